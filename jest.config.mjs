@@ -1,4 +1,6 @@
-import { createEsmPreset } from 'jest-preset-angular/presets/index.js';
+import presets from 'jest-preset-angular/presets/index.js';
+
+const { createEsmPreset } = presets;
 
 const swc = {
   '^.+\\.tsx?$': ['@swc/jest', { jsc: { target: 'es2022', parser: { syntax: 'typescript', decorators: true } }, module: { type: 'es6' } }],
