@@ -1,0 +1,111 @@
+import { type TextItem, type TextPage } from './pdf-text';
+import { type Box } from './reading';
+
+/** Words that stand together: a cell of a table, a label, a value, a stretch of prose. */
+export interface Segment {
+  page: number;
+  text: string;
+  box: Box;
+}
+
+/** What stands on one height of one page, from left to right. */
+export interface Line {
+  page: number;
+  text: string;
+  box: Box;
+  segments: Segment[];
+}
+
+/** Gaps in em: below `joinedEm` letters of one word, below `cellEm` words of one stretch, above that another cell. */
+const joinedEm = 0.16;
+const cellEm = 1.05;
+
+export function pageLines(page: TextPage): Line[] {
+  const rows = groupRows(withoutOverprints(page.items));
+  return rows.map((row) => toLine(row)).filter((line) => line.segments.length > 0);
+}
+
+/** Fake bold draws the same words again a hair beside; text drawn twice is read once. */
+export function withoutOverprints(items: TextItem[]): TextItem[] {
+  const kept: TextItem[] = [];
+  const byHeight = new Map<number, TextItem[]>();
+  for (const item of items) {
+    const slot = Math.round(item.baseline / 4);
+    const letters = squeezed(item.text);
+    const isRepeat = [slot - 1, slot, slot + 1].some((near) => byHeight.get(near)?.some((other) => overprints(item, letters, other)));
+    if (isRepeat) continue;
+    kept.push(item);
+    const list = byHeight.get(slot);
+    if (list) list.push(item);
+    else byHeight.set(slot, [item]);
+  }
+  return kept;
+}
+
+function overprints(item: TextItem, letters: string, other: TextItem): boolean {
+  const tolerance = Math.min(item.height, other.height) * 0.3;
+  if (Math.abs(item.baseline - other.baseline) > tolerance) return false;
+  const start = Math.max(item.x, other.x);
+  const end = Math.min(item.x + item.width, other.x + other.width);
+  if (end - start < item.width * 0.7) return false;
+  return squeezed(other.text).includes(letters);
+}
+
+const squeezed = (text: string): string => text.replace(/\s+/g, '');
+
+/** Items whose heights overlap by half share a row; small raised or lowered letters stay with their word. */
+function groupRows(items: TextItem[]): TextItem[][] {
+  const sorted = [...items].sort((a, b) => a.baseline - b.baseline || a.x - b.x);
+  const rows: { baseline: number; height: number; items: TextItem[] }[] = [];
+  for (const item of sorted) {
+    const row = rows.at(-1);
+    if (row && item.baseline - row.baseline < Math.min(item.height, row.height) * 0.5) {
+      row.items.push(item);
+      if (item.height > row.height) Object.assign(row, { height: item.height, baseline: Math.max(row.baseline, item.baseline) });
+    } else {
+      rows.push({ baseline: item.baseline, height: item.height, items: [item] });
+    }
+  }
+  return rows.map((row) => row.items.sort((a, b) => a.x - b.x));
+}
+
+function toLine(row: TextItem[]): Line {
+  const segments: Segment[] = [];
+  let end = -Infinity;
+  for (const item of row) {
+    const last = segments.at(-1);
+    const gap = (item.x - end) / item.height;
+    if (last && gap < cellEm) {
+      const needsSpace = gap > joinedEm && !last.text.endsWith(' ') && !item.text.startsWith(' ');
+      last.text += (needsSpace ? ' ' : '') + item.text;
+      last.box = around(last.box, boxOf(item));
+    } else {
+      segments.push({ page: item.page, text: item.text, box: boxOf(item) });
+    }
+    end = Math.max(end, item.x + item.width);
+  }
+  for (const segment of segments) segment.text = tidy(segment.text);
+  return lineOf(segments.filter((segment) => segment.text !== ''));
+}
+
+export function lineOf(segments: Segment[]): Line {
+  const box = segments.map((segment) => segment.box).reduce(around, segments[0]?.box ?? { x: 0, y: 0, width: 0, height: 0 });
+  return { page: segments[0]?.page ?? 0, text: segments.map((segment) => segment.text).join('  '), box, segments };
+}
+
+const boxOf = (item: TextItem): Box => ({ x: item.x, y: item.y, width: item.width, height: item.height });
+
+export function around(a: Box, b: Box): Box {
+  const x = Math.min(a.x, b.x);
+  const y = Math.min(a.y, b.y);
+  return { x, y, width: Math.max(a.x + a.width, b.x + b.width) - x, height: Math.max(a.y + a.height, b.y + b.height) - y };
+}
+
+/** Odd blanks and soft hyphens out, control characters out, ligature and width forms normalised by pdfjs already. */
+function tidy(text: string): string {
+  return text
+    .replace(/[\u00a0\u2000-\u200a\u202f\u205f\u3000\t\r\n]/g, ' ')
+    .replace(/[\u00ad\u200b-\u200f\u202a-\u202e\u2060\u2066-\u2069\ufeff]/g, '')
+    .replace(/ {2,}/g, ' ')
+    .trim();
+}
