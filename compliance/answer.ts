@@ -1,0 +1,123 @@
+import { type Finding, type Words } from './outcome';
+import { type Source } from './source';
+
+/** What the rules answer for one shift; the same on the office page (live) and on the server (again). */
+export interface ShiftAnswer {
+  readonly pack: { readonly id: string; readonly version: string; readonly name: Words; readonly isComplete: boolean; readonly gap: Words | null };
+  readonly tasks: readonly TaskAnswer[];
+  readonly people: readonly PersonAnswer[];
+  /** Lines about the whole shift: floor, engines, host, first aid, floor profile. */
+  readonly gates: readonly Finding[];
+  readonly kits: readonly KitAnswer[];
+  readonly notice: Words;
+}
+
+export type TaskState = 'may-not-start' | 'not-decided' | 'ready';
+
+export interface TaskAnswer {
+  readonly taskId: string;
+  readonly name: Words;
+  readonly state: TaskState;
+  /** Short state as shown first in the row: "Table 1, xiii", "May not start". */
+  readonly label: Words;
+  /** One or two sentences: the figures that decide. */
+  readonly summary: Words;
+  readonly silicaBasis: 'table-1' | 'alternative' | 'held' | 'outside';
+  /** Table 1 row as printed in the standard: "xiii". */
+  readonly table1Row: string | null;
+  readonly respirator: RespiratorAnswer;
+  readonly protection: readonly ProtectionItem[];
+  /** Controls before protection. */
+  readonly findings: readonly Finding[];
+}
+
+export interface RespiratorAnswer {
+  readonly outcome: 'required' | 'none-required' | 'by-policy' | 'undecided';
+  readonly apf: number | null;
+  readonly label: Words;
+  readonly source: Source;
+}
+
+export const marks = ['eyes', 'face', 'ears', 'hands', 'clothing', 'boots', 'respirator'] as const;
+export type Mark = (typeof marks)[number];
+
+export interface ProtectionItem {
+  readonly mark: Mark;
+  readonly name: Words;
+  readonly reason: Words;
+  readonly source: Source;
+}
+
+export interface PersonAnswer {
+  readonly personId: string;
+  readonly table1Minutes: number;
+  readonly table1MinutesElsewhere: number;
+  /** Minute of the day at which the person's Table 1 sum passes four hours; null when it never does. */
+  readonly maskRuleChangesAtMinute: number | null;
+  readonly doubleBookings: readonly { readonly startMinute: number; readonly endMinute: number; readonly with: string }[];
+  readonly findings: readonly Finding[];
+}
+
+export interface KitAnswer {
+  readonly kitId: string;
+  readonly kits: number | null;
+  readonly mixingMinutes: number | null;
+  readonly powderDumps: number | null;
+  /** Union of the parts' hazards for protection, not classification. */
+  readonly hazardCodes: readonly string[];
+  readonly pictograms: readonly string[];
+  readonly partsWithoutSheet: readonly string[];
+  readonly findings: readonly Finding[];
+}
+
+/** The day's checklist, language-neutral: both languages side by side; frozen when published. */
+export interface Checklist {
+  readonly format: 'kneeboard-checklist/1';
+  readonly title: Words;
+  readonly date: string;
+  readonly jobName: string;
+  readonly siteName: string;
+  readonly competentPersonName: string | null;
+  readonly packId: string;
+  readonly packVersion: string;
+  /** What must be true in the morning, answered by the lead. */
+  readonly morning: readonly ChecklistLine[];
+  readonly tasks: readonly ChecklistTask[];
+  readonly people: readonly ChecklistPerson[];
+  /** The one sentence that is signed, the same everywhere. */
+  readonly sentence: Words;
+  readonly notice: Words;
+}
+
+export interface ChecklistTask {
+  readonly taskId: string;
+  readonly name: Words;
+  readonly state: TaskState;
+  readonly heldBecause: Words | null;
+  readonly personIds: readonly string[];
+  readonly respirator: Words;
+  readonly protection: readonly { readonly mark: Mark; readonly name: Words }[];
+  /** Two to four live lines that unlock the task each time it starts. */
+  readonly live: readonly ChecklistLine[];
+}
+
+export interface ChecklistLine {
+  readonly id: string;
+  readonly ruleId: string;
+  readonly taskId: string | null;
+  readonly mark: Mark | null;
+  /** "No" on a critical line holds the task and opens a corrective action. */
+  readonly isCritical: boolean;
+  readonly text: Words;
+  readonly why: Words;
+  readonly source: Source;
+}
+
+export interface ChecklistPerson {
+  readonly personId: string;
+  readonly name: string;
+  readonly language: 'en' | 'es';
+  readonly taskIds: readonly string[];
+  /** This person's own lines: tasks with times, mask, protection. */
+  readonly lines: readonly Words[];
+}

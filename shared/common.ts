@@ -1,0 +1,65 @@
+import * as z from 'zod';
+
+// A strict CSP forbids compiled parsers: zod must not probe for `Function`.
+z.config({ jitless: true });
+
+export const Id = z.uuid();
+/** Local calendar date, ISO. */
+export const LocalDate = z.iso.date();
+/** Instant, ISO with offset. */
+export const Instant = z.iso.datetime({ offset: true });
+export const Sha256 = z.string().regex(/^[0-9a-f]{64}$/);
+/** One line a person types: trimmed, no control characters. */
+export const Line = (max: number) =>
+  z
+    .string()
+    .trim()
+    .min(1, 'Fill this in.')
+    .max(max, `Use at most ${max} characters.`)
+    .regex(/^[^\p{Cc}\u202a-\u202e\u2066-\u2069]*$/u, 'Remove control characters.');
+/** Several lines; line breaks and tabs may stay. */
+export const Paragraph = (max: number) =>
+  z
+    .string()
+    .trim()
+    .max(max, `Use at most ${max} characters.`)
+    .regex(/^(?:[^\p{Cc}\u202a-\u202e\u2066-\u2069]|[\n\r\t])*$/u, 'Remove control characters.');
+
+export const Language = z.enum(['en', 'es']);
+export const Role = z.enum(['owner', 'safety-officer', 'crew-lead', 'auditor']);
+export type Role = z.infer<typeof Role>;
+export const roles = Role.options;
+/** Role in words, as pages show it. */
+export const roleNames: Record<Role, string> = {
+  owner: 'Owner',
+  'safety-officer': 'Safety officer',
+  'crew-lead': 'Crew lead',
+  auditor: 'Auditor',
+};
+
+/** Keyset paging: pass `next` back as `after`. */
+export const PageQuery = z.strictObject({
+  after: z.string().max(200).optional(),
+  limit: z.coerce.number().int().min(1, 'Ask for at least 1.').max(100, 'Ask for at most 100.').default(50),
+});
+export const pageOf = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), next: z.string().nullable() });
+export interface Page<T> {
+  readonly items: readonly T[];
+  readonly next: string | null;
+}
+
+/** Every editable thing carries the version it was read at; edits send it back as If-Match. */
+export const Version = z.number().int().min(1);
+
+/** RFC 9457 problem details. */
+export const Problem = z.object({
+  type: z.string(),
+  title: z.string(),
+  status: z.number(),
+  detail: z.string().optional(),
+  errors: z.array(z.object({ path: z.string(), message: z.string() })).optional(),
+  retryAfterSeconds: z.number().optional(),
+  /** With a conflict: what is stored now. */
+  current: z.unknown().optional(),
+});
+export type Problem = z.infer<typeof Problem>;
