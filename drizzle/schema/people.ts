@@ -1,0 +1,41 @@
+import { boolean, customType, date, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid, foreignKey } from 'drizzle-orm/pg-core';
+import { organisations } from './organisations';
+
+export const bytea = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => 'bytea' });
+
+/** Anyone: crew, lead, officer, auditor. A sign-in (door table `logins`) and a PIN are optional. */
+export const people = pgTable(
+  'people',
+  {
+    organisationId: uuid().notNull().references(() => organisations.organisationId),
+    id: uuid().notNull(),
+    name: text().notNull(),
+    language: text().notNull(),
+    employer: text(),
+    isAdultConfirmed: boolean().notNull().default(false),
+    isKeptFromIsocyanates: boolean().notNull().default(false),
+    silicaTrainedOn: date(),
+    hazcomTrainedOn: date(),
+    respirators: jsonb().notNull().default([]),
+    isActive: boolean().notNull().default(true),
+    version: integer().notNull().default(1),
+  },
+  (t) => [primaryKey({ columns: [t.organisationId, t.id] }), index('people_by_name').on(t.organisationId, t.name, t.id)],
+);
+
+/** HMAC of the PIN under a pepper that is not in the database; chosen by the person, witnessed, never by the office. */
+export const pins = pgTable(
+  'pins',
+  {
+    organisationId: uuid().notNull(),
+    personId: uuid().notNull(),
+    digest: bytea().notNull(),
+    setAt: timestamp({ withTimezone: true }).notNull(),
+    witnessPersonId: uuid(),
+    tabletId: uuid(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.organisationId, t.personId] }),
+    foreignKey({ columns: [t.organisationId, t.personId], foreignColumns: [people.organisationId, people.id] }),
+  ],
+);
