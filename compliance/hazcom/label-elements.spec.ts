@@ -39,6 +39,7 @@ describe('[HAZ-07] label elements', () => {
     expect(label('H242:Type C').signalWord).toBe('danger');
     expect(label('H242:Type E').signalWord).toBe('warning');
     expect(label('H242:Type E').categoryMissing).toEqual([]);
+    expect(label('H272:Category 3').signalWord).toBe('warning');
     expect(label('H242')).toMatchObject({ signalWord: 'danger', categoryMissing: ['H242'] });
     expect(label('H314').categoryMissing).toEqual([]);
   });

@@ -44,7 +44,8 @@ function strictest(rows: readonly HazardRow[]): readonly HazardRow[] {
 
 function rowsFor({ code, category }: StatedHazard): { rows: readonly HazardRow[]; isCategoryMissing: boolean } {
   const rows = hazardRowsOf(code);
-  const exact = category === null ? [] : rows.filter((row) => row.category.toLowerCase() === category.trim().toLowerCase());
+  const wanted = category?.trim().toLowerCase().replace(/^category\s+/, '');
+  const exact = rows.filter((row) => row.category.toLowerCase() === wanted);
   if (exact.length > 0) return { rows: differ(exact) ? strictest(exact) : exact, isCategoryMissing: differ(exact) };
   return differ(rows) ? { rows: strictest(rows), isCategoryMissing: true } : { rows, isCategoryMissing: false };
 }
