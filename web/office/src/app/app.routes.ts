@@ -1,0 +1,26 @@
+import { type LoadChildren, type Route, type Routes } from '@angular/router';
+import { mayOpen, signedIn, toFirstPage } from './session/session-guards';
+import { Shell } from './shell/shell';
+
+/** One subject of the office: its folder's routes, loaded when first opened, for the roles named in shell/navigation.ts. */
+export function subject(path: string, loadChildren: LoadChildren): Route {
+  return { path, canMatch: [mayOpen], loadChildren };
+}
+
+/** The office's subjects, for example `subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes))`. */
+const subjects: Routes = [];
+
+export const routes: Routes = [
+  { path: 'sign-in', title: 'Sign in', loadComponent: () => import('./session/sign-in').then((file) => file.SignIn) },
+  {
+    path: '',
+    component: Shell,
+    canActivate: [signedIn],
+    children: [
+      { path: '', pathMatch: 'full', redirectTo: toFirstPage },
+      ...subjects,
+      { path: 'account', title: 'Your account', loadComponent: () => import('./account/account').then((file) => file.Account) },
+      { path: '**', title: 'No such page', loadComponent: () => import('./not-found/not-found').then((file) => file.NotFound) },
+    ],
+  },
+];

@@ -1,0 +1,86 @@
+import { ChangeDetectionStrategy, Component, type ElementRef, computed, inject, signal, viewChild } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { filter } from 'rxjs';
+import { roleNames } from '#shared/common';
+import { BrandMark } from '#ui/brand-mark';
+import { Note } from '#ui/note';
+import { SessionApi } from '../session/session-api';
+import { navigationFor } from './navigation';
+import { NavigationCounts } from './navigation-counts';
+
+/** The frame of every office page: skip link, navigation, who is signed in. On narrow screens the rail is a bar with a menu. */
+@Component({
+  selector: 'kb-shell',
+  imports: [BrandMark, Note, RouterLink, RouterLinkActive, RouterOutlet],
+  templateUrl: './shell.html',
+  styleUrl: './shell.scss',
+  host: { '(keydown.escape)': 'closeMenu()' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class Shell {
+  private readonly api = inject(SessionApi);
+  private readonly router = inject(Router);
+  private readonly navigationCounts = inject(NavigationCounts);
+  private readonly page = viewChild.required<ElementRef<HTMLElement>>('page');
+  private readonly menuButton = viewChild.required<ElementRef<HTMLElement>>('menuButton');
+
+  protected readonly session = this.api.session;
+  protected readonly counts = this.navigationCounts.counts;
+  protected readonly isMenuOpen = signal(false);
+  protected readonly signOutFailed = signal(false);
+  protected readonly roleName = computed(() => {
+    const session = this.session();
+    return session ? roleNames[session.role] : '';
+  });
+  protected readonly entries = computed(() => {
+    const session = this.session();
+    return session ? navigationFor(session.role, this.router.config) : [];
+  });
+
+  private path = '';
+
+  constructor() {
+    this.router.events
+      .pipe(
+        filter((event) => event instanceof NavigationEnd),
+        takeUntilDestroyed(),
+      )
+      .subscribe((event) => this.arrive(event.urlAfterRedirects));
+  }
+
+  protected focusPage(event: Event): void {
+    event.preventDefault();
+    this.page().nativeElement.focus();
+  }
+
+  protected toggleMenu(): void {
+    this.isMenuOpen.update((isOpen) => !isOpen);
+  }
+
+  protected closeMenu(): void {
+    if (!this.isMenuOpen()) return;
+    this.isMenuOpen.set(false);
+    this.menuButton().nativeElement.focus();
+  }
+
+  protected async signOut(): Promise<void> {
+    try {
+      await this.api.signOut();
+      await this.router.navigateByUrl('/sign-in');
+    } catch {
+      this.signOutFailed.set(true);
+    }
+  }
+
+  /** Moves the reader to a new page's beginning; filters and opened rows (same path, other query) keep their focus. */
+  private arrive(url: string): void {
+    const path = url.split(/[?#]/)[0] ?? '';
+    const isFirst = this.path === '';
+    if (path === this.path) return;
+    this.path = path;
+    this.isMenuOpen.set(false);
+    if (!isFirst) this.page().nativeElement.focus();
+    if (this.entries().some((entry) => entry.path === 'today')) void this.navigationCounts.refresh();
+  }
+}
