@@ -86,7 +86,7 @@ async function angular(application) {
 }
 
 async function bundleServer() {
-  const { build } = await import('esbuild');
+  const { build, stop } = await import('esbuild');
   const present = Object.entries(serverEntries).filter(([, path]) => existsSync(join(root, path)));
   rmSync(join(root, 'dist/server'), { recursive: true, force: true });
   if (present.length === 0) return;
@@ -103,6 +103,8 @@ async function bundleServer() {
     sourcemap: true,
     logLevel: 'silent',
   });
+  // Its helper process would stay as long as we do.
+  await stop();
 }
 
 /**

@@ -1,6 +1,7 @@
 // @ts-check
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { underLock } from './lock.mjs';
 import { Refusal, step } from './progress.mjs';
 import { run } from './processes.mjs';
 
@@ -36,5 +37,8 @@ function packagesArePresent(root) {
  */
 export async function ensurePackages(root) {
   if (packagesArePresent(root)) return;
-  await step('Installing npm packages (about a minute)', () => run('npm', ['ci', '--no-progress'], { cwd: root }));
+  await underLock(`packages ${root}`, async () => {
+    if (packagesArePresent(root)) return;
+    await step('Installing npm packages (about a minute)', () => run('npm', ['ci', '--no-progress'], { cwd: root }));
+  });
 }

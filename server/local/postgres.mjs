@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import pg from 'pg';
 import { postgresFolders } from './debian.mjs';
 import { freePort } from './ports.mjs';
-import { run, startService, tied, logPath } from './processes.mjs';
+import { logPath, run, startService, tied } from './processes.mjs';
 import { Refusal } from './progress.mjs';
 import { randomPassword, secretFile } from './secrets.mjs';
 
@@ -33,7 +33,7 @@ const throwawaySettings = { fsync: 'off', synchronous_commit: 'off', full_page_w
  * @returns {Promise<Cluster>}
  */
 export async function startPostgres(folder, { preferredPort = 0, isThrowaway = false, settings = {} } = {}) {
-  mkdirSync(folder, { recursive: true, mode: 0o711 });
+  mkdirSync(join(folder, 'logs'), { recursive: true, mode: 0o711 });
   const data = join(folder, 'postgres');
   const passwords = readPasswords(folder);
   const binaries = binariesFor(data);
@@ -123,7 +123,8 @@ async function privilegesFor(folder) {
   const user = ['--reuid=postgres', '--regid=postgres', '--clear-groups'];
   const candidates = [user, ...['dac_read_search', 'dac_override'].map((name) => [...user, `--inh-caps=+${name}`, `--ambient-caps=+${name}`])];
   for (const privileges of candidates) {
-    const [command, commandArguments] = tied('SIGTERM', privileges, '/usr/bin/test', ['-x', folder]);
+    // Not `test -x`: access(2) leaves privileges out of its answer.
+    const [command, commandArguments] = tied('SIGTERM', privileges, '/usr/bin/stat', [join(folder, 'logs')]);
     try {
       await run(command, commandArguments);
       return privileges;
