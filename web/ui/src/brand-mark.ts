@@ -5,8 +5,8 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
   selector: 'kb-brand-mark',
   template: `
     <svg viewBox="0 0 32 32" aria-hidden="true" focusable="false">
-      <path d="M3 21.500 24 12l5 3.500L8 26z" fill="var(--kb-pigment)" />
-      <path d="M9 16.800 14.500 23M19 12.600l4.500 5.600" stroke="var(--kb-brass-line)" stroke-width="2.200" />
+      <path d="M3 21.5 24 12l5 3.5L8 26z" fill="var(--kb-pigment)" />
+      <path d="M9 16.8 14.5 23M19 12.6l4.5 5.6" stroke="var(--kb-brass-line)" stroke-width="2.2" />
     </svg>
   `,
   styles: `
