@@ -44,7 +44,7 @@ export const PageQuery = z.strictObject({
 });
 export const pageOf = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), next: z.string().nullable() });
 export interface Page<T> {
-  readonly items: readonly T[];
+  readonly items: T[];
   readonly next: string | null;
 }
 

@@ -1,0 +1,46 @@
+import PgBoss from 'pg-boss';
+import { type Tx } from './database';
+
+/** Background work, by queue name. Payloads carry ids only. */
+export interface Work {
+  'read-sheet': { organisationId: string; revisionId: string };
+  'mail-checkpoint': { organisationId: string; size: number };
+}
+export const queueNames = ['read-sheet', 'mail-checkpoint'] as const satisfies readonly (keyof Work)[];
+
+export interface Queue {
+  /** Queued in the caller's transaction: with its rows or not at all. */
+  add<N extends keyof Work>(tx: Tx, name: N, data: Work[N]): Promise<void>;
+  /** Takes work of one kind, one at a time; a killed worker's work is taken again after `expireSeconds`. */
+  serve<N extends keyof Work>(name: N, work: (data: Work[N]) => Promise<void>): Promise<void>;
+  stop(): Promise<void>;
+}
+
+/** Must be above the reader's own hard limit. */
+export const expireSeconds = 60;
+
+export async function createQueue(url: string, options: { isServing: boolean; onError: (error: Error) => void }): Promise<Queue> {
+  // The owner made the schema; the application role only uses it.
+  const boss = new PgBoss({ connectionString: url, schema: 'pgboss', migrate: false, supervise: options.isServing, schedule: false, max: 4, maintenanceIntervalSeconds: 5, application_name: 'kneeboard-queue' });
+  boss.on('error', options.onError);
+  await boss.start();
+  return {
+    async add(tx, name, data) {
+      const id = await boss.send(name, data, {
+        retryLimit: 5,
+        retryDelay: 2,
+        retryBackoff: true,
+        expireInSeconds: expireSeconds,
+        db: { executeSql: (text: string, values: unknown[]) => tx.client.query(text, values) },
+      });
+      // pg-boss answers null for a queue that nobody made.
+      if (!id) throw new Error(`The queue ${name} does not exist: run db:migrate.`);
+    },
+    async serve(name, work) {
+      await boss.work<Work[typeof name]>(name, { batchSize: 1, pollingIntervalSeconds: 0.5 }, async ([job]) => {
+        if (job) await work(job.data);
+      });
+    },
+    stop: () => boss.stop({ graceful: true, timeout: 10_000, wait: true }),
+  };
+}

@@ -1,0 +1,55 @@
+import { Router, type Request } from 'express';
+import passport from 'passport';
+import { Strategy as LocalStrategy } from 'passport-local';
+import { type PersonActor } from '../http/actor';
+import { mount } from '../http/mount';
+import { sessionCookieName } from '../http/sessions';
+import { type SessionService } from './session-service';
+
+interface Remembered {
+  organisationId: string;
+  personId: string;
+  signedInAt: number;
+}
+
+/** Passport wired to the service: how a password becomes a session, and a session a person. */
+export function passportFor(service: SessionService): passport.Authenticator {
+  const door = new passport.Passport();
+  door.use(
+    new LocalStrategy({ usernameField: 'email', passReqToCallback: true }, (request, email, password, done) => {
+      service.signIn({ email, password }, request.ip ?? 'unknown').then((actor) => done(null, { ...actor, signedInAt: Date.now() }), done);
+    }),
+  );
+  door.serializeUser<Remembered>((user, done) => done(null, { organisationId: user.organisationId, personId: user.personId, signedInAt: user.signedInAt }));
+  door.deserializeUser<Remembered>((remembered, done) => {
+    service.readActor(remembered.organisationId, remembered.personId, remembered.signedInAt).then((actor) => done(null, actor && { ...actor, signedInAt: remembered.signedInAt }), done);
+  });
+  return door;
+}
+
+export function sessionRoutes(service: SessionService, door: passport.Authenticator): Router {
+  const router = Router();
+  const remember = (request: Request, actor: PersonActor, signedInAt: number) =>
+    // logIn gives the session a new id: one planted before signing in is worth nothing after.
+    new Promise<void>((resolve, reject) => request.logIn({ ...actor, signedInAt }, (error: unknown) => (error ? reject(error) : resolve())));
+
+  mount(router, 'signIn', async ({ request, response }) => {
+    const actor = await new Promise<PersonActor>((resolve, reject) => {
+      const answer = (error: unknown, user?: Express.User | false) => (error || !user ? reject(error ?? new Error('no user')) : resolve(user));
+      (door.authenticate('local', answer) as (request: unknown, response: unknown, next: (error: unknown) => void) => void)(request, response, reject);
+    });
+    await remember(request, actor, Date.now());
+    return service.toSession(actor);
+  });
+  mount(router, 'readSession', async ({ actor }) => service.toSession(actor));
+  mount(router, 'signOut', async ({ request, response }) => {
+    await new Promise<void>((resolve, reject) => request.session.destroy((error: unknown) => (error ? reject(error) : resolve())));
+    response.clearCookie(sessionCookieName);
+    return undefined;
+  });
+  mount(router, 'changePassword', async ({ actor, body, request }) => {
+    await remember(request, actor, await service.changePassword(actor, body));
+    return undefined;
+  });
+  return router;
+}

@@ -1,0 +1,92 @@
+import { eq, sql } from 'drizzle-orm';
+import { organisations } from '#drizzle/schema/organisations';
+import { people } from '#drizzle/schema/people';
+import { Role } from '#shared/common';
+import { type ChangePassword, type Session, type SignIn } from '#shared/session';
+import { type Deps } from '../deps';
+import { InputError, SignedOutError, SlowDownError } from '../errors';
+import { type PersonActor } from '../http/actor';
+import { hashPassword, refuseWeakPassword, verifyPassword } from './passwords';
+
+/** Wrong tries before waiting begins: few for one account from one address, more for an address as a whole. */
+const freeTries = { account: 5, address: 30, anywhere: 50 };
+
+type Member = { role: string; email: string; passwordHash: string; sessionsValidFrom: Date; name: string; isActive: boolean; organisationName: string };
+
+export function sessionService({ database, clock, log }: Deps) {
+  async function readMember(organisationId: string, personId: string): Promise<Member | undefined> {
+    return database.inOrganisation(organisationId, async (tx) => {
+      const rows = await tx.execute<Member>(sql`
+        SELECT m.role, m.email, m.password_hash AS "passwordHash", m.sessions_valid_from AS "sessionsValidFrom", p.name, p.is_active AS "isActive", o.name AS "organisationName"
+        FROM door_member(${personId}) m
+        JOIN ${people} p ON p.id = ${personId} AND p.organisation_id = ${organisationId}
+        JOIN ${organisations} o ON o.organisation_id = ${organisationId}`);
+      return rows.rows[0];
+    });
+  }
+  const toActor = (organisationId: string, personId: string, member: Member): PersonActor => ({
+    kind: 'person',
+    organisationId,
+    organisationName: member.organisationName,
+    personId,
+    personName: member.name,
+    role: Role.parse(member.role),
+  });
+
+  return {
+    /** Throws SlowDownError before looking, SignedOutError for a wrong address or password alike. */
+    async signIn({ email, password }: SignIn, address: string): Promise<PersonActor> {
+      const account = email.toLowerCase();
+      const guesses = [
+        { key: `account ${account} from ${address}`, free: freeTries.account },
+        { key: `address ${address}`, free: freeTries.address },
+        { key: `account ${account}`, free: freeTries.anywhere },
+      ];
+      for (const { key, free } of guesses) {
+        const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, free]);
+        if (wait?.seconds) throw new SlowDownError(`Too many wrong tries. Wait ${wait.seconds} ${wait.seconds === 1 ? 'second' : 'seconds'}, then try again.`, wait.seconds);
+      }
+      const [login] = await database.atTheDoor<{ organisation_id: string; person_id: string; password_hash: string }>('SELECT * FROM door_find_login($1)', [account]);
+      const fits = await verifyPassword(login?.password_hash, password);
+      const member = login && fits ? await readMember(login.organisation_id, login.person_id) : undefined;
+      if (!login || !member?.isActive) {
+        for (const { key } of guesses) await database.atTheDoor('SELECT door_failed($1)', [key]);
+        log.warn({ address }, 'sign-in refused');
+        throw new SignedOutError('This e-mail address and password do not belong together. Check both, or ask your owner for a new password.');
+      }
+      await database.atTheDoor('SELECT door_succeeded($1)', [guesses[0]?.key]);
+      return toActor(login.organisation_id, login.person_id, member);
+    },
+
+    /** Who this session is now: role and membership are read at every request. Null ends the session. */
+    async readActor(organisationId: string, personId: string, signedInAt: number): Promise<PersonActor | null> {
+      const member = await readMember(organisationId, personId);
+      return member?.isActive && member.sessionsValidFrom.getTime() <= signedInAt ? toActor(organisationId, personId, member) : null;
+    },
+
+    /** Ends every session of this person; answers from when new ones are good (ms). */
+    async changePassword(actor: PersonActor, { current, next }: ChangePassword): Promise<number> {
+      const key = `password change ${actor.personId}`;
+      const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, freeTries.account]);
+      if (wait?.seconds) throw new SlowDownError(`Too many wrong tries. Wait ${wait.seconds} seconds, then try again.`, wait.seconds);
+      const member = await readMember(actor.organisationId, actor.personId);
+      if (!(await verifyPassword(member?.passwordHash, current))) {
+        await database.atTheDoor('SELECT door_failed($1)', [key]);
+        throw new InputError('The password was not changed.', [{ path: 'current', message: 'This is not your present password.' }]);
+      }
+      refuseWeakPassword(next, { email: member?.email ?? '', name: actor.personName }, 'next');
+      const hash = await hashPassword(next);
+      return database.inOrganisation(actor.organisationId, async (tx) => {
+        const { rows } = await tx.execute<{ at: Date }>(sql`SELECT door_set_password(${actor.personId}, ${hash}) AS at`);
+        return (rows[0]?.at ?? clock.now()).getTime() + 1;
+      });
+    },
+
+    toSession: (actor: PersonActor): Session => ({ person: { id: actor.personId, name: actor.personName }, role: actor.role, organisation: { id: actor.organisationId, name: actor.organisationName } }),
+
+    /** The organisation's name, for a paired tablet. */
+    readOrganisation: (organisationId: string) =>
+      database.inOrganisation(organisationId, async (tx) => (await tx.select().from(organisations).where(eq(organisations.organisationId, organisationId)))[0]),
+  };
+}
+export type SessionService = ReturnType<typeof sessionService>;
