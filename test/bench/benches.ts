@@ -1,0 +1,5 @@
+import { type Bench } from './bench';
+import { verifyLogBench } from './verify-log';
+
+/** Every bench, in the order of quality.md. */
+export const benches: readonly Bench[] = [verifyLogBench];
