@@ -1,4 +1,4 @@
-import { type TextItem, type TextPage } from './pdf-text';
+import { type TextItem } from './pdf-text';
 import { type Box } from './reading';
 
 /** Words that stand together: a cell of a table, a label, a value, a stretch of prose. */
@@ -19,11 +19,6 @@ export interface Line {
 /** Gaps in em: below `joinedEm` letters of one word, below `cellEm` words of one stretch, above that another cell. */
 const joinedEm = 0.16;
 const cellEm = 1.05;
-
-export function pageLines(page: TextPage): Line[] {
-  const rows = groupRows(withoutOverprints(page.items));
-  return rows.map((row) => toLine(row)).filter((line) => line.segments.length > 0);
-}
 
 /** Fake bold draws the same words again a hair beside; text drawn twice is read once. */
 export function withoutOverprints(items: TextItem[]): TextItem[] {
@@ -54,7 +49,7 @@ function overprints(item: TextItem, letters: string, other: TextItem): boolean {
 const squeezed = (text: string): string => text.replace(/\s+/g, '');
 
 /** Items whose heights overlap by half share a row; small raised or lowered letters stay with their word. */
-function groupRows(items: TextItem[]): TextItem[][] {
+export function groupRows(items: TextItem[]): TextItem[][] {
   const sorted = [...items].sort((a, b) => a.baseline - b.baseline || a.x - b.x);
   const rows: { baseline: number; height: number; items: TextItem[] }[] = [];
   for (const item of sorted) {
@@ -69,7 +64,7 @@ function groupRows(items: TextItem[]): TextItem[][] {
   return rows.map((row) => row.items.sort((a, b) => a.x - b.x));
 }
 
-function toLine(row: TextItem[]): Line {
+export function toLine(row: TextItem[]): Line {
   const segments: Segment[] = [];
   let end = -Infinity;
   for (const item of row) {

@@ -48,7 +48,7 @@ export async function pdfText(bytes: Uint8Array, limits: PdfTextLimits): Promise
   const { getDocument, VerbosityLevel } = await pdfjs;
   // pdfjs takes the buffer over, so it gets its own copy.
   const task = getDocument({
-    data: bytes.slice(),
+    data: new Uint8Array(bytes),
     ...assetFolders(),
     isEvalSupported: false,
     useSystemFonts: false,

@@ -1,6 +1,19 @@
-import { pageLines } from './lines';
+import { exposureLimits } from './limits';
+import { hazardStatements } from './hazard-statements';
+import { ingredients } from './ingredients';
+import { languageOf } from './language';
+import { type Line } from './lines';
 import { pdfText, type PdfTextLimits } from './pdf-text';
-import { emptyReading, type SheetReading } from './reading';
+import { ppeWords } from './ppe-words';
+import { productName } from './product-name';
+import { readingLines } from './reading-order';
+import { emptyReading, type Field, type SheetReading } from './reading';
+import { revisionDate } from './revision-date';
+import { splitRunningLines } from './running-lines';
+import { findSections, isSectionHeading } from './sections';
+import { type SheetParts } from './sheet-parts';
+import { signalWord } from './signal-word';
+import { supplier } from './supplier';
 
 export type ReadSheetOptions = Partial<PdfTextLimits>;
 
@@ -13,12 +26,41 @@ const defaultLimits: PdfTextLimits = { maxBytes: 25 * 1024 * 1024, maxPages: 100
 export async function readSheet(bytes: Uint8Array, options: ReadSheetOptions = {}): Promise<SheetReading> {
   const pdf = await pdfText(bytes, { ...defaultLimits, ...options });
   if (pdf.state !== 'read') return emptyReading(pdf.state, pdf.pages);
-  const letters = pdf.pages.reduce((sum, page) => sum + page.items.reduce((count, item) => count + item.text.length, 0), 0);
-  if (letters < 20) return emptyReading('no-text-layer', pdf.pages.length);
-  const pages = pdf.pages.map(pageLines);
+  return readLines(pdf.pages.map(readingLines));
+}
+
+/** The reading of lines that are already in order; pages without letters make the sheet one without a text layer. */
+export function readLines(pages: Line[][]): SheetReading {
+  const text = pages.map((lines) => lines.map((line) => line.text).join('\n')).join('\f');
+  if ((text.match(/\p{L}/gu) ?? []).length < leastLetters) return emptyReading('no-text-layer', pages.length);
+  const { pages: kept, running } = splitRunningLines(pages, isSectionHeading);
+  const lines = kept.flat();
+  const sections = findSections(lines);
+  const language = languageField(text, lines);
+  const parts: SheetParts = { sections, lines, running, pages: pages.length, language: language?.value ?? 'en' };
   return {
-    ...emptyReading('read', pdf.pages.length),
+    state: 'read',
+    pages: pages.length,
     hasTextLayer: true,
-    text: pages.map((lines) => lines.map((line) => line.text).join('\n')).join('\f'),
+    language,
+    productName: productName(parts),
+    supplier: supplier(parts),
+    revisionDate: revisionDate(parts),
+    signalWord: signalWord(parts),
+    ...hazardStatements(parts),
+    ingredients: ingredients(parts),
+    limits: exposureLimits(parts),
+    ppeWords: ppeWords(parts),
+    sections: sections.headings,
+    text,
   };
+}
+
+/** Fewer letters than this on the whole sheet are a stamp or a page number over pictures, not a text layer. */
+const leastLetters = 60;
+
+function languageField(text: string, lines: Line[]): Field<string> | null {
+  const guess = languageOf(text);
+  const [first] = lines;
+  return guess && first ? { value: guess.language, page: first.page, box: first.box, quote: first.text, confidence: guess.confidence } : null;
 }

@@ -1,0 +1,117 @@
+import { around, type Line, type Segment } from './lines';
+import { type Box } from './reading';
+import { fold } from './words';
+
+/** A label with what stands beside or below it. */
+export interface Labelled {
+  line: Line;
+  /** Where in `lines` the label stands. */
+  index: number;
+  /** Lines of the value, the first one first. */
+  values: Segment[];
+  isBelow: boolean;
+}
+
+/**
+ * Labels that name something else: a cell holding one of them is no value. Folded.
+ * Common practice on sheets, no source.
+ */
+const otherLabels =
+  /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses? |relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
+
+/** Every place where a segment is, or begins with, the label; `label` is matched on folded text from its start. */
+export function findLabelled(lines: Line[], label: RegExp): Labelled[] {
+  const found: Labelled[] = [];
+  lines.forEach((line, index) => {
+    line.segments.forEach((segment, at) => {
+      const printed = withoutNumber(segment.text);
+      const folded = fold(printed);
+      const match = label.exec(folded) ?? wrappedMatch(lines, index, segment, folded, label);
+      if (!match) return;
+      const rest = folded.slice(match[0].length);
+      // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
+      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest);
+      if (!mark && match[0].length < folded.length) return;
+      const values = valueOf(lines, index, at, printed, rest);
+      if (values) found.push({ line, index, ...values });
+    });
+  });
+  return found;
+}
+
+/** The label broken over two lines of a narrow column. */
+function wrappedMatch(lines: Line[], index: number, segment: Segment, folded: string, label: RegExp): RegExpExecArray | null {
+  if (folded.length > 30 || folded.includes(':')) return null;
+  const below = lines[index + 1]?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 3);
+  if (!below || below.page !== segment.page || below.box.y - segment.box.y > segment.box.height * 1.8) return null;
+  const both = `${folded} ${fold(below.text)}`;
+  const match = label.exec(both);
+  return match && match[0].length > folded.length && match[0].length >= both.length - 2 ? match : null;
+}
+
+const withoutNumber = (text: string): string => text.replace(/^\s*[•·▪■-]?\s*(\d{1,2}(\.\d{1,2}){0,2}[.)]?\s+)?/, '');
+
+function valueOf(lines: Line[], index: number, at: number, printed: string, rest: string): Pick<Labelled, 'values' | 'isBelow'> | null {
+  const line = lines[index];
+  const segment = line?.segments[at];
+  if (!line || !segment) return null;
+  const inline = rest ? /[:*]\s*(\S.*)$|^\s*[-–.]\s+(\S.*)$/.exec(afterLabel(printed, rest)) : null;
+  const inlineText = (inline?.[1] ?? inline?.[2] ?? '').trim();
+  if (inlineText) {
+    const share = inlineText.length / segment.text.length;
+    const box: Box = { ...segment.box, x: segment.box.x + segment.box.width * (1 - share), width: segment.box.width * share };
+    const first = { page: segment.page, text: inlineText, box };
+    return { values: [first, ...continued(lines, index, box.x)], isBelow: false };
+  }
+  const beside = line.segments[at + 1];
+  const text = beside?.text.replace(/^[:\s]+/, '') ?? '';
+  if (beside && text === '' && line.segments[at + 2]) {
+    const next = line.segments[at + 2] as Segment;
+    return { values: [next, ...continued(lines, index, next.box.x)], isBelow: false };
+  }
+  if (beside && text !== '' && !isLabel(beside.text)) {
+    const x = beside.box.x + (beside.text.startsWith(':') ? beside.box.height * 0.8 : 0);
+    return { values: [{ ...beside, text }, ...continued(lines, index, x)], isBelow: false };
+  }
+  const values = below(lines, index, segment);
+  return values.length > 0 ? { values, isBelow: true } : null;
+}
+
+/** The printed text from the label's end on; folding may have changed lengths a little. */
+function afterLabel(printed: string, rest: string): string {
+  const mark = printed.search(/[:*]/);
+  return mark >= 0 && /[:*]/.test(rest) ? printed.slice(mark) : printed.slice(Math.max(0, printed.length - rest.length));
+}
+
+/** Whether a cell reads like a label rather than a value. */
+export const isLabel = (text: string): boolean => /:\s*$/.test(text) || otherLabels.test(fold(withoutNumber(text)));
+
+/** Lines that go on below a value at its own left edge, with nothing of the label's column beside them. */
+function continued(lines: Line[], index: number, x: number): Segment[] {
+  const values: Segment[] = [];
+  let previous = lines[index];
+  for (let next = index + 1; next < lines.length && values.length < 8; next++) {
+    const line = lines[next];
+    const segment = line?.segments.find((other) => Math.abs(other.box.x - x) < 5);
+    if (!line || !previous || !segment || line.page !== previous.page || line.box.y - previous.box.y > previous.box.height * 2.6) break;
+    if (line.segments.some((other) => other.box.x < x - 12 && isLabel(other.text))) break;
+    values.push(segment);
+    previous = line;
+  }
+  return values;
+}
+
+/** What stands under a label that has nothing beside it: the first cell below within reach, and its following lines. */
+function below(lines: Line[], index: number, label: Segment): Segment[] {
+  for (let next = index + 1; next <= index + 4; next++) {
+    const line = lines[next];
+    if (!line || line.page !== label.page || line.box.y - label.box.y > label.box.height * 4.5 || line.box.y < label.box.y) return [];
+    const segment = line.segments.find((other) => other.box.x < label.box.x + label.box.width && other.box.x + other.box.width > label.box.x - 4 && other.box.x > label.box.x - 8);
+    if (!segment) continue;
+    if (isLabel(segment.text)) return [];
+    return [segment, ...continued(lines, next, segment.box.x)];
+  }
+  return [];
+}
+
+export const boxAround = (segments: Segment[]): Box => segments.map(({ box }) => box).reduce(around);

@@ -1,0 +1,107 @@
+import { boxAround, findLabelled, isLabel, type Labelled } from './labels';
+import { type Line, type Segment } from './lines';
+import { type Field } from './reading';
+import { type SheetParts } from './sheet-parts';
+import { fold, hasLetters, joinSpacedLetters } from './words';
+
+/** Labels of the product's name, the plainest first; folded. */
+const nameLabels: readonly { label: RegExp; confidence: number }[] = [
+  {
+    label:
+      /^(product name|product names|name of (the )?product|commercial product name|product trade name|product name ?[/&] ?trade name|product identity|nombre del producto|nombre de producto|nombre comercial del producto|nom du produit|nom de produit|produktname|name des produkts|nome del prodotto|nome do produto|productnaam)\b/,
+    confidence: 0.95,
+  },
+  {
+    label:
+      /^(trade ?name|commercial name|brand name|trade designation|nombre comercial|denominacion comercial|nom commercial|designation commerciale|denomination commerciale|handelsname|warenzeichen|bezeichnung des (stoffs|stoffes|gemischs|produkts)|nome commerciale|nome comercial|handelsnaam)\b/,
+    confidence: 0.9,
+  },
+  {
+    label:
+      /^((ghs )?product identifier|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material name|material|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
+    confidence: 0.75,
+  },
+];
+
+/** Words that show a text is about something else than a name. */
+const notNames =
+  /^(not |no |n\/?a\b|none|see |same |mixture|substance$|mezcla|gemisch|melange|solid|liquid|identification|information|section|page|and |of |for |the substance|company|trade name|other means|product (code|number|use|type|category|class|form)|sds|safety data)|@|www\.|https?:|\b(regulation|according to|conforms?|in accordance)\b/;
+
+/** The product's name from section 1, else from the running header, else the title under "Safety data sheet". */
+export function productName(parts: SheetParts): Field<string> | null {
+  const identification = parts.sections.bodies.get('identification') ?? [];
+  const places = [identification, parts.sections.preamble, parts.running];
+  for (const { label, confidence } of nameLabels) {
+    for (const place of places) {
+      for (const hit of findLabelled(place, label)) {
+        const field = fieldOf(hit, hit.isBelow ? confidence - 0.1 : confidence);
+        if (field) return withSupport(field, parts);
+      }
+    }
+  }
+  return titleName(parts);
+}
+
+function fieldOf(hit: Labelled, confidence: number): Field<string> | null {
+  const [first] = hit.values;
+  if (!first) return null;
+  const segments = [first, ...wrappedName(hit.values)];
+  const value = cleanName(segments.map(({ text }) => text).join(' '));
+  if (!value) return null;
+  return { value, page: first.page, box: boxAround(segments), quote: segments.map(({ text }) => text).join(' '), confidence };
+}
+
+/** A name goes on in the next line only at ordinary line spacing and when it does not read like a label. */
+function wrappedName(values: Segment[]): Segment[] {
+  const wrapped: Segment[] = [];
+  for (let at = 1; at < values.length && at < 3; at++) {
+    const before = values[at - 1];
+    const segment = values[at];
+    if (!before || !segment || segment.box.y - before.box.y > before.box.height * 1.45 || Math.abs(segment.box.height - before.box.height) > 0.6) break;
+    if (isLabel(segment.text) || /[:.]/.test(segment.text) || before.text.length < 28) break;
+    wrapped.push(segment);
+  }
+  return wrapped;
+}
+
+function cleanName(text: string): string | null {
+  const value = joinSpacedLetters(text)
+    .replace(/^[\s:*"“”'_-]+|[\s:*"“”_,;]+$/g, '')
+    .replace(/\s+(product (code|number|no)\b|item (no|number)|sku\b|code:|revision|version\b).*$/i, '')
+    .trim();
+  if (value.length < 2 || value.length > 120 || !/[\p{L}\p{N}]/u.test(value)) return null;
+  return notNames.test(fold(value)) || isLabel(value) ? null : value;
+}
+
+/** A name that the header repeats is surer. */
+function withSupport(field: Field<string>, parts: SheetParts): Field<string> {
+  const name = fold(field.value);
+  const isRepeated = [...parts.running, ...parts.sections.preamble].some((line) => fold(line.text).includes(name));
+  return isRepeated ? { ...field, confidence: Math.min(0.98, field.confidence + 0.05), because: 'The page header repeats this name.' } : field;
+}
+
+/** No label anywhere: the line under the title, when the sheet repeats it or sets it large. */
+function titleName(parts: SheetParts): Field<string> | null {
+  const preamble = parts.sections.preamble;
+  const title = preamble.findIndex((line) => isTitle(line));
+  const candidates = [...(title >= 0 ? preamble.slice(title + 1, title + 6) : []), ...parts.running].filter(isNameLike);
+  const body = median(parts.lines.map((line) => line.box.height));
+  const chosen = candidates.find((line) => line.box.height > body * 1.15 || parts.running.some((other) => fold(other.text) === fold(line.text)));
+  const value = chosen ? cleanName(chosen.text) : null;
+  if (!chosen || !value) return null;
+  return { value, page: chosen.page, box: chosen.box, quote: chosen.text, confidence: 0.5, because: 'No label names the product; this stands under the title of the sheet.' };
+}
+
+const isTitle = (line: Line): boolean => /^(material )?safety data sheet|^(ficha|hoja) de (datos|seguridad)|^fiche de donnees|^sicherheitsdatenblatt/.test(fold(joinSpacedLetters(line.text)));
+
+const isNameLike = (line: Line): boolean =>
+  line.segments.length === 1 &&
+  line.text.length < 60 &&
+  hasLetters(line.text) &&
+  !isTitle(line) &&
+  !/\b(date|fecha|datum|page|pagina|seite|version|revision|revised|issue|phone|tel|fax|inc|llc|ltd|gmbh|corp|company|section|supersedes|osha|ghs|hcs|reach|street|avenue|road|regulation|cfr|sheet|sds|msds)\b|\d{5}|@|www/.test(fold(line.text));
+
+function median(values: number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[Math.floor(sorted.length / 2)] ?? 0;
+}

@@ -1,0 +1,73 @@
+import { groupRows, toLine, withoutOverprints, type Line, type Segment } from './lines';
+import { type TextItem, type TextPage } from './pdf-text';
+
+/**
+ * The lines of a page in the order a person reads them. Rows are read across, as tables and label-value lists want;
+ * only where a band of the page is set in two columns of running prose is the left column read before the right.
+ */
+export function readingLines(page: TextPage): Line[] {
+  const items = withoutOverprints(page.items);
+  const lines = linesOf(items);
+  const gutter = proseGutter(lines, page.width);
+  if (gutter === null) return lines;
+  return bandsAcross(lines, gutter).flatMap((band) => {
+    if (!isProse(band, gutter)) return band;
+    const top = Math.min(...band.map((line) => line.box.y));
+    const bottom = Math.max(...band.map((line) => line.box.y + line.box.height));
+    const inBand = items.filter((item) => item.y >= top - 0.1 && item.y + item.height <= bottom + 0.1);
+    return [...linesOf(inBand.filter((item) => item.x < gutter)), ...linesOf(inBand.filter((item) => item.x >= gutter))];
+  });
+}
+
+const linesOf = (items: TextItem[]): Line[] => groupRows(items).map(toLine).filter((line) => line.segments.length > 0 && !isRule(line));
+
+/** Rows of underscores, dots or dashes drawn as rules. */
+const isRule = (line: Line): boolean => /^[\s._\-–—=*•|]*$/.test(line.text);
+
+const leastProseRows = 8;
+
+/** Where the white strip between two columns of prose stands, if the page has one near its middle. */
+function proseGutter(lines: Line[], width: number): number | null {
+  const starts = new Map<number, number>();
+  for (const line of lines) {
+    for (const segment of line.segments) {
+      if (segment.box.x > width * 0.35 && segment.box.x < width * 0.65) {
+        const start = Math.round(segment.box.x / 2);
+        starts.set(start, (starts.get(start) ?? 0) + 1);
+      }
+    }
+  }
+  const candidates = [...starts].filter(([, count]) => count >= leastProseRows).map(([start]) => start * 2 - 3);
+  candidates.sort((a, b) => a - b);
+  return candidates.find((gutter) => bandsAcross(lines, gutter).some((band) => isProse(band, gutter))) ?? null;
+}
+
+/** Runs of lines that keep clear of the gutter, each followed by the line that crosses it. */
+function bandsAcross(lines: Line[], gutter: number): Line[][] {
+  const bands: Line[][] = [];
+  let isOpen = false;
+  for (const line of lines) {
+    const crosses = line.segments.some((segment) => segment.box.x < gutter - 1 && segment.box.x + segment.box.width > gutter + 1);
+    const band = bands.at(-1);
+    if (!crosses && isOpen && band) band.push(line);
+    else bands.push([line]);
+    isOpen = !crosses;
+  }
+  return bands;
+}
+
+/** Whether most pieces on both sides fill their column, as sentences do and table cells do not. */
+function isProse(band: Line[], gutter: number): boolean {
+  const segments = band.flatMap((line) => line.segments);
+  const left = segments.filter((segment) => segment.box.x < gutter);
+  const right = segments.filter((segment) => segment.box.x >= gutter);
+  return fillsColumn(left) && fillsColumn(right);
+}
+
+function fillsColumn(segments: Segment[]): boolean {
+  if (segments.length < leastProseRows) return false;
+  const start = Math.min(...segments.map((segment) => segment.box.x));
+  const end = Math.max(...segments.map((segment) => segment.box.x + segment.box.width));
+  const full = segments.filter((segment) => segment.box.x + segment.box.width - start > (end - start) * 0.75 && segment.box.x - start < (end - start) * 0.25);
+  return full.length >= leastProseRows && full.length >= segments.length * 0.5 && end - start > 150;
+}

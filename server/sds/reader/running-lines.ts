@@ -1,0 +1,43 @@
+import { type Line } from './lines';
+import { fold } from './words';
+
+export interface RunningSplit {
+  /** The lines of each page without what repeats at its top and foot. */
+  pages: Line[][];
+  /** What repeats at the top or foot of the pages, each wording once: dates, names and addresses stand here too. */
+  running: Line[];
+}
+
+/** How many lines from the top and from the foot of a page may belong to its running header or footer. */
+const edgeLines = 7;
+
+/**
+ * Parts running headers and footers from the text. A line runs when the same words, figures aside, stand near the
+ * same height on at least half of the pages (and two). Section headings that are repeated on each page are kept.
+ */
+export function splitRunningLines(pages: Line[][], isHeading: (line: Line) => boolean): RunningSplit {
+  const counts = new Map<string, number>();
+  const edges = pages.map(edgesOf);
+  for (const edge of edges) {
+    for (const key of new Set([...edge].map(keyOf))) counts.set(key, (counts.get(key) ?? 0) + 1);
+  }
+  const least = Math.max(2, Math.ceil(pages.length * 0.5));
+  const running = new Map<string, Line>();
+  const kept = pages.map((lines, index) =>
+    lines.filter((line) => {
+      if (!edges[index]?.has(line) || (counts.get(keyOf(line)) ?? 0) < least || isHeading(line)) return true;
+      const wording = fold(line.text);
+      if (!running.has(wording)) running.set(wording, line);
+      return false;
+    }),
+  );
+  return { pages: kept, running: [...running.values()] };
+}
+
+function edgesOf(lines: Line[]): Set<Line> {
+  const byHeight = [...lines].sort((a, b) => a.box.y - b.box.y);
+  return new Set([...byHeight.slice(0, edgeLines), ...byHeight.slice(-edgeLines)]);
+}
+
+/** Figures are page numbers as a rule; heights are compared to six points. */
+const keyOf = (line: Line): string => `${Math.round(line.box.y / 6)} ${fold(line.text).replace(/\d+/g, '#')}`;

@@ -1,0 +1,185 @@
+import { numberWords, sectionRoles, sectionWords, titleStarts, type SectionRole } from './headings.data';
+import { type Line } from './lines';
+import { type SectionHeading } from './reading';
+import { fold, joinSpacedLetters, lettersOf } from './words';
+
+interface Candidate {
+  index: number;
+  number: number;
+  role: SectionRole;
+  line: Line;
+  heading: string;
+  /** Title known for its section, as opposed to a number with a free title. */
+  isSure: boolean;
+}
+
+export interface Sections {
+  headings: SectionHeading[];
+  /** Lines of each section without its headings; what stands before the first heading is the preamble. */
+  preamble: Line[];
+  bodies: Map<SectionRole, Line[]>;
+  headingLines: Map<SectionRole, Line>;
+}
+
+/** Finds the numbered sections of a sheet in lines in reading order and deals the lines out to them. */
+export function findSections(lines: Line[]): Sections {
+  const chosen = chooseHeadings(lines);
+  const sections: Sections = { headings: [], preamble: [], bodies: new Map(), headingLines: new Map() };
+  const byIndex = new Map(chosen.map((candidate) => [candidate.index, candidate]));
+  let body = sections.preamble;
+  let lastHeading: Line | null = null;
+  lines.forEach((line, index) => {
+    const candidate = byIndex.get(index);
+    if (candidate) {
+      body = sections.bodies.get(candidate.role) ?? [];
+      sections.bodies.set(candidate.role, body);
+      if (!sections.headingLines.has(candidate.role)) sections.headingLines.set(candidate.role, line);
+      lastHeading = line;
+      return;
+    }
+    // The second line of a long heading is no part of the section's text.
+    if (lastHeading && isWrappedHeading(lastHeading, line)) return;
+    lastHeading = null;
+    body.push(line);
+  });
+  const seen = new Set<number>();
+  for (const { number, heading, line } of [...chosen].sort((a, b) => a.number - b.number || a.index - b.index)) {
+    if (seen.has(number)) continue;
+    seen.add(number);
+    sections.headings.push({ number, heading, page: line.page });
+  }
+  return sections;
+}
+
+/** Whether a line is the heading of a section with a title that is known for it. */
+export const isSectionHeading = (line: Line): boolean => headingIn(line, 0)?.isSure === true;
+
+function isWrappedHeading(heading: Line, line: Line): boolean {
+  const gap = line.box.y - heading.box.y;
+  return (
+    line.page === heading.page &&
+    gap > 0 &&
+    gap < heading.box.height * 2.2 &&
+    Math.abs(line.box.height - heading.box.height) < 0.6 &&
+    line.segments.length === 1 &&
+    (/^\p{Ll}/u.test(line.text) || /^company\s*\/|(^|[/ ])undertaking\b/i.test(line.text)) &&
+    !line.text.includes(':')
+  );
+}
+
+function chooseHeadings(lines: Line[]): Candidate[] {
+  const all = lines.map((line, index) => headingIn(line, index, lines[index + 1])).filter((candidate) => candidate !== null);
+  let chosen = inOrder(all);
+  if (new Set(chosen.map(({ number }) => number)).size < 8) {
+    const titled = lines.map((line, index) => titleAlone(line, index)).filter((candidate) => candidate !== null);
+    chosen = inOrder([...all, ...titled.filter((title) => !all.some((other) => other.index === title.index))].sort((a, b) => a.index - b.index));
+  }
+  return fillGaps(lines, chosen);
+}
+
+/** Reads "Section 3. Composition", "3 Composition", "SECTION THREE", "III.", "H A Z A R D S (ANSI Section 3)". */
+function headingIn(line: Line, index: number, next?: Line): Candidate | null {
+  const [first, second] = line.segments;
+  const texts = new Set([line.text, first?.text ?? '', `${first?.text ?? ''} ${second?.text ?? ''}`]);
+  for (const text of texts) {
+    if (text.length > 170) continue;
+    const joined = joinSpacedLetters(text).trim();
+    const found = numbered(fold(joined), joined, next);
+    if (found) return { ...found, index, line, heading: joined };
+  }
+  return null;
+}
+
+const numberForm = /^(?:no\.? ?|nr\.? ?|n° ?|# ?)?(\d{1,2}|[ivx]{1,4}|[a-z]{2,12})(?![a-z0-9])\s*([:.)\]|/-]*)\s*(.*)$/;
+
+function numbered(folded: string, printed: string, next?: Line): Pick<Candidate, 'number' | 'role' | 'isSure'> | null {
+  const ansi = /^(.*?)\s*\(?ansi section (\d{1,2})\)?$/.exec(folded);
+  if (ansi?.[1]) {
+    const role = roleOfTitle(ansi[1], Number(ansi[2]));
+    return role ? { number: Number(ansi[2]), role, isSure: true } : null;
+  }
+  const word = sectionWords.exec(folded);
+  const form = numberForm.exec(word ? folded.slice(word[0].length).trimStart() : folded);
+  if (!form) return null;
+  const [, figure = '', mark = '', title = ''] = form;
+  const number = /^\d+$/.test(figure) ? Number(figure) : (numberWords.get(figure) ?? 0);
+  if (number < 1 || number > 16) return null;
+  // "9.1 Information on …" is a subsection, "3.5 mg" a figure.
+  if (mark.startsWith('.') && /^\d/.test(title) && !word) return null;
+  if (/^\d/.test(title) && mark === '') return null;
+  const isSpelled = !/^\d+$/.test(figure);
+  if (!word && isSpelled && mark === '') return null;
+  const ownTitle = title === '' && word && next ? fold(joinSpacedLetters(next.text)) : title;
+  const role = roleOfTitle(ownTitle, number);
+  if (role && !isSentence(title)) return { number, role, isSure: true };
+  const isFreeTitle = word && mark !== '' && title !== '' && lettersOf(title).length <= 60 && !isSentence(title) && startsLikeTitle(printed);
+  const own = sectionRoles[number - 1];
+  return isFreeTitle && own ? { number, role: own, isSure: false } : null;
+}
+
+const startsLikeTitle = (printed: string): boolean => /^\S+\s*[\p{L}\d#.]*\s*[:.)\]|/\u2010-\u2015-]+\s*\p{Lu}/u.test(printed);
+
+/** Ends like a sentence or runs on after one: a reference to a section, not its heading. */
+const isSentence = (title: string): boolean => /[a-z]{3}[.;,]$|[a-z]{3}\. [a-z]/.test(title) || lettersOf(title).length > 110;
+
+function roleOfTitle(title: string, number: number): SectionRole | null {
+  const letters = lettersOf(title);
+  if (letters.length < 4) return null;
+  const own = sectionRoles[number - 1];
+  if (own && titleStarts[own].some((start) => start.test(letters))) return own;
+  return sectionRoles.find((role) => titleStarts[role].some((start) => start.test(letters))) ?? null;
+}
+
+/** A title without a number, on a line of its own. */
+function titleAlone(line: Line, index: number): Candidate | null {
+  if (line.segments.length !== 1 || line.text.length > 70 || /[.;,]$/.test(line.text)) return null;
+  const heading = joinSpacedLetters(line.text);
+  const title = fold(heading).replace(/:$/, '');
+  if (lettersOf(title).length > 48 || /[:.]/.test(title) || !/^\p{Lu}/u.test(heading)) return null;
+  const role = roleOfTitle(title, 0);
+  return role ? { index, number: sectionRoles.indexOf(role) + 1, role, line, heading, isSure: false } : null;
+}
+
+/** The longest run of headings whose numbers never fall; a number that stands only elsewhere is kept as well. */
+function inOrder(candidates: Candidate[]): Candidate[] {
+  const best: { weight: number; before: number }[] = [];
+  candidates.forEach((candidate, at) => {
+    const own = { weight: 0, before: -1 };
+    for (let earlier = 0; earlier < at; earlier++) {
+      const other = candidates[earlier];
+      const score = best[earlier];
+      if (other && score && other.number <= candidate.number && score.weight > own.weight) Object.assign(own, { weight: score.weight, before: earlier });
+    }
+    own.weight += candidate.isSure ? 1 : 0.4;
+    best.push(own);
+  });
+  let at = best.reduce((top, score, index) => (score.weight >= (best[top]?.weight ?? 0) ? index : top), 0);
+  const chain = new Set<Candidate>();
+  while (at >= 0 && candidates[at]) {
+    chain.add(candidates[at] as Candidate);
+    at = best[at]?.before ?? -1;
+  }
+  const numbers = new Set([...chain].map(({ number }) => number));
+  return candidates.filter((candidate) => chain.has(candidate) || (candidate.isSure && !numbers.has(candidate.number)));
+}
+
+/** A number missing between two neighbours: a line there that begins with it, or its title alone, will do. */
+function fillGaps(lines: Line[], chosen: Candidate[]): Candidate[] {
+  const filled = [...chosen];
+  const numbers = new Set(chosen.map(({ number }) => number));
+  if (numbers.size < 6) return chosen;
+  for (let number = 1; number <= 16; number++) {
+    if (numbers.has(number)) continue;
+    const from = Math.max(-1, ...chosen.filter((other) => other.number < number).map(({ index }) => index));
+    const to = Math.min(lines.length, ...chosen.filter((other) => other.number > number).map(({ index }) => index));
+    const role = sectionRoles[number - 1];
+    if (from >= to || !role || filled.some((other) => other.role === role)) continue;
+    const between = lines.slice(from + 1, to).map((line, offset) => ({ line, index: from + 1 + offset }));
+    const start = new RegExp(`^(\\p{L}{3,10} )?${number}\\s?[.:)–—-]?\\s{0,3}\\p{Lu}`, 'u');
+    const numberedLine = between.find(({ line }) => line.text.length < 70 && start.test(line.text) && !isSentence(fold(line.text)) && /\p{L}{4}/u.test(line.text) && !/\d/.test(line.text.slice(4)));
+    const titled = between.map(({ line, index }) => titleAlone(line, index)).find((candidate) => candidate?.number === number);
+    if (titled) filled.push(titled);
+    else if (numberedLine) filled.push({ ...numberedLine, number, role, heading: numberedLine.line.text, isSure: false });
+  }
+  return filled.sort((a, b) => a.index - b.index);
+}

@@ -1,0 +1,81 @@
+import { auditSds, type AuditLine } from '#compliance/hazcom/sds-audit';
+import { type SheetEdit, type SheetField, type SheetFields } from '#shared/sheets';
+import type * as z from 'zod';
+import { type SheetRemark } from '#shared/sheets';
+import { type Field, type SheetReading } from './reader/reading';
+
+/** Below this a person is asked to look. */
+export const lookBelow = 0.8;
+
+export const noFields = (): SheetFields => ({ productName: null, supplier: null, language: null, revisedOn: null, signalWord: null, hazardCodes: [], precautionaryCodes: [], ingredients: [], limits: [], protectionWords: [], sections: [] });
+
+const fromReader = <T, U = T>({ value, page, box, quote, confidence, because }: Field<T>, change: (value: T) => U): SheetField<U> => ({ value: change(value), place: { page, box, quote }, confidence, because: because ?? null, origin: 'read' });
+const one = <T>(field: Field<T> | null): SheetField<T> | null => field && fromReader(field, (value) => value);
+const many = <T, U = T>(fields: readonly Field<T>[], change: (value: T) => U): SheetField<U>[] => fields.map((field) => fromReader(field, change));
+
+/** What the reader answered, in the contract's form. Text from a PDF is cut to lengths a form can carry. */
+export function fieldsFromReading(reading: SheetReading): SheetFields {
+  return {
+    productName: one(reading.productName),
+    supplier: one(reading.supplier),
+    language: one(reading.language),
+    revisedOn: one(reading.revisionDate),
+    signalWord: one(reading.signalWord),
+    hazardCodes: many(reading.hazardCodes, (code) => code),
+    precautionaryCodes: many(reading.precautionaryCodes, (code) => code),
+    ingredients: many(reading.ingredients, ({ name, cas, concentration }) => ({ name: (name ?? '').slice(0, 300), cas, concentration })).slice(0, 200),
+    limits: many(reading.limits, ({ substance, kind, value, unit, text }) => ({ substance: (substance ?? '').slice(0, 300), kind: kind ?? '', value: value === null ? text.slice(0, 60) : String(value), unit: unit ?? '' })).slice(0, 200),
+    protectionWords: many(reading.ppeWords, ({ topic, text }) => ({ topic, text: text.slice(0, 1000) })).slice(0, 40),
+    sections: reading.sections,
+  };
+}
+
+/** How many values want a person's look: unsure ones, and single values that were not found. */
+export function countToLookAt(fields: SheetFields): number {
+  const singles = [fields.productName, fields.supplier, fields.revisedOn, fields.signalWord];
+  const all = [...singles, ...fields.hazardCodes, ...fields.ingredients];
+  return all.filter((field) => field === null || field.confidence < lookBelow).length;
+}
+
+const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+/** A value a person left as read keeps its place; a changed one is marked as entered. */
+const keep = <T>(value: T, before: readonly (SheetField<T> | null)[]): SheetField<T> => before.find((field) => field !== null && same(field.value, value)) ?? { value, place: null, confidence: 1, because: null, origin: 'entered' };
+
+export function applyEdit(before: SheetFields, edit: SheetEdit): SheetFields {
+  const single = <T>(value: T | null, field: SheetField<T> | null): SheetField<T> | null => (value === null ? null : keep(value, [field]));
+  return {
+    productName: single(edit.productName, before.productName),
+    supplier: single(edit.supplier, before.supplier),
+    language: single<string>(edit.language, before.language),
+    revisedOn: single(edit.revisedOn, before.revisedOn),
+    signalWord: single(edit.signalWord, before.signalWord),
+    hazardCodes: edit.hazardCodes.map((code) => keep(code, before.hazardCodes)),
+    precautionaryCodes: edit.precautionaryCodes.map((code) => keep(code, before.precautionaryCodes)),
+    ingredients: edit.ingredients.map((each) => keep(each, before.ingredients)),
+    limits: edit.limits.map((each) => keep(each, before.limits)),
+    protectionWords: edit.protectionWords.map((each) => keep(each, before.protectionWords)),
+    sections: before.sections,
+  };
+}
+
+/** What the audit of form, statements and CAS digits has to say, worst first; lines that are met are left out. */
+export function remarksOn(fields: SheetFields, today: string): z.infer<typeof SheetRemark>[] {
+  const codes = fields.hazardCodes.map((field) => ({ code: field.value, category: null }));
+  const lines = auditSds(
+    {
+      kind: 'mixture',
+      language: fields.language?.value ?? 'en',
+      sections: fields.sections.map(({ number, heading }) => ({ number, heading, text: heading })),
+      signalWords: fields.signalWord && [fields.signalWord.value],
+      hazards: codes,
+      pictograms: null,
+      casNumbers: fields.ingredients.flatMap(({ value }) => (value.cas ? [value.cas] : [])),
+      revisedOn: fields.revisedOn?.value ?? null,
+      maxAgeYears: null,
+    },
+    today,
+  );
+  // The text of each section is not kept, so its content is not judged here; pictograms are not read, so nothing is asked of them.
+  const shown = (line: AuditLine) => line.outcome !== 'met' && line.outcome !== 'not-applicable' && !line.id.startsWith('content-') && !/pictogram/.test(line.id);
+  return lines.filter(shown).map(({ outcome, text, source }) => ({ outcome, text: text.en, source: [source.citation, source.paragraph].filter(Boolean).join(' ') }));
+}
