@@ -2,6 +2,7 @@
 import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, openSync, closeSync, readdirSync, readFileSync, renameSync, rmSync, statSync } from 'node:fs';
 import { basename, join } from 'node:path';
+import { Stopped } from './progress.mjs';
 import { writeFileWhole } from './secrets.mjs';
 
 /** Ends a child when its parent dies, even by kill -9 (Linux's parent-death signal); part of every Debian. */
@@ -11,6 +12,7 @@ const logLimitBytes = 5_000_000;
 
 /** @type {Set<import('node:child_process').ChildProcess>} */
 const running = new Set();
+let areCommandsEnding = false;
 
 /** A command that ended with something else than 0; the message carries the end of what it printed. */
 export class CommandFailed extends Error {
@@ -50,15 +52,18 @@ export function run(command, commandArguments, { env = process.env, cwd } = {}) 
     });
     child.on('close', (code, signal) => {
       running.delete(child);
-      if (code === 0) resolve(printed);
+      if (areCommandsEnding) reject(new Stopped());
+      else if (code === 0) resolve(printed);
       else reject(new CommandFailed(name, signal ? `was ended by ${signal}` : `ended with ${code}`, all));
     });
   });
 }
 
-/** Ends the commands that `run` has going, for a Ctrl-C in the middle of a step. */
+/** Ends the commands that `run` has going, for a Ctrl-C in the middle of a step; by force after two seconds. */
 export function endRunningCommands() {
+  areCommandsEnding = true;
   for (const child of running) child.kill('SIGTERM');
+  setTimeout(() => running.forEach((child) => child.kill('SIGKILL')), 2000).unref();
 }
 
 /**
@@ -149,13 +154,46 @@ export function processStartTicks(pid) {
 }
 
 /**
+ * The process that started another; 0 when either is gone.
+ * @param {number} pid
+ */
+export function parentOf(pid) {
+  try {
+    return parentFromStat(readFileSync(`/proc/${pid}/stat`, 'utf8'));
+  } catch {
+    return 0;
+  }
+}
+
+/**
+ * The name of a process's program; empty when it is gone.
+ * @param {number} pid
+ */
+export function processName(pid) {
+  try {
+    return readFileSync(`/proc/${pid}/comm`, 'utf8').trim();
+  } catch {
+    return '';
+  }
+}
+
+/** @param {string} stat */
+const fieldsAfterName = (stat) => stat.slice(stat.lastIndexOf(')') + 2).split(' ');
+
+/**
+ * Field 4 of /proc/PID/stat.
+ * @param {string} stat
+ */
+export const parentFromStat = (stat) => Number(fieldsAfterName(stat)[1]);
+
+/**
  * Field 22 of /proc/PID/stat. The second field is the command in brackets and may hold spaces and brackets itself.
  * A zombie counts as gone.
  * @param {string} stat
  * @returns {number | undefined}
  */
 export function startTicksFromStat(stat) {
-  const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
+  const fields = fieldsAfterName(stat);
   return fields[0] === 'Z' || fields[0] === 'X' ? undefined : Number(fields[19]);
 }
 

@@ -4,6 +4,9 @@ import { performance } from 'node:perf_hooks';
 /** A sentence for whoever sits at the terminal: printed alone, without a stack, and the command ends with 1. */
 export class Refusal extends Error {}
 
+/** A step given up because the whole command is being stopped: no failure. */
+export class Stopped extends Error {}
+
 const quietMs = 2000;
 
 /**
@@ -24,7 +27,7 @@ export async function step(label, work, write = (text) => void process.stdout.wr
     write(`${tookText(performance.now() - startedAtMs)}\n`);
     return answer;
   } catch (error) {
-    write(' failed\n');
+    write(error instanceof Stopped ? '\n' : ' failed\n');
     throw error;
   } finally {
     clearInterval(dots);

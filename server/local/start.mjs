@@ -7,8 +7,8 @@ import { ensurePostgres } from './debian.mjs';
 import { tryLock } from './lock.mjs';
 import { demandNode, ensurePackages } from './packages.mjs';
 import { demandPort, parsePort } from './ports.mjs';
-import { endLeftovers, endRunningCommands, logPath, run } from './processes.mjs';
-import { Refusal, say, sayError, step } from './progress.mjs';
+import { endLeftovers, endRunningCommands, logPath, parentOf, processName, run } from './processes.mjs';
+import { Refusal, say, sayError, step, Stopped } from './progress.mjs';
 import { ensureKeys } from './secrets.mjs';
 import { signInLines, signInsFrom } from './sign-ins.mjs';
 import { keepRunning } from './supervise.mjs';
@@ -25,10 +25,12 @@ for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
   process.on(signal, () => void stopEverything());
 }
 
-// npm passes signals on, but when it is killed outright nobody would be left to press Ctrl-C.
+// A closed terminal or pipe must not end us before our children.
+for (const stream of [process.stdout, process.stderr]) stream.on('error', () => undefined);
+// npm and su pass signals on, but when they are killed outright nobody is left to press Ctrl-C.
 if (process.env['npm_lifecycle_event']) {
-  const npm = process.ppid;
-  setInterval(() => void (process.ppid === npm ? undefined : stopEverything()), 1000).unref();
+  const atFirst = whoCanStopUs();
+  setInterval(() => void (whoCanStopUs() === atFirst ? undefined : stopEverything()), 1000).unref();
 }
 
 try {
@@ -107,6 +109,12 @@ async function start() {
   say(`\nCtrl-C stops it. Data, mail and logs are in ${folder}`);
 }
 
+/** npm (our parent, or the parent of the shell that it runs us in) and, at a terminal, what npm was typed into. */
+function whoCanStopUs() {
+  const npm = ['sh', 'dash', 'bash'].includes(processName(process.ppid)) ? parentOf(process.ppid) : process.ppid;
+  return process.stdout.isTTY ? `${npm} ${parentOf(npm)}` : String(npm);
+}
+
 /** Makes the data folder where it was asked for, .data beside the program otherwise. */
 function dataFolder() {
   // npm changes to the project's folder; a relative path was meant from where the command was typed.
@@ -120,7 +128,7 @@ function dataFolder() {
 }
 
 function goOn() {
-  if (isStopping) throw new Refusal('Stopped.');
+  if (isStopping) throw new Stopped();
 }
 
 /**
