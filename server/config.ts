@@ -19,6 +19,7 @@ const Environment = z.object({
   KNEEBOARD_KEYS: z.string(),
   WEB_ROOT: z.string().default('dist/web'),
   SHEET_READER_ENTRY: z.string().default('dist/server/sheet-reader.mjs'),
+  VERIFIER: z.string().default('server/recordlog/verify.mjs'),
   UPLOAD_FOLDER: z.string().optional(),
   CHECKPOINT_SECONDS: z.coerce.number().positive().default(60),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
