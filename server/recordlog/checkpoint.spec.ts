@@ -48,6 +48,7 @@ describe('published notes', () => {
     expect(openNote(note, [peter])).toEqual({ text: GO.text, signedBy: [peter] });
     expect(openNote(note, [enoch, peter]).signedBy).toEqual([peter, enoch]);
     expect(() => openNote(note, [parseVkey(C2SP.vkey)])).toThrow('None of the known keys');
+    expect(() => openNote(`${GO.text}\n${GO.line.replace('PeterNeumann', 'PeterNeuman')}`, [peter])).toThrow('None of the known keys');
     expect(openNote(C2SP.note, [parseVkey(C2SP.vkey)]).text).toBe('This is an example message.\n');
   });
 

@@ -5,7 +5,8 @@ import { join } from 'node:path';
 import { promisify } from 'node:util';
 import { afterAll, beforeAll, describe, expect, it } from '@jest/globals';
 import { entryOf, newSigner, ORIGIN, TestLog } from '#test/support/test-log';
-import { keyRotationRecord } from './key-rotation';
+import { checkpointText, signNote } from './checkpoint';
+import { keyRotationRecord, nextKey } from './key-rotation';
 import { leafHash, merkleRoot } from './merkle';
 import { verifyLog } from './verify.mjs';
 
@@ -84,6 +85,19 @@ describe('tampered with, hashes left as they were', () => {
   it('names an entry whose record is no longer whole base64', async () => {
     const lines = edit(await new TestLog(30).export(), 17, (line) => line.replace('"record":"ey', '"record":"e*'));
     expect(said(lines)).toMatch(/^Entry 17 is wrong: its record does not match its hash/);
+    const padded = edit(await new TestLog(30).export(), 17, (line) => line.replace(/"record":"[^"]*/, (record) => `${record}!!!!`));
+    expect(said(padded)).toMatch(/^Entry 17 is wrong: its record does not match its hash/);
+  });
+
+  it('names an entry whose leaf has a day that does not exist, or a kind', async () => {
+    for (const [from, to] of [['2026-12-01', '2026-02-30'], ['acknowledgement', 'opinion']] as const) {
+      const log = new TestLog(3);
+      log.entries = log.entries.map((entry, index) => {
+        const leaf = entry.leaf.replace(from, to);
+        return index === 1 ? { ...entry, leaf, leafHash: leafHash(Buffer.from(leaf)) } : entry;
+      });
+      expect(said(await log.export())).toBe('Entry 1 is wrong: its leaf is out of form.');
+    }
   });
 
   it('names an entry whose leaf was changed', async () => {
@@ -226,7 +240,10 @@ describe('rewritten by someone who has the key', () => {
     const proof = leafHash(Buffer.of(1)).toString('hex');
     const last = (lines.at(-1) ?? '').replace(/"proof":\["[0-9a-f]{64}/, `"proof":["${proof}`);
     expect(said([...lines.slice(0, -1), last])).toMatch(/is not proved to be the beginning of this log\.$/);
-    expect(said(lines, { keys: [newSigner('kneeboard.example/log/other').key.vkey] })).toMatch(/^The key is for kneeboard.example\/log\/other/);
+    const other = newSigner('kneeboard.example/log/other');
+    const note = signNote(checkpointText({ origin: other.key.name, size: 20, root: Buffer.alloc(32) }), [other]);
+    expect(said(lines, { earlier: [fileOf(note)] })).toMatch(/is of another log: kneeboard.example\/log\/other\.$/);
+    expect(said(lines, { keys: [other.key.vkey] })).toMatch(/^The key is for kneeboard.example\/log\/other/);
   });
 });
 
@@ -254,6 +271,17 @@ describe('an extract', () => {
     expect(said(lines.toSpliced(2, 1))).toBe('The file has 2 entries, its last line says 3.');
   });
 
+  it('has no entry beyond its checkpoint', async () => {
+    const lines = await new TestLog(1).export({ indexes: [0] });
+    expect(said(edit(lines, 0, (line) => line.replace('"index":0', '"index":5')))).toBe('Entry 5 is wrong: its proof does not lead to the checkpoint.');
+  });
+
+  it('speaks in its header of the log its checkpoint is of', async () => {
+    const [header = '', ...rest] = await new TestLog(30).export({ indexes: [4] });
+    expect(said([header.replace('"size":30', '"size":31'), ...rest])).toMatch(/^The header speaks of 31 entries/);
+    expect(said([header.replace('whole', 'part').replace('extract', 'part'), ...rest])).toBe('The header is out of form.');
+  });
+
   it('is not good beside a kept checkpoint it brings no proof from', async () => {
     const log = new TestLog(30);
     const earlier = [fileOf(log.checkpoint(20))];
@@ -279,6 +307,17 @@ describe('a log whose key was changed', () => {
     for (const key of keys) expect(said(lines, { keys: [key] })).toMatch(/^Good/);
   });
 
+  it('leads from the old key to the new by a record both have signed', () => {
+    const [first, second] = [newSigner(), newSigner()];
+    const record = keyRotationRecord(first, second);
+    expect(nextKey(record, first.key).vkey).toBe(second.key.vkey);
+    expect(() => nextKey(record, newSigner().key)).toThrow('not signed by both keys');
+    const halfSigned = record.split('\n').toSpliced(-2, 1).join('\n');
+    expect(() => nextKey(halfSigned, first.key)).toThrow('not signed by both keys');
+    expect(() => keyRotationRecord(first, first)).toThrow('the old one');
+    expect(() => keyRotationRecord(first, newSigner('kneeboard.example/log/other'))).toThrow('The new key is for');
+  });
+
   it('is not good under the old key once the new one is given, nor under a key that only says it follows', async () => {
     const { log, keys } = await rotated();
     const [oldKey = '', , newKey = ''] = keys;
@@ -292,9 +331,11 @@ describe('a log whose key was changed', () => {
   it('names a rotation that one of the keys did not sign', async () => {
     const { log } = await rotated();
     const [first, second] = [newSigner(), newSigner()];
-    const record = keyRotationRecord(first, second).split('\n').filter((line) => !line.startsWith('— ') || !line.includes(Buffer.from(second.key.keyId, 'hex').toString('base64').slice(0, 5))).join('\n');
-    log.entries[19] = entryOf(19, record, { kind: 'key-rotation' });
-    expect(said(await log.export())).toBe('Entry 19 is wrong: its key rotation is not signed by both keys.');
+    const [text = '', signatures = ''] = keyRotationRecord(first, second).split('\n\n');
+    for (const line of signatures.trim().split('\n')) {
+      log.entries[19] = entryOf(19, `${text}\n\n${line}\n`, { kind: 'key-rotation' });
+      expect(said(await log.export())).toBe('Entry 19 is wrong: its key rotation is not signed by both keys.');
+    }
     log.entries[19] = entryOf(19, 'a new key', { kind: 'key-rotation' });
     expect(said(await log.export())).toBe('Entry 19 is wrong: its key rotation is out of form.');
   });
