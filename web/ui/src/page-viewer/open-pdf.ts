@@ -1,0 +1,34 @@
+import { type PDFDocumentProxy } from 'pdfjs-dist/legacy/build/pdf.mjs';
+
+export type Pdf = PDFDocumentProxy;
+
+/**
+ * Opens a PDF in the browser: the library and its worker are fetched only now, and neither compiles code at run time
+ * (the page's content policy forbids it), so no eval and no WebAssembly. Rejects when it is no PDF, needs a password or is out of reach.
+ */
+export async function openPdf(source: string | ArrayBuffer): Promise<{ readonly pdf: Pdf; readonly close: () => void }> {
+  const library = await import('pdfjs-dist/legacy/build/pdf.mjs');
+  library.GlobalWorkerOptions.workerSrc = new URL('pdf.worker.min.mjs', document.baseURI).href;
+  const task = library.getDocument({
+    // The worker takes the bytes away from whoever holds them: give it a copy.
+    ...(typeof source === 'string' ? { url: source } : { data: new Uint8Array(source.slice(0)) }),
+    isEvalSupported: false,
+    useWasm: false,
+    enableXfa: false,
+    standardFontDataUrl: new URL('pdf-fonts/', document.baseURI).href,
+  });
+  return { pdf: await task.promise, close: () => void task.destroy() };
+}
+
+/** The text of a page as lines, top to bottom as the file gives them: for those who do not see the picture. */
+export async function pageText(pdf: Pdf, pageNumber: number): Promise<readonly string[]> {
+  const page = await pdf.getPage(pageNumber);
+  const content = await page.getTextContent();
+  const lines: string[] = [''];
+  for (const item of content.items) {
+    if (!('str' in item)) continue;
+    lines[lines.length - 1] += item.str;
+    if (item.hasEOL) lines.push('');
+  }
+  return lines.map((line) => line.trim()).filter((line) => line !== '');
+}

@@ -1,0 +1,38 @@
+import { type Language } from '#compliance/outcome';
+
+export const PAGE_VIEWER_WORDS = {
+  en: {
+    previous: 'Previous page',
+    next: 'Next page',
+    page: 'Page',
+    of: (count: number) => `of ${count}`,
+    smaller: 'Smaller',
+    larger: 'Larger',
+    fit: 'Fit width',
+    asText: 'Page as text',
+    asPicture: 'Page as picture',
+    opening: 'Opening the file …',
+    failed: 'The file could not be shown here.',
+    failedDetail: 'The network may be gone, or the file is damaged. The paper copy in the binder counts too.',
+    again: 'Try again',
+    noText: 'This page holds no text, only a picture.',
+    picture: (name: string, page: number) => `${name}, page ${page}`,
+  },
+  es: {
+    previous: 'Página anterior',
+    next: 'Página siguiente',
+    page: 'Página',
+    of: (count: number) => `de ${count}`,
+    smaller: 'Más chico',
+    larger: 'Más grande',
+    fit: 'Ajustar al ancho',
+    asText: 'Página como texto',
+    asPicture: 'Página como imagen',
+    opening: 'Abriendo el archivo …',
+    failed: 'No se pudo mostrar el archivo aquí.',
+    failedDetail: 'Puede que no haya red o que el archivo esté dañado. También vale la copia de papel de la carpeta.',
+    again: 'Intentar de nuevo',
+    noText: 'Esta página no tiene texto, solo una imagen.',
+    picture: (name: string, page: number) => `${name}, página ${page}`,
+  },
+} as const satisfies Record<Language, unknown>;
