@@ -40,8 +40,11 @@ const figures = /(?<![\d.,/-])(\d{1,2})\s?([-/.])\s?(\d{1,2})\s?\2\s?((?:19|20)\
 const dayMonth = new RegExp(`(?<![\\d])(\\d{1,2})(?:st|nd|rd|th|er|o|\\.)?[\\s./-]*(?:of |de |del )?(${monthWord})\\.?[\\s,./-]*(?:de |del |of )?((?:19|20)\\d{2}|\\d{2})(?!\\d)`, 'g');
 const monthDay = new RegExp(`(?<![a-z])(${monthWord})\\.?[\\s/-]*(\\d{1,2})(?:st|nd|rd|th)?[\\s,/-]+((?:19|20)\\d{2})(?!\\d)`, 'g');
 
+const mayHoldDate = /\d.{0,14}\d\d/;
+
 /** Every full date in a line, in order. Figures that could be read both ways are read as `order` says. */
 export function datesIn(text: string, order: Pick<DateOrder, 'isDayFirst'>): WrittenDate[] {
+  if (!mayHoldDate.test(text)) return [];
   const folded = foldKeepingLength(text);
   const found: WrittenDate[] = [];
   const add = (match: RegExpExecArray, year: number, month: number, day: number, other: string | null, isDayFirst: boolean): void => {

@@ -30,7 +30,7 @@ interface Columns {
 
 const amountHeading = /%|\b(weight|wt|conc|concentration|concentracion|concentrations|content|contenido|teneur|gehalt|gew|konzentration|percent|porcentaje|range|amount|anteil|peso|poids|quantity|proportion|vol)\b/;
 const nameHeading = /\b(chemical name|ingredient|ingredients|component|components|substance|name|material|common name|nombre|ingrediente|componente|componentes|sustancia|nom|composant|composants|stoff|bezeichnung|inhaltsstoff|inhaltsstoffe|bestandteil|chemische)\b/;
-const casHeading = /\bcas\b/;
+const casHeading = /\bc\.?\s?a\.?\s?s\b/;
 
 /** The lines of the composition section that carry a CAS number, with the amount and the name of their row. */
 export function ingredients(parts: SheetParts): Field<Ingredient>[] {
@@ -100,6 +100,9 @@ function columnsOf(lines: Line[], anchors: Anchor[]): Columns {
 function amountsOf(lines: Line[], cells: Cell[], anchors: Anchor[], columns: Columns): Map<Anchor, Amount> {
   const paired = new Map<Anchor, Amount>();
   const free = freeAmounts(cells, columns);
+  // Several amounts in a row and no heading that names one of them: one column a product. Whose, nobody can say here.
+  const rowsOfMany = anchors.filter((anchor) => free.filter((amount) => amount.row === anchor.row).length > 1);
+  if (rowsOfMany.length > 0 && rowsOfMany.length >= anchors.length * 0.3 && !rowsOfMany.every((anchor) => free.filter((amount) => amount.row === anchor.row && columns.amount !== null && overlaps(amount.segment, columns.amount)).length === 1)) return paired;
   for (const anchor of anchors) {
     const sameRow = free.filter((amount) => amount.row === anchor.row && amount.segment !== anchor.segment);
     const inColumn = sameRow.filter(({ segment }) => columns.amount !== null && overlaps(segment, columns.amount));

@@ -30,7 +30,7 @@ export function findLabelled(lines: Line[], label: RegExp): Labelled[] {
       if (!match) return;
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
-      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest);
+      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest) ?? /^ [a-z '/&()]{2,34}:/.exec(rest);
       if (!mark && match[0].length < folded.length) return;
       const values = valueOf(lines, index, at, printed, rest);
       if (values) found.push({ line, index, ...values });

@@ -16,10 +16,13 @@ export interface LanguageGuess {
   confidence: number;
 }
 
+/** The first pages decide; the rest of a long sheet costs time and says the same. */
+const enoughLetters = 15_000;
+
 /** The language most small words belong to; null for a text too short or too mixed to say. */
 export function languageOf(text: string): LanguageGuess | null {
   const counts = new Map<string, number>();
-  for (const word of fold(text).match(/[a-z]+/g) ?? []) counts.set(word, (counts.get(word) ?? 0) + 1);
+  for (const word of fold(text.slice(0, enoughLetters)).match(/[a-z]+/g) ?? []) counts.set(word, (counts.get(word) ?? 0) + 1);
   const scores = Object.entries(smallWords)
     .map(([language, words]) => ({ language, score: words.reduce((sum, word) => sum + (counts.get(word) ?? 0), 0) }))
     .sort((a, b) => b.score - a.score);

@@ -8,7 +8,7 @@ import { fold, hasLetters, joinSpacedLetters } from './words';
 const nameLabels: readonly { label: RegExp; confidence: number }[] = [
   {
     label:
-      /^(product name|product names|name of (the )?product|commercial product name|product trade name|product name ?[/&] ?trade name|product identity|nombre del producto|nombre de producto|nombre comercial del producto|nom du produit|nom de produit|produktname|name des produkts|nome del prodotto|nome do produto|productnaam)\b/,
+      /^(product names?(?: ?\/ ?(?:trade names?|codes?|synonyms?))?|product name as (?:used|it appears) on (?:the )?label|material name|name of (the )?product|commercial product name|product trade name|product name ?[/&] ?trade name|product identity|nombre( comercial)? del? (producto|material)|identificacion del producto( quimico)?|nom d[ue] produit|nom de la (matiere|substance)|nom commercial du produit|produktname|name des produkts|nome del prodotto|nome do produto|productnaam)\b/,
     confidence: 0.95,
   },
   {
@@ -18,7 +18,7 @@ const nameLabels: readonly { label: RegExp; confidence: number }[] = [
   },
   {
     label:
-      /^((ghs )?product identifier|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material name|material|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
+      /^((ghs )?product identifier|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material|preparation|article|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
     confidence: 0.75,
   },
 ];

@@ -9,7 +9,7 @@ export type DateRole = 'revision' | 'issue' | 'print' | 'supersedes' | 'other';
 /** Words that say what a date is, the ones that decide against a revision first; folded. */
 const roleWords: readonly (readonly [DateRole, RegExp])[] = [
   ['supersedes', /super[sc]ede|replaces|previous|prior (version|revision|date)|anterior|sustituye|reemplaza|remplace|annule|ersetzt|vorherige|letzte ausgabe|last issue|first (issue|compil|version|edition)|primera (emision|edicion)|premiere (edition|emission)|erstausgabe|original (issue|date)|sostituisce|vervangt/],
-  ['other', /expir|valid (until|to|thru)|effective until|vencim|caduc|gultig bis|next review|review due|proxima|download|transport|shipment|\bregulation|directive|reglament|verordnung|amend(ed|ing) by/],
+  ['other', /expir|valid (until|to|thru)|effective until|vencim|caduc|gultig bis|next review|review due|proxima|download|transport|shipment|\bregulation|directive|\bcfr\b|\brule\b|hazard communication|standard|reglament|verordnung|amend(ed|ing) by/],
   ['print', /print|impres|imprim|druck|stampa|afdruk/],
   ['revision', /revis|\brev\b|rev\.|overhaul|updat|actualiz|mise a jour|misa a jour|ueberarbeit|uberarbeit|bearbeitet|bearbeitungsdatum|version (date|vom|du|from)|date of (the )?version|fecha de version|aggiorna|herzien|last (changed?|modified|review)|date reviewed|reviewed (on|date)|geandert|stand:|\bstand\b/],
   ['issue', /issue|issuing|prepar|emision|emitid|elabora|edicion|emission|edition|etabli|redaction|ausgabe|erstell|ausstell|creation|creacion|created|published|publica|\beffective|completed|compiled|approved|date written|\bemissione|datum vom/],
@@ -93,10 +93,13 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
 }
 
 function roleOf(label: string): { role: DateRole; isBare: boolean; words: string } | null {
-  const folded = fold(label);
-  const near = folded.slice(-70);
-  for (const [at, [role, words]] of roleWords.entries()) {
-    if (words.test(near)) return { role, isBare: at === roleWords.length - 1, words: label };
+  const near = fold(label).slice(-70);
+  // "Supersedes date: - Revision date:": the last label counts, if it says anything.
+  const last = near.replace(/[\s:.-]+$/, '').split(/:\s/).at(-1) ?? near;
+  for (const text of new Set([near.endsWith(':') || last !== near ? `${last}:` : near, near])) {
+    for (const [at, [role, words]] of roleWords.entries()) {
+      if (words.test(text)) return { role, isBare: at === roleWords.length - 1, words: label };
+    }
   }
   return null;
 }

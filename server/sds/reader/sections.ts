@@ -22,8 +22,8 @@ export interface Sections {
 }
 
 /** Finds the numbered sections of a sheet in lines in reading order and deals the lines out to them. */
-export function findSections(lines: Line[]): Sections {
-  const chosen = chooseHeadings(lines);
+export function findSections(all: Line[]): Sections {
+  const { lines, chosen } = chooseHeadings(all);
   const sections: Sections = { headings: [], preamble: [], bodies: new Map(), headingLines: new Map() };
   const byIndex = new Map(chosen.map((candidate) => [candidate.index, candidate]));
   let body = sections.preamble;
@@ -67,18 +67,44 @@ function isWrappedHeading(heading: Line, line: Line): boolean {
   );
 }
 
-function chooseHeadings(lines: Line[]): Candidate[] {
-  const all = lines.map((line, index) => headingIn(line, index, lines[index + 1])).filter((candidate) => candidate !== null);
-  let chosen = inOrder(all);
+function chooseHeadings(all: Line[]): { lines: Line[]; chosen: Candidate[] } {
+  const found = all.map((line, index) => headingIn(line, index, all[index + 1])).filter((candidate) => candidate !== null);
+  const { candidates, end } = firstSheet(found, all.length);
+  const lines = all.slice(0, end);
+  let chosen = inOrder(candidates);
   if (new Set(chosen.map(({ number }) => number)).size < 8) {
     const titled = lines.map((line, index) => titleAlone(line, index)).filter((candidate) => candidate !== null);
-    chosen = inOrder([...all, ...titled.filter((title) => !all.some((other) => other.index === title.index))].sort((a, b) => a.index - b.index));
+    chosen = inOrder([...candidates, ...titled.filter((title) => !candidates.some((other) => other.index === title.index))].sort((a, b) => a.index - b.index));
   }
-  return fillGaps(lines, chosen);
+  return { lines, chosen: fillGaps(lines, chosen) };
 }
+
+/**
+ * A file may hold two sheets (the parts of a kit) or begin with a table of contents: section 1 comes again after most
+ * of the others. Contents are headings on neighbouring lines; they are passed over. A second sheet is left unread.
+ */
+function firstSheet(found: Candidate[], length: number): { candidates: Candidate[]; end: number } {
+  let candidates = found;
+  for (let round = 0; round < 3; round++) {
+    const restart = candidates.findIndex((candidate, at) => candidate.number === 1 && candidate.isSure && new Set(candidates.slice(0, at).filter(({ isSure }) => isSure).map(({ number }) => number)).size >= 10);
+    const before = candidates.slice(0, Math.max(0, restart));
+    const [first] = before;
+    const last = before.at(-1);
+    const second = candidates[restart];
+    if (restart < 0 || !first || !last || !second) break;
+    const isContents = last.index - first.index < before.length * 3;
+    if (!isContents) return { candidates: before, end: second.index };
+    candidates = candidates.slice(restart);
+  }
+  return { candidates, end: length };
+}
+
+/** A quick look before the slow one: a figure, a Roman number, a word for "section", or letters set apart. */
+const mayBeHeading = /^\P{L}{0,6}(\d|[ivx]{1,4}[\s.:)]|sec|sek|rub|abs|sez|se[cç]|apa|kap|part|punkt|\p{L} \p{L} )|ansi section/iu;
 
 /** Reads "Section 3. Composition", "3 Composition", "SECTION THREE", "III.", "H A Z A R D S (ANSI Section 3)". */
 function headingIn(line: Line, index: number, next?: Line): Candidate | null {
+  if (!mayBeHeading.test(line.text)) return null;
   const [first, second] = line.segments;
   const texts = new Set([line.text, first?.text ?? '', `${first?.text ?? ''} ${second?.text ?? ''}`]);
   for (const text of texts) {

@@ -31,7 +31,7 @@ export function matchStatements(text: string, language: string, kind: 'H' | 'P',
       const [start, end] = [match.index, match.index + match[0].length];
       if (taken.some((other) => start < other.end && end > other.start) || !beginsSentence(level, start, isList)) continue;
       taken.push({ start, end });
-      found.push({ code, start: origin[start] ?? 0, end: (origin[end - 1] ?? 0) + 1 });
+      for (const single of code.split(',')) found.push({ code: single, start: origin[start] ?? 0, end: (origin[end - 1] ?? 0) + 1 });
     }
   }
   return found.sort((a, b) => a.start - b.start);

@@ -6,7 +6,7 @@
  */
 type StatementRow = readonly [code: string, en: string, es: string, fr: string, de: string];
 
-export const statementRows: readonly StatementRow[] = [
+const oneByOne: StatementRow[] = [
   ['H200', 'Unstable explosive|Unstable explosives', 'Explosivo inestable', 'Explosif instable', 'Instabil, explosiv'],
   ['H201', 'Explosive; mass explosion hazard', 'Explosivo; peligro de explosión en masa', 'Explosif; danger d’explosion en masse', 'Explosiv, Gefahr der Massenexplosion'],
   ['H204', 'Fire or projection hazard', 'Peligro de incendio o de proyección', 'Danger d’incendie ou de projection', 'Gefahr durch Feuer oder Splitter, Spreng- und Wurfstücke'],
@@ -102,6 +102,14 @@ export const statementRows: readonly StatementRow[] = [
   ['H303+H313+H333', 'May be harmful if swallowed, in contact with skin or if inhaled', 'Puede ser nocivo en caso de ingestión, contacto con la piel o inhalación', 'Peut être nocif par ingestion, par contact cutané ou par inhalation', 'Kann bei Verschlucken, Hautkontakt oder Einatmen gesundheitsschädlich sein'],
   ['H315+H320', 'Causes skin and eye irritation', 'Provoca irritación cutánea y ocular', 'Provoque une irritation de la peau et des yeux', 'Verursacht Haut- und Augenreizung'],
 ];
+
+/** Two statements drawn together, as American sheets do; common practice, no source. */
+const drawnTogether: StatementRow[] = [
+  ['H315,H318', 'Causes skin irritation and serious eye damage', '', '', ''],
+  ['H315,H319', 'Causes skin and serious eye irritation|Causes skin irritation and serious eye irritation|Causes serious eye and skin irritation', 'Provoca irritación cutánea y ocular grave', '', ''],
+];
+
+export const statementRows: readonly StatementRow[] = [...oneByOne, ...drawnTogether];
 
 /** The common precautionary statements by their opening words (UN GHS Annex 3; Spanish, French, German from memory). */
 export const precautionRows: readonly StatementRow[] = [

@@ -1,15 +1,20 @@
 /** Lower case without accents, ß as ss, typographic marks as plain ones, blanks single: what labels are compared in. */
 export function fold(text: string): string {
-  return text
-    .toLowerCase()
+  const lower = text.toLowerCase();
+  return (isPlain.test(lower) ? lower : withoutMarks(lower)).replace(/\s+/g, ' ').trim();
+}
+
+const isPlain = /^[\n -_a-~]*$/;
+
+function withoutMarks(lower: string): string {
+  return lower
     .normalize('NFKD')
     .replace(/[\u0300-\u036f]/g, '')
     .replace(/ß/g, 'ss')
+    .replace(/œ/g, 'oe')
     .replace(/[\u2010-\u2015\u2212]/g, '-')
     .replace(/[\u2018\u2019\u02bc`´]/g, "'")
-    .replace(/[™®©]/g, '')
-    .replace(/\s+/g, ' ')
-    .trim();
+    .replace(/[™®©]/g, '');
 }
 
 /** Joins words set letter by letter: "H A Z A R D S  I D E N T" → "HAZARDS IDENT". Wider gaps part words. */
