@@ -211,26 +211,28 @@ function isStillOurs({ pid, startedTicks, mark }) {
 }
 
 /**
- * Ends what an earlier start left behind in this data folder (after kill -9 and where the parent-death signal did not come).
+ * What an earlier start left running in this data folder (after kill -9 and where the parent-death signal did not come).
  * @param {string} folder
- * @returns {Promise<string[]>} the names of those ended
+ * @returns {{ name: string, end: () => Promise<void> }[]}
  */
-export async function endLeftovers(folder) {
+export function leftovers(folder) {
   const notes = join(folder, 'run');
   if (!existsSync(notes)) return [];
-  const names = [];
-  for (const file of readdirSync(notes).filter((each) => each.endsWith('.json'))) {
+  return readdirSync(notes).flatMap((file) => {
     const path = join(notes, file);
     const noted = readNote(path);
-    if (noted && isStillOurs(noted)) {
-      names.push(basename(file, '.json'));
+    if (!noted || !isStillOurs(noted)) {
+      rmSync(path, { force: true });
+      return [];
+    }
+    const end = async () => {
       // SIGINT is PostgreSQL's fast shutdown; the others take it as any request to end.
       await endByForce(noted, 'SIGINT', 10_000);
       await endByForce(noted, 'SIGKILL', 5_000);
-    }
-    rmSync(path, { force: true });
-  }
-  return names;
+      rmSync(path, { force: true });
+    };
+    return [{ name: basename(file, '.json'), end }];
+  });
 }
 
 /**

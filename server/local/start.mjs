@@ -7,7 +7,7 @@ import { ensurePostgres } from './debian.mjs';
 import { tryLock } from './lock.mjs';
 import { demandNode, ensurePackages } from './packages.mjs';
 import { demandPort, parsePort } from './ports.mjs';
-import { endLeftovers, endRunningCommands, logPath, parentOf, processName, run } from './processes.mjs';
+import { endRunningCommands, leftovers, logPath, parentOf, processName, run } from './processes.mjs';
 import { Refusal, say, sayError, step, Stopped } from './progress.mjs';
 import { ensureKeys } from './secrets.mjs';
 import { signInLines, signInsFrom } from './sign-ins.mjs';
@@ -51,8 +51,8 @@ async function start() {
   const folder = dataFolder();
   const lock = await tryLock(`data ${folder}`, () => `at ${url}; to end it press Ctrl-C there or type: kill ${process.pid}`);
   if ('heldBy' in lock) throw new Refusal(`Kneeboard already runs from ${folder}, ${lock.heldBy}`);
-  const leftovers = await endLeftovers(folder);
-  if (leftovers.length > 0) say(`Ended what an earlier start left running: ${leftovers.join(', ')}`);
+  const left = leftovers(folder);
+  if (left.length > 0) await step(`Ending what an earlier start left running: ${left.map(({ name }) => name).join(', ')}`, () => Promise.all(left.map(({ end }) => end())));
   await demandPort(port);
 
   await ensurePackages(root);

@@ -23,7 +23,7 @@ export function keepRunning(folder, name, entry, { cwd, env }) {
       const how = await service.ended;
       if (isStopping) return how;
       endedAtMs = [...endedAtMs.filter((at) => at > Date.now() - withinMs), Date.now()];
-      if (endedAtMs.length > restartsAllowed) return `${how} ${endedAtMs.length} times within a minute`;
+      if (endedAtMs.length > restartsAllowed) return `${how}, for the ${endedAtMs.length}th time within a minute`;
       await new Promise((resolve) => setTimeout(resolve, pauseMs));
       if (isStopping) return how;
       service = begin();
