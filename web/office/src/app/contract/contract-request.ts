@@ -1,4 +1,4 @@
-import { HttpParams, type HttpResourceRequest } from '@angular/common/http';
+import { HttpParams } from '@angular/common/http';
 import type * as z from 'zod';
 import { endpoints, type Endpoint, type EndpointName } from '#shared/endpoints';
 
@@ -34,8 +34,17 @@ export function paramsOf(query: Readonly<Record<string, unknown>> = {}): HttpPar
   return Object.entries(query).reduce((params, [key, value]) => (value === undefined || value === null || value === '' ? params : params.set(key, String(value))), new HttpParams());
 }
 
+/** What Angular needs to send a request; fits both its client and its resources. */
+interface ContractRequest {
+  readonly url: string;
+  readonly method: string;
+  readonly params: HttpParams;
+  readonly body?: unknown;
+  readonly headers: Record<string, string>;
+}
+
 /** One request as Angular sends it. An edit carries the version it saw. */
-export function requestOf<N extends EndpointName>(name: N, call: CallOf<N>): HttpResourceRequest {
+export function requestOf<N extends EndpointName>(name: N, call: CallOf<N>): ContractRequest {
   const { params, query, body, version } = call as LooseCall;
   return {
     url: pathOf(name, params),

@@ -1,0 +1,90 @@
+import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MAT_DIALOG_DATA, MatDialogActions, MatDialogContent, MatDialogRef, MatDialogTitle } from '@angular/material/dialog';
+import { firstValueFrom } from 'rxjs';
+import { Note } from '#ui/note';
+import { ContractClient } from '../contract/contract-client';
+import { Unready } from '../pieces/unready';
+
+export interface ExactTextQuestion {
+  readonly versionId: string;
+  readonly language: 'en' | 'es';
+  /** What the record says the bytes hash to. */
+  readonly sha256: string;
+  readonly heading: string;
+}
+
+interface ReadText {
+  readonly text: string;
+  readonly byteLength: number;
+  /** Null where this page may not compute it (plain http). */
+  readonly sha256: string | null;
+}
+
+/** The very bytes that were signed: read as text, hashed in this browser, compared with the record. */
+@Component({
+  selector: 'kb-exact-text-dialog',
+  imports: [MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, Note, Unready],
+  template: `
+    <h2 matDialogTitle>{{ question.heading }}</h2>
+    <mat-dialog-content class="kb-stack">
+      @if (read(); as read) {
+        @if (read.sha256 === null) {
+          <kb-note kind="caution">This browser hashes only over https or on this machine. Save the bytes and use sha256sum.</kb-note>
+        } @else if (read.sha256 === question.sha256) {
+          <kb-note kind="done"><b>These are the bytes on record.</b> Their SHA-256, computed here, is the one that was signed.</kb-note>
+        } @else {
+          <kb-note kind="stop" [announce]="true"><b>These are not the bytes on record.</b> Their SHA-256 differs from the one that was signed. Tell the owner.</kb-note>
+        }
+        <p class="kb-hash">sha256 {{ question.sha256 }}<br />{{ read.byteLength.toLocaleString('en-US') }} bytes, UTF-8</p>
+        <div class="text" tabindex="0" role="document" aria-label="The exact text" [attr.lang]="question.language">{{ read.text }}</div>
+      } @else {
+        <kb-unready what="the text" [error]="error()" (retry)="load()" />
+      }
+    </mat-dialog-content>
+    <mat-dialog-actions align="start">
+      <button type="button" matButton="filled" (click)="dialog.close()">Close</button>
+      <a matButton [href]="href" [download]="'text-' + question.sha256.slice(0, 12) + '.txt'">Save the bytes</a>
+    </mat-dialog-actions>
+  `,
+  styles: `
+    .text {
+      white-space: pre-wrap;
+      border-top: var(--kb-strip);
+      border-bottom: var(--kb-strip);
+      padding: 1rem 0;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ExactTextDialog {
+  private readonly client = inject(ContractClient);
+  protected readonly question = inject<ExactTextQuestion>(MAT_DIALOG_DATA);
+  protected readonly dialog = inject<MatDialogRef<ExactTextDialog>>(MatDialogRef);
+
+  protected readonly read = signal<ReadText | null>(null);
+  protected readonly error = signal<unknown>(null);
+  private readonly params = { versionId: this.question.versionId, language: this.question.language };
+  protected readonly href = this.client.hrefOf('readText', this.params);
+
+  constructor() {
+    void this.load();
+  }
+
+  protected async load(): Promise<void> {
+    this.error.set(null);
+    try {
+      const bytes = await firstValueFrom(this.client.bytes('readText', this.params));
+      this.read.set({ text: new TextDecoder().decode(bytes), byteLength: bytes.byteLength, sha256: await sha256Of(bytes) });
+    } catch (error) {
+      this.error.set(error);
+    }
+  }
+}
+
+async function sha256Of(bytes: ArrayBuffer): Promise<string | null> {
+  // Absent on plain http, whatever the typings say.
+  const subtle = (globalThis.crypto as Crypto | undefined)?.subtle as SubtleCrypto | undefined;
+  if (!subtle) return null;
+  return [...new Uint8Array(await subtle.digest('SHA-256', bytes))].map((byte) => byte.toString(16).padStart(2, '0')).join('');
+}

@@ -1,0 +1,31 @@
+import { type NonNullableFormBuilder } from '@angular/forms';
+import { type JobEdit } from '#shared/jobs';
+import { siteForm, unknownSite } from './site-fields';
+
+export const emptyJob: JobEdit = {
+  name: '',
+  siteName: '',
+  siteController: null,
+  jurisdictionId: 'us-federal',
+  timeZone: Intl.DateTimeFormat().resolvedOptions().timeZone,
+  isOpen: true,
+  site: unknownSite,
+};
+
+export function jobForm(builder: NonNullableFormBuilder, job: JobEdit) {
+  return builder.group({
+    name: builder.control(job.name),
+    siteName: builder.control(job.siteName),
+    siteController: builder.control(job.siteController),
+    jurisdictionId: builder.control(job.jurisdictionId),
+    timeZone: builder.control(job.timeZone),
+    isOpen: builder.control(job.isOpen),
+    site: siteForm(builder, job.site),
+  });
+}
+
+/** Only what the contract lets a person edit, from a job as it was read. */
+export function editOf(job: JobEdit): JobEdit {
+  const { name, siteName, siteController, jurisdictionId, timeZone, isOpen, site } = job;
+  return { name, siteName, siteController, jurisdictionId, timeZone, isOpen, site };
+}
