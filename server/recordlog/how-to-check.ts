@@ -94,7 +94,7 @@ fi
 ~~~
 
 **A whole log** has all leaf hashes: join them two by two, an odd one out moves up as it is, until one is left. Before
-that, each leaf hash must belong to its leaf, as in block 3. This is slow with many entries: about a minute for 10,000.
+that, each leaf hash must belong to its leaf, as in block 3. This is slow with many entries: some minutes for 10,000.
 
 ~~~bash
 if grep -q '^{"format":"kneeboard-log/1","form":"whole"' "$FILE"; then
