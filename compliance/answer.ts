@@ -50,11 +50,15 @@ export interface ProtectionItem {
 
 export interface PersonAnswer {
   readonly personId: string;
+  /** Table 1 time of the whole shift, all jobs together. */
   readonly table1Minutes: number;
+  /** The part of it on other jobs. */
   readonly table1MinutesElsewhere: number;
   /** Minute of the day at which the person's Table 1 sum passes four hours; null when it never does. */
   readonly maskRuleChangesAtMinute: number | null;
   readonly doubleBookings: readonly { readonly startMinute: number; readonly endMinute: number; readonly with: string }[];
+  /** This person's own respirator in each assigned task; the task's answer is the strictest of its people. */
+  readonly respirators: readonly { readonly taskId: string; readonly respirator: RespiratorAnswer }[];
   readonly findings: readonly Finding[];
 }
 

@@ -221,4 +221,6 @@ export interface ExposureBasis {
   readonly endsOn: string;
   /** Respirator named by the signer for a sampling day; never filled in by the program. */
   readonly interimApf: number | null;
+  /** Whether the signed figure already counts the Table 1 minutes of the same people; absent means it does not. */
+  readonly includesTable1Work?: boolean;
 }

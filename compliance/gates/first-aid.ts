@@ -1,0 +1,57 @@
+import { met, notApplicable, undecided, unmet, WHO } from '../rule';
+import { type ShiftContext, type TaskContext } from '../shift-context';
+import { type ShiftRule } from '../shift-rule';
+import { usFederal } from '../source';
+import { sentences, words } from '../words';
+
+const said = (text: string | null): boolean => text !== null && text.trim() !== '';
+
+/** A first-aider, the emergency number and the address are named before work. */
+export const firstAidRule: ShiftRule<ShiftContext> = {
+  id: 'first-aid-named',
+  title: words('First aid, number and address', 'Primeros auxilios, número y dirección'),
+  source: usFederal('1926.50', 'from-memory', { paragraph: '(c), (e), (f); 1926.23, .35' }),
+  duties: ['GATE-05'],
+  topic: 'gate',
+  holds: true,
+  evaluate({ facts: { firstAid } }) {
+    const inputs = { 'first-aider': firstAid.firstAiderName, 'emergency number': firstAid.emergencyNumber, address: firstAid.address };
+    if (said(firstAid.firstAiderName) && said(firstAid.emergencyNumber) && said(firstAid.address)) {
+      return met(words(`First aid: ${firstAid.firstAiderName}. Call ${firstAid.emergencyNumber}. Send them to ${firstAid.address}.`, `Primeros auxilios: ${firstAid.firstAiderName}. Llame al ${firstAid.emergencyNumber}. Mándelos a ${firstAid.address}.`), { inputs });
+    }
+    const missing = sentences(
+      said(firstAid.firstAiderName) ? null : words('No first-aider is named.', 'Nadie da primeros auxilios.'),
+      said(firstAid.emergencyNumber) ? null : words('No emergency number.', 'Falta el número de emergencia.'),
+      said(firstAid.address) ? null : words('No address to send help to.', 'Falta la dirección para la ayuda.'),
+    );
+    return undecided(missing, WHO.competentPerson, { inputs, whatWouldChange: words('Write down what is missing.', 'Anote lo que falta.') });
+  },
+  line: ({ facts: { firstAid } }, { outcome }) =>
+    outcome === 'met'
+      ? words(`First aid today: ${firstAid.firstAiderName}. Call ${firstAid.emergencyNumber}.`, `Primeros auxilios hoy: ${firstAid.firstAiderName}. Llame al ${firstAid.emergencyNumber}.`)
+      : words('First aid, number or address not named.', 'Faltan primeros auxilios, número o dirección.'),
+};
+
+const BURNS_EYES = ['H314', 'H318'];
+
+/** Corrosive material and wet cement: eyewash and wash water in reach (29 CFR 1926.50(g)). */
+export const eyewashRule: ShiftRule<TaskContext> = {
+  id: 'eyewash-in-reach',
+  title: words('Eyewash for what burns', 'Lavaojos para lo que quema'),
+  source: usFederal('1926.50', 'read', { paragraph: '(g)', note: 'Quotation read.' }),
+  duties: ['GATE-05', 'PPE-02'],
+  topic: 'gate',
+  holds: true,
+  evaluate({ facts, traits, kitHazards }) {
+    const codes = kitHazards === null ? [] : BURNS_EYES.filter((code) => kitHazards.single.has(code));
+    const isWetCement = kitHazards?.isWetCement ?? false;
+    if (!traits.touchesKit || (codes.length === 0 && !isWetCement)) return notApplicable(words('Nothing here burns eyes.', 'Aquí nada quema los ojos.'));
+    const inputs = { 'on the sheets': codes.join(', ') || null, 'wet cement': isWetCement, eyewash: facts.firstAid.hasEyewash };
+    const reason = isWetCement && codes.length === 0 ? words('Wet cement burns eyes and skin.', 'El cemento mojado quema ojos y piel.') : words(`The sheet says it burns eyes (${codes.join(', ')}).`, `La hoja dice que quema los ojos (${codes.join(', ')}).`);
+    if (facts.firstAid.hasEyewash === true) return met(reason, { inputs });
+    const extra = { inputs, whatWouldChange: words('Bring and check the eyewash.', 'Traiga y revise el lavaojos.') };
+    return facts.firstAid.hasEyewash === false ? unmet(reason, extra) : undecided(sentences(reason, words('Nobody checked the eyewash.', 'Nadie revisó el lavaojos.')), WHO.competentPerson, extra);
+  },
+  line: ({ traits }, { outcome }) =>
+    outcome === 'met' ? words('Eyewash and wash water here, checked.', 'Lavaojos y agua aquí, revisados.') : words(`${traits.name.en} may not start: no checked eyewash.`, `${traits.name.es}: no puede empezar, falta lavaojos revisado.`),
+};

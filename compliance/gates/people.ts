@@ -1,0 +1,171 @@
+import { type RespiratorAnswer } from '../answer';
+import { type PersonFacts, type PersonRespirator, type RespiratorType } from '../facts';
+import { addYears, isIsoDate, type IsoDate } from '../iso-date';
+import { met, notApplicable, undecided, unmet, WHO } from '../rule';
+import { isSilicaWork, type SilicaPerson } from '../silica/silica-context';
+import { type ShiftContext } from '../shift-context';
+import { type ShiftRule } from '../shift-rule';
+import { commonPractice, usFederal } from '../source';
+import { clock, sentences, words } from '../words';
+
+export interface PersonOfShift extends ShiftContext {
+  readonly person: PersonFacts;
+}
+
+export interface PersonInTask extends SilicaPerson {
+  readonly respirator: RespiratorAnswer;
+}
+
+const LOOSE: readonly RespiratorType[] = ['papr-loose', 'papr-hood', 'supplied-air-hood'];
+
+const since = (on: string | null, day: IsoDate): boolean => on !== null && isIsoDate(on) && on <= day;
+
+/** Fit-tested within the year that ends on the day; loose-fitting hoods need no fit test. */
+export function isFitted({ type, fitTestedOn }: PersonRespirator, day: IsoDate): boolean {
+  return LOOSE.includes(type) || (fitTestedOn !== null && since(fitTestedOn, day) && isIsoDate(day) && addYears(fitTestedOn, 1) >= day);
+}
+
+/** A required mask is the person's own: strong enough, cleared by a clinician, fitted within a year ((d), (e), (f)). */
+export const maskReadyRule: ShiftRule<PersonInTask> = {
+  id: 'mask-cleared-and-fitted',
+  title: words('Cleared, fitted and their own', 'Con permiso, prueba y propia'),
+  source: usFederal('1910.134', 'read', { paragraph: '(d)(3)(i)(A), (e)(1), (f)(2)' }),
+  duties: ['RES-01', 'RES-05', 'RES-06'],
+  topic: 'people',
+  holds: true,
+  evaluate({ respirator, person, pack, facts }, day) {
+    if (respirator.outcome !== 'required') return notApplicable(words('No mask is required.', 'No se exige máscara.'));
+    const needed = respirator.apf ?? 0;
+    const strong = person.respirators.filter(({ type }) => pack.silica !== null && pack.silica.apf[type] >= needed);
+    const cleared = strong.filter(({ clearedOn }) => since(clearedOn, day));
+    const ready = cleared.find((mask) => isFitted(mask, day));
+    const best = ready ?? cleared[0] ?? strong[0] ?? person.respirators[0] ?? null;
+    const inputs = {
+      'protection factor, at least': respirator.apf,
+      mask: best?.label ?? null,
+      'cleared on': best?.clearedOn ?? null,
+      'fit test on': best?.fitTestedOn ?? null,
+      date: facts.date,
+    };
+    if (ready !== undefined) return met(words(`${person.name}: ${ready.label}, cleared and fitted.`, `${person.name}: ${ready.label}, con permiso y prueba.`), { inputs });
+    const gap =
+      strong.length === 0
+        ? words(`${person.name} has no mask that is strong enough.`, `${person.name} no tiene máscara bastante fuerte.`)
+        : cleared.length === 0
+          ? words(`${person.name} is not cleared for this mask.`, `${person.name} no tiene permiso médico para esta máscara.`)
+          : words(`${person.name} has no fit test within a year.`, `${person.name} no tiene prueba de ajuste de este año.`);
+    return unmet(gap, { inputs, whatWouldChange: words('Clear and fit the person, or put a ready one.', 'Consiga permiso y prueba, o ponga a otro listo.') });
+  },
+  line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: mask ready.`, `${person.name}: máscara lista.`) : words(`${person.name} may not do this task: mask not ready.`, `${person.name} no puede hacer esta tarea: falta su máscara.`)),
+};
+
+/** Silica training before silica work; no yearly repeat ((i)). */
+export const silicaTrainingRule: ShiftRule<PersonInTask> = {
+  id: 'silica-training-on-record',
+  title: words('Silica training on record', 'Curso de sílice anotado'),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(i)(2)', note: 'Read in WAC 296-840-150.' }),
+  duties: ['SIL-22'],
+  topic: 'people',
+  holds: true,
+  evaluate(context, day) {
+    const { person } = context;
+    if (!isSilicaWork(context)) return notApplicable(words('No silica work.', 'Sin trabajo con sílice.'));
+    const inputs = { 'silica training on': person.silicaTrainedOn };
+    return since(person.silicaTrainedOn, day)
+      ? met(words(`${person.name} was trained on ${person.silicaTrainedOn}.`, `${person.name} tomó el curso el ${person.silicaTrainedOn}.`), { inputs })
+      : unmet(words(`No silica training of ${person.name} is on record.`, `No está anotado el curso de sílice de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
+  },
+  line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: silica training done.`, `${person.name}: curso de sílice hecho.`) : words(`${person.name} may not do this task: no silica training.`, `${person.name} no puede hacer esta tarea: falta el curso de sílice.`)),
+};
+
+/** Hazard communication training before work with the kit ((h)(1)). */
+export const hazardTrainingRule: ShiftRule<PersonInTask> = {
+  id: 'hazard-training-on-record',
+  title: words('Chemical hazard training on record', 'Curso de químicos anotado'),
+  source: usFederal('1910.1200', 'read', { paragraph: '(h)(1)' }),
+  duties: ['HAZ-09'],
+  topic: 'people',
+  holds: true,
+  evaluate({ traits, person }, day) {
+    if (!traits.touchesKit) return notApplicable(words('No kit in this task.', 'Sin kit en esta tarea.'));
+    const inputs = { 'hazard training on': person.hazcomTrainedOn };
+    return since(person.hazcomTrainedOn, day)
+      ? met(words(`${person.name} was trained on ${person.hazcomTrainedOn}.`, `${person.name} tomó el curso el ${person.hazcomTrainedOn}.`), { inputs })
+      : unmet(words(`No chemical training of ${person.name} is on record.`, `No está anotado el curso de químicos de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
+  },
+  line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: chemical training done.`, `${person.name}: curso de químicos hecho.`) : words(`${person.name} may not do this task: no chemical training.`, `${person.name} no puede hacer esta tarea: falta el curso de químicos.`)),
+};
+
+/** A clinician's limit keeps a person off isocyanates; the limit is stored, never the finding. */
+export const keptFromIsocyanatesRule: ShiftRule<PersonInTask> = {
+  id: 'kept-from-isocyanates',
+  title: words('Kept off this kit', 'Fuera de este kit'),
+  source: usFederal('1910.134', 'read', { paragraph: '(e)(6)(i)', note: 'A recommendation holds limits only. Keeping sensitised people from isocyanates is occupational-health practice.' }),
+  duties: ['ISO-01'],
+  topic: 'people',
+  holds: true,
+  evaluate({ person, traits, kitHazards, kit }) {
+    if (!person.isKeptFromIsocyanates || !traits.touchesKit) return notApplicable(words('No limit bears on this.', 'Ningún límite toca esto.'));
+    // A kit that is not chosen, or whose sheets are missing, may hold isocyanate: the limit holds until it is known.
+    const isKnownFree = kitHazards !== null && kitHazards.isocyanateParts.length === 0 && kitHazards.partsWithoutSheet.length === 0;
+    if (isKnownFree) return notApplicable(words('No isocyanate in this kit.', 'Este kit no tiene isocianato.'));
+    return unmet(words(`${person.name} is kept off this kit.`, `${person.name} no trabaja con este kit.`), {
+      inputs: { kit: kit?.name ?? null, 'isocyanate or sensitizer': kitHazards?.isocyanateParts.join(', ') || null },
+      whatWouldChange: words('Put someone else on this task.', 'Ponga a otra persona en esta tarea.'),
+    });
+  },
+  line: ({ person }) => words(`${person.name} may not do this task.`, `${person.name} no puede hacer esta tarea.`),
+};
+
+/** Over eighteen, confirmed without a birth date, and the employer named. */
+export const adultRule: ShiftRule<PersonInTask> = {
+  id: 'adult-confirmed',
+  title: words('Over 18, confirmed', 'Mayor de 18, confirmado'),
+  source: commonPractice('Over 18 confirmed for machines and chemicals; no birth date is stored.'),
+  duties: [],
+  topic: 'people',
+  holds: true,
+  evaluate: ({ person, traits }) =>
+    !traits.isWork || person.isAdultConfirmed
+      ? notApplicable(words('Confirmed.', 'Confirmado.'))
+      : unmet(words(`Nobody confirmed that ${person.name} is over 18.`, `Nadie confirmó que ${person.name} es mayor de 18.`), { inputs: { 'over 18 confirmed': false }, whatWouldChange: words('The officer confirms it.', 'El responsable lo confirma.') }),
+  line: ({ person }) => words(`${person.name} may not work yet: age not confirmed.`, `${person.name} aún no puede trabajar: falta confirmar su edad.`),
+};
+
+export const employerRule: ShiftRule<PersonOfShift> = {
+  id: 'employer-named',
+  title: words('Whose employee', 'De quién es empleado'),
+  source: commonPractice('Own, agency or subcontractor: an inspector asks first.'),
+  duties: [],
+  topic: 'people',
+  holds: false,
+  evaluate({ person }) {
+    const inputs = { employer: person.employer };
+    return person.employer !== null && person.employer.trim() !== ''
+      ? met(words(`${person.name} works for ${person.employer}.`, `${person.name} trabaja para ${person.employer}.`), { inputs })
+      : undecided(words(`Nobody said who employs ${person.name}.`, `Nadie dijo quién emplea a ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name the employer.', 'Nombre al empleador.') });
+  },
+  line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: ${person.employer}.`, `${person.name}: ${person.employer}.`) : words(`${person.name}: employer not named.`, `${person.name}: falta el empleador.`)),
+};
+
+export interface BookedTwice extends PersonOfShift {
+  readonly booking: { readonly startMinute: number; readonly endMinute: number; readonly withName: string };
+}
+
+/** One person in two places of the plan is noticed; the minutes count once. */
+export const doubleBookingRule: ShiftRule<BookedTwice> = {
+  id: 'double-booking',
+  title: words('Booked twice', 'En dos lugares'),
+  source: commonPractice('Nobody works in two places at once.'),
+  duties: ['SIL-04'],
+  topic: 'people',
+  holds: false,
+  evaluate({ person, booking }) {
+    const span = `${clock(booking.startMinute)}–${clock(booking.endMinute)}`;
+    return unmet(words(`${person.name} stands twice in the plan from ${span}.`, `${person.name} está dos veces en el plan de ${span}.`), {
+      inputs: { from: clock(booking.startMinute), to: clock(booking.endMinute), with: booking.withName },
+      whatWouldChange: words('Move one of the two.', 'Mueva uno de los dos.'),
+    });
+  },
+  line: ({ person, booking }) => sentences(words(`${person.name}: booked twice, also ${booking.withName}.`, `${person.name}: en dos lugares, también ${booking.withName}.`)),
+};

@@ -1,0 +1,82 @@
+import { met, undecided, unmet, WHO } from '../rule';
+import { type ShiftContext } from '../shift-context';
+import { type ShiftRule } from '../shift-rule';
+import { usFederal } from '../source';
+import { words } from '../words';
+
+/** The host's hazards toward the crew are asked before work; "none" is an answer, silence is not. */
+export const hostHazardsRule: ShiftRule<ShiftContext> = {
+  id: 'host-hazards-asked',
+  title: words('The host\'s hazards', 'Los peligros del lugar'),
+  source: usFederal('1910.1200', 'read', { paragraph: '(e)(2); 1926.16', note: 'Reference-service texts of (e)(2) and WAC 296-901-14010(2); 1926.16 recalled.' }),
+  duties: ['GATE-06'],
+  topic: 'gate',
+  holds: true,
+  evaluate({ facts: { hostHazards } }) {
+    const inputs = { 'host says': hostHazards };
+    if (hostHazards === null || hostHazards.trim() === '') {
+      return undecided(words('Nobody asked the host what can hurt us here.', 'Nadie preguntó qué nos puede dañar aquí.'), WHO.competentPerson, { inputs, whatWouldChange: words('Ask, and write down the answer.', 'Pregunte y anote la respuesta.') });
+    }
+    return met(words(`The host says: ${hostHazards}`, `El lugar dice: ${hostHazards}`), { inputs });
+  },
+  line: (_context, { outcome }) => (outcome === 'met' ? words('We know the hazards of this place. The host knows ours.', 'Sabemos los peligros de aquí. El lugar sabe los nuestros.') : words('Nobody asked about the hazards of this place.', 'Nadie preguntó por los peligros de aquí.')),
+};
+
+/** A competent person is named and on the crew of the day ((g)(4), 1926.20(b)(2)). */
+export const competentPersonRule: ShiftRule<ShiftContext> = {
+  id: 'competent-person-named',
+  title: words('The competent person', 'La persona competente'),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(4); 1926.20(b)(2)', note: 'Read in WAC 296-840-140(4)(b).' }),
+  duties: ['SIL-19', 'GATE-08'],
+  topic: 'gate',
+  holds: true,
+  evaluate({ facts, peopleById }) {
+    const person = facts.competentPersonId === null ? undefined : peopleById.get(facts.competentPersonId);
+    const inputs = { 'competent person': person?.name ?? null };
+    if (person !== undefined) return met(words(`${person.name} checks the work often and can stop it.`, `${person.name} revisa seguido y puede parar el trabajo.`), { inputs });
+    return undecided(words('No competent person is named for today.', 'Hoy no hay persona competente nombrada.'), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name one who is here.', 'Nombre a alguien que esté aquí.') });
+  },
+  line({ facts, peopleById }, { outcome }) {
+    const name = outcome === 'met' ? peopleById.get(facts.competentPersonId ?? '')?.name : undefined;
+    return name === undefined ? words('No competent person is named.', 'Falta nombrar a la persona competente.') : words(`The competent person today is ${name}.`, `La persona competente hoy es ${name}.`);
+  },
+};
+
+/** A competent person who runs a machine cannot inspect at the same time: who does? */
+export const inspectionCoverRule: ShiftRule<ShiftContext> = {
+  id: 'inspection-cover',
+  title: words('Who inspects meanwhile', 'Quién revisa mientras tanto'),
+  source: usFederal('1926.20', 'from-memory', { paragraph: '(b)(2)', note: 'Frequent and regular inspections; the question of cover is a judgement.' }),
+  duties: ['GATE-08'],
+  topic: 'people',
+  holds: false,
+  evaluate({ facts, peopleById }) {
+    const person = facts.competentPersonId === null ? undefined : peopleById.get(facts.competentPersonId);
+    const machines = facts.tasks.filter(({ equipmentId, assignments }) => equipmentId !== null && assignments.some(({ personId }) => personId === person?.id));
+    const inputs = { 'competent person': person?.name ?? null, 'tasks at a machine': machines.length };
+    if (person === undefined || machines.length === 0) return met(words('Free to inspect all shift.', 'Libre para revisar todo el turno.'), { inputs });
+    return undecided(words(`${person.name} runs a machine today.`, `${person.name} maneja una máquina hoy.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name who inspects in that time.', 'Nombre quién revisa en ese tiempo.') });
+  },
+  line: (_context, { outcome }) => (outcome === 'met' ? words('Inspections are covered.', 'Las revisiones están cubiertas.') : words('Who inspects while the competent person runs a machine?', '¿Quién revisa mientras la persona competente maneja?')),
+};
+
+/** A place without its own pack, or with an incomplete one, is said on every document. */
+export const packRule: ShiftRule<ShiftContext> = {
+  id: 'rules-of-the-place',
+  title: words('Which law this is', 'Qué ley es esta'),
+  source: usFederal('1953', 'from-memory', { note: 'A state plan may replace the federal text; other countries have their own law.' }),
+  duties: ['LOC-01', 'LOC-02'],
+  topic: 'gate',
+  // Holds through the silica tasks, which stay undecided without a pack.
+  holds: false,
+  evaluate({ pack }) {
+    const inputs = { pack: pack.id, 'pack version': pack.version };
+    const law = pack.isComplete ? met(words(`Judged by ${pack.name.en}.`, `Según: ${pack.name.es}.`), { inputs }) : null;
+    if (law !== null) return law;
+    const gap = pack.gap ?? words('The pack is not complete.', 'Las reglas no están completas.');
+    return pack.silica === null
+      ? undecided(gap, WHO.localAuthority, { inputs, whatWouldChange: words('A pack for this place.', 'Reglas para este lugar.') })
+      : unmet(gap, { inputs, whatWouldChange: words('A complete pack.', 'Reglas completas.') });
+  },
+  line: ({ pack }, { outcome }) => (outcome === 'met' ? pack.name : words(`${pack.name.en}: check the local law.`, `${pack.name.es}: revise la ley local.`)),
+};

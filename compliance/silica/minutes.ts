@@ -1,0 +1,81 @@
+import { type PersonFacts, type ShiftFacts, type TaskKind } from '../facts';
+import { FOUR_HOURS_MINUTES } from './table1';
+
+/** Kinds of floor work that stand in Table 1. Counted by kind, so that a machine outside its row never shortens anyone's sum. */
+export const TABLE_1_KINDS: ReadonlySet<TaskKind> = new Set<TaskKind>([
+  'floor-grinding', 'edge-grinding', 'scarifying', 'joint-sawing', 'handheld-sawing', 'crack-chasing', 'mortar-removal', 'chipping', 'drilling',
+]);
+
+export interface Interval {
+  readonly startMinute: number;
+  readonly endMinute: number;
+}
+
+/** Whether the times can be: finite, in order, from the evening before to the end of the day after. */
+export function isPossible({ startMinute, endMinute }: Interval): boolean {
+  return Number.isFinite(startMinute) && Number.isFinite(endMinute) && startMinute >= -1440 && endMinute <= 2880 && startMinute <= endMinute && endMinute - startMinute <= 1440;
+}
+
+/** The same time in sorted pieces that do not overlap. */
+export function merge(intervals: readonly Interval[]): readonly Interval[] {
+  const sorted = intervals.filter(isPossible).sort((a, b) => a.startMinute - b.startMinute);
+  const merged: Interval[] = [];
+  for (const next of sorted) {
+    const last = merged[merged.length - 1];
+    if (last === undefined || next.startMinute > last.endMinute) merged.push({ startMinute: next.startMinute, endMinute: next.endMinute });
+    else merged[merged.length - 1] = { startMinute: last.startMinute, endMinute: Math.max(last.endMinute, next.endMinute) };
+  }
+  return merged;
+}
+
+export function totalMinutes(intervals: readonly Interval[]): number {
+  return merge(intervals).reduce((sum, { startMinute, endMinute }) => sum + (endMinute - startMinute), 0);
+}
+
+/** Minute of the day at which the sum reaches four hours, where it goes on past them; null when it never passes. */
+export function minuteOfPassing(intervals: readonly Interval[], limitMinutes = FOUR_HOURS_MINUTES): number | null {
+  let sum = 0;
+  for (const { startMinute, endMinute } of merge(intervals)) {
+    const length = endMinute - startMinute;
+    if (sum + length > limitMinutes) return startMinute + (limitMinutes - sum);
+    sum += length;
+  }
+  return null;
+}
+
+export interface Table1Time {
+  /** All jobs together. */
+  readonly minutes: number;
+  /** The part on other jobs. */
+  readonly minutesElsewhere: number;
+  readonly passesAtMinute: number | null;
+}
+
+/** Table 1 time of a person over all jobs of the shift: the person, not the job, carries the minutes. */
+export function table1Time(facts: ShiftFacts, person: PersonFacts): Table1Time {
+  const elsewhere = person.elsewhere.filter(({ kind }) => TABLE_1_KINDS.has(kind));
+  const here = facts.tasks.filter(({ kind }) => TABLE_1_KINDS.has(kind)).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === person.id));
+  const all = [...here, ...elsewhere];
+  return { minutes: totalMinutes(all), minutesElsewhere: totalMinutes(elsewhere), passesAtMinute: minuteOfPassing(all) };
+}
+
+export interface DoubleBooking extends Interval {
+  /** Task id of the other work here, or the other job's name. */
+  readonly with: string;
+}
+
+/** Times at which a person stands in two places of the plan. A break or an inspection beside work is no double booking. */
+export function doubleBookings(facts: ShiftFacts, person: PersonFacts): readonly DoubleBooking[] {
+  const here = facts.tasks
+    .filter(({ kind }) => kind !== 'break' && kind !== 'inspection')
+    .flatMap((task) => task.assignments.filter(({ personId }) => personId === person.id).map((assignment) => ({ ...assignment, name: task.id, isHere: true })));
+  const elsewhere = person.elsewhere.map((work) => ({ ...work, name: work.jobName, isHere: false }));
+  const all = [...here, ...elsewhere].filter(isPossible).sort((a, b) => a.startMinute - b.startMinute || a.endMinute - b.endMinute || a.name.localeCompare(b.name, 'en'));
+  return all.flatMap((first, index) =>
+    all.slice(index + 1).flatMap((second) => {
+      const startMinute = Math.max(first.startMinute, second.startMinute);
+      const endMinute = Math.min(first.endMinute, second.endMinute);
+      return startMinute < endMinute ? [{ startMinute, endMinute, with: first.isHere ? second.name : first.name }] : [];
+    }),
+  );
+}
