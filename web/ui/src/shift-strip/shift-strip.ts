@@ -51,6 +51,7 @@ export class ShiftStrip {
     return now === null || now < range.startMinute || now > range.endMinute ? null : percentOf(now, range);
   });
   private isDragged = false;
+  private pulledTo: MinuteRange | null = null;
   protected readonly maskRuleLeft = (MASK_RULE_MINUTES / METER_MINUTES) * 100;
   protected readonly step = STEP_MINUTES;
   protected readonly rows = computed(() => {
@@ -103,6 +104,7 @@ export class ShiftStrip {
     const minutesPerPixel = (range.endMinute - range.startMinute) / bar.width;
     this.drag.set({ block, lane, grip, fromX: event.clientX, minutesPerPixel, range });
     this.isDragged = false;
+    this.pulledTo = null;
   }
 
   protected pull(event: PointerEvent): void {
@@ -110,6 +112,9 @@ export class ShiftStrip {
     if (!drag) return;
     const next = moved(drag.block, drag.grip, (event.clientX - drag.fromX) * drag.minutesPerPixel);
     if (Math.abs(event.clientX - drag.fromX) > 3) this.isDragged = true;
+    // Several moves may come before the lanes follow: each step is asked for once.
+    if (next.startMinute === this.pulledTo?.startMinute && next.endMinute === this.pulledTo.endMinute) return;
+    this.pulledTo = next;
     this.ask(drag.lane, drag.block.id, next);
   }
 
