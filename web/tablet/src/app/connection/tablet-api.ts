@@ -4,7 +4,7 @@ import { firstValueFrom, type Observable, timeout, TimeoutError } from 'rxjs';
 import type * as z from 'zod';
 import { Problem } from '#shared/common';
 import { type CheckPin, type Deliveries, Receipts, TabletDay } from '#shared/envelopes';
-import { PairedTablet, type PairTablet } from '#shared/tablets';
+import { PairedTablet } from '#shared/tablets';
 import { Connection } from './connection';
 
 /**
@@ -34,7 +34,7 @@ export class TabletApi {
   private readonly http = inject(HttpClient);
   private readonly connection = inject(Connection);
 
-  async pair(request: PairTablet): Promise<PairedTablet> {
+  async pair(request: { readonly code: string }): Promise<PairedTablet> {
     return this.parse(PairedTablet, await this.call(this.http.post('/api/tablet/pairing', request, { headers }), 15_000));
   }
 

@@ -1,0 +1,39 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { type Source, sourceLine } from '#compliance/source';
+import { Words } from '../words/words';
+
+/** "Why" in plain words with the citation behind "Source". */
+@Component({
+  selector: 'kb-line-source',
+  template: `
+    <p><b>{{ words.say().answer.why }}</b> {{ why() }}</p>
+    <details>
+      <summary>{{ words.say().answer.source }}</summary>
+      <p class="kb-small">{{ citation() }}</p>
+    </details>
+  `,
+  styles: `
+    :host {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 0 0.75rem;
+      align-items: baseline;
+    }
+
+    summary {
+      color: var(--kb-pigment);
+      text-decoration: underline;
+      text-underline-offset: 3px;
+      cursor: pointer;
+      padding-block: 0.375rem;
+      list-style: none;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class LineSource {
+  readonly why = input.required<string>();
+  readonly source = input.required<Source>();
+  protected readonly words = inject(Words);
+  protected readonly citation = computed(() => sourceLine(this.source()));
+}
