@@ -50,6 +50,9 @@ export const PinSetEnvelope = z.looseObject({
   personId: Id,
   ...sealedPin,
   witnessPersonId: Id.nullable(),
+  /** The witness's own PIN, sealed the same way; absent without a witness. */
+  witnessSealedPin: z.string().max(2000).optional(),
+  witnessNonce: z.string().min(16).max(64).optional(),
 });
 export const Envelope = z.discriminatedUnion('kind', [SignedEnvelope, CouldNotSignEnvelope, BriefingEnvelope, StartCheckEnvelope, PinSetEnvelope]);
 export type Envelope = z.infer<typeof Envelope>;

@@ -3,7 +3,7 @@ import { Router, RouterLink } from '@angular/router';
 import { MatButton } from '@angular/material/button';
 import { Mark } from '#ui/mark';
 import { Note } from '#ui/note';
-import { type LineText } from '../checklists/checklist-text';
+import { type TextLine } from '#compliance/checklists/text';
 import { LineSource } from '../checklists/line-source';
 import { WhoToCall } from '../connection/who-to-call';
 import { Frame } from '../frame/frame';
@@ -85,7 +85,7 @@ export class Briefing {
     this.chosenLead.set(personId);
   }
 
-  protected consequence(line: LineText): string {
+  protected consequence(line: TextLine): string {
     const say = this.words.say().briefing;
     if (!line.isCritical) return say.noted;
     const task = this.view()?.text.tasks.find(({ taskId }) => taskId === line.taskId);

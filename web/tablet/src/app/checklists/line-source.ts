@@ -1,5 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
-import { type Source, sourceLine } from '#compliance/source';
+import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
 import { Words } from '../words/words';
 
 /** "Why" in plain words with the citation behind "Source". */
@@ -9,7 +8,7 @@ import { Words } from '../words/words';
     <p><b>{{ words.say().answer.why }}</b> {{ why() }}</p>
     <details>
       <summary>{{ words.say().answer.source }}</summary>
-      <p class="kb-small">{{ citation() }}</p>
+      <p class="kb-small">{{ source() }}</p>
     </details>
   `,
   styles: `
@@ -33,7 +32,6 @@ import { Words } from '../words/words';
 })
 export class LineSource {
   readonly why = input.required<string>();
-  readonly source = input.required<Source>();
+  readonly source = input.required<string>();
   protected readonly words = inject(Words);
-  protected readonly citation = computed(() => sourceLine(this.source()));
 }

@@ -1,5 +1,5 @@
 import { type Language } from '#compliance/outcome';
-import { type ChecklistText, parseChecklistText } from './checklist-text';
+import { type ChecklistText, parseChecklistText } from '#compliance/checklists/text';
 
 /** damaged: the bytes are not those that were published; unreadable: they are, but this app version cannot read them. */
 export type OpenedText = { readonly state: 'good'; readonly language: Language; readonly sha256: string; readonly text: ChecklistText } | { readonly state: 'damaged' | 'unreadable'; readonly language: Language; readonly sha256: string };

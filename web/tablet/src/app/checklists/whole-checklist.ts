@@ -7,7 +7,7 @@ import { injectJob } from '../jobs/found-job';
 import { NoJob } from '../jobs/no-job';
 import { dayName, nameList } from '../words/dates';
 import { messagesIn, tabletLanguages, Words } from '../words/words';
-import { type TaskText } from './checklist-text';
+import { type TextTask } from '#compliance/checklists/text';
 import { LineSource } from './line-source';
 
 /** The published list from top to bottom, to read. */
@@ -30,7 +30,7 @@ export class WholeChecklist {
     return `${text.jobName}, ${text.siteName}, ${dayName(job.date, this.words.language())}`;
   });
 
-  protected names(task: TaskText): string {
+  protected names(task: TextTask): string {
     const found = this.found();
     if (found.state !== 'good') return '';
     const names = found.view.text.people.filter(({ personId }) => task.personIds.includes(personId)).map(({ name }) => name);

@@ -1,6 +1,6 @@
 import { type Language } from '#compliance/outcome';
 import { type Envelope } from '#shared/envelopes';
-import { type ChecklistText, type LineText, type TaskText } from '../checklists/checklist-text';
+import { type ChecklistText, type TextLine, type TextTask } from '#compliance/checklists/text';
 import { type DayJob } from '../day/day';
 import { type Posted } from '../outbox/outbox';
 
@@ -34,7 +34,7 @@ export interface Stop {
 }
 
 export interface TaskView {
-  readonly task: TaskText;
+  readonly task: TextTask;
   readonly people: readonly PersonView[];
   readonly state: 'may-not-start' | 'not-decided' | 'stopped' | 'started' | 'ready';
   readonly stops: readonly Stop[];
@@ -60,7 +60,7 @@ export function jobView(job: DayJob, text: ChecklistText, posted: readonly Poste
   const ofVersion = posted.filter(({ envelope }) => envelope && 'versionId' in envelope && envelope.versionId === job.version.id);
   const newer = ofVersion.filter((one) => isNewerThan(one, serverTime));
   const people = job.people.map((person) => personView(person, job, posted, serverTime));
-  const lines = new Map<string, LineText>([...text.morning, ...text.tasks.flatMap((task) => task.live)].map((line) => [line.id, line]));
+  const lines = new Map<string, TextLine>([...text.morning, ...text.tasks.flatMap((task) => task.live)].map((line) => [line.id, line]));
   return {
     job,
     text,
@@ -116,7 +116,7 @@ function noLineIds(envelope: Envelope): readonly string[] {
   return envelope.answers.filter(({ answer }) => answer === 'no').map(({ lineId }) => lineId);
 }
 
-function taskView(task: TaskText, job: DayJob, people: readonly PersonView[], newer: readonly Posted[], lines: ReadonlyMap<string, LineText>): TaskView {
+function taskView(task: TextTask, job: DayJob, people: readonly PersonView[], newer: readonly Posted[], lines: ReadonlyMap<string, TextLine>): TaskView {
   const base = { task, people: people.filter((person) => task.personIds.includes(person.id)) };
   if (task.state !== 'ready') return { ...base, state: task.state, stops: [] };
   const heard = job.stopped.filter((stop) => stop.taskId === task.taskId).map((stop): Stop => ({ text: stop.text, isHeard: true }));
@@ -128,7 +128,7 @@ function taskView(task: TaskText, job: DayJob, people: readonly PersonView[], ne
 }
 
 /** "No" on a critical line holds its task; a line about the whole shift holds every task. */
-function stopsOf({ row, envelope }: Posted, taskId: string, lines: ReadonlyMap<string, LineText>): readonly Stop[] {
+function stopsOf({ row, envelope }: Posted, taskId: string, lines: ReadonlyMap<string, TextLine>): readonly Stop[] {
   if (!envelope || (envelope.kind !== 'briefing' && envelope.kind !== 'start-check')) return [];
   return noLineIds(envelope).flatMap((lineId) => {
     const line = lines.get(lineId);

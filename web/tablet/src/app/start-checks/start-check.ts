@@ -4,7 +4,7 @@ import { MatButton } from '@angular/material/button';
 import { Empty } from '#ui/empty';
 import { Mark } from '#ui/mark';
 import { Note } from '#ui/note';
-import { type LineText } from '../checklists/checklist-text';
+import { type TextLine } from '#compliance/checklists/text';
 import { LineSource } from '../checklists/line-source';
 import { ReadAloud } from '../checklists/read-aloud';
 import { WhoToCall } from '../connection/who-to-call';
@@ -53,12 +53,12 @@ export class StartCheck {
     return found.state === 'good' ? found.view : null;
   });
   protected readonly one = computed(() => this.view()?.tasks.find(({ task }) => task.taskId === this.taskId()) ?? null);
-  protected readonly line = computed<LineText | null>(() => this.one()?.task.live[this.at()] ?? null);
+  protected readonly line = computed<TextLine | null>(() => this.one()?.task.live[this.at()] ?? null);
   protected readonly checkerId = computed(() => this.chosenChecker() ?? this.view()?.lead?.id ?? this.one()?.people[0]?.id ?? null);
   /** Whose masks are on, for a line about masks; forgotten with each line. */
-  protected readonly masksOn = linkedSignal<LineText | null, readonly string[]>({ source: this.line, computation: () => [] });
-  protected readonly note = linkedSignal<LineText | null, string>({ source: this.line, computation: () => '' });
-  protected readonly isNoteOpen = linkedSignal<LineText | null, boolean>({ source: this.line, computation: () => false });
+  protected readonly masksOn = linkedSignal<TextLine | null, readonly string[]>({ source: this.line, computation: () => [] });
+  protected readonly note = linkedSignal<TextLine | null, string>({ source: this.line, computation: () => '' });
+  protected readonly isNoteOpen = linkedSignal<TextLine | null, boolean>({ source: this.line, computation: () => false });
 
   protected readonly kicker = computed(() => {
     const view = this.view();
