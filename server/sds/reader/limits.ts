@@ -51,8 +51,9 @@ export function exposureLimits(parts: SheetParts): Field<ExposureLimit>[] {
     for (const { segment, match } of values) {
       const above = headings.find((heading) => heading.box.x < segment.box.x + segment.box.width && heading.box.x + heading.box.width > segment.box.x);
       const before = segment.text.slice(0, match.index);
-      const lineKind = kindOf(line.text.slice(0, Math.max(0, line.text.indexOf(segment.text)) + match.index));
-      const kind = [lineKind ?? (above ? kindOf(above.text) : null) ?? rowKind, termOf(before.slice(-30)) ?? termOf(segment.text.slice(match.index + match[0].length, match.index + match[0].length + 24)) ?? (above ? termOf(above.text) : null)].filter((part) => part !== null).join(' ');
+      const rowBefore = line.text.slice(0, Math.max(0, line.text.indexOf(segment.text)) + match.index);
+      const lineKind = kindOf(rowBefore);
+      const kind = [lineKind ?? (above ? kindOf(above.text) : null) ?? rowKind, termOf(before.slice(-30)) ?? termOf(segment.text.slice(match.index + match[0].length, match.index + match[0].length + 24)) ?? (above ? termOf(above.text) : null) ?? termOf(rowBefore.slice(-40))].filter((part) => part !== null).join(' ');
       const value = Number((match[1] ?? '').replace(',', '.'));
       const limit: ExposureLimit = { substance, kind: kind || null, value: Number.isFinite(value) ? value : null, unit: unitOf(match[2] ?? ''), text: line.text };
       found.push({ value: limit, page: line.page, box: segment.box, quote: line.text, confidence: substance && kind ? 0.8 : 0.55 });

@@ -1,3 +1,4 @@
+import { STATEMENT_TEXTS } from '#compliance/hazcom/ghs-statements.data';
 import { precautionRows, statementRows } from './statements.data';
 import { fold } from './words';
 
@@ -39,12 +40,15 @@ export function matchStatements(text: string, language: string, kind: 'H' | 'P',
 
 function statementsOf(language: string, kind: 'H' | 'P'): readonly Compiled[] {
   const key = `${language in columns ? language : 'en'}${kind}`;
-  const known = compiled.get(key);
-  if (known) return known;
+  const ready = compiled.get(key);
+  if (ready) return ready;
   const column = columns[language] ?? 1;
   const rows = kind === 'H' ? statementRows : precautionRows;
-  const list = rows
-    .flatMap((row) => (row[column] ?? '').split('|').map((wording) => ({ code: row[0], wording: levelled(wording).level.trim() })))
+  const wordings = rows.flatMap((row) => (row[column] ?? '').split('|').map((wording) => ({ code: row[0], wording })));
+  const official = kind === 'H' && column <= 2 ? STATEMENT_TEXTS.map(({ code, text }) => ({ code, wording: column === 2 ? text.es : text.en })) : [];
+  const known = new Set(wordings.map(({ code }) => code));
+  const list = [...wordings, ...official.filter(({ code, wording }) => !known.has(code) && wording.length > 12)]
+    .map(({ code, wording }) => ({ code, wording: levelled(wording).level.trim() }))
     .filter(({ wording }) => wording !== '')
     .map(({ code, wording }) => ({
       code,
