@@ -54,6 +54,7 @@ export const ShiftSummary = z.object({
   signed: z.number().int(),
   openActions: z.number().int(),
 });
+export type ShiftSummary = z.infer<typeof ShiftSummary>;
 export const JobSummary = z.object({
   id: Id,
   name: z.string(),
@@ -93,6 +94,8 @@ export const ShiftPlan = z.strictObject({
 });
 export type ShiftPlan = z.infer<typeof ShiftPlan>;
 export const AddShift = z.strictObject({ date: LocalDate, /** Copies people, tasks and kits of this shift. */ copyFromShiftId: Id.nullable() });
+
+export type AddShift = z.infer<typeof AddShift>;
 
 export const basisKinds = ['objective-data', 'air-samples', 'sampling-day', 'below-action-level'] as const;
 export const SignBasis = z

@@ -227,7 +227,7 @@ CREATE TABLE "people" (
 CREATE TABLE "pins" (
 	"organisation_id" uuid NOT NULL,
 	"person_id" uuid NOT NULL,
-	"digest" "bytea" NOT NULL,
+	"digest" text NOT NULL,
 	"set_at" timestamp with time zone NOT NULL,
 	"witness_person_id" uuid,
 	"tablet_id" uuid,

@@ -29,7 +29,7 @@ export const pins = pgTable(
   {
     organisationId: uuid().notNull(),
     personId: uuid().notNull(),
-    digest: bytea().notNull(),
+    digest: text().notNull(),
     setAt: timestamp({ withTimezone: true }).notNull(),
     witnessPersonId: uuid(),
     tabletId: uuid(),

@@ -1,0 +1,40 @@
+import { deliveriesService } from './acknowledgements/deliveries-service';
+import { type Deps } from './deps';
+import { recordlogService } from './recordlog/recordlog-service';
+import { createGuardedReader } from './sds/reader/guarded-reader';
+import { readSheetWork } from './sds/sheets-work';
+
+/** The reader's hard limits: shorter than the queue's patience, so that a stuck sheet is named and not tried for ever. */
+const readerLimits = { wallClockMs: 40_000, maxRssBytes: 1_500 * 1024 * 1024 };
+const sweepSeconds = 15;
+
+/** Background work: reading sheets, mailing checkpoints, signing checkpoints, interpreting what an ended process left. */
+export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
+  const { config, queue, log } = deps;
+  const reader = createGuardedReader({ ...readerLimits, entry: config.SHEET_READER_ENTRY });
+  const recordlog = recordlogService(deps);
+  const deliveries = deliveriesService(deps);
+  await queue.serve('read-sheet', readSheetWork(deps, reader));
+  await queue.serve('mail-checkpoint', (data) => recordlog.mailCheckpoint(data));
+  const stopCheckpoints = every(config.CHECKPOINT_SECONDS, 'checkpoints', () => recordlog.makeCheckpoints());
+  const stopSweep = every(sweepSeconds, 'left-over deliveries', () => deliveries.interpretLeftOver());
+  return async () => {
+    stopCheckpoints();
+    stopSweep();
+    await reader.close();
+  };
+
+  /** Runs again and again, never twice at once; a fault is logged and tried at the next turn. */
+  function every(seconds: number, what: string, work: () => Promise<void>): () => void {
+    let timer: NodeJS.Timeout;
+    const turn = () => {
+      timer = setTimeout(() => {
+        work()
+          .catch((error: unknown) => log.error({ err: error }, `${what} failed`))
+          .finally(turn);
+      }, seconds * 1000);
+    };
+    turn();
+    return () => clearTimeout(timer);
+  }
+}
