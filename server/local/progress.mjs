@@ -1,5 +1,4 @@
 // @ts-check
-import { performance } from 'node:perf_hooks';
 
 /** A sentence for whoever sits at the terminal: printed alone, without a stack, and the command ends with 1. */
 export class Refusal extends Error {}
@@ -19,12 +18,12 @@ const quietMs = 2000;
  * @returns {Promise<T>}
  */
 export async function step(label, work, write = (text) => void process.stdout.write(text)) {
-  const startedAtMs = performance.now();
+  const startedAtMs = Date.now();
   write(label);
   const dots = setInterval(() => write('.'), quietMs);
   try {
     const answer = await work();
-    write(`${tookText(performance.now() - startedAtMs)}\n`);
+    write(`${tookText(Date.now() - startedAtMs)}\n`);
     return answer;
   } catch (error) {
     write(error instanceof Stopped ? '\n' : ' failed\n');
