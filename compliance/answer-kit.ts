@@ -1,17 +1,18 @@
 import { type KitAnswer } from './answer';
 import { type KitFacts } from './facts';
+import { LEAST_AMOUNT } from './gates/possible';
 import { type Finding } from './outcome';
 import { KIT_COVERAGE_SOURCE, KIT_MIXING_SOURCE, kitsFor, mixingOf, statedCoverageFt2 } from './quantities/kits';
 import { type ShiftContext } from './shift-context';
 import { eachLanguage, listed, words } from './words';
 
 const isAmount = (value: number | null): value is number => value !== null && Number.isFinite(value) && value >= 0;
+const isPositive = (value: number | null): value is number => isAmount(value) && value >= LEAST_AMOUNT;
 
 function countOf({ facts }: ShiftContext, kit: KitFacts): number | null {
   if (kit.count !== null) return isAmount(kit.count) ? kit.count : null;
   const { areaM2, thicknessMm } = facts;
-  const canCount = isAmount(areaM2) && isAmount(thicknessMm) && thicknessMm > 0 && Number.isFinite(kit.volumeL) && kit.volumeL > 0;
-  return canCount ? kitsFor(areaM2, thicknessMm, kit.volumeL) : null;
+  return isAmount(areaM2) && isPositive(thicknessMm) && isPositive(kit.volumeL) ? kitsFor(areaM2, thicknessMm, kit.volumeL) : null;
 }
 
 /** Kits, minutes and dumps of one kit, with the hazards of its parts together. */
@@ -48,7 +49,7 @@ function countFinding({ facts, pack }: ShiftContext, kit: KitFacts, kits: number
       whoDecides: words('the crew lead', 'el jefe de cuadrilla'),
     };
   }
-  const coverage = facts.thicknessMm !== null && facts.thicknessMm > 0 && kit.volumeL > 0 ? statedCoverageFt2(kit.volumeL, facts.thicknessMm) : null;
+  const coverage = isPositive(facts.thicknessMm) && isPositive(kit.volumeL) ? statedCoverageFt2(kit.volumeL, facts.thicknessMm) : null;
   return {
     ...common,
     outcome: 'met',

@@ -60,6 +60,7 @@ function dumps(context: SilicaTask): readonly Words[] {
 
 function scopeSummary(context: SilicaTask, findings: readonly Finding[]): Words {
   const parts = context.kitHazards?.isocyanateParts ?? [];
-  const vapor = parts.length === 0 ? null : words(`Vapor of ${parts.join(', ')} decided apart.`, `Vapor de ${parts.join(', ')}: se decide aparte.`);
+  const letters = parts.map(({ part }) => part).join(', ');
+  const vapor = parts.length === 0 ? null : words(`Part ${letters} vapor decided apart.`, `Vapor de la parte ${letters}: se decide aparte.`);
   return sentences(...dumps(context), ...textsOf(findings, 'powder-dust-at-bucket'), words('Does the silica rule apply?', '¿Aplica la regla de sílice?'), vapor);
 }

@@ -24,8 +24,8 @@ export interface KitHazardsOfShift extends KitHazards {
   readonly single: ReadonlySet<string>;
   /** Cement in a powder part: burns when wet, whatever its sheet says. */
   readonly isWetCement: boolean;
-  /** Product names whose sheet shows isocyanate or a breathing sensitizer. */
-  readonly isocyanateParts: readonly string[];
+  /** Parts whose sheet shows isocyanate or a breathing sensitizer. */
+  readonly isocyanateParts: readonly Pick<PartFacts, 'part' | 'productName'>[];
   /** Codes for flammable liquids (H224 to H226) on the sheets. */
   readonly flammableCodes: readonly string[];
 }
@@ -72,7 +72,7 @@ function hazardsOf(kit: KitFacts): KitHazardsOfShift {
     ...hazards,
     single,
     isWetCement: hazards.effects.some(({ id }) => id === 'alkaline-when-wet'),
-    isocyanateParts: kit.parts.filter(isSensitizer).map(({ productName }) => productName),
+    isocyanateParts: kit.parts.filter(isSensitizer).map(({ part, productName }) => ({ part, productName })),
     flammableCodes: FLAMMABLE.filter((code) => single.has(code)),
   };
 }

@@ -77,10 +77,11 @@ export const vaporRule: ShiftRule<TaskContext> = {
     if (!traits.touchesKit || kitHazards === null) return noKit;
     const { isocyanateParts, flammableCodes } = kitHazards;
     if (isocyanateParts.length === 0 && flammableCodes.length === 0) return notApplicable(words('No isocyanate and no solvent on the sheets.', 'Ni isocianato ni solvente en las hojas.'));
-    const inputs = { 'isocyanate or sensitizer': isocyanateParts.join(', ') || null, 'flammable liquid': flammableCodes.join(', ') || null };
+    const names = isocyanateParts.map(({ productName }) => productName).join(', ');
+    const inputs = { 'isocyanate or sensitizer': names || null, 'flammable liquid': flammableCodes.join(', ') || null };
     return met(
       isocyanateParts.length > 0
-        ? words(`${isocyanateParts.join(', ')}: the vapor can make you allergic for life.`, `${isocyanateParts.join(', ')}: el vapor puede dar alergia de por vida.`)
+        ? words(`${names}: the vapor can make you allergic for life.`, `${names}: el vapor puede dar alergia de por vida.`)
         : words('The solvent gives off vapor.', 'El solvente suelta vapor.'),
       { inputs, whatWouldChange: words('An air reading, or what the sheet says of masks.', 'Una medición del aire, o lo que diga la hoja.') },
     );

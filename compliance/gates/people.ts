@@ -110,7 +110,7 @@ export const keptFromIsocyanatesRule: ShiftRule<PersonInTask> = {
     const isKnownFree = kitHazards !== null && kitHazards.isocyanateParts.length === 0 && kitHazards.partsWithoutSheet.length === 0;
     if (isKnownFree) return notApplicable(words('No isocyanate in this kit.', 'Este kit no tiene isocianato.'));
     return unmet(words(`${person.name} is kept off this kit.`, `${person.name} no trabaja con este kit.`), {
-      inputs: { kit: kit?.name ?? null, 'isocyanate or sensitizer': kitHazards?.isocyanateParts.join(', ') || null },
+      inputs: { kit: kit?.name ?? null, 'isocyanate or sensitizer': kitHazards?.isocyanateParts.map(({ productName }) => productName).join(', ') || null },
       whatWouldChange: words('Put someone else on this task.', 'Ponga a otra persona en esta tarea.'),
     });
   },

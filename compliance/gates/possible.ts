@@ -7,16 +7,20 @@ import { type ShiftRule } from '../shift-rule';
 import { commonPractice } from '../source';
 import { words } from '../words';
 
+/** No coat is thinner than a thousandth of a millimeter and no kit smaller than a milliliter. */
+export const LEAST_AMOUNT = 0.001;
+
 /** Names of the fields that cannot be: a refusal by name in place of a throw, so that the page can point at them. */
 export function impossibleFields(facts: ShiftFacts): readonly string[] {
   const ofAtLeast = (field: string, value: number | null, min: number): readonly string[] => (value === null || (Number.isFinite(value) && value >= min) ? [] : [field]);
-  const ofPositive = (field: string, value: number): readonly string[] => (Number.isFinite(value) && value > 0 ? [] : [field]);
+  const ofPositive = (field: string, value: number): readonly string[] => (Number.isFinite(value) && value >= LEAST_AMOUNT ? [] : [field]);
   const repeated = (field: string, ids: readonly string[]): readonly string[] => (new Set(ids).size === ids.length ? [] : [field]);
   const people = new Set(facts.people.map(({ id }) => id));
   const fields = [
     ...(isIsoDate(facts.date) ? [] : ['date']),
     ...ofAtLeast('areaM2', facts.areaM2, 0),
     ...ofAtLeast('roomVolumeM3', facts.roomVolumeM3, 0),
+    ...(facts.targetProfile === null || (Number.isInteger(facts.targetProfile) && facts.targetProfile >= 1 && facts.targetProfile <= 10) ? [] : ['targetProfile']),
     ...(facts.thicknessMm === null ? [] : ofPositive('thicknessMm', facts.thicknessMm)),
     ...repeated('people.id', facts.people.map(({ id }) => id)),
     ...repeated('tasks.id', facts.tasks.map(({ id }) => id)),

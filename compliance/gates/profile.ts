@@ -1,12 +1,16 @@
+import { type TaskKind } from '../facts';
 import { met, notApplicable, undecided, unmet, WHO } from '../rule';
+import { METHOD_RANGES, type MethodRangeRow, type SurfaceMethod } from '../surface/profiles.data';
+import { ORDER_SOURCE } from '../surface/profile';
 import { isPossible, type Interval } from '../silica/minutes';
 import { type ShiftContext } from '../shift-context';
 import { type ShiftRule } from '../shift-rule';
-import { commonPractice, sourced } from '../source';
+import { sourced } from '../source';
 import { words } from '../words';
 
-/** Roughest profile that grinding gives (ICRI 310.2R). */
-export const GRINDING_TOP_PROFILE = 3;
+/** Kinds of work that leave a profile, and the method of the surface table that each is. */
+const METHODS: Readonly<Partial<Record<TaskKind, SurfaceMethod>>> = { 'floor-grinding': 'grinding', 'edge-grinding': 'grinding', 'shot-blasting': 'shot-blasting', scarifying: 'scarifying', chipping: 'scabbling' };
+const rangeOf = (kind: TaskKind): MethodRangeRow | undefined => METHOD_RANGES.find(({ method }) => method === METHODS[kind]);
 
 const spans = ({ facts }: ShiftContext, ...kinds: readonly string[]): readonly Interval[] => facts.tasks.filter(({ kind }) => kinds.includes(kind)).flatMap(({ assignments }) => assignments.filter(isPossible));
 
@@ -21,26 +25,26 @@ export const profileRule: ShiftRule<ShiftContext> = {
   evaluate(context) {
     const { facts } = context;
     const target = facts.targetProfile;
-    const doesGrind = facts.tasks.some(({ kind }) => kind === 'floor-grinding' || kind === 'edge-grinding');
-    if (target === null || !doesGrind) return notApplicable(words('No grinding toward a profile.', 'No se pule para un perfil.'));
-    const doesRougher = facts.tasks.some(({ kind }) => kind === 'shot-blasting' || kind === 'scarifying' || kind === 'chipping');
-    const inputs = { 'profile wanted, CSP': target, 'rougher work in the shift': doesRougher };
-    if (target <= GRINDING_TOP_PROFILE || doesRougher) return met(words(`CSP ${target} is wanted.`, `Se pide CSP ${target}.`), { inputs });
+    const ranges = facts.tasks.flatMap(({ kind }) => rangeOf(kind) ?? []);
+    if (target === null || ranges.length === 0) return notApplicable(words('No work toward a profile.', 'No se trabaja para un perfil.'));
+    const roughest = Math.max(...ranges.map(({ maxProfile }) => maxProfile));
+    const inputs = { 'profile wanted, CSP': target, 'roughest that the planned work gives, CSP': roughest };
+    if (target <= roughest) return met(words(`CSP ${target} is wanted.`, `Se pide CSP ${target}.`), { inputs });
     return undecided(
-      words(`Grinding gives CSP 1 to 3, not ${target}. A coarse grind with primer is the supplier's written exception.`, `Pulir da CSP 1 a 3, no ${target}. Pulido grueso con primario es excepción escrita del proveedor.`),
+      words(`The planned work gives CSP ${roughest} at most, not ${target}. A coarse grind with primer is the supplier's written exception.`, `El trabajo planeado da CSP ${roughest} a lo más, no ${target}. Pulido grueso con primario es excepción escrita del proveedor.`),
       WHO.supplier,
       { inputs, whatWouldChange: words('Shot blast, or keep the supplier\'s written exception.', 'Granalle, o guarde la excepción escrita del proveedor.') },
     );
   },
   line: ({ facts }, { outcome }) =>
-    outcome === 'met' ? words(`Profile wanted: CSP ${facts.targetProfile}.`, `Perfil pedido: CSP ${facts.targetProfile}.`) : words('Grinding alone does not give this profile.', 'Solo pulir no da este perfil.'),
+    outcome === 'met' ? words(`Profile wanted: CSP ${facts.targetProfile}.`, `Perfil pedido: CSP ${facts.targetProfile}.`) : words('This work does not give the profile that is wanted.', 'Este trabajo no da el perfil que se pide.'),
 };
 
 /** Grinding takes a blasted profile off again: grind first, then blast. */
 export const grindThenBlastRule: ShiftRule<ShiftContext> = {
   id: 'grind-then-blast',
   title: words('Grind, then blast', 'Primero pulir, luego granallar'),
-  source: commonPractice('Grinding takes a blasted profile off again.'),
+  source: ORDER_SOURCE,
   duties: [],
   topic: 'gate',
   holds: false,

@@ -51,9 +51,9 @@ export function respiratorOf(context: SilicaTask, person: PersonFacts | null): R
     return { outcome: 'by-policy', apf: null, label: words(`${half.en}, by policy`, `${half.es}, por regla`), source: policy };
   }
   if (demand.kind === 'conditional') {
-    return { outcome: 'none-required', apf: null, label: words('none while fresh air moves', 'ninguno si corre aire fresco'), source: sheetSource(demand.productName, demand.quote) };
+    return { outcome: 'none-required', apf: null, label: words('none while fresh air moves', 'ninguna si corre aire fresco'), source: sheetSource(demand.productName, demand.quote) };
   }
-  if (traits.touchesKit) return { outcome: 'none-required', apf: null, label: words('none named on the sheets', 'ninguno en las hojas'), source: sourced('Confirmed safety data sheets of this job', 'read', { paragraph: 'sections 2 and 8' }) };
+  if (traits.touchesKit) return { outcome: 'none-required', apf: null, label: words('none named on the sheets', 'ninguna en las hojas'), source: sourced('Confirmed safety data sheets of this job', 'read', { paragraph: 'sections 2 and 8' }) };
   return forSilica;
 }
 

@@ -1,5 +1,6 @@
 import { type ExposureBasis, type TaskKind } from '../facts';
 import { isIsoDate, type IsoDate } from '../iso-date';
+import { hazardRatio } from '../respirators/select';
 import { type SilicaLaw } from './shift-pack';
 
 /** Protection factors that respirator classes offer, lowest first (29 CFR 1910.134(d)(3)(i)(A), read). */
@@ -41,7 +42,7 @@ function judge(basis: ExposureBasis, law: SilicaLaw): BasisDecision {
     return { kind: 'outside-scope', basis };
   }
   if (exposure === null || !Number.isFinite(exposure) || exposure < 0) return unusable('no-exposure');
-  const ratio = exposure / law.limit;
+  const ratio = hazardRatio(exposure, law.limit);
   const apf = apfForRatio(ratio);
   return apf === undefined ? unusable('beyond-every-respirator') : { kind: 'assessed', basis, ratio, apf };
 }
@@ -73,5 +74,5 @@ function compare(a: BasisDecision, b: BasisDecision): number {
 /** The last basis of this kind of work that has ended, so that the line can say so. */
 export function endedBasis(bases: readonly ExposureBasis[], kinds: readonly TaskKind[], day: IsoDate): ExposureBasis | null {
   const ended = bases.filter((basis) => kinds.includes(basis.taskKind) && isIsoDate(basis.endsOn) && basis.endsOn < day);
-  return [...ended].sort((a, b) => b.endsOn.localeCompare(a.endsOn) || a.id.localeCompare(b.id))[0] ?? null;
+  return [...ended].sort((a, b) => (a.endsOn === b.endsOn ? (a.id < b.id ? -1 : 1) : a.endsOn > b.endsOn ? -1 : 1))[0] ?? null;
 }

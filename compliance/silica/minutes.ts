@@ -70,7 +70,7 @@ export function doubleBookings(facts: ShiftFacts, person: PersonFacts): readonly
     .filter(({ kind }) => kind !== 'break' && kind !== 'inspection')
     .flatMap((task) => task.assignments.filter(({ personId }) => personId === person.id).map((assignment) => ({ ...assignment, name: task.id, isHere: true })));
   const elsewhere = person.elsewhere.map((work) => ({ ...work, name: work.jobName, isHere: false }));
-  const all = [...here, ...elsewhere].filter(isPossible).sort((a, b) => a.startMinute - b.startMinute || a.endMinute - b.endMinute || a.name.localeCompare(b.name, 'en'));
+  const all = [...here, ...elsewhere].filter(isPossible).sort((a, b) => a.startMinute - b.startMinute || a.endMinute - b.endMinute || (a.name < b.name ? -1 : 1));
   return all.flatMap((first, index) =>
     all.slice(index + 1).flatMap((second) => {
       const startMinute = Math.max(first.startMinute, second.startMinute);

@@ -24,11 +24,11 @@ export const UNDECIDED_RESPIRATOR: RespiratorAnswer = { outcome: 'undecided', ap
 export function silicaRespirator(decision: SilicaDecision, place: Table1Place, table1Minutes: number): RespiratorAnswer {
   switch (decision.kind) {
     case 'none':
-      return { outcome: 'none-required', apf: null, label: words('none', 'ninguno'), source: SCOPE };
+      return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: SCOPE };
     case 'housekeeping':
-      return { outcome: 'none-required', apf: null, label: words('none', 'ninguno'), source: usFederal('1926.1153', 'read', { paragraph: '(f)' }) };
+      return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: usFederal('1926.1153', 'read', { paragraph: '(f)' }) };
     case 'incidental':
-      return { outcome: 'none-required', apf: null, label: words('none, part of Table 1 work', 'ninguno, parte del trabajo de la Tabla 1'), source: usFederal('1926.1153', 'read', { paragraph: '(c)(1)' }) };
+      return { outcome: 'none-required', apf: null, label: words('none, part of Table 1 work', 'ninguna, parte del trabajo de la Tabla 1'), source: usFederal('1926.1153', 'read', { paragraph: '(c)(1)' }) };
     case 'table-1':
       return table1Respirator(decision, place, table1Minutes);
     case 'basis':
@@ -46,13 +46,13 @@ function table1Respirator({ option }: Extract<SilicaDecision, { kind: 'table-1' 
     const isOver = table1Minutes > FOUR_HOURS_MINUTES && respirator.upTo4Hours !== apf;
     return { outcome: 'required', apf, label: isOver ? words(`Over 4 h: ${name.en}`, `Más de 4 h: ${name.es}`) : name, source: option.source };
   }
-  const label = respirator.over4Hours === null ? words('none under Table 1', 'ninguno en la Tabla 1') : words('none until 4 h', 'ninguno hasta 4 h');
+  const label = respirator.over4Hours === null ? words('none under Table 1', 'ninguna en la Tabla 1') : words('none until 4 h', 'ninguna hasta 4 h');
   return { outcome: 'none-required', apf: null, label, source: option.source };
 }
 
 function basisRespirator(decision: Extract<SilicaDecision, { kind: 'basis' }>['decision']): RespiratorAnswer {
-  if (decision.kind === 'outside-scope') return { outcome: 'none-required', apf: null, label: words('none for silica', 'ninguno por sílice'), source: SCOPE };
-  if (decision.apf === null) return { outcome: 'none-required', apf: null, label: words('none: below the limit', 'ninguno: bajo el límite'), source: OUTSIDE_TABLE_1 };
+  if (decision.kind === 'outside-scope') return { outcome: 'none-required', apf: null, label: words('none for silica', 'ninguna por sílice'), source: SCOPE };
+  if (decision.apf === null) return { outcome: 'none-required', apf: null, label: words('none: below the limit', 'ninguna: bajo el límite'), source: OUTSIDE_TABLE_1 };
   const name = apfName(decision.apf);
   if (decision.kind === 'sampling-day') {
     return { outcome: 'required', apf: decision.apf, label: words(`${name.en}, as ${decision.basis.signedBy} wrote`, `${name.es}, como escribió ${decision.basis.signedBy}`), source: QUALIFIED };

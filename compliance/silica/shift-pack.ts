@@ -1,4 +1,5 @@
-import { type RespiratorType } from '../facts';
+import { respiratorTypes, type RespiratorType } from '../facts';
+import { apfRowsOf, type FacePiece, type RespiratorDevice } from '../respirators/apf.data';
 import { type Words } from '../outcome';
 import { usFederal, type Source } from '../source';
 import { words } from '../words';
@@ -24,9 +25,27 @@ export interface SilicaLaw {
   readonly apf: Readonly<Record<RespiratorType, number>>;
 }
 
-const US_APF: SilicaLaw['apf'] = {
-  'filtering-facepiece': 10, 'half-mask': 10, 'full-facepiece': 50, 'papr-loose': 25, 'papr-hood': 25, 'papr-half-mask': 50, 'papr-full-facepiece': 1000, 'supplied-air-hood': 25,
+const KINDS: Readonly<Record<RespiratorType, readonly [RespiratorDevice, FacePiece]>> = {
+  'filtering-facepiece': ['air-purifying', 'filtering-facepiece'],
+  'half-mask': ['air-purifying', 'half-mask'],
+  'full-facepiece': ['air-purifying', 'full-facepiece'],
+  'papr-loose': ['powered-air-purifying', 'loose-fitting'],
+  'papr-hood': ['powered-air-purifying', 'hood'],
+  'papr-half-mask': ['powered-air-purifying', 'half-mask'],
+  'papr-full-facepiece': ['powered-air-purifying', 'full-facepiece'],
+  'supplied-air-hood': ['supplied-air-continuous-flow', 'hood'],
 };
+
+/** A type's factor under a law; 0 where the table has none, or one for each filter class, which the facts do not tell apart. A hood counts without the maker's evidence. */
+function apfUnder(jurisdictionId: string, type: RespiratorType): number {
+  const [device, facePiece] = KINDS[type];
+  const rows = apfRowsOf(jurisdictionId).filter((row) => row.device === device && row.facePiece === facePiece);
+  return rows.length === 1 ? rows[0]!.apf : 0;
+}
+
+function apfTable(jurisdictionId: string): SilicaLaw['apf'] {
+  return Object.fromEntries(respiratorTypes.map((type) => [type, apfUnder(jurisdictionId, type)])) as Record<RespiratorType, number>;
+}
 
 const US_FEDERAL: ShiftPack = {
   id: 'us-federal',
@@ -34,7 +53,7 @@ const US_FEDERAL: ShiftPack = {
   name: words('US federal rules', 'Reglas federales de EE. UU.'),
   isComplete: true,
   gap: null,
-  silica: { actionLevel: 25, limit: 50, limitSource: usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)' }), hasTable1: true, apf: US_APF },
+  silica: { actionLevel: 25, limit: 50, limitSource: usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)' }), hasTable1: true, apf: apfTable('us-federal') },
 };
 
 /** The pack of a place; a place without one gets a pack that decides nothing and says so. */
