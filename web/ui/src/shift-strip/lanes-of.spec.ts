@@ -31,7 +31,7 @@ const task: TaskFacts = {
 };
 const answer: Pick<ShiftAnswer, 'tasks' | 'people'> = {
   tasks: [{ taskId: 'mix', name: { en: 'Powder mixing', es: 'Mezclar polvo' }, state: 'may-not-start' } as TaskAnswer],
-  people: [{ personId: 'marisol', table1Minutes: 105, table1MinutesElsewhere: 60, maskRuleChangesAtMinute: null, doubleBookings: [{ startMinute: 760, endMinute: 800, with: 'Spreading' }], findings: [] }],
+  people: [{ personId: 'marisol', table1Minutes: 105, table1MinutesElsewhere: 60, maskRuleChangesAtMinute: null, doubleBookings: [{ startMinute: 760, endMinute: 800, with: 'Spreading' }], respirators: [], findings: [] }],
 };
 
 describe('lanes from facts and answer', () => {

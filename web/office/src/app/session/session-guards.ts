@@ -21,10 +21,13 @@ export const mayOpen: CanMatchFn = async (route) => {
   return !session || navigationFor(session.role).some((entry) => entry.path === route.path);
 };
 
-/** The first page of a role: the first entry of its navigation that exists. */
-export const toFirstPage: RedirectFunction = () => {
+/** The first page of a role: the first entry of its navigation that exists. Redirects come before guards, so it asks by itself. */
+export const toFirstPage: RedirectFunction = async () => {
   const router = inject(Router);
-  const session = inject(SessionApi).session();
-  const first = session && navigationFor(session.role, router.config)[0];
+  const session = await inject(SessionApi)
+    .load()
+    .catch(() => null);
+  if (!session) return router.parseUrl('/sign-in');
+  const [first] = navigationFor(session.role, router.config);
   return router.parseUrl(first ? `/${first.path}` : '/account');
 };
