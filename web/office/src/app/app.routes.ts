@@ -8,7 +8,10 @@ export function subject(path: string, loadChildren: LoadChildren): Route {
 }
 
 /** The office's subjects, for example `subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes))`. */
-const subjects: Routes = [subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes))];
+const subjects: Routes = [
+  subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes)),
+  subject('sheets', () => import('./sheets/sheets.routes').then((file) => file.routes)),
+];
 
 export const routes: Routes = [
   { path: 'sign-in', title: 'Sign in', loadComponent: () => import('./session/sign-in').then((file) => file.SignIn) },

@@ -9,8 +9,8 @@ export type ListStatus = 'loading' | 'ready' | 'failed';
 interface Step<Q> {
   readonly query: Q;
   readonly after?: string;
-  /** first: throw away what is shown; more: append; refresh: replace the newest rows, keep the older ones. */
-  readonly how: 'first' | 'more' | 'refresh';
+  /** first: throw away what is shown; more: append; refresh: replace the newest rows, keep the older ones; whole: replace all quietly. */
+  readonly how: 'first' | 'more' | 'refresh' | 'whole';
 }
 
 /** A keyset-paged list that a page shows and extends. Call where `inject()` may be called. */
@@ -50,9 +50,9 @@ export class PagedList<Q, P extends Page<{ readonly id: string }>> {
     this.asked.next({ query: this.query(), how: 'first' });
   }
 
-  /** Looks for news without disturbing what is read; a failure leaves the list as it is. */
-  refresh(): void {
-    if (this.status() === 'ready') this.asked.next({ query: this.query(), how: 'refresh' });
+  /** Looks for news without disturbing what is read; a failure leaves the list as it is. `isWhole` lets rows leave the list too. */
+  refresh({ isWhole = false } = {}): void {
+    if (this.status() === 'ready') this.asked.next({ query: this.query(), how: isWhole ? 'whole' : 'refresh' });
   }
 
   more(): void {
@@ -61,7 +61,7 @@ export class PagedList<Q, P extends Page<{ readonly id: string }>> {
   }
 
   private begin({ how }: Step<Q>): void {
-    if (how === 'refresh') return;
+    if (how === 'refresh' || how === 'whole') return;
     this.problem.set(null);
     this.status.set('loading');
     if (how === 'first') this.items.set([]);
@@ -73,12 +73,12 @@ export class PagedList<Q, P extends Page<{ readonly id: string }>> {
     if (how !== 'more') this.page.set(page);
     // After a refresh the older rows stay, so their "more" mark stays too.
     if (how !== 'refresh' || older.length === 0) this.next.set(page.next);
-    this.items.set(how === 'first' ? page.items : how === 'more' ? [...older, ...page.items] : [...page.items, ...older]);
+    this.items.set(how === 'first' || how === 'whole' ? page.items : how === 'more' ? [...older, ...page.items] : [...page.items, ...older]);
     this.status.set('ready');
   }
 
   private fail({ how }: Step<Q>, error: unknown): void {
-    if (how === 'refresh') return;
+    if (how === 'refresh' || how === 'whole') return;
     this.problem.set(problemOf(error));
     this.status.set('failed');
   }
