@@ -4,15 +4,16 @@ const mark = '(?:[<>≤≥~≈]=?|=<|=>|ca\\.?|approx\\.?|about|max\\.?|up to|mo
 const figure = '(?:\\d{1,3}(?:[.,]\\d{1,6})?|[.,]\\d{1,6})';
 const unit = '(?:\\s?(?:%|wt\\.?\\s?%?|w\\/w|vol\\.?\\s?%?|percent)(?:\\s?\\(?(?:w\\/w|w\\/v|v\\/v|by (?:wt|weight|vol|volume)\\.?|wt\\.?|vol\\.?|weight)\\)?)?)';
 const dash = '(?:-|\\u2010|\\u2011|\\u2012|–|—|−|to|a|bis|à|and|y|und|et|\\.\\.\\.?|…)';
+const letter = `${figure}\\s?%?\\s?[<≤]=?\\s?(?:x|c|conc\\.?)\\s?%?\\s?[<≤]=?\\s?${figure}\\s?%?`;
 const amount = `(?:${mark}\\s?)?${figure}${unit}?(?:\\s?${dash}\\s?(?:${mark}\\s?)?${figure}${unit}?)?`;
-const whole = new RegExp(`^\\(?\\s?(${amount})\\s?\\)?$`, 'i');
+const whole = new RegExp(`^\\(?\\s?(${letter}|${amount})\\s?\\)?$`, 'i');
 const rangeInside = new RegExp(`(?<![\\d.,/-])(?:${mark}\\s?)?${figure}${unit}?\\s?(?:-|–|—|−|to|bis)\\s?(?:${mark}\\s?)?${figure}${unit}?(?![\\d/-]|\\s?(?:ppm|mg|µg|ug|°|ppb))`, 'i');
 const percentInside = new RegExp(`(?<![\\d.,/-])(?:${mark}\\s?)?${figure}\\s?%(?:\\s?${dash}\\s?(?:${mark}\\s?)?${figure}\\s?%?)?`, 'i');
 const percentRangeInside = new RegExp(`(?<![\\d.,/-])(?:${mark}\\s?)?${figure}${unit}?\\s?${dash}\\s?(?:${mark}\\s?)?${figure}\\s?%`, 'i');
 
 /** The text as an amount when it is nothing but one, at most 100; null otherwise. */
 export function wholeConcentration(text: string): string | null {
-  const match = whole.exec(text.trim());
+  const match = whole.exec(text.trim().replace(/\s*[*†‡]+$/, ''));
   return match?.[1] && isShare(match[1]) ? match[1].trim() : null;
 }
 

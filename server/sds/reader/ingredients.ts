@@ -102,7 +102,7 @@ function amountsOf(lines: Line[], cells: Cell[], anchors: Anchor[], columns: Col
   const free = freeAmounts(cells, columns);
   // Several amounts in a row and no heading that names one of them: one column a product. Whose, nobody can say here.
   const rowsOfMany = anchors.filter((anchor) => free.filter((amount) => amount.row === anchor.row).length > 1);
-  if (rowsOfMany.length > 0 && rowsOfMany.length >= anchors.length * 0.3 && !rowsOfMany.every((anchor) => free.filter((amount) => amount.row === anchor.row && columns.amount !== null && overlaps(amount.segment, columns.amount)).length === 1)) return paired;
+  if (rowsOfMany.length >= Math.min(3, anchors.length * 0.2) && rowsOfMany.length > 0 && !rowsOfMany.every((anchor) => free.filter((amount) => amount.row === anchor.row && columns.amount !== null && overlaps(amount.segment, columns.amount)).length === 1)) return paired;
   for (const anchor of anchors) {
     const sameRow = free.filter((amount) => amount.row === anchor.row && amount.segment !== anchor.segment);
     const inColumn = sameRow.filter(({ segment }) => columns.amount !== null && overlaps(segment, columns.amount));
@@ -217,11 +217,11 @@ function nameCell(line: Line, anchor: Anchor, columns: Columns): Segment | null 
   return inColumn ?? cells[0] ?? (isNameText(withoutCas(anchor.segment.text)) && line.segments.includes(anchor.segment) ? anchor.segment : null);
 }
 
-const withoutCas = (text: string): string => text.replace(/\(?\s*(cas)?\s*(-?\s*(no|nr|n°|number|#|rn))?\.?\s*:?\s*\d{2,7}-\d{2}-\d\s*\)?/gi, ' ').trim();
+const withoutCas = (text: string): string => text.replace(/\(?\s*(\(?cas\)?)?\s*(-?\s*(no|nr|n°|number|#|rn))?\.?\s*:?\s*\d{2,7}-\d{2}-\d\s*\)?/gi, ' ').trim();
 
-const isNameText = (text: string): boolean => hasLetters(text) && wholeConcentration(text) === null && !/^(cas|ec|einecs|index|rrn|reach|reg)\b[\s:.#-]*(no|nr|number|n°)?[\s:.]*(\d|$)|^(ghs\d|h\d{3}|not |acute|skin irrit|eye|flam|stot|classification|type\b|see |\[\d\]|xn|xi\b|trade secret$|-$)/i.test(text.trim());
+const isNameText = (text: string): boolean => hasLetters(text) && wholeConcentration(text) === null && !/^(cas|ec|einecs|index|rrn|reach|reg)\b[\s:.#-]*(no|nr|number|n°)?[\s:.]*(\d|$)|^(ghs\d|h\d{3}|not |acute|skin irrit|eye|flam|stot|classification|type\b|see |\[\d\]|xn|xi\b|trade secret$|other (components|ingredients)|-$)|\bH[2-4]\d\d\b/i.test(text.trim());
 
 function cleanName(text: string, cas: string): string {
-  const name = withoutCas(text.replaceAll(cas, ' ')).replace(/\s*\b(\d+([.,]\d+)?\s?(-|–)\s?)?\d+([.,]\d+)?\s?%.*$/, '').replace(/\s+/g, ' ').replace(/^[\s:;,-]+|[\s:;,(-]+$/g, '').trim();
+  const name = withoutCas(text).replaceAll(cas, ' ').replace(/\s*\b(\d+([.,]\d+)?\s?(-|–)\s?)?\d+([.,]\d+)?\s?%.*$/, '').replace(/\s+/g, ' ').replace(/^[\s:;,-]+|[\s:;,(-]+$/g, '').trim();
   return name || text.trim();
 }

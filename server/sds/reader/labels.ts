@@ -17,10 +17,13 @@ export interface Labelled {
  * Common practice on sheets, no source.
  */
 const otherLabels =
-  /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses? |relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
+  /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses?( of|$|:)|uses advised|relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
 
-/** Every place where a segment is, or begins with, the label; `label` is matched on folded text from its start. */
-export function findLabelled(lines: Line[], label: RegExp): Labelled[] {
+/**
+ * Every place where a segment is, or begins with, the label; `label` is matched on folded text from its start. A loose
+ * search also takes "Signal word Danger", where only a blank parts label and value.
+ */
+export function findLabelled(lines: Line[], label: RegExp, isLoose = false): Labelled[] {
   const found: Labelled[] = [];
   lines.forEach((line, index) => {
     line.segments.forEach((segment, at) => {
@@ -31,12 +34,22 @@ export function findLabelled(lines: Line[], label: RegExp): Labelled[] {
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
       const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest) ?? /^ [a-z '/&()]{2,34}:/.exec(rest);
-      if (!mark && match[0].length < folded.length) return;
+      if (!mark && match[0].length < folded.length) {
+        if (isLoose && /^ \S/.test(rest)) found.push({ line, index, values: [tail(segment, rest)], isBelow: false });
+        return;
+      }
       const values = valueOf(lines, index, at, printed, rest);
       if (values) found.push({ line, index, ...values });
     });
   });
   return found;
+}
+
+/** The last part of a segment, as a segment of its own. */
+function tail(segment: Segment, rest: string): Segment {
+  const text = segment.text.slice(Math.max(0, segment.text.length - rest.trimStart().length)).trim();
+  const share = text.length / Math.max(1, segment.text.length);
+  return { page: segment.page, text, box: { ...segment.box, x: segment.box.x + segment.box.width * (1 - share), width: segment.box.width * share } };
 }
 
 /** The label broken over two lines of a narrow column. */

@@ -2,10 +2,10 @@ import { fold } from './words';
 
 /** The commonest small words of each language; from memory, no list was copied. */
 const smallWords: Readonly<Record<string, readonly string[]>> = {
-  en: ['the', 'of', 'and', 'to', 'in', 'for', 'with', 'is', 'not', 'or', 'if', 'this', 'by', 'be', 'are', 'may', 'from', 'on', 'as', 'eyes', 'skin', 'use'],
-  es: ['el', 'los', 'las', 'del', 'y', 'en', 'para', 'con', 'es', 'por', 'una', 'se', 'al', 'si', 'su', 'puede', 'que', 'la', 'o', 'ojos', 'piel'],
-  fr: ['le', 'les', 'des', 'du', 'et', 'est', 'pour', 'avec', 'dans', 'une', 'ou', 'par', 'sur', 'au', 'aux', 'en', 'ne', 'pas', 'la', 'yeux', 'peau'],
-  de: ['der', 'die', 'das', 'und', 'mit', 'von', 'zu', 'den', 'nicht', 'ist', 'bei', 'oder', 'auf', 'fur', 'im', 'nach', 'werden', 'eine', 'augen', 'haut'],
+  en: ['the', 'of', 'and', 'to', 'in', 'for', 'with', 'is', 'not', 'or', 'if', 'this', 'by', 'be', 'are', 'may', 'from', 'on', 'as', 'eyes', 'skin', 'use', 'safety', 'data', 'name', 'product', 'hazard'],
+  es: ['el', 'los', 'las', 'del', 'y', 'en', 'para', 'con', 'es', 'por', 'una', 'se', 'al', 'si', 'su', 'puede', 'que', 'la', 'o', 'ojos', 'piel', 'seguridad', 'datos', 'nombre', 'producto'],
+  fr: ['le', 'les', 'des', 'du', 'et', 'est', 'pour', 'avec', 'dans', 'une', 'ou', 'par', 'sur', 'au', 'aux', 'en', 'ne', 'pas', 'la', 'yeux', 'peau', 'securite', 'donnees', 'nom', 'produit'],
+  de: ['der', 'die', 'das', 'und', 'mit', 'von', 'zu', 'den', 'nicht', 'ist', 'bei', 'oder', 'auf', 'fur', 'im', 'nach', 'werden', 'eine', 'augen', 'haut', 'sicherheitsdatenblatt', 'angaben', 'abschnitt'],
   it: ['il', 'di', 'e', 'per', 'con', 'del', 'della', 'non', 'che', 'nel', 'gli', 'una', 'sono', 'dei', 'alla', 'occhi', 'pelle'],
   pt: ['o', 'os', 'do', 'da', 'e', 'em', 'para', 'com', 'nao', 'uma', 'ou', 'ao', 'por', 'dos', 'das', 'olhos', 'pele'],
   nl: ['de', 'het', 'een', 'en', 'van', 'met', 'niet', 'voor', 'bij', 'of', 'op', 'in', 'door', 'zijn', 'ogen', 'huid'],

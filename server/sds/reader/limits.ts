@@ -53,7 +53,7 @@ export function exposureLimits(parts: SheetParts): Field<ExposureLimit>[] {
       const before = segment.text.slice(0, match.index);
       const rowBefore = line.text.slice(0, Math.max(0, line.text.indexOf(segment.text)) + match.index);
       const lineKind = kindOf(rowBefore);
-      const kind = [lineKind ?? (above ? kindOf(above.text) : null) ?? rowKind, termOf(before.slice(-30)) ?? termOf(segment.text.slice(match.index + match[0].length, match.index + match[0].length + 24)) ?? (above ? termOf(above.text) : null) ?? termOf(rowBefore.slice(-40))].filter((part) => part !== null).join(' ');
+      const kind = [lineKind ?? (above ? kindOf(above.text) : null) ?? rowKind, termOf(before.slice(-30)) ?? termOf(segment.text.slice(match.index + match[0].length, match.index + match[0].length + 24)) ?? (above ? termOf(above.text) : null) ?? termOf(sinceLastAmount(rowBefore))].filter((part) => part !== null).join(' ');
       const value = Number((match[1] ?? '').replace(',', '.'));
       const limit: ExposureLimit = { substance, kind: kind || null, value: Number.isFinite(value) ? value : null, unit: unitOf(match[2] ?? ''), text: line.text };
       found.push({ value: limit, page: line.page, box: segment.box, quote: line.text, confidence: substance && kind ? 0.8 : 0.55 });
@@ -63,6 +63,9 @@ export function exposureLimits(parts: SheetParts): Field<ExposureLimit>[] {
 }
 
 const amountsIn = (line: Line): { segment: Segment; match: RegExpExecArray }[] => line.segments.flatMap((segment) => [...segment.text.matchAll(amount)].map((match) => ({ segment, match })));
+
+/** What stands between the figure before and this one: that figure's words are its own. */
+const sinceLastAmount = (rowBefore: string): string => rowBefore.slice(Math.max(0, ...[...rowBefore.matchAll(amount)].map((match) => match.index + match[0].length)));
 
 const kindOf = (text: string): string | null => kinds.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
 const termOf = (text: string): string | null => terms.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
@@ -78,5 +81,5 @@ function substanceIn(line: Line): string | null {
   const isWords = hasLetters(text) && text.length < 70 && !/[.!?]$/.test(text) && kindOf(text) === null && termOf(text) === null;
   const isHeading = /^(component|ingredient|chemical|substance|exposure|occupational|control parameter|limit|not |no |none|type|value|form|country|basis|source|\d+(\.\d+)*\s|components|nombre|ingrediente|parametros|valores|inhaltsstoff|see |date|reference|remark|note|total|respirable|inhalable|as |united|uk|us)\b/.test(folded);
   if (casNumbersIn(line.text).length > 0 && isWords) return text.replace(/\(?\d{2,7}-\d{2}-\d\)?/, '').replace(/\(?\s*CAS[^)]*\)?\s*$/i, '').trim() || null;
-  return isWords && !isHeading ? text : null;
+  return isWords && !isHeading ? text.replace(/\s*\(\s*CAS\b[^)]*$/i, '') || null : null;
 }

@@ -39,7 +39,20 @@ export function productName(parts: SheetParts): Field<string> | null {
       }
     }
   }
-  return titleName(parts);
+  return looselyLabelled(places, parts) ?? titleName(parts);
+}
+
+/** "Product name Quarrybond 40", set without mark or gap: only under the plainest labels. */
+function looselyLabelled(places: Line[][], parts: SheetParts): Field<string> | null {
+  for (const { label, confidence } of nameLabels.slice(0, 2)) {
+    for (const place of places) {
+      for (const hit of findLabelled(place, label, true)) {
+        const field = /^\P{Ll}/u.test(hit.values[0]?.text ?? '') ? fieldOf(hit, confidence - 0.2) : null;
+        if (field) return withSupport(field, parts);
+      }
+    }
+  }
+  return null;
 }
 
 function fieldOf(hit: Labelled, confidence: number): Field<string> | null {
@@ -86,7 +99,7 @@ function titleName(parts: SheetParts): Field<string> | null {
   const title = preamble.findIndex((line) => isTitle(line));
   const candidates = [...(title >= 0 ? preamble.slice(title + 1, title + 6) : []), ...parts.running].filter(isNameLike);
   const body = median(parts.lines.map((line) => line.box.height));
-  const chosen = candidates.find((line) => line.box.height > body * 1.15 || parts.running.some((other) => fold(other.text) === fold(line.text)));
+  const chosen = candidates.find((line) => line.box.height > body * 1.15 || parts.running.some((other) => other.segments.some((segment) => fold(segment.text) === fold(line.text))));
   const value = chosen ? cleanName(chosen.text) : null;
   if (!chosen || !value) return null;
   return { value, page: chosen.page, box: chosen.box, quote: chosen.text, confidence: 0.5, because: 'No label names the product; this stands under the title of the sheet.' };

@@ -37,7 +37,7 @@ function proseGutter(lines: Line[], width: number): number | null {
       }
     }
   }
-  const candidates = [...starts].filter(([, count]) => count >= leastProseRows).map(([start]) => start * 2 - 3);
+  const candidates = [...starts].filter(([, count]) => count >= leastProseRows / 2).map(([start]) => start * 2 - 3);
   candidates.sort((a, b) => a - b);
   return candidates.find((gutter) => bandsAcross(lines, gutter).some((band) => isProse(band, gutter))) ?? null;
 }
@@ -61,13 +61,15 @@ function isProse(band: Line[], gutter: number): boolean {
   const segments = band.flatMap((line) => line.segments);
   const left = segments.filter((segment) => segment.box.x < gutter);
   const right = segments.filter((segment) => segment.box.x >= gutter);
-  return fillsColumn(left) && fillsColumn(right);
+  // One full column of prose is enough when the other, perhaps at its end, has some full lines too.
+  return Math.max(fullness(left), fullness(right)) >= 0.5 && Math.min(fullness(left), fullness(right)) >= 0.3;
 }
 
-function fillsColumn(segments: Segment[]): boolean {
-  if (segments.length < leastProseRows) return false;
+/** The share of pieces that run from edge to edge of their column; 0 for a column too narrow or too short to tell. */
+function fullness(segments: Segment[]): number {
+  if (segments.length < leastProseRows) return 0;
   const start = Math.min(...segments.map((segment) => segment.box.x));
   const end = Math.max(...segments.map((segment) => segment.box.x + segment.box.width));
   const full = segments.filter((segment) => segment.box.x + segment.box.width - start > (end - start) * 0.75 && segment.box.x - start < (end - start) * 0.25);
-  return full.length >= leastProseRows && full.length >= segments.length * 0.5 && end - start > 150;
+  return end - start > 150 && full.length >= 4 ? full.length / segments.length : 0;
 }

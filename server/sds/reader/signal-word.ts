@@ -9,12 +9,12 @@ const danger = /^(danger|peligro|gefahr|pericolo|perigo|gevaar)\b/;
 const warning = /^(warning|atencion|advertencia|attention|achtung|avertissement|attenzione|atencao|waarschuwing)\b/;
 const none = /^(none|no signal word|not applicable|not required|n\/?a\b|no\b|ninguna|sin palabra|no aplica|aucune?|sans objet|kein|keine|entfallt|nicht|not classified|-+$)/;
 
-/** "Danger" or "Warning" of section 2; `none` when the section prints neither. Null when there is no section 2. */
+/** "Danger" or "Warning" of section 2; `none` when the section prints neither and no statement asks for one. */
 export function signalWord(parts: SheetParts): Field<SignalWord> | null {
   const lines = parts.sections.bodies.get('hazards');
   const heading = parts.sections.headingLines.get('hazards');
   if (!lines || !heading) return null;
-  for (const hit of findLabelled(lines, label)) {
+  for (const hit of [...findLabelled(lines, label), ...findLabelled(lines, label, true)]) {
     const [first] = hit.values;
     const value = first ? wordOf(first.text) : null;
     if (first && value) return field(value, first, value === 'none' ? 0.95 : 0.97);
@@ -22,6 +22,8 @@ export function signalWord(parts: SheetParts): Field<SignalWord> | null {
   const alone = standingAlone(lines);
   if (alone) return alone;
   const unclassified = lines.find((line) => /not classified|not hazardous|not a hazardous|non-?hazardous|no clasificad|nicht eingestuft|non classe|nicht gefahrlich|kennzeichnung nicht erforderlich|no es peligros/.test(fold(line.text)));
+  // Statements without a word: the word may be drawn as a picture. Better no answer than a false "none".
+  if (!unclassified && lines.some((line) => /(?<![A-Z0-9])H[23]\d\d\b/.test(line.text) || label.test(fold(line.text)))) return null;
   const place = unclassified ?? heading;
   const because = unclassified ? 'Section 2 says the product is not classified and prints no signal word.' : 'Section 2 prints no signal word.';
   return { value: 'none', page: place.page, box: place.box, quote: place.text, confidence: unclassified ? 0.9 : 0.6, because };

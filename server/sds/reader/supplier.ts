@@ -74,7 +74,8 @@ export function companyName(text: string): string | null {
 
 /** No label: a line of section 1, or of the running header or footer, that ends in a legal form. */
 function unlabelled(identification: Line[], parts: SheetParts): Field<string> | null {
-  const segments = [...identification, ...parts.running, ...parts.sections.preamble].flatMap((line) => line.segments);
+  const firstPage = parts.lines.filter((line) => line.page === 1).sort((a, b) => a.box.y - b.box.y);
+  const segments = [...identification, ...parts.running, ...parts.sections.preamble, ...firstPage.slice(-2)].flatMap((line) => line.segments);
   for (const segment of segments) {
     const value = companyName(segment.text);
     if (!value || value.split(' ').length > 8 || !legalForm.test(value) || /[.;] \p{Ll}|\b(is|are|the product|material)\b/u.test(value)) continue;
