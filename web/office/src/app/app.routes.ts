@@ -11,6 +11,7 @@ export function subject(path: string, loadChildren: LoadChildren): Route {
 const subjects: Routes = [
   subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes)),
   subject('sheets', () => import('./sheets/sheets.routes').then((file) => file.routes)),
+  subject('products', () => import('./products/products.routes').then((file) => file.routes)),
 ];
 
 export const routes: Routes = [
