@@ -12,6 +12,7 @@ const subjects: Routes = [
   subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes)),
   subject('sheets', () => import('./sheets/sheets.routes').then((file) => file.routes)),
   subject('products', () => import('./products/products.routes').then((file) => file.routes)),
+  subject('history', () => import('./history/history.routes').then((file) => file.routes)),
 ];
 
 export const routes: Routes = [

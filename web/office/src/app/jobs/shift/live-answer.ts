@@ -1,5 +1,5 @@
 import { InjectionToken } from '@angular/core';
-import { answerShift } from '#compliance/answer-shift';
+import { answerShift } from '#compliance';
 import { type ShiftAnswer } from '#compliance/answer';
 import { type ShiftFacts } from '#compliance/facts';
 

@@ -1,0 +1,33 @@
+import { type Acknowledgement, type AcknowledgementRow } from '#shared/acknowledgements';
+import { type StateKind } from '#ui/state';
+
+export const kindNames: Readonly<Record<AcknowledgementRow['kind'], string>> = { signed: 'signed', 'could-not-sign': 'could not sign yet', paper: 'on paper', witnessed: 'witnessed' };
+export const languageNames = { en: 'English', es: 'Español' } as const;
+
+/** "on Tablet 2, PIN not confirmed, an older version" */
+export function howWords(row: AcknowledgementRow): string {
+  const kind = row.kind === 'signed' ? '' : kindNames[row.kind];
+  const where = row.tabletName ? `on ${row.tabletName}` : '';
+  const pin = row.pinState === 'not-confirmed' ? 'PIN not confirmed' : row.pinState === 'not-set' && row.kind === 'signed' ? 'no PIN set' : '';
+  return [kind, where, pin, row.wasSuperseded ? 'a newer version was out' : ''].filter(Boolean).join(', ') || 'in the office';
+}
+
+/** Only what is not as usual gets a mark. */
+export function howKind(row: AcknowledgementRow): StateKind | null {
+  if (row.kind === 'could-not-sign' || row.pinState === 'not-confirmed') return 'stop';
+  return row.wasSuperseded ? 'caution' : null;
+}
+
+/** "tablet 4 s slow": tablet clock minus server clock. */
+export function clockWords({ clockOffsetSeconds: offset }: Acknowledgement): string {
+  if (offset === null || Math.abs(offset) < 1) return '';
+  const seconds = Math.round(Math.abs(offset));
+  const length = seconds < 120 ? `${seconds} s` : seconds < 7200 ? `${Math.round(seconds / 60)} min` : `${Math.round(seconds / 3600)} h`;
+  return `, tablet ${length} ${offset > 0 ? 'fast' : 'slow'}`;
+}
+
+/** "9c1f 42d0 7be8 … 5a31": enough of a hash to compare by eye. */
+export function shortHash(hash: string): string {
+  const groups = hash.match(/.{1,4}/g) ?? [];
+  return groups.length <= 4 ? groups.join(' ') : `${groups.slice(0, 3).join(' ')} … ${groups.at(-1)}`;
+}
