@@ -76,7 +76,12 @@ describe('times in words', () => {
     ['07:10', 420, 430],
     ['01:00', 1470, 1500],
     ['23:50', 1450, 1430],
+    ['7.10', 420, 430],
+    ['0710', 420, 430],
     ['', 420, null],
+    ['24:00', 420, null],
+    ['7:60', 420, null],
+    ['soon', 420, null],
   ])('clock time "%s" near minute %i means minute %s', (time, near, expected) => {
     expect(minuteOfClock(time, near)).toBe(expected);
   });

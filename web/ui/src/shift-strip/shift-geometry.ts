@@ -71,11 +71,13 @@ export function clock(minute: number): string {
   return `${String(Math.floor(ofDay / 60)).padStart(2, '0')}:${String(ofDay % 60).padStart(2, '0')}`;
 }
 
-/** The minute a clock time means, on the day nearest to the minute it replaces; null when it is no time. */
+/** The minute a typed clock time means ("7:10", "0710", "07:10"), on the day nearest to the minute it replaces; null when it is no time. */
 export function minuteOfClock(time: string, near: number): number | null {
-  const match = /^(\d{2}):(\d{2})/.exec(time);
-  if (!match) return null;
-  const ofDay = Number(match[1]) * 60 + Number(match[2]);
+  const match = /^\s*(\d{1,2})[:.]?(\d{2})\s*$/.exec(time);
+  const hours = Number(match?.[1]);
+  const minutes = Number(match?.[2]);
+  if (!match || hours > 23 || minutes > 59) return null;
+  const ofDay = hours * 60 + minutes;
   const nextDay = ofDay + 1440;
   return Math.abs(nextDay - near) < Math.abs(ofDay - near) ? nextDay : ofDay;
 }

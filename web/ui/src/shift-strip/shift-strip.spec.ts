@@ -84,6 +84,13 @@ describe('the shift strip', () => {
     expect((await strip.blockWords())[2]).toBe('Shot blasting, may not start, Per Aldana: 09:30 to 13:15');
   });
 
+  it('puts back what is no time', async () => {
+    const { strip, page, element } = await show();
+    await strip.setTime('Shot blasting', 'end', 'noon');
+    expect(page.changes).toEqual([]);
+    expect([...element.querySelectorAll<HTMLInputElement>('.times input')].map((input) => input.value)).toEqual(['09:30', '12:00']);
+  });
+
   it('follows the pointer in five-minute steps from an edge, and a broken-off drag leaves things as they were', async () => {
     const { strip, page, element, fixture } = await show();
     const bar = element.querySelector('.hours .bar');

@@ -163,10 +163,16 @@ export class ShiftStrip {
     if (this.ask(lane, block.id, next)) this.announce(lane, { ...block, ...next });
   }
 
-  protected setTime(lane: ShiftLane, block: ShiftBlock, grip: 'start' | 'end', time: string): void {
+  /** What is no time is put back as it was. */
+  protected setTime(lane: ShiftLane, block: ShiftBlock, grip: 'start' | 'end', field: HTMLInputElement): void {
     const before = grip === 'start' ? block.startMinute : block.endMinute;
-    const minute = minuteOfClock(time, before);
-    if (minute !== null) this.ask(lane, block.id, moved(block, grip, minute - before));
+    const minute = minuteOfClock(field.value, before);
+    field.value = clock(before);
+    if (minute !== null) this.shiftTime(lane, block, grip, minute - before);
+  }
+
+  protected shiftTime(lane: ShiftLane, block: ShiftBlock, grip: 'start' | 'end', byMinutes: number): void {
+    this.ask(lane, block.id, moved(block, grip, byMinutes));
   }
 
   /** Emits when something would change; whether it did. */

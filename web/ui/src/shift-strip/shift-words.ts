@@ -12,6 +12,8 @@ export interface ShiftWords {
   readonly fromTo: (start: string, end: string) => string;
   readonly from: string;
   readonly to: string;
+  readonly earlier: (which: string) => string;
+  readonly later: (which: string) => string;
   readonly close: string;
   readonly nobody: string;
 }
@@ -28,6 +30,8 @@ export const SHIFT_WORDS: Readonly<Record<Language, ShiftWords>> = {
     fromTo: (start, end) => `${start} to ${end}`,
     from: 'From',
     to: 'to',
+    earlier: (which) => `${which}: five minutes earlier`,
+    later: (which) => `${which}: five minutes later`,
     close: 'Close',
     nobody: 'Nobody has a task in this shift yet.',
   },
@@ -42,6 +46,8 @@ export const SHIFT_WORDS: Readonly<Record<Language, ShiftWords>> = {
     fromTo: (start, end) => `${start} a ${end}`,
     from: 'De',
     to: 'a',
+    earlier: (which) => `${which}: cinco minutos antes`,
+    later: (which) => `${which}: cinco minutos después`,
     close: 'Cerrar',
     nobody: 'Nadie tiene todavía una tarea en este turno.',
   },

@@ -10,8 +10,16 @@ export class NavigationCounts {
   private readonly current = signal<Readonly<Record<string, number>>>({});
   readonly counts = this.current.asReadonly();
 
-  /** Asks again; an unreachable server leaves the counts as they were, the pages say so themselves. */
+  private askedAt = -Infinity;
+
+  /** For every change of page: asks again when the counts are older than half a minute. */
+  async refreshWhenOld(): Promise<void> {
+    if (performance.now() - this.askedAt >= 30_000) await this.refresh();
+  }
+
+  /** After something was done: asks again. An unreachable server leaves the counts as they were, the pages say so themselves. */
   async refresh(): Promise<void> {
+    this.askedAt = performance.now();
     try {
       this.show(Today.parse(await firstValueFrom(this.http.get('/api/today'))));
     } catch {

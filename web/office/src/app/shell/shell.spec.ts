@@ -104,6 +104,15 @@ describe('the office frame', () => {
     expect(document.activeElement).toBe(element.querySelector('main'));
   });
 
+  it('leaves the reader on the row that opened something beside its list', async () => {
+    const { harness, element } = await open('owner');
+    const row = document.createElement('button');
+    element.querySelector('main')?.append(row);
+    row.focus();
+    await harness.navigateByUrl('/history');
+    expect(document.activeElement).toBe(row);
+  });
+
   it('opens and closes the menu of narrow screens, with Escape too, and gives the focus back', async () => {
     const { button, settle, element } = await open('owner');
     const menu = button('Menu');

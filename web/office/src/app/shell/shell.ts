@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, type ElementRef, computed, inject, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, type ElementRef, computed, inject, signal, viewChild } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { filter } from 'rxjs';
@@ -19,6 +19,7 @@ import { NavigationCounts } from './navigation-counts';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Shell {
+  private readonly document = inject(DOCUMENT);
   private readonly api = inject(SessionApi);
   private readonly router = inject(Router);
   private readonly navigationCounts = inject(NavigationCounts);
@@ -73,14 +74,15 @@ export class Shell {
     }
   }
 
-  /** Moves the reader to a new page's beginning; filters and opened rows (same path, other query) keep their focus. */
+  /** Puts the reader at a new page's beginning; who is still within the page (a row that opens beside its list) stays there. */
   private arrive(url: string): void {
     const path = url.split(/[?#]/)[0] ?? '';
     const isFirst = this.path === '';
     if (path === this.path) return;
     this.path = path;
     this.isMenuOpen.set(false);
-    if (!isFirst) this.page().nativeElement.focus();
-    if (this.entries().some((entry) => entry.path === 'today')) void this.navigationCounts.refresh();
+    const page = this.page().nativeElement;
+    if (!isFirst && !page.contains(this.document.activeElement)) page.focus();
+    if (this.entries().some((entry) => entry.path === 'today')) void this.navigationCounts.refreshWhenOld();
   }
 }
