@@ -57,10 +57,12 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
   });
   api.use(demandSameOrigin(config.publicUrl));
   api.use('/api/tablet', recogniseTablet(tablets));
-  api.use(/^\/api\/(?!tablet\/)/, kept.handler, door.initialize(), door.session(), (request, _response, next) => {
+  // A tablet's requests carry no session: they must not make one, or keep one alive.
+  const people = Router().use(kept.handler, door.initialize(), door.session(), (request, _response, next) => {
     if (request.user) request.actor = request.user;
     next();
   });
+  api.use((request, response, next) => (request.path.startsWith('/api/tablet/') ? next() : people(request, response, next)));
   api.use(sessionRoutes(session, door));
   api.use(peopleRoutes(peopleService(deps)));
   api.use(tabletsRoutes(tablets, isSecure));

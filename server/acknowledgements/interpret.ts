@@ -2,11 +2,11 @@ import { createHash } from 'node:crypto';
 import { and, eq, inArray } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
 import { type Checklist } from '#compliance/answer';
-import { acknowledgements, correctiveActions } from '#drizzle/schema/acknowledgements';
-import { answerSets, checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
+import { type acknowledgements, type correctiveActions } from '#drizzle/schema/acknowledgements';
+import { type answerSets, checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
 import { jobs } from '#drizzle/schema/jobs';
 import { people, pins } from '#drizzle/schema/people';
-import { couldNotSignReasons, Envelope, type Receipt } from '#shared/envelopes';
+import { type couldNotSignReasons, Envelope, type Receipt } from '#shared/envelopes';
 import { type Config } from '../config';
 import { newestVersion } from '../jobs/shift-store';
 import { pinDigest, isSamePinDigest } from '../people/pin-digest';
@@ -141,6 +141,7 @@ export async function interpret(tx: Tx, keys: Config['keys'], delivery: Delivery
     if (opened === undefined) return aside(`The PIN of ${name} could not be opened. Ask them to set it again.`);
     if (!/^\d{4,8}$/.test(opened)) return aside(`The PIN of ${name} is not four to eight digits. Ask them to set it again.`);
     if (pinsBefore.has(sent.personId)) return aside(`${name} has a PIN already. If they forgot it, reset it in the office; they then set a new one.`);
+    if (sent.witnessPersonId !== null && judgePin(sent.witnessPersonId, sent.witnessSealedPin ?? '', pinSetHash, sent.witnessNonce ?? '') === 'not-confirmed') return aside(`The PIN that was to witness ${name}'s new one was not the witness's own. Ask them to set it again.`);
     const digest = pinDigest(keys.pinPepper, tx.organisationId, sent.personId, opened);
     pinsBefore.set(sent.personId, digest);
     return { delivery, pin: { organisationId: tx.organisationId, personId: sent.personId, digest, setAt: delivery.receivedAt, witnessPersonId: sent.witnessPersonId, tabletId: delivery.tabletId }, actions: [], drafts: [] };
@@ -174,7 +175,7 @@ const sha256 = (bytes: string | Uint8Array) => createHash('sha256').update(bytes
 
 /** Digests of the PINs that the people named in these envelopes have now. */
 export async function readPins(tx: Tx, deliveries: readonly Delivery[]): Promise<Map<string, string>> {
-  const ids = deliveries.flatMap(({ bytes }) => [...bytes.toString('utf8').matchAll(/"personId"\s*:\s*"([0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12})"/gi)].map((found) => found[1] as string));
+  const ids = deliveries.flatMap(({ bytes }) => [...bytes.toString('utf8').matchAll(/"(?:personId|witnessPersonId)"\s*:\s*"([0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12})"/gi)].map((found) => found[1] as string));
   if (ids.length === 0) return new Map();
   const rows = await tx.select().from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, ids)));
   return new Map(rows.map((row) => [row.personId, row.digest]));

@@ -1,14 +1,15 @@
 import { createHash } from 'node:crypto';
 import { and, eq } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
-import { answerShift, generateChecklist, renderChecklistText } from '#compliance';
+import { renderChecklistText } from '#compliance';
+import { type ShiftFacts } from '#compliance/facts';
 import { languages, type Language } from '#compliance/outcome';
 import { checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
-import { assembleFacts, type PublishedVersion } from '#shared/jobs';
+import { type PublishedVersion } from '#shared/jobs';
 import { type Deps } from '../deps';
 import { ConflictError, NotFoundError, RefusedError } from '../errors';
 import { demandRole, type PersonActor } from '../http/actor';
-import { factsBytes, findShift, newestVersion, readShift, readVersions } from '../jobs/shift-store';
+import { draftChecklist, findShift, newestVersion, readShift, readVersions } from '../jobs/shift-store';
 import { appendEntry } from '../recordlog/recordlog-store';
 
 const sha256 = (bytes: Uint8Array) => createHash('sha256').update(bytes).digest('hex');
@@ -23,30 +24,25 @@ export function checklistsService({ database, clock }: Deps) {
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer', 'crew-lead');
         const row = await findShift(tx, shiftId, true);
-        const shift = await readShift(tx, shiftId);
+        const publishedAt = clock.now();
+        const shift = await readShift(tx, shiftId, publishedAt);
         if (row.version !== version) throw new ConflictError('Somebody changed this shift after you opened it. Look at it again, then publish.', shift);
-        const facts = assembleFacts(shift);
+        const { facts, checklist, factsBytes, checklistBytes } = draftChecklist(shift, publishedAt);
         refuseUnfinished(facts);
         const newest = await newestVersion(tx, shiftId);
-        const factsAsBytes = factsBytes(shift);
-        const factsSha256 = sha256(factsAsBytes);
-        if (newest?.factsSha256 === factsSha256) throw new RefusedError(`Nothing has changed since version ${newest.number}. It stands as it is.`);
-
-        const publishedAt = clock.now();
-        const answer = answerShift(facts, publishedAt.toISOString());
-        const checklist = generateChecklist(facts, answer);
-        const checklistBytes = Buffer.from(JSON.stringify(checklist));
+        if (newest?.checklist.equals(checklistBytes)) throw new RefusedError(`Nothing that people sign has changed since version ${newest.number}. It stands as it is.`);
         const texts = languages.map((language) => {
           const bytes = Buffer.from(renderChecklistText(checklist, language));
           return { language, bytes, sha256: sha256(bytes) };
         });
+        const factsSha256 = sha256(factsBytes);
         const manifest = [`${factsSha256}  facts.json`, `${sha256(checklistBytes)}  checklist.json`, ...texts.map((text) => `${text.sha256}  text.${text.language}.json`), ''].join('\n');
         const manifestSha256 = sha256(Buffer.from(manifest));
 
         const id = newId();
         const number = (newest?.number ?? 0) + 1;
         const own = { organisationId: tx.organisationId, versionId: id };
-        await tx.insert(checklistVersions).values({ organisationId: tx.organisationId, id, shiftId, jobId: shift.jobId, date: shift.date, number, facts: factsAsBytes, checklist: checklistBytes, factsSha256, manifest, manifestSha256, publishedBy: actor.personId, publishedByName: actor.personName, publishedAt });
+        await tx.insert(checklistVersions).values({ organisationId: tx.organisationId, id, shiftId, jobId: shift.jobId, date: shift.date, number, facts: factsBytes, checklist: checklistBytes, factsSha256, manifest, manifestSha256, publishedBy: actor.personId, publishedByName: actor.personName, publishedAt });
         await tx.insert(checklistTexts).values(texts.map((text) => ({ ...own, ...text })));
         await tx.insert(checklistPeople).values(checklist.people.map((person) => ({ ...own, personId: person.personId, name: person.name, language: person.language })));
         const published = (await readVersions(tx, shiftId)).find((each) => each.id === id) as PublishedVersion;
@@ -72,7 +68,7 @@ export function checklistsService({ database, clock }: Deps) {
 }
 export type ChecklistsService = ReturnType<typeof checklistsService>;
 
-function refuseUnfinished(facts: ReturnType<typeof assembleFacts>): void {
+function refuseUnfinished(facts: ShiftFacts): void {
   const assigned = new Set(facts.tasks.flatMap((task) => task.assignments.map((each) => each.personId)));
   if (assigned.size === 0) throw new RefusedError('Nobody has a task yet. Put people on the shift strip, then publish.');
   if (!facts.competentPersonId || !facts.people.some((person) => person.id === facts.competentPersonId)) throw new RefusedError('Name the competent person of the day first: the crew must know who it is.');

@@ -134,14 +134,14 @@ export function jobsService({ database, clock }: Deps) {
           const id = newId();
           await tx.insert(shifts).values({ organisationId: tx.organisationId, id, jobId, date, plan });
           await writeReferences(tx, id, plan);
-          return readShift(tx, id);
+          return readShift(tx, id, clock.now());
         });
       } catch (error) {
         if (databaseErrorCode(error) === '23505') throw new RefusedError(`This job has a shift on ${date} already. Open that one.`);
         throw error;
       }
     },
-    readShift: (actor: PersonActor, id: string): Promise<Shift> => database.inOrganisation(actor.organisationId, (tx) => readShift(tx, id)),
+    readShift: (actor: PersonActor, id: string): Promise<Shift> => database.inOrganisation(actor.organisationId, (tx) => readShift(tx, id, clock.now())),
     editPlan: (actor: PersonActor, id: string, version: number, plan: ShiftPlan): Promise<Shift> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer', 'crew-lead');
@@ -154,10 +154,10 @@ export function jobsService({ database, clock }: Deps) {
           .returning({ id: shifts.id });
         if (changed.length === 0) {
           await findShift(tx, id);
-          throw new ConflictError('Somebody changed this shift after you opened it. Here are both versions.', await readShift(tx, id));
+          throw new ConflictError('Somebody changed this shift after you opened it. Here are both versions.', await readShift(tx, id, clock.now()));
         }
         await writeReferences(tx, id, plan);
-        return readShift(tx, id);
+        return readShift(tx, id, clock.now());
       }),
 
     /** The act of a named person: their typed name must be their own. */
@@ -176,7 +176,7 @@ export function jobsService({ database, clock }: Deps) {
         const row = { organisationId: tx.organisationId, id, jobId: job.id, ...basis, signedBy: actor.personId, signedByName: actor.personName, signedAt, signedOn };
         await tx.insert(exposureBases).values(row);
         const { organisationId: _, ...record } = row;
-        const read = await readShift(tx, shiftId);
+        const read = await readShift(tx, shiftId, clock.now());
         await appendEntry(tx, clock, { kind: 'exposure-basis', subjectId: id, record: { ...record, typedName, signedAt: signedAt.toISOString() } });
         return read;
       }),

@@ -1,5 +1,5 @@
-import { createHash } from 'node:crypto';
 import { and, asc, desc, eq, inArray, isNull, ne } from 'drizzle-orm';
+import { answerShift, generateChecklist } from '#compliance';
 import { type ElsewhereFacts, type ExposureBasis, type PersonFacts } from '#compliance/facts';
 import { acknowledgements, correctiveActions } from '#drizzle/schema/acknowledgements';
 import { checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
@@ -28,7 +28,7 @@ export async function findShift(tx: Tx, id: string, lock = false): Promise<Shift
 }
 
 /** Everything the shift page and the publisher need, read in one transaction. */
-export async function readShift(tx: Tx, id: string): Promise<Shift> {
+export async function readShift(tx: Tx, id: string, asOf: Date): Promise<Shift> {
   const row = await findShift(tx, id);
   const job = await findJob(tx, row.jobId);
   const plan = row.plan as ShiftPlan;
@@ -56,11 +56,15 @@ export async function readShift(tx: Tx, id: string): Promise<Shift> {
     openActions: openActions.map((action) => ({ id: action.id, taskId: action.taskId, text: action.text, openedAt: action.openedAt.toISOString(), openedBy: action.openedBy })),
   };
   const newest = await newestVersion(tx, id);
-  return { ...shift, hasUnpublishedChanges: newest ? newest.factsSha256 !== factsHash(shift) : plan.tasks.length > 0 };
+  return { ...shift, hasUnpublishedChanges: newest ? !newest.checklist.equals(draftChecklist(shift, asOf).checklistBytes) : plan.tasks.length > 0 };
 }
 
-export const factsBytes = (shift: Parameters<typeof assembleFacts>[0]): Buffer => Buffer.from(JSON.stringify(assembleFacts(shift)));
-const factsHash = (shift: Parameters<typeof assembleFacts>[0]) => createHash('sha256').update(factsBytes(shift)).digest('hex');
+/** The checklist as it would be published now. What people sign has changed when these bytes have, whatever else in the facts did. */
+export function draftChecklist(shift: Parameters<typeof assembleFacts>[0], asOf: Date) {
+  const facts = assembleFacts(shift);
+  const checklist = generateChecklist(facts, answerShift(facts, asOf.toISOString()));
+  return { facts, checklist, factsBytes: Buffer.from(JSON.stringify(facts)), checklistBytes: Buffer.from(JSON.stringify(checklist)) };
+}
 
 export async function newestVersion(tx: Tx, shiftId: string): Promise<VersionRow | undefined> {
   const [row] = await tx.select().from(checklistVersions).where(and(eq(checklistVersions.organisationId, tx.organisationId), eq(checklistVersions.shiftId, shiftId))).orderBy(desc(checklistVersions.number)).limit(1);

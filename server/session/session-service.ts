@@ -11,13 +11,13 @@ import { hashPassword, refuseWeakPassword, verifyPassword } from './passwords';
 /** Wrong tries before waiting begins: few for one account from one address, more for an address as a whole. */
 const freeTries = { account: 5, address: 30, anywhere: 50 };
 
-type Member = { role: string; email: string; passwordHash: string; sessionsValidFrom: Date; name: string; isActive: boolean; organisationName: string };
+type Member = { role: string; email: string; passwordHash: string; sessionsValidFromMs: number; name: string; isActive: boolean; organisationName: string };
 
 export function sessionService({ database, clock, log }: Deps) {
   async function readMember(organisationId: string, personId: string): Promise<Member | undefined> {
     return database.inOrganisation(organisationId, async (tx) => {
       const rows = await tx.execute<Member>(sql`
-        SELECT m.role, m.email, m.password_hash AS "passwordHash", m.sessions_valid_from AS "sessionsValidFrom", p.name, p.is_active AS "isActive", o.name AS "organisationName"
+        SELECT m.role, m.email, m.password_hash AS "passwordHash", floor(extract(epoch FROM m.sessions_valid_from) * 1000)::float8 AS "sessionsValidFromMs", p.name, p.is_active AS "isActive", o.name AS "organisationName"
         FROM door_member(${personId}) m
         JOIN ${people} p ON p.id = ${personId} AND p.organisation_id = ${organisationId}
         JOIN ${organisations} o ON o.organisation_id = ${organisationId}`);
@@ -61,7 +61,7 @@ export function sessionService({ database, clock, log }: Deps) {
     /** Who this session is now: role and membership are read at every request. Null ends the session. */
     async readActor(organisationId: string, personId: string, signedInAt: number): Promise<PersonActor | null> {
       const member = await readMember(organisationId, personId);
-      return member?.isActive && member.sessionsValidFrom.getTime() <= signedInAt ? toActor(organisationId, personId, member) : null;
+      return member?.isActive && member.sessionsValidFromMs <= signedInAt ? toActor(organisationId, personId, member) : null;
     },
 
     /** Ends every session of this person; answers from when new ones are good (ms). */
@@ -77,8 +77,8 @@ export function sessionService({ database, clock, log }: Deps) {
       refuseWeakPassword(next, { email: member?.email ?? '', name: actor.personName }, 'next');
       const hash = await hashPassword(next);
       return database.inOrganisation(actor.organisationId, async (tx) => {
-        const { rows } = await tx.execute<{ at: Date }>(sql`SELECT door_set_password(${actor.personId}, ${hash}) AS at`);
-        return (rows[0]?.at ?? clock.now()).getTime() + 1;
+        const { rows } = await tx.execute<{ atMs: number }>(sql`SELECT floor(extract(epoch FROM door_set_password(${actor.personId}, ${hash})) * 1000)::float8 AS "atMs"`);
+        return (rows[0]?.atMs ?? clock.now().getTime()) + 1;
       });
     },
 

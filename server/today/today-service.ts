@@ -15,7 +15,10 @@ import { type Tx } from '../platform/database';
 const dayMs = 24 * 3600 * 1000;
 const renewWithinDays = 30;
 type Level = TodayItem['level'];
-const harm: Record<Level, number> = { stop: 0, caution: 1, plain: 2 };
+const harm: Record<Level, number> = { stop: 0, caution: 10, plain: 20 };
+/** Within a level: work that runs unprotected comes before work that waits, and that before paper. */
+const urgency: Readonly<Record<string, number>> = { Stopped: 0, 'May not start': 1, 'Sign again': 2, 'No sheet': 3, Help: 4, 'Not signed': 5 };
+const rank = (item: TodayItem) => harm[item.level] + (urgency[item.label] ?? 6);
 const counted = (n: number, one: string, many: string) => `${n} ${n === 1 ? one : many}`;
 
 /** What needs a person, worst first; who is on site; how the library stands. */
@@ -27,7 +30,7 @@ export function todayService({ database, clock }: Deps) {
         const shiftsNow = await currentShifts(tx, now);
         const items = [...(await stops(tx)), ...shiftsNow.flatMap((shift) => shiftItems(shift, now)), ...(await libraryItems(tx)), ...(await keptAside(tx)), ...renewals(shiftsNow, now)];
         return {
-          items: items.sort((a, b) => harm[a.level] - harm[b.level]).slice(0, 100),
+          items: items.sort((a, b) => rank(a) - rank(b)).slice(0, 100),
           onSite: await Promise.all(shiftsNow.map((shift) => onSite(tx, shift, now))),
           library: await library(tx),
         };
@@ -45,7 +48,7 @@ export function todayService({ database, clock }: Deps) {
       .limit(40);
     const today = rows.filter((row) => row.date === localDate(now, row.timeZone));
     const read: Shift[] = [];
-    for (const row of today) read.push(await readShift(tx, row.id));
+    for (const row of today) read.push(await readShift(tx, row.id, now));
     return read;
   }
 

@@ -117,14 +117,14 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
   await pastDay(creamery.id, 2, withNewTasks(creameryPlan), ['Dov Lindqvist', 'Marisol Tena', 'Abe Kowalczyk', 'Tomasz Reyes']);
   await pastDay(creamery.id, 1, withNewTasks(creameryPlan), ['Dov Lindqvist', 'Marisol Tena', 'Abe Kowalczyk', 'Tomasz Reyes', 'Per Aldana']);
   deps.clock.set(realNow);
-  await publishDay(freight.id, today, withNewTasks(freightPlan));
   const open = await jobs.addShift(officer, creamery.id, { date: today, copyFromShiftId: null });
   await jobs.editPlan(officer, open.id, open.version, withNewTasks(creameryPlan));
+  await publishDay(freight.id, today, withNewTasks(freightPlan));
   const kitchenShift = await jobs.addShift(officer, kitchen.id, { date: today, copyFromShiftId: null });
   await jobs.editPlan(officer, kitchenShift.id, kitchenShift.version, kitchenDay(idOf, machines));
 
   // A newer sheet of part C has come in and waits for the officer: it adds a statement.
-  await addSheet(deps, officer, quarrybondPartC);
+  await addSheet(deps, officer, { ...quarrybondPartC, revisedOn: daysAgo(3), supersedesOn: '2023-05-11' });
   await recordlogService(deps).makeCheckpoint(organisationId);
 
   function instantAt(date: string, minute: number): Date {
