@@ -18,6 +18,7 @@ export const routes: Routes = [
       { path: 'tasks/:taskId/start', loadComponent: async () => (await import('./start-checks/start-check')).StartCheck },
       { path: 'checklist', loadComponent: async () => (await import('./checklists/whole-checklist')).WholeChecklist },
       { path: 'sheets', loadComponent: async () => (await import('./sheets/sheets')).Sheets },
+      { path: 'sheets/:revisionId', loadComponent: async () => (await import('./sheets/sheet-page')).SheetPage },
     ],
   },
   { path: '**', redirectTo: '' },

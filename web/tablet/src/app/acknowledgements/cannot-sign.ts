@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, input, output, signal } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { Note } from '#ui/note';
 import { couldNotSignReasons } from '#shared/envelopes';
 import { type Messages } from '../words/en';
@@ -9,7 +8,7 @@ export type Reason = (typeof couldNotSignReasons)[number];
 /** "I can't sign yet" is ordinary: a reason, a few words if wanted, and off the shared screen again. */
 @Component({
   selector: 'kb-cannot-sign',
-  imports: [MatButton, Note],
+  imports: [Note],
   templateUrl: './cannot-sign.html',
   styleUrl: './cannot-sign.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

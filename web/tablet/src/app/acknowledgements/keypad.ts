@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { type Messages } from '../words/en';
 
 const mostDigits = 6;
@@ -8,8 +7,7 @@ const fewestDigits = 4;
 /** A keypad for gloves. Digits are never shown; the PIN leaves it once, when OK is pressed, and is forgotten here. */
 @Component({
   selector: 'kb-keypad',
-  imports: [MatButton],
-  template: `
+    template: `
     <output class="dots">
       <span class="kb-visually-hidden">{{ say().pin.digits(typed().length) }}</span>
       @for (place of places; track place) {
@@ -18,10 +16,10 @@ const fewestDigits = 4;
     </output>
     <div class="keys" role="group" [attr.aria-label]="say().pin.keypad">
       @for (digit of digits; track digit) {
-        <button type="button" class="key" [class.zero]="digit === '0'" (click)="type(digit)">{{ digit }}</button>
+        <button type="button" class="kb-pick key" [class.zero]="digit === '0'" (click)="type(digit)">{{ digit }}</button>
       }
-      <button type="button" class="key word" (click)="erase()">{{ say().pin.erase }}</button>
-      <button type="button" class="ok kb-big" matButton="filled" [disabled]="isBusy()" (click)="accept()">{{ say().pin.ok }}</button>
+      <button type="button" class="kb-pick key word" (click)="erase()">{{ say().pin.erase }}</button>
+      <button type="button" class="kb-button filled ok" [disabled]="isBusy()" (click)="accept()">{{ say().pin.ok }}</button>
     </div>
   `,
   styleUrl: './keypad.scss',

@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output, signal } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { Note } from '#ui/note';
 import { Connection } from '../connection/connection';
 import { type PersonView } from '../jobs/job-view';
@@ -22,7 +21,7 @@ type Step = 'enter' | 'choose' | 'repeat' | 'witness';
  */
 @Component({
   selector: 'kb-pin-entry',
-  imports: [Keypad, Note, MatButton],
+  imports: [Keypad, Note],
   template: `
     <h2 tabindex="-1">{{ heading() }}</h2>
     @if (detail()) {
@@ -42,7 +41,7 @@ type Step = 'enter' | 'choose' | 'repeat' | 'witness';
       }
     </div>
     <kb-keypad [say]="say()" [isBusy]="isBusy() || isPaused()" (entered)="take($event)" (tooShort)="trouble.set(say().pin.short)" />
-    <button type="button" matButton="text" [disabled]="isBusy()" (click)="cancelled.emit()">{{ say().pin.back }}</button>
+    <button type="button" class="kb-button text small" [disabled]="isBusy()" (click)="cancelled.emit()">{{ say().pin.back }}</button>
   `,
   styles: `
     :host {

@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal, viewChild } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { type Mark as MarkName } from '#compliance/answer';
 import { type Language } from '#compliance/outcome';
 import { Mark } from '#ui/mark';
@@ -13,7 +12,7 @@ import { type Ink, InkBox } from './ink';
 /** What one person reads and signs, in the language whose bytes are signed. */
 @Component({
   selector: 'kb-sign-pane',
-  imports: [Mark, Note, InkBox, ReadAloud, MatButton],
+  imports: [Mark, Note, InkBox, ReadAloud],
   templateUrl: './sign-pane.html',
   styleUrl: './sign-pane.scss',
   host: { '[attr.lang]': 'text().language' },

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, effect, ElementRef, inject, input, signal } from '@angular/core';
+import { afterNextRender, ChangeDetectionStrategy, Component, computed, effect, ElementRef, inject, Injector, input, signal } from '@angular/core';
 import { type Language } from '#compliance/outcome';
 import { Note } from '#ui/note';
 import { type OpenedText } from '../checklists/opened-text';
@@ -81,10 +81,14 @@ export class SignSheet {
   });
 
   constructor() {
-    // Each step begins at its top: on a phone the one before was scrolled.
+    // Each step begins at its heading: on a phone the one before was scrolled, and a reader must hear where it is.
+    const injector = inject(Injector);
+    let isFirst = true;
     effect(() => {
       this.step();
-      if (this.sitting()) this.host.nativeElement.querySelector('.pane')?.scrollIntoView?.({ block: 'nearest' });
+      this.sitting();
+      if (!isFirst) afterNextRender(() => this.host.nativeElement.querySelector<HTMLElement>('.pane > :not([hidden]) h2, .pane > h2')?.focus(), { injector });
+      isFirst = false;
     });
   }
 

@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, effect, ElementRef, inject, input, signal } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Mark } from '#ui/mark';
 import { Note } from '#ui/note';
 import { type TextLine } from '#compliance/checklists/text';
@@ -28,7 +27,7 @@ interface Draft {
 /** The morning lines, said by the lead and answered as they are now. */
 @Component({
   selector: 'kb-briefing',
-  imports: [Frame, NoJob, Note, Mark, LineSource, MatButton, RouterLink],
+  imports: [Frame, NoJob, Note, Mark, LineSource, RouterLink],
   templateUrl: './briefing.html',
   styleUrl: './briefing.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

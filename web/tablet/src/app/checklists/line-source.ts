@@ -24,7 +24,10 @@ import { Words } from '../words/words';
       text-decoration: underline;
       text-underline-offset: 3px;
       cursor: pointer;
-      padding-block: 0.375rem;
+      display: inline-flex;
+      align-items: center;
+      min-height: var(--kb-target);
+      padding-inline: 0.5rem;
       list-style: none;
     }
   `,

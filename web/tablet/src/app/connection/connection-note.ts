@@ -46,6 +46,10 @@ interface Said {
       max-width: 26rem;
     }
 
+    b {
+      display: inline-block;
+    }
+
     .pair {
       display: flex;
       align-items: center;

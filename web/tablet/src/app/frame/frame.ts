@@ -17,12 +17,12 @@ let isLaterPage = false;
   template: `
     <header>
       <div class="words">
-        @if (back()) {
-          <a class="back" [routerLink]="back()">{{ backLabel() }}</a>
-        }
-        @if (kicker()) {
-          <p class="kb-quiet">{{ kicker() }}</p>
-        }
+        <p class="kicker kb-quiet">
+          @if (back()) {
+            <a class="back" [routerLink]="back()">{{ backLabel() }}</a>
+          }
+          {{ kicker() }}
+        </p>
         <h1 #heading tabindex="-1">{{ title() }}</h1>
       </div>
       <kb-connection-note />

@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Note } from '#ui/note';
 import { State, type StateKind } from '#ui/state';
 import { WhoToCall } from '../connection/who-to-call';
@@ -16,7 +15,7 @@ const taskKinds: Readonly<Record<TaskView['state'], StateKind>> = { 'may-not-sta
 /** One job today: the briefing, the signing, and what each task needs before it starts. */
 @Component({
   selector: 'kb-job-home',
-  imports: [Frame, NoJob, Note, State, MatButton, RouterLink],
+  imports: [Frame, NoJob, Note, State, RouterLink],
   templateUrl: './job-home.html',
   styleUrl: './job-home.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Empty } from '#ui/empty';
 import { Sender } from '../outbox/sender';
 import { Day } from '../day/day';
@@ -11,15 +10,18 @@ import { type FoundJob } from './found-job';
 /** What a job's page shows when there is no list to show: why, and the next step. */
 @Component({
   selector: 'kb-no-job',
-  imports: [Empty, Frame, MatButton, RouterLink],
+  imports: [Empty, Frame, RouterLink],
   template: `
     <kb-frame [title]="words.say().today.title">
-      @if (found().state === 'loading') {
-        <kb-empty state="loading" [heading]="words.say().today.loading" />
-      } @else {
-        <kb-empty state="error" [heading]="said().heading" [detail]="said().detail" [retryLabel]="words.say().today.look" (retry)="lookAgain()">
-          <a matButton="text" routerLink="/">{{ words.say().job.back }}</a>
-        </kb-empty>
+      @defer (on immediate) {
+        @if (found().state === 'loading') {
+          <kb-empty state="loading" [heading]="words.say().today.loading" />
+        } @else {
+          <kb-empty state="error" [heading]="said().heading" [detail]="said().detail">
+            <button type="button" class="kb-button outlined small" (click)="lookAgain()">{{ words.say().today.look }}</button>
+            <a class="kb-button text small" routerLink="/">{{ words.say().job.back }}</a>
+          </kb-empty>
+        }
       }
     </kb-frame>
   `,

@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { Empty } from '#ui/empty';
 import { State, type StateKind } from '#ui/state';
 import { Day } from '../day/day';
@@ -13,14 +12,14 @@ import { Storage } from './storage';
 /** Everything this tablet wrote in the last day and whether the office has it. Reasons and strokes stay out of sight. */
 @Component({
   selector: 'kb-waiting-list',
-  imports: [Frame, Empty, State, MatButton],
+  imports: [Frame, Empty, State],
   template: `
     @let say = words.say();
     <kb-frame [title]="say.outbox.heading" [kicker]="tablet()" back="/" [backLabel]="say.outbox.back">
       <div class="body">
         <p>{{ say.outbox.intro }}</p>
         @if (outbox.waitingCount() > 0) {
-          <div><button type="button" matButton="filled" class="kb-big" [disabled]="sender.isSending()" (click)="sender.sendNow()">{{ say.outbox.sendNow }}</button></div>
+          <div><button type="button" class="kb-button filled" [disabled]="sender.isSending()" (click)="sender.sendNow()">{{ say.outbox.sendNow }}</button></div>
         }
         @if (lines().length > 0) {
           <ul class="kb-rows">

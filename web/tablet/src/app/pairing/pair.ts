@@ -1,7 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { FormControl, ReactiveFormsModule, Validators } from '@angular/forms';
 import { RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Note } from '#ui/note';
 import { CallFailed, TabletApi } from '../connection/tablet-api';
 import { Day } from '../day/day';
@@ -14,7 +13,7 @@ import { Words } from '../words/words';
 /** Where a tablet becomes one of the organisation's: the code the office shows, typed once. */
 @Component({
   selector: 'kb-pair',
-  imports: [Frame, Note, MatButton, ReactiveFormsModule, RouterLink],
+  imports: [Frame, Note, ReactiveFormsModule, RouterLink],
   templateUrl: './pair.html',
   styleUrl: './pair.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

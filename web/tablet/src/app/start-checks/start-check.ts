@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Empty } from '#ui/empty';
 import { Mark } from '#ui/mark';
 import { Note } from '#ui/note';
@@ -26,7 +25,7 @@ interface Answered {
 /** The live lines that unlock one task, one at a time, answered where the work is. A critical "No" stops the task at once. */
 @Component({
   selector: 'kb-start-check',
-  imports: [Frame, NoJob, Empty, Mark, Note, LineSource, ReadAloud, MatButton, RouterLink],
+  imports: [Frame, NoJob, Empty, Mark, Note, LineSource, ReadAloud, RouterLink],
   templateUrl: './start-check.html',
   styleUrl: './start-check.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

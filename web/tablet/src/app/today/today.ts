@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { MatButton } from '@angular/material/button';
 import { Empty } from '#ui/empty';
 import { Note } from '#ui/note';
 import { AppUpdate } from '../app-update';
@@ -17,7 +16,7 @@ import { messagesIn, tabletLanguages, Words } from '../words/words';
 /** The tablet's first page: which job are you on? */
 @Component({
   selector: 'kb-today',
-  imports: [Frame, Empty, Note, MatButton, RouterLink],
+  imports: [Frame, Empty, Note, RouterLink],
   templateUrl: './today.html',
   styleUrl: './today.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
