@@ -6,6 +6,7 @@ import { doubleBookingRule, employerRule, type PersonInTask } from './gates/peop
 import { NOTICE } from './notice';
 import { topics, type Finding } from './outcome';
 import { protectionFor } from './ppe/protection';
+import { protectionRule } from './ppe/protection-rule';
 import { respiratorOf, taskRespirator } from './ppe/task-respirator';
 import { decideIncidental, decideSilica, type SilicaDecision } from './silica/decision';
 import { doubleBookings } from './silica/minutes';
@@ -34,7 +35,7 @@ export function answerShift(facts: ShiftFacts, asOf: string): ShiftAnswer {
     tasks: tasks.map(({ answer }) => answer),
     people: facts.people.map((person) => answerPerson(shift, person, tasks, day)),
     gates,
-    kits: facts.kits.map((kit) => answerKit(shift, kit)),
+    kits: facts.kits.map((kit) => answerKit(shift, kit, day)),
     notice: NOTICE,
   };
 }
@@ -63,8 +64,9 @@ function answerTask(context: SilicaTask, day: string, isShiftHeld: boolean): Ans
     const facts: PersonInTask = { ...context, ...each };
     return { personId: each.person.id, respirator: each.respirator, findings: present(PERSON_IN_TASK_RULES.map((rule) => ask(rule, facts, { ...place, personId: each.person.id }))) };
   });
+  const protection = protectionFor(context, respirator);
   const controls = controlChecks(context).map((check) => ask(table1ControlRule, { ...context, check }, { ...place, about: check.demand }));
-  const findings = inOrder([...present([...TASK_RULES.map((rule) => ask(rule, context, place)), ...controls]), ...byPerson.flatMap((each) => each.findings)]);
+  const findings = inOrder([...present([...TASK_RULES.map((rule) => ask(rule, context, place)), ...controls, ask(protectionRule, { ...context, protection }, place)]), ...byPerson.flatMap((each) => each.findings)]);
   const isHeld = context.traits.isWork && (isShiftHeld || findings.some(({ isHolding }) => isHolding));
   const silicaBasis = basisOf(context.silica);
   return {
@@ -75,7 +77,7 @@ function answerTask(context: SilicaTask, day: string, isShiftHeld: boolean): Ans
       silicaBasis,
       table1Row: silicaBasis === 'table-1' ? rowOf(context.silica) : null,
       respirator,
-      protection: protectionFor(context, respirator),
+      protection,
       findings,
     },
     byPerson,

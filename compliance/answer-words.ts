@@ -1,6 +1,6 @@
 import { type TaskAnswer } from './answer';
 import { type Finding, type Words } from './outcome';
-import { answerKit } from './answer-kit';
+import { countKits } from './quantities/kit-rules';
 import { apfName } from './silica/respirator';
 import { type SilicaTask } from './silica/silica-context';
 import { table1Place } from './silica/table1';
@@ -44,18 +44,18 @@ function readySummary(context: SilicaTask, findings: readonly Finding[]): Words 
   return lines.length > 0 ? sentences(...lines) : words('Nothing else to settle.', 'Nada más que aclarar.');
 }
 
-function over4Hours({ silica, facts }: SilicaTask): Words | null {
+function over4Hours({ silica, facts, pack }: SilicaTask): Words | null {
   if (silica.kind !== 'table-1') return null;
   const respirator = silica.option[table1Place(facts.setting)];
   if (respirator === null || respirator.over4Hours === null || respirator.over4Hours === respirator.upTo4Hours) return null;
-  const name = apfName(respirator.over4Hours);
+  const name = apfName(respirator.over4Hours, pack.silica?.factors ?? null);
   return words(`Over 4 h in all Table 1 work: ${name.en}.`, `Más de 4 h en todo lo de la Tabla 1: ${name.es}.`);
 }
 
 function dumps(context: SilicaTask): readonly Words[] {
   if (context.task.kind !== 'powder-mixing' || context.kit === null) return [];
-  const { powderDumps } = answerKit(context, context.kit);
-  return powderDumps === null ? [] : [words(`${powderDumps} dumps.`, `${powderDumps} vaciadas.`)];
+  const count = countKits(context, context.kit);
+  return count === null ? [] : [words(`${count.powderDumps} dumps.`, `${count.powderDumps} vaciadas.`)];
 }
 
 function scopeSummary(context: SilicaTask, findings: readonly Finding[]): Words {

@@ -44,7 +44,7 @@ function gearLine(answer: TaskAnswer): ChecklistLine | null {
   if (first === undefined) return null;
   const en = listed(gear.map(({ name }) => inside(name).en)).en;
   const es = listed(gear.map(({ name }) => inside(name).es)).es;
-  return { id: `${answer.taskId}/gear-on`, ruleId: 'protection', taskId: answer.taskId, mark: first.mark, isCritical: false, text: words(`On: ${en}.`, `Puesto: ${es}.`), why: first.reason, source: first.source };
+  return { id: `${answer.taskId}/gear-on`, ruleId: 'protection-for-task', taskId: answer.taskId, mark: first.mark, isCritical: false, text: words(`On: ${en}.`, `Puesto: ${es}.`), why: first.reason, source: first.source };
 }
 
 /** Two to four lines that unlock a task each time it starts, controls first. None for breaks and inspections, none while the task is held. */

@@ -68,6 +68,6 @@ function peopleLines(open: readonly TaskAnswer[], maskNames: readonly string[]):
         ]),
     ...(gear.length === 0
       ? []
-      : [line({ id: 'gear', ruleId: 'protection', isCritical: false, text: words(`We have it and it fits: ${listed(gear.map(({ en }) => en)).en}.`, `Lo tenemos y nos queda: ${listed(gear.map(({ es }) => es)).es}.`), why: words('Gear that does not fit does not protect.', 'Lo que no queda bien no protege.'), source: FIT })]),
+      : [line({ id: 'gear', ruleId: 'protection-for-task', isCritical: false, text: words(`We have it and it fits: ${listed(gear.map(({ en }) => en)).en}.`, `Lo tenemos y nos queda: ${listed(gear.map(({ es }) => es)).es}.`), why: words('Gear that does not fit does not protect.', 'Lo que no queda bien no protege.'), source: FIT })]),
   ];
 }

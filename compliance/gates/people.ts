@@ -36,7 +36,9 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
   evaluate({ respirator, person, pack, facts }, day) {
     if (respirator.outcome !== 'required') return notApplicable(words('No mask is required.', 'No se exige máscara.'));
     const needed = respirator.apf ?? 0;
-    const strong = person.respirators.filter(({ type }) => pack.silica !== null && pack.silica.apf[type] >= needed);
+    const factorOf = ({ type }: PersonRespirator): number | null => pack.silica?.factors?.apf[type] ?? null;
+    // A sheet's respirator has no factor: the person's own serves, whatever it is rated.
+    const strong = person.respirators.filter((mask) => respirator.apf === null || (factorOf(mask) ?? 0) >= needed);
     const cleared = strong.filter(({ clearedOn }) => since(clearedOn, day));
     const ready = cleared.find((mask) => isFitted(mask, day));
     const best = ready ?? cleared[0] ?? strong[0] ?? person.respirators[0] ?? null;
@@ -47,6 +49,8 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
       'fit test on': best?.fitTestedOn ?? null,
       date: facts.date,
     };
+    const unrated = strong.length === 0 && person.respirators.some((mask) => factorOf(mask) === null);
+    if (unrated) return undecided(words(`The factor of ${person.name}'s mask is not on file here.`, `No está anotado aquí el factor de la máscara de ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Look up its class and factor.', 'Busque su clase y factor.') });
     if (ready !== undefined) return met(words(`${person.name}: ${ready.label}, cleared and fitted.`, `${person.name}: ${ready.label}, con permiso y prueba.`), { inputs });
     const gap =
       strong.length === 0

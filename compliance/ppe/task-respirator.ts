@@ -36,9 +36,9 @@ const POLICY: Readonly<Partial<Record<TaskKind, RespiratorAnswer['source']>>> = 
 
 /** A person's respirator in a task: silica first, then the sheets for vapor, then the house's own rule. */
 export function respiratorOf(context: SilicaTask, person: PersonFacts | null): RespiratorAnswer {
-  const { silica, facts, traits, kitHazards, task, table1TimeByPerson } = context;
+  const { silica, facts, traits, kitHazards, task, table1TimeByPerson, pack } = context;
   const minutes = person === null ? 0 : (table1TimeByPerson.get(person.id)?.minutes ?? 0);
-  const forSilica = silicaRespirator(silica, table1Place(facts.setting), minutes);
+  const forSilica = silicaRespirator(silica, table1Place(facts.setting), minutes, pack.silica?.factors ?? null);
   if (forSilica.outcome === 'undecided') return forSilica;
   const isKitKnown = !traits.touchesKit || (kitHazards !== null && kitHazards.partsWithoutSheet.length === 0);
   if (!isKitKnown) return UNDECIDED_RESPIRATOR;
@@ -47,7 +47,7 @@ export function respiratorOf(context: SilicaTask, person: PersonFacts | null): R
   if (forSilica.outcome === 'required') return forSilica;
   const policy = POLICY[task.kind];
   if (policy !== undefined) {
-    const half = apfName(10);
+    const half = apfName(10, pack.silica?.factors ?? null);
     return { outcome: 'by-policy', apf: null, label: words(`${half.en}, by policy`, `${half.es}, por regla`), source: policy };
   }
   if (demand.kind === 'conditional') {

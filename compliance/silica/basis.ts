@@ -1,10 +1,7 @@
 import { type ExposureBasis, type TaskKind } from '../facts';
 import { isIsoDate, type IsoDate } from '../iso-date';
 import { hazardRatio } from '../respirators/select';
-import { type SilicaLaw } from './shift-pack';
-
-/** Protection factors that respirator classes offer, lowest first (29 CFR 1910.134(d)(3)(i)(A), read). */
-export const APF_CLASSES = [10, 25, 50, 1000, 10_000] as const;
+import { type RespiratorFactors, type SilicaLaw } from './shift-pack';
 
 /** What a signed basis settles for a task. */
 export type BasisDecision =
@@ -14,7 +11,7 @@ export type BasisDecision =
   /** Signed and in time, but it settles nothing: the fault says why. */
   | { readonly kind: 'unusable'; readonly basis: ExposureBasis; readonly fault: BasisFault };
 
-export type BasisFault = 'no-exposure' | 'no-conditions' | 'not-below-action-level' | 'no-action-level' | 'no-interim-respirator' | 'beyond-every-respirator';
+export type BasisFault = 'no-exposure' | 'no-conditions' | 'not-below-action-level' | 'no-action-level' | 'no-interim-respirator' | 'beyond-every-respirator' | 'no-factors';
 
 /** Whether a named person signed it and the day lies inside its life. A sampling day is good for the one day it ends on. */
 export function isInForce(basis: ExposureBasis, day: IsoDate): boolean {
@@ -22,9 +19,9 @@ export function isInForce(basis: ExposureBasis, day: IsoDate): boolean {
   return basis.kind === 'sampling-day' ? basis.endsOn === day : basis.endsOn >= day;
 }
 
-/** Smallest class whose factor reaches the ratio of exposure to limit; null where the limit is kept; undefined beyond every class. */
-export function apfForRatio(ratio: number): number | null | undefined {
-  return ratio <= 1 ? null : APF_CLASSES.find((apf) => apf >= ratio);
+/** Smallest factor of the law that is enough for the ratio of exposure to limit; undefined beyond every respirator. */
+export function apfForRatio(ratio: number, { classes, mustExceedRatio }: RespiratorFactors): number | undefined {
+  return classes.find((apf) => (mustExceedRatio ? apf > ratio : apf >= ratio));
 }
 
 function judge(basis: ExposureBasis, law: SilicaLaw): BasisDecision {
@@ -43,15 +40,17 @@ function judge(basis: ExposureBasis, law: SilicaLaw): BasisDecision {
   }
   if (exposure === null || !Number.isFinite(exposure) || exposure < 0) return unusable('no-exposure');
   const ratio = hazardRatio(exposure, law.limit);
-  const apf = apfForRatio(ratio);
+  if (ratio <= 1) return { kind: 'assessed', basis, ratio, apf: null };
+  if (law.factors === null) return unusable('no-factors');
+  const apf = apfForRatio(ratio, law.factors);
   return apf === undefined ? unusable('beyond-every-respirator') : { kind: 'assessed', basis, ratio, apf };
 }
 
-/** Strictest last; a basis that settles nothing beats those that do only when its exposure is beyond every respirator. */
+/** Strictest last; a basis that settles nothing beats those that do only when its exposure has no respirator. */
 function strictness(decision: BasisDecision): number {
   switch (decision.kind) {
     case 'unusable':
-      return decision.fault === 'beyond-every-respirator' ? Number.POSITIVE_INFINITY : -1;
+      return decision.fault === 'beyond-every-respirator' || decision.fault === 'no-factors' ? Number.POSITIVE_INFINITY : -1;
     case 'outside-scope':
       return 0;
     case 'assessed':

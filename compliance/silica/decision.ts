@@ -25,7 +25,7 @@ export type SilicaDecision =
 
 /** Why a task of Table 1 is not in Table 1 today. */
 export interface LeftTable1 {
-  readonly because: 'machine' | 'method' | 'place' | 'controls';
+  readonly because: 'machine' | 'method' | 'place' | 'controls' | 'not-compared';
   readonly row: string | null;
   readonly checks: readonly ControlCheck[];
 }
@@ -44,7 +44,7 @@ export function decideSilica(context: TaskContext): SilicaDecision {
   if (task.failedControl !== null) return { kind: 'control-failed', control: task.failedControl };
   if (traits.silica === 'housekeeping') return { kind: 'housekeeping' };
   if (pack.silica === null) return { kind: 'no-pack' };
-  if (traits.silica === 'table-1' && pack.silica.hasTable1) return decideTable1(context, pack.silica);
+  if (traits.silica === 'table-1' && pack.silica.table1Rows.length > 0) return decideTable1(context, pack.silica);
   return byBasis(context, pack.silica, [task.kind], traits.silica === 'scope' ? 'scope' : 'assessment');
 }
 
@@ -72,6 +72,7 @@ function decideTable1(context: TaskContext, law: SilicaLaw): SilicaDecision {
   const selection = selectTable1({ tool: heading, method, place });
   if (!selection.isCovered) return left(selection.because, selection.row);
   const option = selection.options[0]!;
+  if (law.table1Rows !== 'all' && !law.table1Rows.includes(option.row)) return left('not-compared', option.row);
   const checks = checkControls({ option, place, tool, collector, equipment: facts.equipment });
   if (checks.some(({ state }) => state === 'unmet')) return left('controls', option.row, checks);
   if (checks.some(({ state }) => state === 'unknown')) return { kind: 'controls-unknown', option, checks };

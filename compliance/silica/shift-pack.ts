@@ -1,7 +1,9 @@
 import { respiratorTypes, type RespiratorType } from '../facts';
-import { apfRowsOf, type FacePiece, type RespiratorDevice } from '../respirators/apf.data';
+import { findPack } from '../jurisdictions/pack';
+import { type JurisdictionPack } from '../jurisdictions/packs.data';
 import { type Words } from '../outcome';
-import { usFederal, type Source } from '../source';
+import { APF_COMPARISON, apfRowsOf, type FacePiece, type RespiratorDevice } from '../respirators/apf.data';
+import { type Source } from '../source';
 import { words } from '../words';
 
 /** What the shift's rules need from the law of a place. */
@@ -20,9 +22,20 @@ export interface SilicaLaw {
   readonly actionLevel: number | null;
   readonly limit: number;
   readonly limitSource: Source;
-  readonly hasTable1: boolean;
-  /** Assigned protection factor of each type under this law. */
-  readonly apf: Readonly<Record<RespiratorType, number>>;
+  /** Rows of Table 1 compared with this place's text; none where its law has no such table. */
+  readonly table1Rows: 'all' | readonly string[];
+  readonly factors: RespiratorFactors | null;
+}
+
+/** Assigned protection factors of one law; they never serve another. */
+export interface RespiratorFactors {
+  readonly isUs: boolean;
+  /** Factors that some respirator offers, lowest first. */
+  readonly classes: readonly number[];
+  /** Whether the factor must be above the ratio of exposure to limit, not just reach it. */
+  readonly mustExceedRatio: boolean;
+  /** Null where the type alone does not tell: the law rates it by a filter class that the facts do not hold. */
+  readonly apf: Readonly<Record<RespiratorType, number | null>>;
 }
 
 const KINDS: Readonly<Record<RespiratorType, readonly [RespiratorDevice, FacePiece]>> = {
@@ -36,35 +49,34 @@ const KINDS: Readonly<Record<RespiratorType, readonly [RespiratorDevice, FacePie
   'supplied-air-hood': ['supplied-air-continuous-flow', 'hood'],
 };
 
-/** A type's factor under a law; 0 where the table has none, or one for each filter class, which the facts do not tell apart. A hood counts without the maker's evidence. */
-function apfUnder(jurisdictionId: string, type: RespiratorType): number {
-  const [device, facePiece] = KINDS[type];
-  const rows = apfRowsOf(jurisdictionId).filter((row) => row.device === device && row.facePiece === facePiece);
-  return rows.length === 1 ? rows[0]!.apf : 0;
+/** A hood counts without the maker's evidence, which the facts do not hold. */
+function factorsOf(jurisdictionId: string | null): RespiratorFactors | null {
+  const comparison = jurisdictionId === null ? undefined : APF_COMPARISON[jurisdictionId];
+  if (jurisdictionId === null || comparison === undefined) return null;
+  const rows = apfRowsOf(jurisdictionId).filter(({ facePiece }) => facePiece !== 'quarter-mask');
+  const apfOf = (type: RespiratorType): number | null => {
+    const [device, facePiece] = KINDS[type];
+    const own = rows.filter((row) => row.device === device && row.facePiece === facePiece);
+    return own.length === 1 ? own[0]!.apf : null;
+  };
+  return {
+    isUs: jurisdictionId.startsWith('us-'),
+    classes: [...new Set(rows.map(({ apf }) => apf))].sort((a, b) => a - b),
+    mustExceedRatio: comparison.mustExceedRatio,
+    apf: Object.fromEntries(respiratorTypes.map((type) => [type, apfOf(type)])) as Record<RespiratorType, number | null>,
+  };
 }
 
-function apfTable(jurisdictionId: string): SilicaLaw['apf'] {
-  return Object.fromEntries(respiratorTypes.map((type) => [type, apfUnder(jurisdictionId, type)])) as Record<RespiratorType, number>;
+function lawOf({ silica, apfJurisdictionId }: JurisdictionPack): SilicaLaw {
+  return { actionLevel: silica.actionLevelMicrogramsPerM3, limit: silica.limitMicrogramsPerM3, limitSource: silica.limitSource, table1Rows: silica.table1Rows, factors: factorsOf(apfJurisdictionId) };
 }
-
-const US_FEDERAL: ShiftPack = {
-  id: 'us-federal',
-  version: '2026.12',
-  name: words('US federal rules', 'Reglas federales de EE. UU.'),
-  isComplete: true,
-  gap: null,
-  silica: { actionLevel: 25, limit: 50, limitSource: usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)' }), hasTable1: true, apf: apfTable('us-federal') },
-};
 
 /** The pack of a place; a place without one gets a pack that decides nothing and says so. */
 export function shiftPack(jurisdictionId: string): ShiftPack {
-  if (jurisdictionId === US_FEDERAL.id) return US_FEDERAL;
-  return {
-    id: jurisdictionId,
-    version: 'none',
-    name: words('No pack for this place', 'Sin reglas para este lugar'),
-    isComplete: false,
-    gap: words('No pack: federal text shown for orientation, check the state\'s.', 'Sin reglas propias: el texto federal es solo de guía; consulte las del estado.'),
-    silica: null,
-  };
+  const found = findPack(jurisdictionId);
+  if (found.kind === 'no-pack') {
+    return { id: jurisdictionId, version: 'none', name: found.place?.name ?? words('No pack for this place', 'Sin reglas para este lugar'), isComplete: false, gap: found.gap, silica: null };
+  }
+  const { pack, isComplete, gap } = found;
+  return { id: pack.id, version: pack.version, name: pack.name, isComplete, gap, silica: lawOf(pack) };
 }

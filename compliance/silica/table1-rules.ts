@@ -19,12 +19,14 @@ const LEFT: Readonly<Record<LeftTable1['because'], Words>> = {
   machine: words('No row of Table 1 fits this machine.', 'Ninguna fila de la Tabla 1 sirve para esta máquina.'),
   method: words('Table 1 has no row for this tool with this dust control.', 'La Tabla 1 no tiene fila para esta herramienta con este control de polvo.'),
   place: words('Table 1 does not allow this indoors or in closed places.', 'La Tabla 1 no lo permite adentro ni en lugares cerrados.'),
+  'not-compared': words('This row was not compared with the text of this place.', 'Esta fila no se comparó con el texto de este lugar.'),
   controls: words('One control of the row is missing, so Table 1 is lost.', 'Falta un control de la fila, así que se pierde la Tabla 1.'),
 };
 const RESTORES: Readonly<Record<LeftTable1['because'], Words>> = {
   machine: words('The competent person records why a row fits, or a signed basis.', 'La persona competente anota por qué sirve una fila, o una base firmada.'),
   method: words('Use the vacuum or water the row asks, or a signed basis.', 'Use la aspiradora o el agua que pide la fila, o una base firmada.'),
   place: words('Use the row\'s vacuum indoors, or a signed basis.', 'Use adentro la aspiradora de la fila, o una base firmada.'),
+  'not-compared': words('Someone reads the local text, or a signed basis.', 'Alguien lee el texto local, o una base firmada.'),
   controls: words('Fix it and check it, or re-assess.', 'Arréglelo y revíselo, o evalúe otra vez.'),
 };
 
@@ -43,6 +45,7 @@ export const table1RowRule: ShiftRule<SilicaTask> = {
       case 'controls-unknown':
         return met(silica.option.heading, { inputs, results: { row: silica.option.row } });
       case 'lost':
+        if (silica.left.because === 'not-compared') return undecided(LEFT['not-compared'], WHO.localAuthority, { inputs, results: { row: silica.left.row }, whatWouldChange: RESTORES['not-compared'] });
         return unmet(LEFT[silica.left.because], { inputs, results: { row: silica.left.row }, whatWouldChange: RESTORES[silica.left.because] });
       case 'not-chosen':
         return silica.missing === 'machine'
@@ -157,10 +160,10 @@ export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
   duties: ['SIL-03', 'SIL-04'],
   topic: 'protection',
   holds: false,
-  evaluate({ silica, person, table1TimeByPerson, facts }) {
+  evaluate({ silica, person, table1TimeByPerson, facts, pack }) {
     if (silica.kind !== 'table-1') return notApplicable(words('Not a Table 1 task.', 'No es tarea de la Tabla 1.'));
     const time = table1TimeByPerson.get(person.id) ?? { minutes: 0, minutesElsewhere: 0, passesAtMinute: null };
-    const answer = silicaRespirator(silica, table1Place(facts.setting), time.minutes);
+    const answer = silicaRespirator(silica, table1Place(facts.setting), time.minutes, pack.silica?.factors ?? null);
     return met(
       words(`${person.name}: ${duration(time.minutes)} of Table 1 work today, all jobs.`, `${person.name}: ${duration(time.minutes)} de trabajo de la Tabla 1 hoy, en todas las obras.`),
       {
@@ -170,8 +173,8 @@ export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
       },
     );
   },
-  line({ silica, person, table1TimeByPerson, facts }) {
-    const { label } = silicaRespirator(silica, table1Place(facts.setting), table1TimeByPerson.get(person.id)?.minutes ?? 0);
+  line({ silica, person, table1TimeByPerson, facts, pack }) {
+    const { label } = silicaRespirator(silica, table1Place(facts.setting), table1TimeByPerson.get(person.id)?.minutes ?? 0, pack.silica?.factors ?? null);
     return words(`${person.name}: ${label.en}.`, `${person.name}: ${label.es}.`);
   },
   sourceOf: ({ silica }) => (silica.kind === 'table-1' ? silica.option.source : table1RespiratorRule.source),
