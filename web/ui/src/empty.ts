@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 
 export type EmptyState = 'empty' | 'loading' | 'error' | 'offline';
 
@@ -9,7 +8,6 @@ export type EmptyState = 'empty' | 'loading' | 'error' | 'offline';
  */
 @Component({
   selector: 'kb-empty',
-  imports: [MatButton],
   template: `
     @if (state() === 'loading') {
       <div class="bar" aria-hidden="true"></div>
@@ -20,7 +18,7 @@ export type EmptyState = 'empty' | 'loading' | 'error' | 'offline';
     }
     <div class="kb-actions">
       @if (retryLabel()) {
-        <button type="button" matButton="outlined" (click)="retry.emit()">{{ retryLabel() }}</button>
+        <button type="button" class="kb-button outlined small" (click)="retry.emit()">{{ retryLabel() }}</button>
       }
       <ng-content />
     </div>

@@ -1,10 +1,8 @@
 import { ChangeDetectionStrategy, Component, type ElementRef, computed, input, output, signal, viewChild } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 
 /** A place to drop files on, with a button for those who do not drag. What is not accepted is named, not dropped in silence. */
 @Component({
   selector: 'kb-file-drop',
-  imports: [MatButton],
   templateUrl: './file-drop.html',
   styleUrl: './file-drop.scss',
   host: {

@@ -1,4 +1,5 @@
 import { type PDFDocumentProxy } from 'pdfjs-dist/legacy/build/pdf.mjs';
+import { linesOf } from './page-lines';
 
 export type Pdf = PDFDocumentProxy;
 
@@ -20,15 +21,9 @@ export async function openPdf(source: string | ArrayBuffer): Promise<{ readonly 
   return { pdf: await task.promise, close: () => void task.destroy() };
 }
 
-/** The text of a page as lines, top to bottom as the file gives them: for those who do not see the picture. */
+/** The text of a page as lines, for those who do not see the picture. */
 export async function pageText(pdf: Pdf, pageNumber: number): Promise<readonly string[]> {
   const page = await pdf.getPage(pageNumber);
   const content = await page.getTextContent();
-  const lines: string[] = [''];
-  for (const item of content.items) {
-    if (!('str' in item)) continue;
-    lines[lines.length - 1] += item.str;
-    if (item.hasEOL) lines.push('');
-  }
-  return lines.map((line) => line.trim()).filter((line) => line !== '');
+  return linesOf(content.items.flatMap((item) => ('str' in item ? [{ text: item.str, x: Number(item.transform[4]), y: Number(item.transform[5]), height: item.height }] : [])));
 }

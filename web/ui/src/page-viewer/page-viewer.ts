@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, afterNextRender, computed, effect, inject, input, linkedSignal, signal, viewChild } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { type Language } from '#compliance/outcome';
 import { Empty } from '../empty';
 import { type Pdf, openPdf, pageText } from './open-pdf';
@@ -19,7 +18,7 @@ const ZOOMS = [0.5, 0.75, 1, 1.5, 2, 3] as const;
  */
 @Component({
   selector: 'kb-page-viewer',
-  imports: [Empty, MatButton],
+  imports: [Empty],
   templateUrl: './page-viewer.html',
   styleUrl: './page-viewer.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
