@@ -61,8 +61,9 @@ export const LIMIT_ROWS: readonly LimitRow[] = [
 
   row('portland-cement', 'us-federal', 'construction', 'twa-8h', 50, 'mppcf', null, OSHA_CHEMICAL_PAGE('1926.55')),
   row('portland-cement', 'us-federal', 'general-industry', 'twa-8h', 15, 'mg/m3', 'total', OSHA_CHEMICAL_PAGE('1910.1000')),
+  row('portland-cement', 'us-federal', 'general-industry', 'twa-8h', 50, 'mppcf', null, usFederal('1910.1000', 'read', { paragraph: 'Table Z-3' })),
   row('portland-cement', 'acgih', 'advice', 'twa-8h', 1, 'mg/m3', 'respirable', sourced('ACGIH TLV', 'from-memory', { note: 'An older page shows 10 mg/m³.' })),
-  row('portland-cement', 'niosh', 'advice', 'twa-10h', 10, 'mg/m3', 'total', sourced('NIOSH REL', 'partly')),
+  row('portland-cement', 'niosh', 'advice', 'twa-10h', 10, 'mg/m3', 'total', sourced('NIOSH REL', 'read')),
   row('portland-cement', 'niosh', 'advice', 'idlh', 5000, 'mg/m3', null, sourced('NIOSH IDLH', 'read')),
 
   row('calcium-hydroxide', 'us-federal', 'construction', 'twa-8h', null, 'mg/m3', null, OSHA_CHEMICAL_PAGE('1926.55')),

@@ -112,7 +112,10 @@ export interface WorkChange {
   readonly canRaiseExposure: boolean | null;
 }
 
-export type Reassessment = { readonly outcome: 'needed' | 'not-needed'; readonly changes: readonly WorkChange[] } | { readonly outcome: 'undecided'; readonly changes: readonly WorkChange[]; readonly whoDecides: Words };
+export type Reassessment =
+  | { readonly outcome: 'needed'; readonly changes: readonly WorkChange[] }
+  | { readonly outcome: 'not-needed'; readonly changes: readonly WorkChange[] }
+  | { readonly outcome: 'undecided'; readonly changes: readonly WorkChange[]; readonly whoDecides: Words };
 
 /** Whether changes since the last assessment call for another; a change nobody judged leaves it undecided. */
 export function reassessment(lastAssessedOn: IsoDate, changes: readonly WorkChange[]): Reassessment {

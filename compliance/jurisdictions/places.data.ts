@@ -46,8 +46,8 @@ export const PLACES_WITHOUT_PACK: readonly PlaceWithoutPack[] = [
   },
   { id: 'canada-ontario', name: words('Ontario', 'Ontario'), isUsState: false, points: [point('The silica regulation leaves out construction, where the ministry’s guideline is followed: check the current text.', 'El reglamento de sílice excluye la construcción, donde se sigue la guía del ministerio: consulte el texto vigente.', sourced('O. Reg. 490/09 s. 14', 'read', { note: 'Heading read; the guideline recalled.' }))] },
   { id: 'canada-british-columbia', name: words('British Columbia', 'Columbia Británica'), isUsState: false, points: [point('Exposure control plan, monitoring and training for silica processes; grinding, blasting and concrete dressing are among them.', 'Plan de control, mediciones y capacitación para procesos con sílice; entre ellos pulir, granallar y labrar concreto.', sourced('OHS Regulation 6.110 to 6.115', 'partly', { note: 'That the sections exist, and the list of processes, were read.' }))] },
-  { id: 'canada-alberta', name: words('Alberta', 'Alberta'), isUsState: false, points: [point('OHS Code Part 4.', 'Código OHS, parte 4.', sourced('Alberta OHS Code Part 4', 'partly'))] },
-  { id: 'canada-other', name: words('elsewhere in Canada', 'el resto de Canadá'), isUsState: false, points: [point('As of 2011: 0.025 mg/m³ federally and in MB, NS, NL, PE; 0.05 in SK; 0.1 in QC, since lowered. Uncertain.', 'En 2011: 0.025 mg/m³ a nivel federal y en MB, NS, NL, PE; 0.05 en SK; 0.1 en QC, rebajado después. Incierto.', sourced('industry table of 2011', 'partly'))] },
+  { id: 'canada-alberta', name: words('Alberta', 'Alberta'), isUsState: false, points: [point('OHS Code Part 4.', 'Código OHS, parte 4.', sourced('Alberta OHS Code Part 4', 'partly', { note: 'That the part exists was read.' }))] },
+  { id: 'canada-other', name: words('elsewhere in Canada', 'el resto de Canadá'), isUsState: false, points: [point('As of 2011: 0.025 mg/m³ federally and in MB, NS, NL, PE; 0.05 in SK; 0.1 in QC, since lowered. Uncertain.', 'En 2011: 0.025 mg/m³ a nivel federal y en MB, NS, NL, PE; 0.05 en SK; 0.1 en QC, rebajado después. Incierto.', sourced('industry table of 2011', 'partly', { note: 'Figures read as of 2011; the change in Quebec recalled.' }))] },
   {
     id: 'australia',
     name: words('Australia', 'Australia'),
@@ -57,5 +57,5 @@ export const PLACES_WITHOUT_PACK: readonly PlaceWithoutPack[] = [
       point('Protection factors of AS/NZS 1715 differ.', 'Los factores de AS/NZS 1715 son otros.', sourced('AS/NZS 1715', 'from-memory')),
     ],
   },
-  { id: 'new-zealand', name: words('New Zealand', 'Nueva Zelanda'), isUsState: false, points: [point('The limit is advisory unless prescribed; the duty is what is reasonably practicable.', 'El límite es orientativo salvo que se prescriba; el deber es lo razonablemente practicable.', sourced('Health and Safety at Work Act', 'partly'))] },
+  { id: 'new-zealand', name: words('New Zealand', 'Nueva Zelanda'), isUsState: false, points: [point('The limit is advisory unless prescribed; the duty is what is reasonably practicable.', 'El límite es orientativo salvo que se prescriba; el deber es lo razonablemente practicable.', sourced('Health and Safety at Work Act', 'partly', { note: 'Ministry text on the limit; the duty recalled.' }))] },
 ];

@@ -1,0 +1,72 @@
+import { contentsRule, yearlyRule, type ContentItem } from '../contents';
+import { usFederal } from '../source';
+import { words } from '../words';
+
+const PARALLEL = (paragraph: string, note: string) => usFederal('1926.1153', 'parallel-text', { paragraph, note });
+const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
+
+/** The written exposure control plan: its four elements, for each task. */
+export const silicaPlanElements = contentsRule({
+  id: 'silica-plan-elements',
+  title: words('Written silica plan holds its four elements', 'El plan escrito de sílice tiene sus cuatro elementos'),
+  source: PARALLEL('(g)(1)(i)-(iv)', 'WAC 296-840-140(1), (4)(a).'),
+  duties: ['SIL-16'],
+  items: [
+    item('tasks', 'tasks with silica exposure', 'tareas con exposición a sílice'),
+    item('controls-per-task', 'for each task: controls, work practices, respirators', 'por tarea: controles, prácticas, respiradores'),
+    item('housekeeping', 'housekeeping measures', 'medidas de limpieza'),
+    item('access', 'how access is limited, others’ exposures included', 'cómo se limita el acceso, también ante exposiciones de otros'),
+  ],
+});
+
+export const silicaPlanReview = yearlyRule({
+  id: 'silica-plan-review',
+  title: words('Silica plan reviewed every year', 'Plan de sílice revisado cada año'),
+  source: usFederal('1926.1153', 'read', { paragraph: '(g)(2)' }),
+  duties: ['SIL-17'],
+});
+
+export const silicaPlanAvailable = contentsRule({
+  id: 'silica-plan-available',
+  title: words('Silica plan and standard at hand', 'Plan y norma de sílice a la mano'),
+  source: usFederal('1926.1153', 'read', { paragraph: '(g)(3), (i)(2)(ii)', note: 'The free copy of the standard in WAC 296-840-150.' }),
+  duties: ['SIL-18', 'SIL-26'],
+  items: [
+    item('plan-on-site', 'plan readable by each employee and representative, also offline', 'plan que cada empleado y representante puede leer, también sin red'),
+    item('copy-of-plan', 'copies given on request', 'copias a quien las pida'),
+    item('copy-of-standard', 'free copy of the silica standard', 'copia gratis de la norma de sílice'),
+  ],
+});
+
+/** What each covered employee must be able to show that they know; no fixed interval for repeats. */
+export const silicaTraining = contentsRule({
+  id: 'silica-training-contents',
+  title: words('Silica training: every topic, shown to be known', 'Capacitación en sílice: cada tema, y que se demuestre'),
+  source: PARALLEL('(i)(1), (i)(2)', 'WAC 296-840-150(1), (3), (4).'),
+  duties: ['SIL-22'],
+  items: [
+    item('health-hazards', 'cancer, lung, immune and kidney effects', 'cáncer y efectos en pulmones, defensas y riñones'),
+    item('tasks', 'tasks here that can expose', 'tareas de aquí que exponen'),
+    item('protection', 'controls, work practices and respirators in use', 'controles, prácticas y respiradores en uso'),
+    item('standard', 'contents of the standard', 'contenido de la norma'),
+    item('competent-person', 'who the competent person is', 'quién es la persona competente'),
+    item('medical', 'purpose of medical surveillance', 'para qué es la vigilancia médica'),
+    item('language', 'in a language the person understands', 'en un idioma que la persona entiende'),
+    item('shown', 'knowledge shown by the person', 'la persona mostró que lo sabe'),
+  ],
+});
+
+/** Shown to the clinician; nothing of what the clinician finds comes back. */
+export const clinicianPacket = contentsRule({
+  id: 'silica-clinician-packet',
+  title: words('Information for the clinician', 'Información para el clínico'),
+  source: usFederal('1926.1153', 'from-memory', { paragraph: '(h)(4)' }),
+  duties: ['SIL-25'],
+  items: [
+    item('standard', 'copy of the standard', 'copia de la norma'),
+    item('duties', 'the person’s duties as they bear on silica', 'tareas de la persona respecto a la sílice'),
+    item('exposure', 'former, present and expected exposure', 'exposición pasada, actual y prevista'),
+    item('respirator', 'respirator worn, how and how long', 'respirador que usa, cómo y cuánto tiempo'),
+    item('earlier-exams', 'information from earlier exams held by the employer', 'datos de exámenes anteriores que tiene el empleador'),
+  ],
+});

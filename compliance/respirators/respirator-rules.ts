@@ -1,0 +1,137 @@
+import { contentsRule, yearlyRule, type ContentItem } from '../contents';
+import { type IsoDate } from '../iso-date';
+import { met, notApplicable, undecided, unmet, WHO, type Rule } from '../rule';
+import { usFederal } from '../source';
+import { words } from '../words';
+import { checkWearer, type Wearer } from './fit-test';
+import { countRespiratorDays, EXAM_SOURCE, MEDICAL_TRIGGER_DAYS, MEDICAL_TRIGGER_SOURCE, silicaExamDue, type RespiratorDay } from './respirator-days';
+import { selectRespirator, type RespiratorNeed } from './select';
+
+const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
+
+export interface ChosenRespiratorFacts extends RespiratorNeed {
+  /** Factor of the respirator planned; null where none is. */
+  readonly plannedApf: number | null;
+  /** Controls were put in place first, or a reason why none is feasible is on file; null where nobody said. */
+  readonly areControlsFirst: boolean | null;
+  /** For gas or vapor with a cartridge: a written change schedule from objective data is on file. */
+  readonly hasChangeSchedule: boolean | null;
+  readonly usesCartridge: boolean;
+}
+
+/** Outside Table 1: controls first, then a factor that covers what is left. */
+export const respiratorByRatio: Rule<ChosenRespiratorFacts> = {
+  id: 'respirator-by-hazard-ratio',
+  title: words('Respirator strong enough for what controls leave', 'Respirador suficiente para lo que dejan los controles'),
+  source: usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii), (d)(3)(i)', note: 'In silica work outside Table 1 by 1926.1153(d)(3)(i) and (e).' }),
+  duties: ['SIL-12', 'SIL-14', 'RES-01', 'RES-02', 'RES-03', 'RES-04'],
+  evaluate(facts) {
+    const choice = selectRespirator(facts);
+    const inputs = { 'exposure, mg/m³': facts.exposureMgPerM3, 'limit, mg/m³': facts.limitMgPerM3, 'planned factor': facts.plannedApf };
+    if (choice.outcome === 'immediately-dangerous' || choice.outcome === 'undecided') {
+      return undecided(choice.reason, choice.whoDecides, { inputs, whatWouldChange: words('Samples or objective data, signed.', 'Muestras o datos objetivos, firmados.') });
+    }
+    if (choice.outcome === 'none-required') return notApplicable(choice.reason, { inputs, results: { ratio: choice.ratio } });
+    const results = { ratio: choice.ratio, 'least factor': choice.leastApf };
+    if (facts.areControlsFirst !== true) {
+      const reason = words('Controls come before respirators. Which are in place, or why can none be?', 'Los controles van antes que los respiradores. ¿Cuáles hay, o por qué no puede haberlos?');
+      return undecided(reason, WHO.competentPerson, { inputs, results, whatWouldChange: words('Name the controls, or the reason.', 'Nombre los controles o la razón.') });
+    }
+    if (facts.plannedApf === null || !choice.options.some((option) => option.apf <= facts.plannedApf!)) {
+      return unmet(choice.reason, { inputs, results, whatWouldChange: words(`A respirator with a factor of ${choice.leastApf} or more.`, `Un respirador con factor de ${choice.leastApf} o más.`) });
+    }
+    if (facts.form === 'gas-or-vapor' && facts.usesCartridge && facts.hasChangeSchedule !== true) {
+      const reason = words('A cartridge against vapor needs a written change schedule.', 'Un cartucho contra vapor necesita un calendario escrito de cambio.');
+      const extra = { inputs, results, whatWouldChange: words('Write the schedule from objective data, or supply air.', 'Escriba el calendario con datos objetivos, o dé aire con línea.') };
+      return facts.hasChangeSchedule === null ? undecided(reason, WHO.hygienist, extra) : unmet(reason, extra);
+    }
+    return met(choice.reason, { inputs, results });
+  },
+};
+
+export const wearerReady: Rule<Wearer> = {
+  id: 'wearer-ready',
+  title: words('Cleared, fitted, shaved and trained for this mask', 'Autorizado, ajustado, afeitado y capacitado para esta máscara'),
+  source: usFederal('1910.134', 'read', { paragraph: '(e)-(g), (k)' }),
+  duties: ['RES-05', 'RES-06', 'RES-07', 'RES-08'],
+  evaluate(wearer, asOf) {
+    const checks = checkWearer(wearer, asOf);
+    const inputs = Object.fromEntries(checks.map((check) => [check.id, check.outcome]));
+    const fault = checks.find((check) => check.outcome === 'unmet');
+    const until = checks.map((check) => check.validUntil).filter((day) => day !== null).sort()[0] ?? null;
+    if (fault !== undefined) return unmet(fault.reason, { inputs, whatWouldChange: words('Put it right before the task.', 'Corríjalo antes de la tarea.') });
+    const open = checks.find((check) => check.outcome === 'undecided');
+    if (open !== undefined) return undecided(open.reason, WHO.competentPerson, { inputs, whatWouldChange: words('Look or ask.', 'Mire o pregunte.') });
+    return met(words('May wear it.', 'Puede usarla.'), { inputs, dueOn: until });
+  },
+};
+
+export interface MedicalTriggerFacts {
+  readonly days: readonly RespiratorDay[];
+  readonly assignedOn: IsoDate;
+  readonly lastExamOn: IsoDate | null;
+  readonly clinicianWantsBy: IsoDate | null;
+}
+
+export const medicalSurveillance: Rule<MedicalTriggerFacts> = {
+  id: 'silica-medical-surveillance',
+  title: words('Silica exam offered at 30 respirator days', 'Examen por sílice a los 30 días de respirador'),
+  source: MEDICAL_TRIGGER_SOURCE,
+  duties: ['SIL-20', 'SIL-21'],
+  evaluate({ days, ...person }, asOf) {
+    const count = countRespiratorDays(days, asOf);
+    const results = { 'days in 12 months, most': count.inAny12Months, 'days so far': count.inLast12Months, 'reached on': count.reachedOn };
+    if (!count.isTriggered) {
+      return notApplicable(words(`${count.inAny12Months} of ${MEDICAL_TRIGGER_DAYS} days in any 12 months.`, `${count.inAny12Months} de ${MEDICAL_TRIGGER_DAYS} días en 12 meses.`), { results, whatWouldChange: words('More days with a respirator required by the silica rule.', 'Más días con respirador exigido por la norma de sílice.') });
+    }
+    const exam = silicaExamDue(person, asOf);
+    const extra = { inputs: { 'assigned on': person.assignedOn, 'last exam': person.lastExamOn }, results, dueOn: exam.dueOn };
+    if (exam.isOverdue) return unmet(words(`The exam was due by ${exam.dueOn}.`, `El examen debía hacerse antes del ${exam.dueOn}.`), { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
+    return met(words(`Exam by ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`, `Examen antes del ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`), extra);
+  },
+};
+
+export const voluntaryUse = contentsRule({
+  id: 'respirator-voluntary-use',
+  title: words('Voluntary use kept apart and informed', 'Uso voluntario aparte e informado'),
+  source: usFederal('1910.134', 'read', { paragraph: '(c)(2)', note: 'Quotation by a university; for anything but a filtering facepiece the last two as well.' }),
+  duties: ['RES-09'],
+  items: [
+    item('no-hazard', 'the respirator makes no hazard itself', 'el respirador no crea un peligro'),
+    item('information', 'Appendix D information given', 'información del apéndice D entregada'),
+    item('fitness', 'medically fit (not for filtering facepieces)', 'apto médicamente (no para mascarillas desechables)'),
+    item('care', 'cleaned, stored and kept under the written program (not for filtering facepieces)', 'limpio, guardado y cuidado según el programa (no para mascarillas desechables)'),
+  ],
+});
+
+export const fitTestRecord = contentsRule({
+  id: 'fit-test-record',
+  title: words('Fit test record is whole', 'El registro de la prueba de ajuste está completo'),
+  source: usFederal('1910.134', 'read', { paragraph: '(m)(2)' }),
+  duties: ['RES-10'],
+  items: [item('person', 'name', 'nombre'), item('type', 'type of test', 'tipo de prueba'), item('mask', 'make, model, style and size', 'marca, modelo, estilo y talla'), item('date', 'date', 'fecha'), item('result', 'passed or not, or the fit factor with its recording', 'aprobada o no, o el factor de ajuste con su registro')],
+});
+
+export const respiratorProgram = contentsRule({
+  id: 'respirator-program',
+  title: words('Written respirator program', 'Programa escrito de respiradores'),
+  source: usFederal('1910.134', 'from-memory', { paragraph: '(c)(1), (l)' }),
+  duties: ['RES-11', 'RES-08'],
+  items: [
+    item('administrator', 'a program administrator named', 'un administrador del programa'),
+    item('selection', 'how respirators are chosen', 'cómo se eligen los respiradores'),
+    item('medical', 'medical evaluations', 'evaluaciones médicas'),
+    item('fit', 'fit testing', 'pruebas de ajuste'),
+    item('use', 'proper use, routine and emergency', 'uso correcto, habitual y de emergencia'),
+    item('care', 'cleaning, storing, inspecting, repairing', 'limpieza, guardado, revisión, reparación'),
+    item('training', 'training', 'capacitación'),
+    item('evaluation', 'evaluation of the program', 'evaluación del programa'),
+  ],
+});
+
+export const respiratorProgramEvaluation = yearlyRule({
+  id: 'respirator-program-evaluation',
+  title: words('Respirator program evaluated', 'Programa de respiradores evaluado'),
+  source: usFederal('1910.134', 'from-memory', { paragraph: '(l)', note: 'The rule says "as necessary"; yearly is the habit of the trade.' }),
+  duties: ['RES-11'],
+});
