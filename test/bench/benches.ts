@@ -1,5 +1,6 @@
 import { type Bench } from './bench';
+import { checklistBench } from './checklist';
 import { verifyLogBench } from './verify-log';
 
 /** Every bench, in the order of quality.md. */
-export const benches: readonly Bench[] = [verifyLogBench];
+export const benches: readonly Bench[] = [checklistBench, verifyLogBench];
