@@ -3,7 +3,7 @@ import { casesOf, type RuleCases } from '../rules/case';
 import { sourced, usFederal, type Source } from '../source';
 import { averageWithinLimit, collectorAirflow, dilutionEnough, mixtureWithinLimits, type AirflowFacts, type AverageFacts, type DilutionFacts } from './air-rules';
 import { monitoringDue, noticeOfAssessment, reassessOnChange, type ChangeFacts, type MonitoringFacts, type NoticeFacts } from './monitoring-rules';
-import { cfmToM3PerH, inchesToMm } from './units';
+import { MM_PER_INCH, m3PerHFromCfm } from '../quantities/units';
 
 const DAY = '2026-12-01';
 const DERIVED = (what: string): Source => sourced(what, 'derived');
@@ -41,7 +41,7 @@ const changed = (name: string, canRaiseExposure: boolean | null, expected: RuleC
 
 const airflow = (name: string, changes: Partial<AirflowFacts>, expected: RuleCase<AirflowFacts>['expected'], source: Source): RuleCase<AirflowFacts> => ({
   name,
-  facts: { isHandheldGrinder: true, wheelDiameterMm: inchesToMm(5), makerAirflowM3PerH: null, measuredM3PerH: cfmToM3PerH(125), ...changes },
+  facts: { isHandheldGrinder: true, wheelDiameterMm: 5 * MM_PER_INCH, makerAirflowM3PerH: null, measuredM3PerH: m3PerHFromCfm(125), ...changes },
   asOf: DAY,
   expected,
   source,
@@ -93,7 +93,7 @@ export const AIR_CASES: readonly RuleCases[] = [
   ]),
   casesOf(collectorAirflow, [
     airflow('A14: 125 cfm at a 5-inch wheel', {}, 'met', ROW_XII),
-    airflow('124 cfm loses Table 1', { measuredM3PerH: cfmToM3PerH(124) }, 'unmet', ROW_XII),
+    airflow('124 cfm loses Table 1', { measuredM3PerH: m3PerHFromCfm(124) }, 'unmet', ROW_XII),
     airflow('not measured', { measuredM3PerH: null }, 'undecided', ROW_XII),
     airflow('walk-behind without the maker’s figure', { isHandheldGrinder: false }, 'undecided', ROW_XIII),
     airflow('walk-behind at the maker’s figure', { isHandheldGrinder: false, makerAirflowM3PerH: 212 }, 'met', ROW_XIII),

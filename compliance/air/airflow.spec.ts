@@ -2,7 +2,7 @@ import { describe, expect, it } from '@jest/globals';
 import fc from 'fast-check';
 import { InputError } from '../input-error';
 import { airflowDemand, handheldAirflowCfm, meetsAirflow } from './airflow';
-import { cfmToM3PerH, inchesToMm } from './units';
+import { MM_PER_INCH, m3PerHFromCfm } from '../quantities/units';
 
 const handheld = { isHandheldGrinder: true, wheelDiameterMm: null, makerAirflowM3PerH: null };
 const walkBehind = { ...handheld, isHandheldGrinder: false };
@@ -15,8 +15,8 @@ describe('[AIR-03] collector airflow', () => {
     [7, 175],
   ])('%d-inch wheel needs %d cfm', (inches, cfm) => {
     expect(handheldAirflowCfm(inches)).toBe(cfm);
-    const demand = airflowDemand({ ...handheld, wheelDiameterMm: inchesToMm(inches) });
-    expect(demand.isDecided && demand.requiredM3PerH).toBeCloseTo(cfmToM3PerH(cfm), 9);
+    const demand = airflowDemand({ ...handheld, wheelDiameterMm: inches * MM_PER_INCH });
+    expect(demand.isDecided && demand.requiredM3PerH).toBeCloseTo(m3PerHFromCfm(cfm), 9);
   });
 
   it('takes the maker’s figure for a walk-behind machine, and asks where there is none', () => {
@@ -31,9 +31,9 @@ describe('[AIR-03] collector airflow', () => {
   });
 
   it('passes on the figure and fails just under it', () => {
-    const required = cfmToM3PerH(100);
+    const required = m3PerHFromCfm(100);
     expect(meetsAirflow(169.9, required)).toBe(true);
-    expect(meetsAirflow(cfmToM3PerH(99.9), required)).toBe(false);
+    expect(meetsAirflow(m3PerHFromCfm(99.9), required)).toBe(false);
   });
 
   it('refuses a wheel of nothing by name', () => {

@@ -2,7 +2,7 @@ import { checkNumber } from '../input-error';
 import { type Words } from '../outcome';
 import { WHO } from '../rule';
 import { usFederal, type Source } from '../source';
-import { cfmToM3PerH, mmToInches } from './units';
+import { inchesFromMm, m3PerHFromCfm } from '../quantities/units';
 
 export const CFM_PER_INCH_OF_WHEEL = 25;
 export const HANDHELD_SOURCE = usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1 rows (xi), (xii)', note: '25 cfm per inch of wheel diameter, at the shroud in real use; the latter is a reading of OSHA guidance, recalled.' });
@@ -37,11 +37,11 @@ export function airflowDemand(tool: {
   if (wheelDiameterMm === null) {
     return { isDecided: false, reason: { en: 'The wheel size is not known.', es: 'No se conoce el diámetro del disco.' }, whoDecides: WHO.competentPerson, source: HANDHELD_SOURCE };
   }
-  const inches = mmToInches(checkNumber('wheelDiameterMm', wheelDiameterMm, { above: 0, max: 1_000 }));
+  const inches = inchesFromMm(checkNumber('wheelDiameterMm', wheelDiameterMm, { above: 0, max: 1_000 }));
   const cfm = handheldAirflowCfm(inches);
   return {
     isDecided: true,
-    requiredM3PerH: Math.max(cfmToM3PerH(cfm), makerAirflowM3PerH ?? 0),
+    requiredM3PerH: Math.max(m3PerHFromCfm(cfm), makerAirflowM3PerH ?? 0),
     reason: { en: `25 cfm for each inch of wheel: ${Math.round(cfm)} cfm.`, es: `25 cfm por cada pulgada de disco: ${Math.round(cfm)} cfm.` },
     source: HANDHELD_SOURCE,
   };

@@ -1,7 +1,7 @@
 import { describe, expect, it } from '@jest/globals';
 import { InputError } from '../input-error';
 import { dilutionAirflowCfm, dilutionVentilation } from './dilution';
-import { cfmToM3PerH } from './units';
+import { m3PerHFromCfm } from '../quantities/units';
 
 const chloroform = { specificGravity: 1.32, evaporationPintsPerMin: 1.5 / 60, molarMassGPerMol: 133.4, targetPpm: 350, mixingFactor: 5 };
 /** 1 US pint = 473.176473 mL exactly enough; grams per hour of the same evaporation. */
@@ -20,7 +20,7 @@ describe('[AIR-04] dilution ventilation', () => {
 
   it('agrees in metric within 2 % (derived: the two constants differ by 1.4 %)', () => {
     const answer = dilutionVentilation(metric);
-    const ratio = answer.isAllowed ? answer.requiredM3PerH / cfmToM3PerH(dilutionAirflowCfm(chloroform).requiredCfm) : Number.NaN;
+    const ratio = answer.isAllowed ? answer.requiredM3PerH / m3PerHFromCfm(dilutionAirflowCfm(chloroform).requiredCfm) : Number.NaN;
     expect(Math.abs(ratio - 1)).toBeLessThan(0.02);
     expect(answer.isAllowed && answer.requiredM3PerH / answer.idealM3PerH).toBeCloseTo(5, 12);
   });

@@ -5,9 +5,6 @@ import { sourced } from '../source';
 export const MOLAR_VOLUME_L = 24.45;
 export const MOLAR_VOLUME_SOURCE = sourced('ppm to mg/m³ at 25 °C and 1 atm', 'from-memory', { note: 'Consistent with the paired MDI limits 0.02 ppm and 0.2 mg/m³.' });
 
-/** 1 ft³ = 0.3048³ m³ exactly; per minute to per hour. */
-const M3_PER_H_PER_CFM = 0.3048 ** 3 * 60;
-const MM_PER_IN = 25.4;
 const MICROGRAMS_PER_MG = 1_000;
 
 /** mg/m³ = ppm × molar mass ÷ 24.45. */
@@ -24,7 +21,3 @@ export function mgPerM3ToPpm(mgPerM3: number, molarMassGPerMol: number): number 
 export const ppbToPpm = (ppb: number): number => checkNumber('ppb', ppb, { min: 0 }) / 1_000;
 export const mgToMicrogramsPerM3 = (mgPerM3: number): number => checkNumber('mgPerM3', mgPerM3, { min: 0 }) * MICROGRAMS_PER_MG;
 export const microgramsToMgPerM3 = (microgramsPerM3: number): number => checkNumber('microgramsPerM3', microgramsPerM3, { min: 0 }) / MICROGRAMS_PER_MG;
-export const cfmToM3PerH = (cfm: number): number => checkNumber('cfm', cfm, { min: 0 }) * M3_PER_H_PER_CFM;
-export const m3PerHToCfm = (m3PerH: number): number => checkNumber('m3PerH', m3PerH, { min: 0 }) / M3_PER_H_PER_CFM;
-export const inchesToMm = (inches: number): number => checkNumber('inches', inches, { min: 0 }) * MM_PER_IN;
-export const mmToInches = (mm: number): number => checkNumber('mm', mm, { min: 0 }) / MM_PER_IN;
