@@ -9,9 +9,13 @@ export function subject(path: string, loadChildren: LoadChildren): Route {
 
 /** The office's subjects, for example `subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes))`. */
 const subjects: Routes = [
+  subject('today', () => import('./today/today.routes').then((file) => file.routes)),
   subject('jobs', () => import('./jobs/jobs.routes').then((file) => file.routes)),
   subject('sheets', () => import('./sheets/sheets.routes').then((file) => file.routes)),
   subject('products', () => import('./products/products.routes').then((file) => file.routes)),
+  subject('people', () => import('./people/people.routes').then((file) => file.routes)),
+  subject('equipment', () => import('./equipment/equipment.routes').then((file) => file.routes)),
+  subject('tablets', () => import('./tablets/tablets.routes').then((file) => file.routes)),
   subject('history', () => import('./history/history.routes').then((file) => file.routes)),
 ];
 

@@ -2,9 +2,11 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogContent, MatDialogRef, MatDialogTitle } from '@angular/material/dialog';
 import { firstValueFrom } from 'rxjs';
+import { parseChecklistText, type ChecklistText } from '#compliance';
 import { Note } from '#ui/note';
 import { ContractClient } from '../contract/contract-client';
 import { Unready } from '../pieces/unready';
+import { SignedText } from './signed-text';
 
 export interface ExactTextQuestion {
   readonly versionId: string;
@@ -16,6 +18,8 @@ export interface ExactTextQuestion {
 
 interface ReadText {
   readonly text: string;
+  /** Null where the bytes are not a text this page can set; they are then shown as they are. */
+  readonly checklist: ChecklistText | null;
   readonly byteLength: number;
   /** Null where this page may not compute it (plain http). */
   readonly sha256: string | null;
@@ -24,7 +28,7 @@ interface ReadText {
 /** The very bytes that were signed: read as text, hashed in this browser, compared with the record. */
 @Component({
   selector: 'kb-exact-text-dialog',
-  imports: [MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, Note, Unready],
+  imports: [MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, Note, SignedText, Unready],
   template: `
     <h2 matDialogTitle>{{ question.heading }}</h2>
     <mat-dialog-content class="kb-stack">
@@ -37,7 +41,16 @@ interface ReadText {
           <kb-note kind="stop" [announce]="true"><b>These are not the bytes on record.</b> Their SHA-256 differs from the one that was signed. Tell the owner.</kb-note>
         }
         <p class="kb-hash">sha256 {{ question.sha256 }}<br />{{ read.byteLength.toLocaleString('en-US') }} bytes, UTF-8</p>
-        <div class="text" tabindex="0" role="document" aria-label="The exact text" [attr.lang]="question.language">{{ read.text }}</div>
+        <p>
+          <button type="button" class="kb-link" [attr.aria-pressed]="isRaw()" (click)="isRaw.set(!isRaw())">{{ isRaw() ? 'Show as it reads' : 'Show the bytes as they are' }}</button>
+        </p>
+        <div class="text" tabindex="0" role="document" aria-label="The exact text" [class.raw]="isRaw() || !read.checklist" [attr.lang]="question.language">
+          @if (read.checklist && !isRaw()) {
+            <kb-signed-text [text]="read.checklist" />
+          } @else {
+            {{ read.text }}
+          }
+        </div>
       } @else {
         <kb-unready what="the text" [error]="error()" (retry)="load()" />
       }
@@ -49,10 +62,15 @@ interface ReadText {
   `,
   styles: `
     .text {
-      white-space: pre-wrap;
       border-top: var(--kb-strip);
       border-bottom: var(--kb-strip);
       padding: 1rem 0;
+    }
+
+    .raw {
+      white-space: pre-wrap;
+      font: 500 0.8125rem / 1.5 var(--kb-mono);
+      overflow-wrap: anywhere;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -64,6 +82,7 @@ export class ExactTextDialog {
 
   protected readonly read = signal<ReadText | null>(null);
   protected readonly error = signal<unknown>(null);
+  protected readonly isRaw = signal(false);
   private readonly params = { versionId: this.question.versionId, language: this.question.language };
   protected readonly href = this.client.hrefOf('readText', this.params);
 
@@ -75,10 +94,19 @@ export class ExactTextDialog {
     this.error.set(null);
     try {
       const bytes = await firstValueFrom(this.client.bytes('readText', this.params));
-      this.read.set({ text: new TextDecoder().decode(bytes), byteLength: bytes.byteLength, sha256: await sha256Of(bytes) });
+      const text = new TextDecoder().decode(bytes);
+      this.read.set({ text, checklist: checklistIn(text), byteLength: bytes.byteLength, sha256: await sha256Of(bytes) });
     } catch (error) {
       this.error.set(error);
     }
+  }
+}
+
+function checklistIn(text: string): ChecklistText | null {
+  try {
+    return parseChecklistText(text);
+  } catch {
+    return null;
   }
 }
 
