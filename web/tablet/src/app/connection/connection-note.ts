@@ -24,7 +24,9 @@ interface Said {
   template: `
     @if (said(); as now) {
       @if (now.kind === 'done') {
-        <p class="kb-quiet" role="status">{{ now.text }} {{ heard() }}</p>
+        <p class="kb-quiet" role="status">
+          <span>{{ now.text }}</span> <span>{{ heard() }}</span>
+        </p>
       } @else {
         <kb-note [kind]="now.kind" [announce]="true">
           {{ now.text }} <b>{{ now.count }}</b>
@@ -46,8 +48,15 @@ interface Said {
       max-width: 26rem;
     }
 
-    b {
+    b,
+    span {
       display: inline-block;
+    }
+
+    @media (min-width: 601px) {
+      span {
+        display: block;
+      }
     }
 
     .pair {
