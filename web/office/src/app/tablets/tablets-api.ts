@@ -2,6 +2,8 @@ import { inject, Injectable } from '@angular/core';
 import { type Observable } from 'rxjs';
 import { type Page } from '#shared/common';
 import { type PairingCode, type Tablet } from '#shared/tablets';
+import { type KeptAside } from '#shared/today';
+import type * as z from 'zod';
 import { ContractClient } from '../contract/contract-client';
 
 /** Tablets that crews sign on. */
@@ -23,5 +25,10 @@ export class TabletsApi {
 
   withdraw(tabletId: string): Observable<Tablet> {
     return this.client.call('withdrawTablet', { params: { tabletId } });
+  }
+
+  /** Deliveries that could not be recorded: stored all the same, a person must look. */
+  keptAside(after?: string): Observable<Page<z.infer<typeof KeptAside>>> {
+    return this.client.call('listKeptAside', { query: { after } });
   }
 }

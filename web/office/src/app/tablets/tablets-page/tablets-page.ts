@@ -16,12 +16,13 @@ import { TextField } from '../../pieces/fields/text-field';
 import { FormSending } from '../../pieces/form-sending';
 import { FormTrouble } from '../../pieces/form-trouble';
 import { Unready } from '../../pieces/unready';
+import { KeptAsideList } from '../kept-aside/kept-aside-list';
 import { TabletsApi } from '../tablets-api';
 
 /** Tablets that crews sign on: pair one by a code shown once, see when each was last heard, withdraw a lost one. */
 @Component({
   selector: 'kb-tablets-page',
-  imports: [Empty, FormTrouble, MatButton, Note, PageHeader, ReactiveFormsModule, State, TextField, Unready],
+  imports: [Empty, FormTrouble, KeptAsideList, MatButton, Note, PageHeader, ReactiveFormsModule, State, TextField, Unready],
   templateUrl: './tablets-page.html',
   styleUrl: './tablets-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -33,6 +34,7 @@ export class TabletsPage {
 
   protected readonly tablets = new PagedList(signal(null).asReadonly(), (_query: null, after) => this.api.list(after));
   protected readonly mayAdd = computed(() => this.access.may('addTablet'));
+  protected readonly mayReadKeptAside = computed(() => this.access.may('listKeptAside'));
   protected readonly mayWithdraw = computed(() => this.access.may('withdrawTablet'));
   protected readonly form = inject(NonNullableFormBuilder).group({ name: '' });
   protected readonly sending = new FormSending(this.form);
