@@ -74,6 +74,8 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
   api.use(acknowledgementsRoutes(historyService(deps, recordlog), recordlog, deliveriesService(deps), tabletDayService(deps)));
   const today = todayService(deps);
   mount(api, 'readToday', ({ actor }) => today.read(actor));
+  // What is no row of the contract is not a page either.
+  api.use(unknownRoute);
   app.use((request, response, next) => (request.path.startsWith('/api/') ? api(request, response, next) : next()));
 
   app.use(pages(config.WEB_ROOT));

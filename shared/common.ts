@@ -4,26 +4,30 @@ import * as z from 'zod';
 z.config({ jitless: true });
 
 export const Id = z.uuid();
+// Years before this are slips of the keyboard, and the database has no year 0.
+const firstYear = '1700';
 /** Local calendar date, ISO. */
-export const LocalDate = z.iso.date();
+export const LocalDate = z.iso.date().refine((date) => date >= firstYear, 'Check the year.');
 /** Instant, ISO with offset. */
-export const Instant = z.iso.datetime({ offset: true });
+export const Instant = z.iso.datetime({ offset: true }).refine((instant) => instant >= firstYear, 'Check the year.');
 export const Sha256 = z.string().regex(/^[0-9a-f]{64}$/);
-/** One line a person types: trimmed, no control characters. */
+/** One line a person types: trimmed, no control characters, no halves of a character pair (the database refuses those). */
 export const Line = (max: number) =>
   z
     .string()
     .trim()
     .min(1, 'Fill this in.')
     .max(max, `Use at most ${max} characters.`)
-    .regex(/^[^\p{Cc}\u202a-\u202e\u2066-\u2069]*$/u, 'Remove control characters.');
+    .regex(/^[^\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]*$/u, 'Remove control characters.');
 /** Several lines; line breaks and tabs may stay. */
 export const Paragraph = (max: number) =>
   z
     .string()
     .trim()
     .max(max, `Use at most ${max} characters.`)
-    .regex(/^(?:[^\p{Cc}\u202a-\u202e\u2066-\u2069]|[\n\r\t])*$/u, 'Remove control characters.');
+    .regex(/^(?:[^\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]|[\n\r\t])*$/u, 'Remove control characters.');
+/** What a person looks for. */
+export const SearchText = z.string().max(100).regex(/^[^\p{Cc}\p{Cs}]*$/u, 'Remove control characters.');
 
 export const Language = z.enum(['en', 'es']);
 export const Role = z.enum(['owner', 'safety-officer', 'crew-lead', 'auditor']);
@@ -39,7 +43,8 @@ export const roleNames: Record<Role, string> = {
 
 /** Keyset paging: pass `next` back as `after`. */
 export const PageQuery = z.strictObject({
-  after: z.string().max(200).optional(),
+  // A cursor holds sort keys, among them names of 200 characters.
+  after: z.string().max(2000).optional(),
   limit: z.coerce.number().int().min(1, 'Ask for at least 1.').max(100, 'Ask for at most 100.').default(50),
 });
 export const pageOf = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), next: z.string().nullable() });

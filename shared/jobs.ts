@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { dustMethods, settings, taskKinds, type ShiftFacts, type EquipmentFacts, type KitFacts, type PersonFacts, type ExposureBasis } from '#compliance/facts';
-import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, Version } from './common';
+import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, SearchText, Version } from './common';
 
 const survey = z.enum(['absent', 'present', 'unknown', 'not-needed']);
 const known = z.boolean().nullable();
@@ -67,7 +67,7 @@ export const JobSummary = z.object({
 export type JobSummary = z.infer<typeof JobSummary>;
 export const Job = JobEdit.extend({ id: Id, version: Version, shifts: z.array(ShiftSummary) });
 export type Job = z.infer<typeof Job>;
-export const JobsQuery = PageQuery.extend({ q: z.string().max(100).optional(), isOpen: z.enum(['true', 'false']).optional() });
+export const JobsQuery = PageQuery.extend({ q: SearchText.optional(), isOpen: z.enum(['true', 'false']).optional() });
 
 const minuteOfDay = z.number().int().min(0).max(2880);
 export const Task = z.strictObject({

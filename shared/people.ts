@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { respiratorTypes } from '#compliance/facts';
-import { Id, Language, Line, LocalDate, PageQuery, Role, Version } from './common';
+import { Id, Language, Line, LocalDate, PageQuery, Role, SearchText, Version } from './common';
 import { NewPassword } from './session';
 
 export const PersonRespirator = z.strictObject({
@@ -34,7 +34,7 @@ export const Person = z.object({
 });
 export type Person = z.infer<typeof Person>;
 
-export const PeopleQuery = PageQuery.extend({ q: z.string().max(100).optional() });
+export const PeopleQuery = PageQuery.extend({ q: SearchText.optional() });
 
 /** Owner only: gives, changes or (null) takes away a sign-in. A password is set only when given. */
 export const SetLogin = z.strictObject({

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { Id, Line, LocalDate, PageQuery, Version } from './common';
+import { Id, Line, LocalDate, PageQuery, SearchText, Version } from './common';
 
 export const Product = z.object({
   id: Id,
@@ -11,7 +11,7 @@ export const Product = z.object({
 });
 export type Product = z.infer<typeof Product>;
 export const AddProduct = z.strictObject({ name: Line(200), supplier: Line(200) });
-export const ProductsQuery = PageQuery.extend({ q: z.string().max(100).optional() });
+export const ProductsQuery = PageQuery.extend({ q: SearchText.optional() });
 
 export const partForms = ['liquid', 'powder', 'paste'] as const;
 export const KitEdit = z.strictObject({

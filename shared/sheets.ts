@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { Id, Instant, Line, LocalDate, PageQuery, Sha256, Version } from './common';
+import { Id, Instant, Line, LocalDate, PageQuery, SearchText, Sha256, Version } from './common';
 
 /** Where a value was read: page from 1, box in PDF points from the page's top left corner. */
 export const Place = z.object({
@@ -81,7 +81,7 @@ export type Revision = z.infer<typeof Revision>;
 export const UploadedSheet = z.object({ revision: RevisionSummary, isKnown: z.boolean() });
 export type UploadedSheet = z.infer<typeof UploadedSheet>;
 
-export const SheetsQuery = PageQuery.extend({ state: z.enum(revisionStates).optional(), q: z.string().max(100).optional() });
+export const SheetsQuery = PageQuery.extend({ state: z.enum(revisionStates).optional(), q: SearchText.optional() });
 
 /** Values as a person confirms or enters them; places of untouched values are kept by the server. */
 export const SheetEdit = z.strictObject({

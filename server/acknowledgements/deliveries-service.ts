@@ -177,7 +177,7 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     /** What tablets sent and the service could not record, newest last: for the safety officer. */
     listKeptAside: (actor: PersonActor, { after, limit }: z.output<typeof PageQuery>): Promise<Page<z.input<typeof KeptAside>>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'instant', 'id');
         const rows = await tx
           .select({ id: deliveries.id, receivedAt: deliveries.receivedAt, tabletName: tablets.name, bytes: deliveries.bytes, because: deliveryOutcomes.because })
           .from(deliveryOutcomes)

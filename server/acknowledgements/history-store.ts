@@ -41,7 +41,7 @@ const matching = (tx: Tx, { jobId, personId, from, to, kind }: Filter): SQL | un
 
 /** Newest entry first. */
 export async function listHistory(tx: Tx, query: z.output<typeof HistoryQuery>): Promise<AcknowledgementRecord[]> {
-  const cursor = readCursor(query.after, 1);
+  const cursor = readCursor(query.after, 'index');
   return tx
     .select()
     .from(acknowledgements)

@@ -66,7 +66,7 @@ export function actionsService({ database, clock }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit, state, shiftId }: z.output<typeof ActionsQuery>): Promise<Page<CorrectiveAction>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'instant', 'id');
         const rows = await select(tx)
           .where(
             and(

@@ -19,7 +19,7 @@ export function equipmentService({ database }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit }: z.output<typeof PageQuery>): Promise<Page<Equipment>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'text', 'id');
         const rows = await tx
           .select()
           .from(equipment)

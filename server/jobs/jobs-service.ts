@@ -75,7 +75,7 @@ export function jobsService({ database, clock }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit, q, isOpen }: z.output<typeof JobsQuery>): Promise<Page<JobSummary>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'instant', 'id');
         const like = q ? `%${q.replace(/[\\%_]/g, '\\$&')}%` : undefined;
         const rows = await tx
           .select()

@@ -36,7 +36,7 @@ export function peopleService({ database, log }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit, q }: z.output<typeof PeopleQuery>): Promise<Page<Person>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'text', 'id');
         const rows = await tx
           .select()
           .from(people)

@@ -114,7 +114,7 @@ export function productsService({ database }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit, q }: z.output<typeof ProductsQuery>): Promise<Page<Product>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'text', 'id');
         const like = q ? `%${q.replace(/[\\%_]/g, '\\$&')}%` : undefined;
         const rows = await tx
           .select()
@@ -140,7 +140,7 @@ export function productsService({ database }: Deps) {
       }),
     listKits: (actor: PersonActor, { after, limit }: z.output<typeof PageQuery>): Promise<Page<Kit>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 2);
+        const cursor = readCursor(after, 'text', 'id');
         const rows = await tx
           .select()
           .from(kits)

@@ -63,7 +63,7 @@ export const findByHash = async (tx: Tx, sha256: string): Promise<RevisionRow | 
 
 /** Newest first. Text is looked for in file name, product and supplier. */
 export function listRevisions(tx: Tx, { after, limit, state, q }: z.output<typeof SheetsQuery>): Promise<RevisionRow[]> {
-  const cursor = readCursor(after, 2);
+  const cursor = readCursor(after, 'instant', 'id');
   const like = q ? `%${q.replace(/[\\%_]/g, '\\$&')}%` : undefined;
   return selectRevisions(tx)
     .where(

@@ -42,7 +42,7 @@ export function tabletsService({ database, clock, log }: Deps) {
   return {
     list: (actor: PersonActor, { after, limit }: z.output<typeof PageQuery>): Promise<Page<Tablet>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 1);
+        const cursor = readCursor(after, 'id');
         const rows = await tx
           .select()
           .from(tablets)
