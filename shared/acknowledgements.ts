@@ -14,6 +14,8 @@ export const AcknowledgementRow = z.object({
   personName: z.string(),
   jobId: Id,
   jobName: z.string(),
+  /** The job's own zone: times are shown in it, wherever the reader sits. */
+  timeZone: z.string(),
   shiftDate: LocalDate,
   versionNumber: z.number().int(),
   language: Language,

@@ -1,14 +1,15 @@
-import { and, asc, between, desc, eq, gte, lt, lte, type SQL } from 'drizzle-orm';
+import { and, asc, between, desc, eq, getTableColumns, gte, lt, lte, type SQL } from 'drizzle-orm';
 import type * as z from 'zod';
 import { acknowledgements } from '#drizzle/schema/acknowledgements';
 import { checklistTexts } from '#drizzle/schema/checklists';
+import { jobs } from '#drizzle/schema/jobs';
 import { recordlogEntries, recordlogHeads } from '#drizzle/schema/recordlog';
 import { type AcknowledgementRow, type HistoryExportQuery, type HistoryQuery } from '#shared/acknowledgements';
 import { NotFoundError } from '../errors';
 import { readCursor } from '../paging';
 import { type Tx } from '../platform/database';
 
-export type AcknowledgementRecord = typeof acknowledgements.$inferSelect;
+export type AcknowledgementRecord = typeof acknowledgements.$inferSelect & { readonly timeZone: string };
 export const foundCap = 1_000;
 
 export const toRow = (row: AcknowledgementRecord): AcknowledgementRow => ({
@@ -19,6 +20,7 @@ export const toRow = (row: AcknowledgementRecord): AcknowledgementRow => ({
   personName: row.personName,
   jobId: row.jobId,
   jobName: row.jobName,
+  timeZone: row.timeZone,
   shiftDate: row.shiftDate,
   versionNumber: row.versionNumber,
   language: row.language as AcknowledgementRow['language'],
@@ -28,6 +30,9 @@ export const toRow = (row: AcknowledgementRecord): AcknowledgementRow => ({
   tabletName: row.tabletName,
   entryIndex: row.entryIndex,
 });
+
+const ofJob = and(eq(jobs.organisationId, acknowledgements.organisationId), eq(jobs.id, acknowledgements.jobId));
+const columns = { ...getTableColumns(acknowledgements), timeZone: jobs.timeZone };
 
 type Filter = z.output<typeof HistoryExportQuery>;
 const matching = (tx: Tx, { jobId, personId, from, to, kind }: Filter): SQL | undefined =>
@@ -43,8 +48,9 @@ const matching = (tx: Tx, { jobId, personId, from, to, kind }: Filter): SQL | un
 export async function listHistory(tx: Tx, query: z.output<typeof HistoryQuery>): Promise<AcknowledgementRecord[]> {
   const cursor = readCursor(query.after, 'index');
   return tx
-    .select()
+    .select(columns)
     .from(acknowledgements)
+    .innerJoin(jobs, ofJob)
     .where(and(matching(tx, query), cursor ? lt(acknowledgements.entryIndex, Number(cursor[0])) : undefined))
     .orderBy(desc(acknowledgements.entryIndex))
     .limit(query.limit + 1);
@@ -62,16 +68,18 @@ export async function totalAcknowledgements(tx: Tx): Promise<number> {
 /** Oldest first, in pieces: for exports. */
 export const readHistoryAfter = (tx: Tx, query: Filter, after: number, limit: number): Promise<AcknowledgementRecord[]> =>
   tx
-    .select()
+    .select(columns)
     .from(acknowledgements)
+    .innerJoin(jobs, ofJob)
     .where(and(matching(tx, query), gte(acknowledgements.entryIndex, after + 1)))
     .orderBy(asc(acknowledgements.entryIndex))
     .limit(limit);
 
 export async function findAcknowledgement(tx: Tx, id: string): Promise<{ row: AcknowledgementRecord; text: Buffer; leaf: string; leafHash: Buffer }> {
   const [found] = await tx
-    .select({ row: acknowledgements, text: checklistTexts.bytes, leaf: recordlogEntries.leaf, leafHash: recordlogEntries.leafHash })
+    .select({ row: columns, text: checklistTexts.bytes, leaf: recordlogEntries.leaf, leafHash: recordlogEntries.leafHash })
     .from(acknowledgements)
+    .innerJoin(jobs, ofJob)
     .innerJoin(checklistTexts, and(eq(checklistTexts.organisationId, acknowledgements.organisationId), eq(checklistTexts.versionId, acknowledgements.versionId), eq(checklistTexts.language, acknowledgements.language)))
     .innerJoin(recordlogEntries, and(eq(recordlogEntries.organisationId, acknowledgements.organisationId), eq(recordlogEntries.index, acknowledgements.entryIndex)))
     .where(and(eq(acknowledgements.organisationId, tx.organisationId), eq(acknowledgements.id, id)));

@@ -2,8 +2,6 @@
 const days = ['Sunday', 'Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday'] as const;
 const months = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December'] as const;
 
-const two = (value: number): string => String(value).padStart(2, '0');
-
 interface DayParts {
   readonly year: number;
   readonly month: string;
@@ -42,34 +40,18 @@ export function localDateOf(instant: string | Date, timeZone?: string): string {
   return `${part('year')}-${part('month')}-${part('day')}`;
 }
 
-/** "06:52", with seconds "06:52:05". */
-export function timeOf(instant: string | Date, { seconds = false } = {}): string {
-  const date = new Date(instant);
-  return `${two(date.getHours())}:${two(date.getMinutes())}${seconds ? `:${two(date.getSeconds())}` : ''}`;
+/** "06:52", with seconds "06:52:05"; in the browser's zone or a named one. */
+export function timeOf(instant: string | Date, { seconds = false, timeZone }: { seconds?: boolean; timeZone?: string | undefined } = {}): string {
+  return new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit', ...(seconds ? { second: '2-digit' as const } : {}), hourCycle: 'h23' }).format(new Date(instant));
 }
 
 /** "3 Dec 06:26" */
-export function momentShort(instant: string): string {
-  const { dayOfMonth, month } = partsOf(localDateOf(instant));
-  return `${dayOfMonth} ${month.slice(0, 3)} ${timeOf(instant)}`;
+export function momentShort(instant: string, timeZone?: string): string {
+  const { dayOfMonth, month } = partsOf(localDateOf(instant, timeZone));
+  return `${dayOfMonth} ${month.slice(0, 3)} ${timeOf(instant, { timeZone })}`;
 }
 
 /** "3 Dec 2026, 06:26:41" */
-export function momentFull(instant: string): string {
-  return `${dayOf(localDateOf(instant))}, ${timeOf(instant, { seconds: true })}`;
-}
-
-/** "06:52" today, "Wed 17:20" within a week, "3 Dec 2026" before that. */
-export function heardAt(instant: string, now: Date): string {
-  const day = localDateOf(instant);
-  if (day === localDateOf(now)) return timeOf(instant);
-  const isThisWeek = now.getTime() - new Date(instant).getTime() < 6 * 24 * 3600 * 1000;
-  return isThisWeek ? `${partsOf(day).weekday.slice(0, 3)} ${timeOf(instant)}` : dayOf(day);
-}
-
-/** The local date a number of days after (or before) another. */
-export function daysAfter(isoDate: string, count: number): string {
-  const date = new Date(`${isoDate}T00:00:00Z`);
-  date.setUTCDate(date.getUTCDate() + count);
-  return date.toISOString().slice(0, 10);
+export function momentFull(instant: string, timeZone?: string): string {
+  return `${dayOf(localDateOf(instant, timeZone))}, ${timeOf(instant, { seconds: true, timeZone })}`;
 }

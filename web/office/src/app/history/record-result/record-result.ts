@@ -32,6 +32,10 @@ import { HowToCheckDialog } from './how-to-check-dialog';
     }
   `,
   styles: `
+    :host:empty {
+      display: none;
+    }
+
     .links {
       display: inline-flex;
       gap: 1rem;
