@@ -55,3 +55,18 @@ export function momentShort(instant: string, timeZone?: string): string {
 export function momentFull(instant: string, timeZone?: string): string {
   return `${dayOf(localDateOf(instant, timeZone))}, ${timeOf(instant, { seconds: true, timeZone })}`;
 }
+
+/** "06:52" today, "Wed 17:20" within a week, "3 Dec 2026" before that. */
+export function heardAt(instant: string, now: Date): string {
+  const day = localDateOf(instant);
+  if (day === localDateOf(now)) return timeOf(instant);
+  const isThisWeek = now.getTime() - new Date(instant).getTime() < 6 * 24 * 3600 * 1000;
+  return isThisWeek ? `${partsOf(day).weekday.slice(0, 3)} ${timeOf(instant)}` : dayOf(day);
+}
+
+/** The local date a number of days after (or before) another. */
+export function daysAfter(isoDate: string, count: number): string {
+  const date = new Date(`${isoDate}T00:00:00Z`);
+  date.setUTCDate(date.getUTCDate() + count);
+  return date.toISOString().slice(0, 10);
+}

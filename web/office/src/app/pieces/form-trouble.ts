@@ -10,6 +10,11 @@ import { Note } from '#ui/note';
       <kb-note kind="stop" [announce]="true">{{ words() }} <ng-content /></kb-note>
     }
   `,
+  styles: `
+    :host:empty {
+      display: none;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FormTrouble {

@@ -12,7 +12,7 @@ let lastId = 0;
   styles: `
     :host {
       display: block;
-      width: 18rem;
+      width: 22rem;
       max-width: 100%;
     }
 

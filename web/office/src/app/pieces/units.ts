@@ -55,10 +55,24 @@ export function figure(value: number): string {
   return value.toLocaleString('en-US', { maximumSignificantDigits: 4 });
 }
 
-/** "38,000 ft³", in the unit this browser prefers. */
+/** "1/4", "1 3/8": inches are said in eighths where they are eighths. */
+function inches(value: number): string {
+  const eighths = Math.round(value * 8);
+  if (eighths === 0 || eighths % 8 === 0 || Math.abs(value * 8 - eighths) > 1e-3) return figure(value);
+  const whole = Math.floor(eighths / 8);
+  const [top, bottom] = eighths % 4 === 0 ? [1, 2] : eighths % 2 === 0 ? [(eighths % 8) / 2, 4] : [eighths % 8, 8];
+  return `${whole > 0 ? `${whole} ` : ''}${top}/${bottom}`;
+}
+
+/** A stored SI figure in a unit, as it stands in a field. */
+export function inUnit(si: number, unit: Unit): string {
+  return unit.id === 'in' ? inches(si / unit.perUnit) : figure(si / unit.perUnit);
+}
+
+/** "38,000 ft³", "1/4 in", in the unit this browser prefers. */
 export function withUnit(quantity: Quantity, si: number): string {
   const unit = preferredUnit(quantity);
-  return `${figure(si / unit.perUnit)} ${unit.label}`;
+  return `${inUnit(si, unit)} ${unit.label}`;
 }
 
 /** What a person typed as a number: "38,000", "1/4", "1 1/4", "0.25". NaN when it is none. */

@@ -2,12 +2,15 @@ import { type NonNullableFormBuilder } from '@angular/forms';
 import { type JobEdit } from '#shared/jobs';
 import { siteForm, unknownSite } from './site-fields';
 
+/** The browser's own zone; a machine set to UTC stands in no place, so one of the United States is proposed. */
+const own = Intl.DateTimeFormat().resolvedOptions().timeZone;
+
 export const emptyJob: JobEdit = {
   name: '',
   siteName: '',
   siteController: null,
   jurisdictionId: 'us-federal',
-  timeZone: Intl.DateTimeFormat().resolvedOptions().timeZone,
+  timeZone: own === 'UTC' ? 'America/Chicago' : own,
   isOpen: true,
   site: unknownSite,
 };

@@ -47,7 +47,8 @@ export function floorWords({ floor }: SiteFacts): string {
   if (floor.covering === 'unknown') return 'floor not checked yet';
   const covering = coveringChoices.find((choice) => choice.value === floor.covering)?.label ?? floor.covering;
   const age = floor.builtYear === null ? 'age not known' : `of ${floor.builtYear}`;
-  return `floor: ${covering} ${age}, asbestos ${surveyed[floor.asbestos]}, lead ${surveyed[floor.lead]}`;
+  const survey = floor.asbestos === floor.lead ? (floor.asbestos === 'not-needed' ? surveyed[floor.asbestos] : `asbestos and lead ${surveyed[floor.asbestos]}`) : `asbestos ${surveyed[floor.asbestos]}, lead ${surveyed[floor.lead]}`;
+  return `floor: ${covering} ${age}, ${survey}`;
 }
 
 /** Where the work is: setting, room, area and thickness. */

@@ -4,6 +4,7 @@ import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { RouterLink } from '@angular/router';
 import { firstValueFrom } from 'rxjs';
+import { listed } from '#compliance/words';
 import { type Job, type PublishedVersion, type Shift } from '#shared/jobs';
 import { Note } from '#ui/note';
 import { PageHeader } from '#ui/page-header';
@@ -78,6 +79,7 @@ export class ShiftPage {
   });
   /** Held tasks a basis would open. */
   protected readonly undecided = computed(() => this.held().filter((task) => task.silicaBasis === 'held'));
+  protected readonly undecidedNames = computed(() => listed(this.undecided().map((task, index) => (index === 0 ? task.name.en : task.name.en.toLowerCase()))).en);
   protected readonly openLines = computed(() => {
     const answer = this.editor.answer();
     return answer ? openLines(answer) : [];

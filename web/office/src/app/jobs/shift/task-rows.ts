@@ -19,9 +19,7 @@ export class TaskRows {
   readonly answer = input.required<ShiftAnswer>();
   readonly plan = input.required<ShiftPlan>();
   readonly mayEdit = input(false);
-  readonly mayDecide = input(false);
   readonly openTask = output<string>();
-  readonly decide = output<string>();
 
   private readonly openWhys = signal<ReadonlySet<string>>(new Set());
   protected readonly rows = computed(() =>

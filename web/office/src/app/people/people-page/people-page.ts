@@ -51,10 +51,15 @@ export class PeoplePage {
 
   /** What keeps a person from work, in a word; training and masks in one look. */
   protected gap(person: Person): string {
-    if (!person.isActive) return '';
+    if (!person.isActive || !this.isCrew(person)) return '';
     const gaps = [person.silicaTrainedOn === null ? 'silica training' : '', person.hazcomTrainedOn === null ? 'hazard training' : '', person.respirators.some(({ clearedOn, fitTestedOn }) => clearedOn && fitTestedOn) ? '' : 'fitted mask', person.isAdultConfirmed ? '' : 'age'];
     const open = gaps.filter(Boolean);
     return open.length === 0 ? '' : `not on file: ${open.join(', ')}`;
+  }
+
+  /** Who works on the floor: everybody without a sign-in, and the leads. */
+  protected isCrew({ login }: Person): boolean {
+    return login === null || login.role === 'crew-lead';
   }
 
   protected search(q: string): void {

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, signal } from '@angular/core';
-import { figure, keepUnit, numberFrom, preferredUnit, quantities, type Quantity, type Unit } from '../units';
+import { inUnit, keepUnit, numberFrom, preferredUnit, quantities, type Quantity, type Unit } from '../units';
 import { Field } from './field';
 
 /**
@@ -35,7 +35,7 @@ export class QuantityField extends Field<number | null> {
     const typed = this.typed();
     if (typed !== null) return typed;
     const value = this.stored();
-    return value === null || Number.isNaN(value) ? '' : figure(value / this.unit().perUnit);
+    return value === null || Number.isNaN(value) ? '' : inUnit(value, this.unit());
   });
   protected readonly error = computed(() => (Number.isNaN(this.value()) ? 'Write a number, or a fraction such as 1/4.' : this.message()));
 

@@ -32,6 +32,11 @@ import { TabletsApi } from '../tablets-api';
       <kb-unready what="deliveries" [error]="list.problem()" (retry)="list.reload()" />
     }
   `,
+  styles: `
+    :host:empty {
+      display: none;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class KeptAsideList {
