@@ -54,14 +54,19 @@ export function groupRows(items: TextItem[]): TextItem[][] {
   const rows: { baseline: number; height: number; items: TextItem[] }[] = [];
   for (const item of sorted) {
     const row = rows.at(-1);
-    if (row && item.baseline - row.baseline < Math.min(item.height, row.height) * 0.5) {
+    if (row && sharedHeight(item, row) >= Math.min(item.height, row.height) * 0.45) {
       row.items.push(item);
-      if (item.height > row.height) Object.assign(row, { height: item.height, baseline: Math.max(row.baseline, item.baseline) });
+      if (item.height > row.height) Object.assign(row, { height: item.height, baseline: item.baseline });
     } else {
       rows.push({ baseline: item.baseline, height: item.height, items: [item] });
     }
   }
   return rows.map((row) => row.items.sort((a, b) => a.x - b.x));
+}
+
+/** How far the letters of two runs overlap in height, points; letters reach four fifths of their size above the line. */
+function sharedHeight(a: { baseline: number; height: number }, b: { baseline: number; height: number }): number {
+  return Math.min(a.baseline, b.baseline) - Math.max(a.baseline - a.height * 0.8, b.baseline - b.height * 0.8);
 }
 
 export function toLine(row: TextItem[]): Line {

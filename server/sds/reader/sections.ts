@@ -62,7 +62,7 @@ function isWrappedHeading(heading: Line, line: Line): boolean {
     gap < heading.box.height * 2.2 &&
     Math.abs(line.box.height - heading.box.height) < 0.6 &&
     line.segments.length === 1 &&
-    (/^\p{Ll}/u.test(line.text) || /^company\s*\/|(^|[/ ])undertaking\b/i.test(line.text)) &&
+    ((/^\p{Ll}/u.test(line.text) && /(\/|,|\b(and|of|the|o|y|e|u|de|del|la|el|et|des|du|und|der|des|zu|von|sur))$/i.test(heading.text)) || /^company\s*\/|(^|[/ ])undertaking\b/i.test(line.text)) &&
     !line.text.includes(':')
   );
 }

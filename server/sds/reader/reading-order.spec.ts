@@ -1,0 +1,47 @@
+import { describe, expect, it } from '@jest/globals';
+import { withoutOverprints } from './lines';
+import { type TextItem, type TextPage } from './pdf-text';
+import { readingLines } from './reading-order';
+
+const item = (text: string, x: number, baseline: number, size = 10): TextItem => ({ page: 1, text, x, y: baseline - size * 0.8, width: text.length * size * 0.5, height: size, baseline });
+const page = (items: TextItem[]): TextPage => ({ page: 1, width: 612, height: 792, items });
+const texts = (items: TextItem[]): string[] => readingLines(page(items)).map(({ text }) => text);
+
+describe('reading order', () => {
+  it('sorts by place, not by the order of drawing', () => {
+    expect(texts([item('Danger', 200, 100), item('SECTION 2', 50, 80), item('Signal word', 50, 100)])).toEqual(['SECTION 2', 'Signal word  Danger']);
+  });
+
+  it('joins the pieces of a word, parts words at a small gap and cells at a wide one', () => {
+    expect(texts([item('Haz', 50, 80), item('ard', 65, 80), item('word', 83, 80), item('cell', 150, 80)])).toEqual(['Hazard word  cell']);
+  });
+
+  it('keeps a raised figure with its line', () => {
+    expect(texts([item('5 mg/m', 50, 80), item('3', 80, 77, 6)])).toEqual(['5 mg/m3']);
+  });
+
+  it('reads words printed twice for bold type once', () => {
+    const once = [item('Hazard identification', 50, 80), item('Hazard identification', 50.4, 80)];
+    expect(withoutOverprints(once).map(({ text }) => text)).toEqual(['Hazard identification']);
+    expect(withoutOverprints([item('Hazard identification', 50, 80), item('identification', 86, 80.2)])).toHaveLength(1);
+  });
+
+  it('keeps the same word standing twice in a row of a table', () => {
+    expect(texts([item('100 ppm', 50, 80), item('100 ppm', 150, 80)])).toEqual(['100 ppm  100 ppm']);
+  });
+
+  it('reads two columns of prose one after the other', () => {
+    const prose = (side: string, x: number): TextItem[] => Array.from({ length: 12 }, (_, row) => item(`${side}${row} ${'word '.repeat(9)}`.slice(0, 46), x, 100 + row * 12));
+    const lines = texts([...prose('R', 320), ...prose('L', 50)]);
+    expect(lines.map((line) => line.split(' ')[0])).toEqual([...Array.from({ length: 12 }, (_, row) => `L${row}`), ...Array.from({ length: 12 }, (_, row) => `R${row}`)]);
+  });
+
+  it('reads labels and values across, however many there are', () => {
+    const rows = Array.from({ length: 12 }, (_, row) => [item(`Label ${row}`, 50, 100 + row * 12), item(`${'value '.repeat(9)}`, 300, 100 + row * 12)]).flat();
+    expect(texts(rows)[0]).toMatch(/^Label 0 {2}value/);
+  });
+
+  it('drops rules drawn with underscores', () => {
+    expect(texts([item('______________', 50, 80), item('Text', 50, 100)])).toEqual(['Text']);
+  });
+});
