@@ -21,6 +21,7 @@ import { type Words } from '../outcome';
 import { LIVE_LINES } from '../checklists/live-lines.data';
 import { clinicianPacket, silicaPlanAvailable, silicaPlanElements, silicaPlanReview, silicaTraining } from '../plans/silica-plan';
 import { PROTECTION } from '../ppe/protection.data';
+import { machinePreUse, wasteHandling } from '../plans/site-papers';
 import { accessInTime, mayDiscardRecord, rightsNotice, safetyMeetings } from '../records/record-rules';
 import { RETENTION_ROWS } from '../records/retention.data';
 import { APF_ROWS } from '../respirators/apf.data';
@@ -49,6 +50,8 @@ export const CONTENTS_RULES: readonly ContentsRule[] = [
   voluntaryUse,
   fitTestRecord,
   respiratorProgram,
+  wasteHandling,
+  machinePreUse,
 ];
 
 /** Rules about papers, records, readings and dates: beside the shift, not on its checklist. */

@@ -35,6 +35,8 @@ const ITEMS: Readonly<Record<string, string>> = {
   'sheets-accessible': 'opens-offline no-permission backup',
   'respirator-voluntary-use': 'no-hazard information fitness care',
   'fit-test-record': 'person type mask date result',
+  'waste-handling': 'container acidity no-drain hardened taker',
+  'machine-pre-use-check': 'guard cord ground-fault isolation manual',
   'respirator-program': 'administrator selection medical fit use care training evaluation',
 };
 

@@ -2,6 +2,7 @@ import * as z from 'zod';
 import { InputError } from '#compliance/input-error';
 import { findPack, listPlaces } from '#compliance/jurisdictions/pack';
 import { RULE_CASES } from '#compliance/rules/cases';
+import { dutyCoverage, dutyTable } from '#compliance/rules/coverage';
 import { CONTENTS_RULES, DATA_TABLES, findRule, RULES } from '#compliance/rules/registry';
 import { type Source } from '#compliance/source';
 import { AIR_CALCULATIONS } from './air';
@@ -26,6 +27,7 @@ const refused = (fields: readonly RefusedField[]): CommandResult => ({ exitCode:
 const USAGE = `usage:
   npm run -s rules -- list                    every rule, table, place and calculation
   npm run -s rules -- show ID                 one rule, table or place with its sources
+  npm run -s rules -- duties                  the table of duties and the rules that serve them, as Markdown
   npm run -s rules -- NAME '<json>'           a calculation; or JSON on standard input
   npm run -s rules -- NAME --help             what it takes, with units, and an example that runs
 calculations: ${CALCULATIONS.map(({ name }) => name).join(', ')}`;
@@ -35,6 +37,7 @@ export async function runRules(args: readonly string[], readStdin: () => Promise
   const [name, argument] = args;
   if (name === undefined || name === '--help' || name === 'help') return name === undefined ? { exitCode: 1, stdout: '', stderr: USAGE } : done(USAGE);
   if (name === 'list') return done(list());
+  if (name === 'duties') return done(dutyTable());
   if (name === 'show') return show(argument);
   const calculation = CALCULATIONS.find((each) => each.name === name);
   if (calculation === undefined) return { exitCode: 1, stdout: '', stderr: `${name}: no such calculation\n${USAGE}` };
@@ -71,6 +74,7 @@ function list() {
   return {
     rules: RULES.map(({ id, title, source, duties }) => ({ id, title: title.en, ...brief(source), duties })),
     tables: DATA_TABLES.map(({ id, title, rows }) => ({ id, title: title.en, rows: rows.length, fromMemory: rows.filter(({ source }) => source.verified === 'from-memory').length })),
+    duties: dutyCoverage().map(({ id, ruleIds, flow }) => ({ id, ruleIds, flow })),
     places: listPlaces().map(({ id, name, hasPack, isComplete }) => ({ id, name: name.en, hasPack, isComplete })),
     calculations: CALCULATIONS.map(({ name, summary }) => ({ name, summary })),
   };
