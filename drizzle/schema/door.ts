@@ -38,4 +38,4 @@ export const sessions = pgTable(
 );
 
 /** Tables without tenant policies, by name: a test demands forced policies on all others. */
-export const doorTables = ['logins', 'tablet_keys', 'attempts', 'sessions'] as const;
+export const doorTables = ['logins', 'tablet_keys', 'attempts', 'sessions', 'link_keys'] as const;
