@@ -37,7 +37,7 @@ function codesIn(cells: PartText[], pattern: RegExp, isWanted: (cell: PartText) 
   const found = new Map<string, Field<string>>();
   cells.forEach((cell, index) => {
     if (!isWanted(cell)) return;
-    const { text, tail } = withWrappedCode(cell.segment, cells[index + 1]?.segment);
+    const { text, tail } = withWrappedCode(cell.segment, cells.slice(index + 1, index + 5));
     let end = 0;
     for (const match of text.matchAll(pattern)) {
       if (match.index < end) continue;
@@ -56,10 +56,10 @@ function codesIn(cells: PartText[], pattern: RegExp, isWanted: (cell: PartText) 
 }
 
 /** A combination broken over two lines of a narrow cell: "P305+P351+P3" / "38". */
-function withWrappedCode(segment: Segment, next: Segment | undefined): { text: string; tail: number } {
+function withWrappedCode(segment: Segment, following: PartText[]): { text: string; tail: number } {
   const isOpen = /[HP]\s?\d{3}\s*\+\s*(?:[HP]?\d{0,2})$/.test(segment.text);
-  const isRest = next !== undefined && /^[HP]?\d{1,3}\b/.test(next.text) && Math.abs(next.box.x - segment.box.x) < 4;
-  return isOpen && isRest ? { text: segment.text + next.text, tail: next.text.length } : { text: segment.text, tail: 0 };
+  const next = isOpen ? following.find((other) => Math.abs(other.segment.box.x - segment.box.x) < 4)?.segment : undefined;
+  return next && /^[HP]?\d{1,3}\b/.test(next.text) ? { text: segment.text + next.text, tail: next.text.length } : { text: segment.text, tail: 0 };
 }
 
 function clean(code: string, suffix = ''): string {

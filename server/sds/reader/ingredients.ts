@@ -38,7 +38,9 @@ export function ingredients(parts: SheetParts): Field<Ingredient>[] {
   const cells = cellsOf(lines);
   const anchors = anchorsOf(cells);
   const columns = columnsOf(lines, anchors);
-  const amounts = amountsOf(lines, cells, anchors, columns);
+  const free = freeAmounts(cells, columns);
+  const amounts = amountsOf(lines, free, anchors, columns);
+  const amountRows = new Set(free.map(({ row }) => row));
   const found = new Map<string, Field<Ingredient>>();
   for (const [index, anchor] of anchors.entries()) {
     const concentration = amounts.get(anchor) ?? null;
@@ -47,7 +49,7 @@ export function ingredients(parts: SheetParts): Field<Ingredient>[] {
       if (known.value.concentration === null && concentration) known.value.concentration = concentration.text;
       continue;
     }
-    const name = nameOf(lines, anchor, anchors[index - 1], anchors[index + 1], columns);
+    const name = nameOf(lines, anchor, anchors[index - 1], anchors[index + 1], columns, amountRows);
     const pieces = [anchor.segment, ...(concentration && concentration.segment.page === anchor.segment.page ? [concentration.segment] : []), ...(name && name.segment.page === anchor.segment.page ? [name.segment] : [])];
     const ordered = [...new Set([name?.segment, anchor.segment, concentration?.segment].filter((piece) => piece !== undefined))];
     found.set(anchor.cas, {
@@ -97,9 +99,8 @@ function columnsOf(lines: Line[], anchors: Anchor[]): Columns {
 }
 
 /** Pairs numbers with amounts: same row first, then row by row where both columns have as many entries, then the nearest. */
-function amountsOf(lines: Line[], cells: Cell[], anchors: Anchor[], columns: Columns): Map<Anchor, Amount> {
+function amountsOf(lines: Line[], free: Amount[], anchors: Anchor[], columns: Columns): Map<Anchor, Amount> {
   const paired = new Map<Anchor, Amount>();
-  const free = freeAmounts(cells, columns);
   // Several amounts in a row and no heading that names one of them: one column a product. Whose, nobody can say here.
   const rowsOfMany = anchors.filter((anchor) => free.filter((amount) => amount.row === anchor.row).length > 1);
   if (rowsOfMany.length >= Math.min(3, anchors.length * 0.2) && rowsOfMany.length > 0 && !rowsOfMany.every((anchor) => free.filter((amount) => amount.row === anchor.row && columns.amount !== null && overlaps(amount.segment, columns.amount)).length === 1)) return paired;
@@ -118,7 +119,7 @@ function amountsOf(lines: Line[], cells: Cell[], anchors: Anchor[], columns: Col
   const open = [...new Map(anchors.map((anchor) => [anchor.cas, anchor])).values()].filter((anchor) => !paired.has(anchor));
   const used = new Set([...paired.values()].map(({ segment }) => segment));
   const firstOf = new Set(anchors.filter((anchor, index) => anchors.findIndex(({ cas }) => cas === anchor.cas) === index));
-  pairApart(open.filter((anchor) => firstOf.has(anchor)), anchors, free.filter(({ segment }) => !used.has(segment)), paired);
+  pairApart(lines, columns, open.filter((anchor) => firstOf.has(anchor)), anchors, free.filter(({ segment }) => !used.has(segment)), paired);
   return paired;
 }
 
@@ -163,22 +164,30 @@ function besideIn(line: Line | undefined, anchor: Anchor): { segment: Segment; t
 }
 
 /** Blocks where number and amount stand on different lines of one entry. */
-function pairApart(open: Anchor[], all: Anchor[], amounts: Amount[], paired: Map<Anchor, Amount>): void {
+function pairApart(lines: Line[], columns: Columns, open: Anchor[], all: Anchor[], amounts: Amount[], paired: Map<Anchor, Amount>): void {
+  const isNamed = (row: number, own: Segment): boolean => nameSegments(lines[row], columns).some((segment) => segment !== own);
+  // A row with a name of its own keeps its amount to itself.
+  const fits = (anchor: Anchor, amount: Amount): boolean => isNear(anchor, amount, all) && !(isNamed(anchor.row, anchor.segment) && isNamed(amount.row, amount.segment));
   if (open.length === amounts.length) {
     open.forEach((anchor, index) => {
       const amount = amounts[index];
-      if (amount && isNear(anchor, amount, all)) paired.set(anchor, amount);
+      if (amount && fits(anchor, amount)) paired.set(anchor, amount);
     });
     return;
   }
   const used = new Set<Amount>();
   for (const anchor of open) {
-    const near = amounts.filter((amount) => !used.has(amount) && isNear(anchor, amount, all)).sort((a, b) => distance(anchor, a) - distance(anchor, b));
+    const near = amounts.filter((amount) => !used.has(amount) && fits(anchor, amount)).sort((a, b) => distance(anchor, a) - distance(anchor, b));
     const [nearest] = near;
     if (!nearest) continue;
     used.add(nearest);
     paired.set(anchor, nearest);
   }
+}
+
+/** Cells that hold words of a name; in the name column where it is known. */
+function nameSegments(line: Line | undefined, { name }: Columns): Segment[] {
+  return (line?.segments ?? []).filter((segment) => isNameText(withoutCas(segment.text)) && (name === null || (segment.box.x < name.box.x + name.box.width && segment.box.x + segment.box.width > name.box.x - 30)));
 }
 
 /** Rows apart; a page turn counts as nothing. */
@@ -191,7 +200,7 @@ function isNear(anchor: Anchor, amount: Amount, all: Anchor[]): boolean {
 }
 
 /** The name of the row: in the name column, else the first words on the line, else the nearest line above. */
-function nameOf(lines: Line[], anchor: Anchor, before: Anchor | undefined, after: Anchor | undefined, columns: Columns): { segment: Segment; text: string } | null {
+function nameOf(lines: Line[], anchor: Anchor, before: Anchor | undefined, after: Anchor | undefined, columns: Columns, amountRows: ReadonlySet<number>): { segment: Segment; text: string } | null {
   const from = Math.max(before && before.row < anchor.row ? before.row + 1 : 0, anchor.row - 5);
   for (let row = anchor.row; row >= from; row--) {
     const line = lines[row];
@@ -202,7 +211,8 @@ function nameOf(lines: Line[], anchor: Anchor, before: Anchor | undefined, after
     for (let below = row + 1; below < Math.min(lines.length, after && after.row > row ? after.row : lines.length, row + 4); below++) {
       const next = lines[below]?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 5);
       if (!next || next.page !== last.page || next.box.y - last.box.y > last.box.height * 2 || !isNameText(next.text) || /:|\.$/.test(next.text) || below === anchor.row) break;
-      if (below > anchor.row && next.text.length > 60) break;
+      // A row with its own amount is another ingredient; a row that names the columns opens another table.
+      if (below > anchor.row && (next.text.length > 60 || amountRows.has(below) || lines[below]?.segments.some(({ text }) => casHeading.test(fold(text))))) break;
       rest.push(next.text);
       last = next;
     }

@@ -19,6 +19,9 @@ export interface Labelled {
 const otherLabels =
   /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses?( of|$|:)|uses advised|relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
 
+/** "Product code:" and the like name another thing than "Product". */
+const otherThing = /^ (code|number|no|nr|type|use|class|category|form|description|date|id|line|group|family|info|emergency|telephone|phone|for)\b/;
+
 /**
  * Every place where a segment is, or begins with, the label; `label` is matched on folded text from its start. A loose
  * search also takes "Signal word Danger", where only a blank parts label and value.
@@ -33,7 +36,7 @@ export function findLabelled(lines: Line[], label: RegExp, isLoose = false): Lab
       if (!match) return;
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
-      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest) ?? /^ [a-z '/&()]{2,34}:/.exec(rest);
+      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest) ?? (otherThing.test(rest) ? null : /^ [a-z '/&()]{2,34}:/.exec(rest));
       if (!mark && match[0].length < folded.length) {
         if (isLoose && /^ \S/.test(rest)) found.push({ line, index, values: [tail(segment, rest)], isBelow: false });
         return;
