@@ -1,6 +1,6 @@
 import { describe, expect, it } from '@jest/globals';
 import { englishSyllables, fernandezHuerta, fleschKincaidGrade, spanishSyllables } from '#test/support/readability';
-import { airflowCfm, basisFacts, equipmentFacts, kitFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
+import { airflowCfm, basisFacts, equipmentFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
 import { type Checklist } from '../answer';
 import { answerShift } from '../answer-shift';
 import { taskKinds, type ShiftFacts } from '../facts';
@@ -137,6 +137,24 @@ describe('a checklist text', () => {
 
   it.each(['', '{}', '[]', 'null', '{"format":"kneeboard-checklist-text/2"}', '{"format":"kneeboard-checklist-text/1","language":"en"}'])('refuses %j', (bytes) => {
     expect(() => parseChecklistText(bytes)).toThrow(SyntaxError);
+  });
+});
+
+describe('a checklist text with one piece broken', () => {
+  const whole = checklistText(make(decided()), 'en');
+  it.each<[string, object]>([
+    ['a line without its text', { morning: [{ ...whole.morning[0], text: 1 }] }],
+    ['a line without its weight', { morning: [{ ...whole.morning[0], isCritical: 'yes' }] }],
+    ['a task whose protection has no name', { tasks: [{ ...whole.tasks[1], protection: [{ mark: 'eyes' }] }] }],
+    ['a task whose protection has no mark', { tasks: [{ ...whole.tasks[1], protection: [{ name: 'Goggles' }] }] }],
+    ['a task with a broken live line', { tasks: [{ ...whole.tasks[1], live: [{}] }] }],
+    ['a person without lines', { people: [{ ...whole.people[0], lines: null }] }],
+    ['no sentence', { sentence: undefined }],
+  ])('%s is refused', (_name, broken) => {
+    expect(() => parseChecklistText(JSON.stringify({ ...whole, ...broken }))).toThrow(SyntaxError);
+  });
+  it('further keys of a later version are left in place', () => {
+    expect(parseChecklistText(JSON.stringify({ ...whole, later: 1 }))).toMatchObject({ later: 1 });
   });
 });
 

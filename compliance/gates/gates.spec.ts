@@ -55,6 +55,11 @@ describe('[GATE-02] engines indoors', () => {
     expect(gate(engines(used, exhaust, alarm), 'engines-indoors')).toMatchObject({ outcome, isHolding });
   });
 
+  it('says what to do with engines inside, or that there are none', () => {
+    expect(gate(engines(true, true, true), 'engines-indoors')?.text.en).toBe('Exhaust led outside. CO alarm worn and on.');
+    expect(gate(engines(false, null, null), 'engines-indoors')?.text.en).toBe('No engines and no fuel heaters inside.');
+  });
+
   it('holds all work of the shift, and says nothing outdoors', () => {
     const held = engines(true, false, false);
     expect(held.tasks.filter(({ state }) => state === 'ready').map(({ taskId }) => taskId)).toEqual(['inspection']);
@@ -184,8 +189,8 @@ describe('each person', () => {
     expect(holds(ask({ ...withPerson('per', { isKeptFromIsocyanates: true }), kits: [free] }), 'spreading')).toEqual([]);
   });
 
-  it('employer not named is said, and holds nothing', () => {
-    const answer = ask(withPerson('abe', { employer: null }));
+  it.each([[null], [' ']])('employer %j is said, and holds nothing', (employer) => {
+    const answer = ask(withPerson('abe', { employer }));
     expect(answer.people.find(({ personId }) => personId === 'abe')?.findings.find(({ ruleId }) => ruleId === 'employer-named')).toMatchObject({ outcome: 'undecided', isHolding: false });
   });
 });
@@ -195,6 +200,8 @@ describe('facts that cannot be', () => {
     ['areaM2', { areaM2: -1 }],
     ['thicknessMm', { thicknessMm: 0 }],
     ['targetProfile', { targetProfile: 11 }],
+    ['targetProfile', { targetProfile: 0 }],
+    ['targetProfile', { targetProfile: 4.5 }],
     ['date', { date: '2026-02-30' }],
     ['people.id', { people: [personFacts(), personFacts()] }],
     ['tasks.break.assignments', { tasks: [taskFacts({ kind: 'break', assignments: [{ personId: 'dov', startMinute: 60, endMinute: 30 }] })] }],
@@ -204,8 +211,8 @@ describe('facts that cannot be', () => {
     expect(found).toMatchObject({ outcome: 'unmet', isHolding: true });
     expect(found?.reason.en).toContain(field);
   });
-  it('possible facts say nothing', () => {
-    expect(gate(ask(), 'facts-possible')).toBeUndefined();
+  it.each<[Partial<ShiftFacts>]>([[{}], [{ targetProfile: 10 }], [{ targetProfile: 1 }], [{ thicknessMm: 0.001 }], [{ areaM2: 0 }]])('possible facts %j say nothing', (overrides) => {
+    expect(gate(ask(overrides), 'facts-possible')).toBeUndefined();
   });
 });
 
