@@ -1,6 +1,7 @@
 import { averageWithinLimit, collectorAirflow, dilutionEnough, mixtureWithinLimits } from '../air/air-rules';
 import { LIMIT_ROWS } from '../air/limits.data';
 import { monitoringDue, noticeOfAssessment, reassessOnChange } from '../air/monitoring-rules';
+import { PUBLISHED_EXPOSURES } from '../air/published-exposure.data';
 import { airRecordContents, laboratoryContents, objectiveDataContents, observationOffered } from '../air/record-contents';
 import { SUBSTANCES } from '../air/substances.data';
 import { type ContentsRule } from '../contents';
@@ -109,6 +110,7 @@ export const DATA_TABLES: readonly DataTable[] = [
   table('live-lines', 'Lines at the start of a task', 'Líneas al empezar una tarea', LIVE_LINES),
   table('limits', 'Limits of substances', 'Límites de sustancias', LIMIT_ROWS),
   table('substances', 'Substances', 'Sustancias', SUBSTANCES),
+  table('published-exposures', 'Published exposures, for orientation', 'Exposiciones publicadas, como guía', PUBLISHED_EXPOSURES),
   table('protection-factors', 'Assigned protection factors', 'Factores de protección asignados', APF_ROWS),
   table('hazards', 'Hazard classes and label elements', 'Clases de peligro y elementos de etiqueta', HAZARD_ROWS),
   table('statements', 'Hazard statements', 'Indicaciones de peligro', STATEMENT_TEXTS.map(({ code }) => ({ id: `statement/${code}`, source: STATEMENT_EN_SOURCE }))),
