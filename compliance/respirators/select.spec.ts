@@ -2,7 +2,7 @@ import { describe, expect, it } from '@jest/globals';
 import fc from 'fast-check';
 import { InputError } from '../input-error';
 import { APF_ROWS, apfOf, apfRowsOf, type FacePiece, type RespiratorDevice } from './apf.data';
-import { hazardRatio, maximumUseConcentration, selectRespirator, type RespiratorNeed } from './select';
+import { hazardRatio, maximumUseConcentration, selectForAll, selectRespirator, type RespiratorNeed } from './select';
 
 const need = (changes: Partial<RespiratorNeed> = {}): RespiratorNeed => ({ jurisdictionId: 'us-federal', exposureMgPerM3: 0.6, limitMgPerM3: 0.05, idlhMgPerM3: 50, form: 'particles', hasHoodEvidence: false, ...changes });
 const leastApf = (changes: Partial<RespiratorNeed>) => {
@@ -131,6 +131,16 @@ describe('[SIL-14] choice by hazard ratio', () => {
     expect(leastApf({ limitMgPerM3: null })).toBe('undecided');
     expect(leastApf({ jurisdictionId: 'australia' })).toBe('undecided');
     expect(leastApf({ jurisdictionId: 'us-california' })).toBe('undecided');
+  });
+
+  it('takes the strictest of several contaminants (trap 10), and an undecided one holds all', () => {
+    const silica = need({ exposureMgPerM3: 0.1 });
+    const worse = need({ exposureMgPerM3: 0.6 });
+    expect(selectForAll([silica, worse])).toMatchObject({ outcome: 'required', leastApf: 25 });
+    expect(selectForAll([worse, silica])).toMatchObject({ outcome: 'required', leastApf: 25 });
+    expect(selectForAll([worse, need({ limitMgPerM3: null })])).toMatchObject({ outcome: 'undecided' });
+    expect(selectForAll([need({ limitMgPerM3: null }), need({ exposureMgPerM3: null })])).toMatchObject({ outcome: 'immediately-dangerous' });
+    expect(selectForAll([need({ exposureMgPerM3: 0.01 }), need({ exposureMgPerM3: 0.02 })])).toMatchObject({ outcome: 'none-required' });
   });
 
   it('refuses impossible values by name', () => {

@@ -75,6 +75,18 @@ export function selectRespirator(need: RespiratorNeed): RespiratorChoice {
   return fromRatio(need, limit, ratio);
 }
 
+const RANK: Readonly<Record<RespiratorChoice['outcome'], number>> = { 'none-required': 0, required: 1, undecided: 2, 'immediately-dangerous': 3 };
+
+function isStricter(a: RespiratorChoice, b: RespiratorChoice): boolean {
+  if (a.outcome === 'required' && b.outcome === 'required') return a.leastApf > b.leastApf || (a.leastApf === b.leastApf && a.ratio > b.ratio);
+  return RANK[a.outcome] > RANK[b.outcome];
+}
+
+/** Several contaminants at once: the strictest answer holds; one that nobody can decide holds all. Additive effects are for the mixture, beside this. */
+export function selectForAll(needs: readonly [RespiratorNeed, ...RespiratorNeed[]]): RespiratorChoice {
+  return needs.map(selectRespirator).reduce((top, next) => (isStricter(next, top) ? next : top));
+}
+
 function fromRatio(need: RespiratorNeed, limit: number, ratio: number): RespiratorChoice {
   const comparison = APF_COMPARISON[need.jurisdictionId];
   const rows = apfRowsOf(need.jurisdictionId);
