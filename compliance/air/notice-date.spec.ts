@@ -6,7 +6,9 @@ import { addDays, daysBetween, isWeekend } from '../iso-date';
 import { addWorkingDays, noticeDate } from './notice-date';
 
 const us = new Holidays('US');
-const isHoliday = (day: string) => (us.isHoliday(new Date(`${day}T12:00:00`)) || []).some((each) => each.type === 'public');
+/** Days, not instants: the calendar keeps the country's own zone. */
+const holidays = new Set([2025, 2026, 2027, 2028, 2029, 2030].flatMap((year) => us.getHolidays(year).filter((each) => each.type === 'public').map((each) => each.date.slice(0, 10))));
+const isHoliday = (day: string) => holidays.has(day);
 const due = (completedOn: string, scope: 'construction' | 'general-industry' = 'construction') => {
   const { dueOn, earlierDueOn } = noticeDate(completedOn, scope, isHoliday);
   return [dueOn, earlierDueOn];

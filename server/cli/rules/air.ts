@@ -1,4 +1,3 @@
-import Holidays from 'date-holidays';
 import * as z from 'zod';
 import { airflowDemand, meetsAirflow } from '#compliance/air/airflow';
 import { dilutionVentilation } from '#compliance/air/dilution';
@@ -10,6 +9,7 @@ import { findSubstance, SUBSTANCES } from '#compliance/air/substances.data';
 import { LONG_SHIFT_SOURCE, shiftTwa, TWA_SOURCE } from '#compliance/air/twa';
 import { findPack } from '#compliance/jurisdictions/pack';
 import { cfmFromM3PerH } from '#compliance/quantities/units';
+import { publicHolidays } from '../../platform/holidays';
 import { calculation, day, jurisdictionId, minutes, RefusedInput, unsaid, type Calculation } from './calculation';
 
 const twa = calculation({
@@ -60,10 +60,9 @@ const notice = calculation({
   }),
   example: { assessmentCompletedOn: '2026-12-04', scope: 'construction', country: 'US' },
   run: ({ assessmentCompletedOn, scope, country, state }) => {
-    const calendar = state === undefined ? new Holidays(country) : new Holidays(country, state);
-    if (calendar.getRules().length === 0) throw new RefusedInput([{ field: state === undefined ? 'country' : 'state', message: 'has no holiday calendar' }]);
-    // Noon keeps the calendar's local day in every zone of the machine.
-    return noticeDate(assessmentCompletedOn, scope, (each) => (calendar.isHoliday(new Date(`${each}T12:00:00`)) || []).some(({ type }) => type === 'public'));
+    const isHoliday = publicHolidays(country, state);
+    if (isHoliday === null) throw new RefusedInput([{ field: state === undefined ? 'country' : 'state', message: 'has no holiday calendar' }]);
+    return noticeDate(assessmentCompletedOn, scope, isHoliday);
   },
 });
 
