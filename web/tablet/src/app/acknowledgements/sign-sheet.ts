@@ -70,6 +70,12 @@ export class SignSheet {
     const good = this.sitting()?.texts.filter(({ state }) => state === 'good').map(({ language }) => language) ?? [];
     return tabletLanguages.filter((language) => good.includes(language));
   });
+  /** Said when the person's own language is there but its bytes are not those that were published. */
+  protected readonly refusedText = computed(() => {
+    const sitting = this.sitting();
+    const own = sitting?.texts.find(({ language }) => language === sitting.person.language);
+    return own && own.state !== 'good' ? messagesIn(own.language).sign.textRefused(messagesIn(own.language).languageName) : '';
+  });
   protected readonly say = computed(() => messagesIn(this.text()?.language ?? this.words.language()));
   protected readonly outcome = computed(() => {
     const last = this.lastOutcome();

@@ -36,6 +36,12 @@ interface Said {
         </kb-note>
       }
     }
+    @if (outbox.lostCount(); as lost) {
+      <kb-note kind="stop" [announce]="true">
+        {{ words.say().signal.lost(lost) }}
+        <button type="button" class="kb-button text small" (click)="outbox.acknowledgeLoss()">{{ words.say().signal.lostRead }}</button>
+      </kb-note>
+    }
     @if (storageWords(); as trouble) {
       <kb-note kind="stop" [announce]="true">{{ trouble }}</kb-note>
     }
@@ -69,7 +75,7 @@ interface Said {
 })
 export class ConnectionNote {
   private readonly connection = inject(Connection);
-  private readonly outbox = inject(Outbox);
+  protected readonly outbox = inject(Outbox);
   private readonly sender = inject(Sender);
   private readonly storage = inject(Storage);
   private readonly day = inject(Day);

@@ -20,6 +20,11 @@ export class Connection {
     this.stateNow.set('online');
   }
 
+  /** The service is there. A pairing code it does not take leaves the tablet as unpaired as it was. */
+  refused(): void {
+    if (this.stateNow() !== 'not-paired') this.stateNow.set('online');
+  }
+
   lost(trouble: Exclude<CallTrouble, 'refused'>): void {
     this.stateNow.set(trouble);
   }

@@ -60,7 +60,7 @@ export class TabletApi {
     } catch (error) {
       // A network that broke off, at the first byte or in the middle of the answer.
       const failure = error instanceof CallFailed ? error : new CallFailed('no-signal', 0, null);
-      if (failure.trouble === 'refused') this.connection.heard();
+      if (failure.trouble === 'refused') this.connection.refused();
       else this.connection.lost(failure.trouble);
       throw failure;
     }

@@ -1,5 +1,5 @@
-import { beforeEach, describe, expect, it } from '@jest/globals';
-import { EnvironmentInjector, createEnvironmentInjector, runInInjectionContext, inject } from '@angular/core';
+import { afterEach, beforeEach, describe, expect, it } from '@jest/globals';
+import { createEnvironmentInjector, EnvironmentInjector } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { openDB } from 'idb';
 import { Deliveries, Envelope, type Receipt } from '#shared/envelopes';
@@ -9,10 +9,16 @@ import { Outbox, TooLong } from './outbox';
 import { NotKept, Storage } from './storage';
 import { databaseName } from './tablet-database';
 
+const tabs: EnvironmentInjector[] = [];
+afterEach(() => {
+  for (const opened of tabs.splice(0)) opened.destroy();
+});
+
 /** Another tab of the same tablet: its own objects over the same storage. */
 function tab(): Outbox {
   const injector = createEnvironmentInjector([Storage, Outbox], TestBed.inject(EnvironmentInjector));
-  return runInInjectionContext(injector, () => inject(Outbox));
+  tabs.push(injector);
+  return injector.get(Outbox);
 }
 
 function receiptFor(id: string, more: Partial<Receipt> = {}): Receipt {
@@ -114,5 +120,40 @@ describe('Outbox', () => {
     const outbox = tab();
     await expect(outbox.add([{ ...cannotSign(), extra: 'x'.repeat(400_000) }])).rejects.toThrow(TooLong);
     expect(await outbox.nextBatch()).toEqual([]);
+  });
+});
+
+describe('a tablet whose storage was cleared', () => {
+  beforeEach(() => {
+    setUpTabletBrowser();
+    document.cookie = 'kneeboard-waiting=0; path=/tablet; max-age=0';
+    history.replaceState(null, '', '/tablet/');
+  });
+
+  it('says how many waiting envelopes are gone until somebody has read it, and then no more', async () => {
+    await tab().add([cannotSign(), cannotSign()]);
+    setUpTabletBrowser();
+    const later = tab();
+    await later.load();
+    expect(later.lostCount()).toBe(2);
+    await later.add([cannotSign()]);
+    const again = tab();
+    await again.load();
+    expect(again.lostCount()).toBe(2);
+    again.acknowledgeLoss();
+    const last = tab();
+    await last.load();
+    expect(last.lostCount()).toBe(0);
+    expect(last.waitingCount()).toBe(1);
+  });
+
+  it('alarms nobody when everything was sent', async () => {
+    const outbox = tab();
+    const [one] = await outbox.add([cannotSign()]);
+    await outbox.settle({ receivedAt: '2026-12-03T12:00:00Z', receipts: [receiptFor(one?.id ?? '')] });
+    setUpTabletBrowser();
+    const later = tab();
+    await later.load();
+    expect(later.lostCount()).toBe(0);
   });
 });

@@ -1,9 +1,10 @@
-import { computed, inject, Injectable, signal } from '@angular/core';
+import { computed, DestroyRef, inject, Injectable, signal } from '@angular/core';
 import { formatISO } from 'date-fns';
 import { v7 } from 'uuid';
 import { Envelope, type Receipt, type Receipts } from '#shared/envelopes';
 import { Storage } from './storage';
 import { type OutboxRow } from './tablet-database';
+import { readWaitingMark, writeWaitingMark } from './waiting-mark';
 
 type Known<T> = { [K in keyof T as string extends K ? never : K]: T[K] };
 type Unstamped<T> = T extends unknown ? Omit<Known<T>, 'format' | 'id' | 'sequence' | 'capturedAt'> : never;
@@ -20,6 +21,7 @@ export interface Posted {
 const mostCharacters = 400_000;
 const batchEnvelopes = 50;
 const batchCharacters = 1_000_000;
+const lookAgainMs = 1_000;
 /** Delivered envelopes stay readable on the tablet this long, so that a list can say what was sent. */
 const keepDoneMs = 24 * 3_600_000;
 
@@ -41,8 +43,13 @@ export class Outbox {
   readonly posted = computed<readonly Posted[]>(() => this.rowsNow().map((row) => ({ row, envelope: this.parse(row) })));
   readonly waitingCount = computed(() => this.rowsNow().filter((row) => row.state === 'waiting').length);
 
+  /** Envelopes that waited here and are gone, because the browser dropped the storage; until somebody has read so. */
+  readonly lostCount = signal(0);
+  private isCompared = false;
+
   constructor() {
     this.channel?.addEventListener('message', () => void this.load());
+    inject(DestroyRef).onDestroy(() => this.channel?.close());
     this.storage.onCleared(() => void this.restore());
   }
 
@@ -50,6 +57,14 @@ export class Outbox {
   async load(): Promise<void> {
     const rows = await this.storage.use((database) => database.getAll('outbox'));
     this.rowsNow.set(inOrder(rows));
+    if (!this.isCompared) await this.compareWithMark();
+    this.mark();
+  }
+
+  /** Somebody read that envelopes are gone. */
+  acknowledgeLoss(): void {
+    this.lostCount.set(0);
+    this.mark();
   }
 
   /**
@@ -70,6 +85,7 @@ export class Outbox {
       return { stamped, rows };
     });
     this.rowsNow.update((rows) => inOrder([...rows, ...written.rows]));
+    this.mark();
     this.channel?.postMessage('changed');
     return written.stamped;
   }
@@ -115,6 +131,19 @@ export class Outbox {
       if (typeof last !== 'number' || last < highest) await transaction.objectStore('kept').put(highest, 'sequence');
       await transaction.done;
     }).catch((error: unknown) => console.error(error));
+  }
+
+  private async compareWithMark(): Promise<void> {
+    this.isCompared = true;
+    if (readWaitingMark() <= this.waitingCount()) return;
+    // Another tab may be between sending and saying so: look once more before alarming anybody.
+    await new Promise((resolve) => setTimeout(resolve, lookAgainMs));
+    this.rowsNow.set(inOrder(await this.storage.use((database) => database.getAll('outbox'))));
+    this.lostCount.set(Math.max(0, readWaitingMark() - this.waitingCount()));
+  }
+
+  private mark(): void {
+    writeWaitingMark(this.waitingCount() + this.lostCount());
   }
 
   private parse(row: OutboxRow): Envelope | null {

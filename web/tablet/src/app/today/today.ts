@@ -34,6 +34,11 @@ export class Today {
     const day = this.day.day();
     return day ? `${day.organisationName}, ${day.tablet.name}` : '';
   });
+  protected readonly heard = computed(() => {
+    const at = this.day.heardAt();
+    const say = this.words.say().signal;
+    return at ? say.heard(whenTime(at, this.words.language())) : say.neverHeard;
+  });
   protected readonly isUnpaired = computed(() => this.connection.state() === 'not-paired');
   protected readonly emptyState = computed(() => {
     const say = this.words.say().today;

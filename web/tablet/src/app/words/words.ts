@@ -35,8 +35,10 @@ export class Words {
 
 function stored(): Language {
   try {
-    return localStorage.getItem(storedAs) === 'es' ? 'es' : 'en';
+    const chosen = localStorage.getItem(storedAs);
+    if (chosen === 'en' || chosen === 'es') return chosen;
   } catch {
-    return 'en';
+    // Without storage the browser's own language decides.
   }
+  return navigator.language.startsWith('es') ? 'es' : 'en';
 }
