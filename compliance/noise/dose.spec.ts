@@ -1,7 +1,7 @@
 import { describe, expect, it } from '@jest/globals';
 import fc from 'fast-check';
 import { InputError } from '../input-error';
-import { generalIndustryActionLevelDba, nioshDosePercent, nioshTwaDba, noiseDosePercent, noiseShift, printedReferenceHours, referenceHours, tableD2Fraction, tableD2Hours, twaDbaFromDose } from './dose';
+import { generalIndustryActionLevelDba, isImpulseExceeded, nioshDosePercent, nioshTwaDba, noiseDosePercent, noiseShift, printedReferenceHours, referenceHours, tableD2Fraction, tableD2Hours, twaDbaFromDose } from './dose';
 import { PUBLISHED_LEVELS, TABLE_D2, TABLE_G16A } from './noise-tables.data';
 
 const at = (...pairs: [levelDba: number, hours: number][]) => pairs.map(([levelDba, hours]) => ({ levelDba, minutes: hours * 60 }));
@@ -43,6 +43,10 @@ describe('[NOI-01] construction, 29 CFR 1926.52 Table D-2', () => {
     expect(shift.construction).toMatchObject({ isExceeded: true, minutesAboveTable: 6 });
     expect(shift.generalIndustryDosePercent).toBeLessThan(100);
     expect(shift.isAboveTable).toBe(true);
+  });
+
+  it('caps impulses at 140 dB peak, (e): read in 41 CFR 50-204.10 and 1910.95', () => {
+    expect([isImpulseExceeded(140), isImpulseExceeded(140.1)]).toEqual([false, true]);
   });
 
   it('refuses impossible values by name', () => {

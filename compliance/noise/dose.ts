@@ -1,6 +1,6 @@
 import { checkMinutes, checkNumber, InputError, MINUTES_PER_DAY } from '../input-error';
 import { usFederal, sourced } from '../source';
-import { TABLE_D2, TABLE_G16A, type DurationRow } from './noise-tables.data';
+import { IMPULSE_LIMIT_DB_PEAK, TABLE_D2, TABLE_G16A, type DurationRow } from './noise-tables.data';
 
 export const DOSE_SOURCE = usFederal('1910.95', 'read', { paragraph: 'App. A', note: 'General industry; in construction Table D-2 is the law.' });
 export const NIOSH_SOURCE = sourced('NIOSH recommended exposure limit for noise', 'read', { note: 'Advice: 85 dBA, 8 hours, 3 dB exchange.' });
@@ -51,6 +51,11 @@ export function tableD2Fraction(periods: readonly NoisePeriod[]): TableD2Result 
     fraction += minutes / 60 / (hours ?? TABLE_D2.at(-1)!.hours);
   }
   return { fraction, isExceeded: fraction > 1 + 1e-9 || minutesAboveTable > 0, minutesAboveTable };
+}
+
+/** Whether an impulse is above 140 dB peak, 1926.52(e). */
+export function isImpulseExceeded(peakDb: number): boolean {
+  return checkNumber('peakDb', peakDb, { min: 0, max: 200 }) > IMPULSE_LIMIT_DB_PEAK;
 }
 
 /** T = 8 / 2^((L − 90)/5), hours. */
