@@ -38,19 +38,22 @@ export function createGuardedReader(options: GuardedReaderOptions): GuardedReade
   let isClosed = false;
   let nextId = 1;
 
-  const child = (): Promise<ChildProcess> => (warm ??= startChild(options));
   const forget = (): void => {
     warm = null;
   };
+  /** The warm child; another one when it ended while it was idle or did not start. */
+  async function living(): Promise<ChildProcess> {
+    const idle = await warm?.catch(() => null);
+    if (idle && !hasEnded(idle)) return idle;
+    warm = startChild(options);
+    return warm;
+  }
 
   async function readNow(source: Uint8Array | string): Promise<SheetReading> {
     if (isClosed) throw new Error('The sheet reader is closed.');
-    const process = await child().catch((error: unknown) => {
-      forget();
-      throw error;
-    });
+    const process = await living();
     const outcome = await watchedRead(process, { id: nextId++, source, ...limitsOf(options) }, options);
-    if (process.exitCode !== null || process.signalCode !== null || !process.connected) forget();
+    if (hasEnded(process)) forget();
     else if ((await residentBytes(process.pid)) > options.maxRssBytes * tiredShare) {
       forget();
       process.kill('SIGKILL');
@@ -72,6 +75,8 @@ export function createGuardedReader(options: GuardedReaderOptions): GuardedReade
     },
   };
 }
+
+const hasEnded = (child: ChildProcess): boolean => child.exitCode !== null || child.signalCode !== null || !child.connected;
 
 const limitsOf = ({ maxBytes, maxPages }: GuardedReaderOptions): Partial<ReadRequest> => ({
   ...(maxBytes === undefined ? {} : { maxBytes }),
@@ -128,18 +133,22 @@ async function watchedRead(child: ChildProcess, request: ReadRequest, { wallCloc
       child.off('exit', gone);
       resolve(reading);
     };
+    let verdict: ReadingState | null = null;
+    // The answer waits for the child's end, so that its memory is free before the next one starts.
     const stop = (state: ReadingState): void => {
+      verdict ??= state;
       child.kill('SIGKILL');
-      finish(emptyReading(state));
     };
     const heard = (message: ChildMessage): void => {
       if (message.kind === 'answer' && message.id === request.id) finish(message.reading);
     };
-    // V8 aborts itself when its heap is full; any other end is the file's doing too.
-    const gone = (_code: number | null, signal: NodeJS.Signals | null): void => finish(emptyReading(signal === 'SIGABRT' ? 'too-much-memory' : 'damaged'));
+    // V8 aborts itself when its heap is full, the kernel kills when the machine is; any other end is the file's doing.
+    const gone = (_code: number | null, signal: NodeJS.Signals | null): void => finish(emptyReading(verdict ?? (signal === 'SIGABRT' || signal === 'SIGKILL' ? 'too-much-memory' : 'damaged')));
     child.on('message', heard);
     child.on('exit', gone);
-    child.send(request, (error) => (error ? gone(null, null) : undefined));
+    // A child that ended before it was asked will not say so again.
+    if (child.exitCode !== null || child.signalCode !== null) gone(null, child.signalCode);
+    else child.send(request, (error) => (error ? stop('damaged') : undefined));
   });
 }
 

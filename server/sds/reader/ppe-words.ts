@@ -1,6 +1,7 @@
 import { findLabelled, boxAround, type Labelled } from './labels';
 import { type Field, type PpeTopic, type PpeWords } from './reading';
 import { type SheetParts } from './sheet-parts';
+import { fold } from './words';
 
 /** Labels of section 8 on protection, folded. */
 const topicLabels: readonly (readonly [PpeTopic, RegExp])[] = [
@@ -18,11 +19,14 @@ export function ppeWords(parts: SheetParts): Field<PpeWords>[] {
   for (const [topic, label] of topicLabels) {
     for (const hit of findLabelled(lines, label)) {
       const text = textOf(hit);
-      if (text.length < 8 || found.some(({ value }) => value.topic === topic && value.text === text)) continue;
+      if (text.length < 8 || isHeading(text) || found.some(({ value }) => value.topic === topic && value.text === text)) continue;
       found.push({ value: { topic, text }, page: hit.line.page, box: boxAround(hit.values), quote: text, confidence: hit.isBelow ? 0.75 : 0.85 });
     }
   }
   return found;
 }
+
+/** A label that is followed by another label has no text of its own. */
+const isHeading = (text: string): boolean => text.length < 40 && topicLabels.some(([, label]) => label.test(fold(text)) && !/[.:]/.test(text));
 
 const textOf = ({ values }: Labelled): string => values.map(({ text }) => text).join(' ').replace(/^[\s:-]+/, '').slice(0, 1200);
