@@ -72,6 +72,8 @@ export class Outbox {
    * @throws NotKept when the tablet could not write; TooLong when an envelope is over the limit
    */
   async add(drafts: readonly Draft[], now = new Date()): Promise<readonly Envelope[]> {
+    // What was here before is looked at before anything is added, or an old loss would hide behind a new record.
+    if (!this.isCompared) await this.load();
     const capturedAt = formatISO(now);
     const envelopes = drafts.map((draft) => checked({ format: 'kneeboard-envelope/1', id: v7(), capturedAt, sequence: 0, ...draft }));
     const written = await this.storage.use(async (database) => {
