@@ -94,7 +94,7 @@ export const es: Messages = {
     begin: 'Antes de empezar',
     beginLabel: (task) => `Antes de empezar: ${task}`,
     again: 'Revisar otra vez después de un descanso o un cambio',
-    againLabel: (task) => `Revisar otra vez: ${task}`,
+    againLabel: (task) => `Revisar otra vez después de un descanso o un cambio: ${task}`,
     nobody: 'Nadie tiene esta tarea.',
     notHeard: 'Todavía sin enviar: la oficina no lo sabe.',
     heard: 'La oficina lo sabe.',

@@ -24,7 +24,7 @@ const words: Readonly<Record<SigningState, { readonly kind: StateKind; readonly 
           <b>Version {{ version.number }}</b>
           <span class="kb-quiet kb-grow">published {{ momentShort(version.publishedAt) }} by {{ version.publishedBy }}</span>
           @for (text of version.texts; track text.language) {
-            <button type="button" class="kb-link" [attr.aria-label]="'Read version ' + version.number + ' in ' + languages[text.language]" (click)="read(version, text)">{{ languages[text.language] }} text</button>
+            <button type="button" class="kb-link" [attr.aria-label]="languages[text.language] + ' text of version ' + version.number" (click)="read(version, text)">{{ languages[text.language] }} text</button>
           }
         </div>
         @if (first) {

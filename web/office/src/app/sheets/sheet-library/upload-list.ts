@@ -41,7 +41,7 @@ import { SheetUploads } from '../sheet-uploads';
           <span>
             @if (upload.state === 'failed') {
               <button type="button" class="kb-link" [attr.aria-label]="'Send again: ' + upload.file.name" (click)="uploads.sendAgain(upload.id)">again</button>
-              <button type="button" class="kb-link" [attr.aria-label]="'Take off the list: ' + upload.file.name" (click)="uploads.remove(upload.id)">remove</button>
+              <button type="button" class="kb-link" [attr.aria-label]="'remove from the list: ' + upload.file.name" (click)="uploads.remove(upload.id)">remove</button>
             }
           </span>
         </li>
