@@ -18,7 +18,7 @@ import { ActionsApi } from './actions-api';
   template: `
     <form novalidate [formGroup]="form" (ngSubmit)="resolve()">
       <h2 matDialogTitle>{{ action.taskName ? 'Release ' + action.taskName.toLowerCase() : 'Resolve this' }}</h2>
-      <mat-dialog-content class="kb-stack">
+      <mat-dialog-content><div class="kb-stack">
         <kb-note kind="stop"
           ><b>{{ action.text }}</b
           ><br />{{ action.openedBy }}, {{ opened }}</kb-note
@@ -35,7 +35,7 @@ import { ActionsApi } from './actions-api';
           <kb-form-trouble [words]="sending.refusal()" />
         }
         <kb-text-field label="What was done, and how it was checked" formControlName="evidence" [lines]="4" hint="with the reading: instrument, place, figure, who" />
-      </mat-dialog-content>
+      </div></mat-dialog-content>
       <mat-dialog-actions align="start">
         <button matButton="filled" type="submit" [disabled]="sending.isSending()">Resolve with this evidence</button>
         <button matButton type="button" (click)="dialog.close()">Cancel</button>

@@ -31,7 +31,7 @@ interface ReadText {
   imports: [MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, Note, SignedText, Unready],
   template: `
     <h2 matDialogTitle>{{ question.heading }}</h2>
-    <mat-dialog-content class="kb-stack">
+    <mat-dialog-content><div class="kb-stack">
       @if (read(); as read) {
         @if (read.sha256 === null) {
           <kb-note kind="caution">This browser hashes only over https or on this machine. Save the bytes and use sha256sum.</kb-note>
@@ -54,7 +54,7 @@ interface ReadText {
       } @else {
         <kb-unready what="the text" [error]="error()" (retry)="load()" />
       }
-    </mat-dialog-content>
+    </div></mat-dialog-content>
     <mat-dialog-actions align="start">
       <button type="button" matButton="filled" (click)="dialog.close()">Close</button>
       <a matButton [href]="href" [download]="'text-' + question.sha256.slice(0, 12) + '.txt'">Save the bytes</a>

@@ -13,35 +13,26 @@ import { kindNames } from '../history-words';
 @Component({
   selector: 'kb-history-filters',
   template: `
-    <label
-      ><span>Job</span>
-      <select class="kb-field" (change)="changed.emit({ jobId: $any($event.target).value || null })">
+    <div><label for="history-job">Job</label><select class="kb-field" id="history-job" (change)="changed.emit({ jobId: $any($event.target).value || null })">
         <option value="">all</option>
         @for (job of jobs(); track job.id) {
           <option [value]="job.id" [selected]="job.id === filter().jobId">{{ job.name }}</option>
         }
-      </select>
-    </label>
-    <label
-      ><span>Person</span>
-      <select class="kb-field" (change)="changed.emit({ personId: $any($event.target).value || null })">
+      </select></div>
+    <div><label for="history-person">Person</label><select class="kb-field" id="history-person" (change)="changed.emit({ personId: $any($event.target).value || null })">
         <option value="">all</option>
         @for (person of people(); track person.id) {
           <option [value]="person.id" [selected]="person.id === filter().personId">{{ person.name }}</option>
         }
-      </select>
-    </label>
-    <label><span>From</span><input class="kb-field" type="date" [value]="filter().from ?? ''" [max]="filter().to ?? ''" (change)="changed.emit({ from: $any($event.target).value || null })" /></label>
-    <label><span>To</span><input class="kb-field" type="date" [value]="filter().to ?? ''" [min]="filter().from ?? ''" (change)="changed.emit({ to: $any($event.target).value || null })" /></label>
-    <label
-      ><span>Kind</span>
-      <select class="kb-field" (change)="changed.emit({ kind: $any($event.target).value || null })">
+      </select></div>
+    <div><label for="history-from">From</label><input class="kb-field" id="history-from" type="date" [value]="filter().from ?? ''" [max]="filter().to ?? ''" (change)="changed.emit({ from: $any($event.target).value || null })" /></div>
+    <div><label for="history-to">To</label><input class="kb-field" id="history-to" type="date" [value]="filter().to ?? ''" [min]="filter().from ?? ''" (change)="changed.emit({ to: $any($event.target).value || null })" /></div>
+    <div><label for="history-kind">Kind</label><select class="kb-field" id="history-kind" (change)="changed.emit({ kind: $any($event.target).value || null })">
         <option value="">all</option>
         @for (kind of kinds; track kind) {
           <option [value]="kind" [selected]="kind === filter().kind">{{ kindNames[kind] }}</option>
         }
-      </select>
-    </label>
+      </select></div>
     @if (isFiltered()) {
       <button type="button" class="kb-link" (click)="changed.emit(none)">Show everything</button>
     }
@@ -54,7 +45,7 @@ import { kindNames } from '../history-words';
       align-items: end;
     }
 
-    span {
+    label {
       display: block;
       font-size: var(--kb-small);
       color: var(--kb-ink-2);
@@ -67,6 +58,17 @@ import { kindNames } from '../history-words';
 
     .kb-link {
       margin-bottom: 6px;
+    }
+
+    @media (max-width: 700px) {
+      :host {
+        display: grid;
+        grid-template-columns: repeat(2, minmax(0, 1fr));
+      }
+
+      .kb-field {
+        width: 100%;
+      }
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -9,7 +9,7 @@ import { HistoryApi } from '../history-api';
   imports: [MatButton, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle],
   template: `
     <h2 matDialogTitle>How to check without us</h2>
-    <mat-dialog-content class="kb-stack">
+    <mat-dialog-content><div class="kb-stack">
       <p>
         Every signature, refusal and published text is an entry of one append-only list. Each entry's hash goes into a tree of hashes (RFC 9162, SHA-256). A checkpoint is a signed note that says how long the list was and what its root
         hash was at that moment. Whoever keeps an old checkpoint can prove that nothing before it was changed, removed or added later.
@@ -21,7 +21,7 @@ import { HistoryApi } from '../history-api';
         <li>Compare the checkpoint with the one you were sent or printed earlier. The list may only have grown.</li>
         <li>The exact text of a signature is the file behind “Save the bytes”: its <code>sha256sum</code> must be the one in the entry.</li>
       </ol>
-    </mat-dialog-content>
+    </div></mat-dialog-content>
     <mat-dialog-actions align="start"><button type="button" matButton="filled" matDialogClose>Close</button></mat-dialog-actions>
   `,
   styles: `

@@ -37,9 +37,8 @@ import { HowToCheckDialog } from './how-to-check-dialog';
     }
 
     .links {
-      display: inline-flex;
+      display: flex;
       gap: 1rem;
-      margin-inline: 0.5rem;
     }
 
     .kb-hash {

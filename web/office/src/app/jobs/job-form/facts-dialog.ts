@@ -18,14 +18,14 @@ import { JobFields } from './job-fields';
   template: `
     <form novalidate [formGroup]="form" (ngSubmit)="save()">
       <h2 matDialogTitle>Change facts</h2>
-      <mat-dialog-content class="kb-stack">
+      <mat-dialog-content><div class="kb-stack">
         @if (theirs(); as theirs) {
           <kb-conflict what="this job" [mine]="form.getRawValue()" [theirs]="theirs" (keepMine)="keepMine(theirs)" (takeTheirs)="takeTheirs(theirs)" />
         } @else {
           <kb-form-trouble [words]="sending.refusal()" />
         }
         <kb-job-fields [form]="form" [showOpen]="true" />
-      </mat-dialog-content>
+      </div></mat-dialog-content>
       <mat-dialog-actions align="start">
         <button matButton="filled" type="submit" [disabled]="sending.isSending()">Save facts</button>
         <button matButton type="button" (click)="dialog.close()">Cancel</button>

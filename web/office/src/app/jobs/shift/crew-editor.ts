@@ -19,15 +19,15 @@ import { type ShiftThings } from './shift-names';
         }
       </ul>
     </fieldset>
-    <label class="line">
-      <span>Competent person</span>
-      <select class="kb-field" (change)="lead.emit($any($event.target).value || null)">
+    <div class="line">
+      <label for="competent-person">Competent person</label>
+      <select class="kb-field" id="competent-person" (change)="lead.emit($any($event.target).value || null)">
         <option value="" [selected]="plan().competentPersonId === null">nobody named yet</option>
         @for (person of onShift(); track person.id) {
           <option [value]="person.id" [selected]="person.id === plan().competentPersonId">{{ person.name }}</option>
         }
       </select>
-    </label>
+    </div>
     <fieldset>
       <legend>Kits of this shift</legend>
       <ul class="kb-plain list">

@@ -31,7 +31,7 @@ export interface PublishQuestion {
   imports: [FormTrouble, MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, State],
   template: `
     <h2 matDialogTitle>{{ question.nextNumber === 1 ? 'Publish the checklist' : 'Publish version ' + question.nextNumber }}</h2>
-    <mat-dialog-content class="kb-stack">
+    <mat-dialog-content><div class="kb-stack">
       <kb-form-trouble [words]="refusal()" />
       <p>
         {{ question.day }}, version {{ question.nextNumber }}, in English and Spanish. It is frozen as it is signed.
@@ -62,7 +62,7 @@ export interface PublishQuestion {
           </ul>
         </div>
       }
-    </mat-dialog-content>
+    </div></mat-dialog-content>
     <mat-dialog-actions align="start">
       <button type="button" matButton="filled" [disabled]="isSending()" (click)="publish()">{{ question.label }}</button>
       <button type="button" matButton (click)="dialog.close()">Not yet</button>

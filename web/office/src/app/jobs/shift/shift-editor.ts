@@ -98,8 +98,8 @@ export class ShiftEditor {
   /** Sends what is not saved yet; resolves to whether everything is on the server. */
   async flush(): Promise<boolean> {
     clearTimeout(this.timer);
-    // One save at a time, because each needs the version the last one made.
-    if (this.sending) await this.sending;
+    // One save at a time, because each needs the version the last one made; another caller may have begun the next one meanwhile.
+    while (this.sending) await this.sending;
     if (this.saveState() === 'saved') return true;
     if (this.saveState() === 'conflict') return false;
     this.sending = this.send();

@@ -35,7 +35,7 @@ const kinds: readonly Choice<SignBasis['kind']>[] = [
   template: `
     <form novalidate [formGroup]="form" (ngSubmit)="sign()">
       <h2 matDialogTitle>Decide the exposure of {{ question.taskName.toLowerCase() }}</h2>
-      <mat-dialog-content class="kb-stack">
+      <mat-dialog-content><div class="kb-stack">
         <p class="kb-quiet">The program decides nothing here. Your name stands under this basis, and it opens the task while its conditions hold.</p>
         <kb-form-trouble [words]="sending.refusal()" />
         <kb-choice-field label="Basis" formControlName="kind" [choices]="kinds" />
@@ -47,7 +47,7 @@ const kinds: readonly Choice<SignBasis['kind']>[] = [
         <kb-text-field label="Conditions" formControlName="conditions" [lines]="3" hint="setting, machine, collector, hours: under which this holds" />
         <kb-text-field label="Ends on" kind="date" formControlName="endsOn" [min]="question.date" [hint]="isSamplingDay() ? 'a sampling day is good for the day of the shift only' : ''" />
         <kb-text-field label="Your name, as your signature" formControlName="typedName" [hint]="'write ' + name() + ' to sign'" />
-      </mat-dialog-content>
+      </div></mat-dialog-content>
       <mat-dialog-actions align="start">
         <button matButton="filled" type="submit" [disabled]="sending.isSending()">Sign this basis</button>
         <button matButton type="button" (click)="dialog.close()">Cancel</button>

@@ -15,6 +15,8 @@ const dustChoices: readonly { readonly value: DustMethod | null; readonly label:
   { value: 'none', label: 'no dust control' },
 ];
 
+let lastId = 0;
+
 /** One task in place, under the strip: every change counts at once, and the lines below answer it. */
 @Component({
   selector: 'kb-task-editor',
@@ -31,6 +33,7 @@ export class TaskEditor {
   readonly removed = output<void>();
   readonly closed = output<void>();
 
+  protected readonly id = `kb-task-editor-${(lastId += 1)}`;
   protected readonly dustChoices = dustChoices;
   protected readonly name = computed(() => TASKS[this.task().kind].name.en);
   protected readonly tools = computed(() => this.things().equipment.filter(({ kind }) => !collecting.includes(kind)));

@@ -1,6 +1,5 @@
 import { type Place, type SheetFields, type SheetEdit } from '#shared/sheets';
 import type * as z from 'zod';
-import { dayOf } from '../../pieces/dates';
 import { splitCodes, type SheetForm } from './sheet-form';
 
 export type ReviewKey = keyof SheetEdit | 'sections';
@@ -55,7 +54,7 @@ function wordsOf(value: ReturnType<SheetForm['getRawValue']>, fields: SheetField
     case 'language':
       return value.language === null ? 'not found' : languageNames[value.language];
     case 'revisedOn':
-      return value.revisedOn === null || !/^\d{4}-\d{2}-\d{2}$/.test(value.revisedOn) ? 'not found' : `${value.revisedOn} (${dayOf(value.revisedOn)})`;
+      return value.revisedOn ?? 'not found';
     case 'signalWord':
       return value.signalWord === null ? 'not found' : signalWordNames[value.signalWord];
     case 'hazardCodes':
