@@ -1,7 +1,9 @@
 import { deliveriesService } from './acknowledgements/deliveries-service';
 import { type Deps } from './deps';
+import { requestsService } from './library/requests-service';
 import { recordlogService } from './recordlog/recordlog-service';
 import { createGuardedReader } from './sds/reader/guarded-reader';
+import { sheetsService } from './sds/sheets-service';
 import { readSheetWork } from './sds/sheets-work';
 
 /** The reader's hard limits: shorter than the queue's patience, so that a stuck sheet is named and not tried for ever. */
@@ -16,6 +18,8 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   const deliveries = deliveriesService(deps);
   await queue.serve('read-sheet', readSheetWork(deps, reader));
   await queue.serve('mail-checkpoint', (data) => recordlog.mailCheckpoint(data));
+  const requests = requestsService(deps, sheetsService(deps));
+  await queue.serve('mail-request', (data) => requests.mailRequest(data));
   const stopCheckpoints = every(config.CHECKPOINT_SECONDS, 'checkpoints', () => recordlog.makeCheckpoints());
   const stopSweep = every(sweepSeconds, 'left-over deliveries', () => deliveries.interpretLeftOver());
   return async () => {

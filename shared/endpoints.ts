@@ -1,5 +1,6 @@
 import type * as z from 'zod';
 import { acknowledgementEndpoints, actionEndpoints, tabletDoorEndpoints } from './endpoints-field';
+import { libraryKeepingEndpoints } from './endpoints-library';
 import { libraryEndpoints, jobEndpoints, peopleEndpoints, sessionEndpoints } from './endpoints-office';
 import { type Role } from './common';
 
@@ -27,5 +28,6 @@ export const endpoints = {
   ...actionEndpoints,
   ...acknowledgementEndpoints,
   ...tabletDoorEndpoints,
+  ...libraryKeepingEndpoints,
 } satisfies Record<string, Endpoint>;
 export type EndpointName = keyof typeof endpoints;

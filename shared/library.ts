@@ -133,15 +133,17 @@ export type SitePage = z.infer<typeof SitePage>;
 
 /** A label for a mixed or decanted container (29 CFR 1910.1200(f)(6)). */
 export const LabelQuery = z.strictObject({ state: z.enum(['dry', 'mixing', 'wet', 'cured-being-ground']).optional() });
+const words = z.object({ en: z.string(), es: z.string() });
 export const ContainerLabel = z.object({
   identifier: z.string(),
-  part: z.string().nullable(),
-  state: z.string().nullable(),
+  state: words,
   signalWord: z.enum(['danger', 'warning', 'none']),
-  statements: z.array(z.object({ code: z.string(), en: z.string(), es: z.string() })),
+  statements: z.array(words.extend({ code: z.string() })),
   pictograms: z.array(z.string()),
-  /** Products whose sheet is missing: a label without them is not complete, and says so. */
+  /** What mixing adds, in plain words. */
+  effects: z.array(words),
+  /** Products whose sheet is missing: the label must not be printed before it is there. */
   partsWithoutSheet: z.array(z.string()),
-  notice: z.object({ en: z.string(), es: z.string() }),
+  notice: words,
 });
 export type ContainerLabel = z.infer<typeof ContainerLabel>;

@@ -29,7 +29,7 @@ export function acknowledgementsRoutes(history: HistoryService, recordlog: Recor
 }
 
 /** Streams a download. A fault on the way ends the connection, so that half a file is never taken for a whole one. */
-async function sendFile(response: Response, name: string, type: string, pieces: AsyncIterable<string>): Promise<undefined> {
+export async function sendFile(response: Response, name: string, type: string, pieces: AsyncIterable<string>): Promise<undefined> {
   response.set({ 'Content-Type': type, 'Content-Disposition': `attachment; filename="${name}"`, 'Cache-Control': 'no-store' });
   await pipeline(Readable.from(pieces), response);
   return undefined;

@@ -5,11 +5,13 @@ import { renderChecklistText } from '#compliance';
 import { type ShiftFacts } from '#compliance/facts';
 import { languages, type Language } from '#compliance/outcome';
 import { checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
-import { type PublishedVersion } from '#shared/jobs';
+import { productUses } from '#drizzle/schema/library';
+import { type PublishedVersion, type Shift } from '#shared/jobs';
 import { type Deps } from '../deps';
 import { ConflictError, NotFoundError, RefusedError } from '../errors';
 import { demandRole, type PersonActor } from '../http/actor';
 import { draftChecklist, findShift, newestVersion, readShift, readVersions } from '../jobs/shift-store';
+import { type Tx } from '../platform/database';
 import { appendEntry } from '../recordlog/recordlog-store';
 
 const sha256 = (bytes: Uint8Array) => createHash('sha256').update(bytes).digest('hex');
@@ -45,6 +47,7 @@ export function checklistsService({ database, clock }: Deps) {
         await tx.insert(checklistVersions).values({ organisationId: tx.organisationId, id, shiftId, jobId: shift.jobId, date: shift.date, number, facts: factsBytes, checklist: checklistBytes, factsSha256, manifest, manifestSha256, publishedBy: actor.personId, publishedByName: actor.personName, publishedAt });
         await tx.insert(checklistTexts).values(texts.map((text) => ({ ...own, ...text })));
         await tx.insert(checklistPeople).values(checklist.people.map((person) => ({ ...own, personId: person.personId, name: person.name, language: person.language })));
+        await registerUses(tx, shift, facts);
         const published = (await readVersions(tx, shiftId)).find((each) => each.id === id) as PublishedVersion;
         await appendEntry(tx, clock, {
           kind: 'checklist-version',
@@ -67,6 +70,14 @@ export function checklistsService({ database, clock }: Deps) {
   };
 }
 export type ChecklistsService = ReturnType<typeof checklistsService>;
+
+/** Where and when each product was used stays on record 30 years (29 CFR 1910.1020(d)(1)(ii)(B)). */
+async function registerUses(tx: Tx, shift: Shift, facts: ShiftFacts): Promise<void> {
+  const parts = facts.kits.flatMap((kit) => kit.parts.flatMap((part) => (part.sheet ? [{ ...part, sheet: part.sheet }] : [])));
+  if (parts.length === 0) return;
+  const place = { organisationId: tx.organisationId, jobId: shift.jobId, jobName: facts.jobName, siteName: facts.siteName, shiftId: shift.id, usedOn: shift.date };
+  await tx.insert(productUses).values(parts.map((part) => ({ ...place, id: newId(), productId: part.productId, productName: part.productName, revisionId: part.sheet.revisionId }))).onConflictDoNothing();
+}
 
 function refuseUnfinished(facts: ShiftFacts): void {
   const assigned = new Set(facts.tasks.flatMap((task) => task.assignments.map((each) => each.personId)));

@@ -5,8 +5,9 @@ import { type Tx } from './database';
 export interface Work {
   'read-sheet': { organisationId: string; revisionId: string };
   'mail-checkpoint': { organisationId: string; size: number };
+  'mail-request': { organisationId: string; requestId: string };
 }
-export const queueNames = ['read-sheet', 'mail-checkpoint'] as const satisfies readonly (keyof Work)[];
+export const queueNames = ['read-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
 
 export interface Queue {
   /** Queued in the caller's transaction: with its rows or not at all. */

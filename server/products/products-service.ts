@@ -17,6 +17,17 @@ import { makeProduct } from '../sds/sheets-service';
 type ProductRow = typeof products.$inferSelect;
 type KitRow = typeof kits.$inferSelect;
 
+/** A sheet as the rules see it. */
+export const sheetFactsOf = (revisionId: string, revisedOn: string | null, fields: SheetFields): SheetFacts => ({
+  revisionId,
+  revisedOn,
+  signalWord: fields.signalWord?.value ?? null,
+  hazardCodes: fields.hazardCodes.map((field) => field.value),
+  precautionaryCodes: fields.precautionaryCodes.map((field) => field.value),
+  casNumbers: fields.ingredients.flatMap(({ value }) => (value.cas ? [value.cas] : [])),
+  protectionWords: fields.protectionWords.map((field) => field.value),
+});
+
 /** The confirmed current sheet of each product, English before any other language. */
 async function currentSheets(tx: Tx, productIds: readonly string[]): Promise<Map<string, SheetFacts>> {
   if (productIds.length === 0) return new Map();
@@ -27,19 +38,7 @@ async function currentSheets(tx: Tx, productIds: readonly string[]): Promise<Map
     .orderBy(sql`${revisions.language} = 'en'`, asc(revisions.language));
   return new Map(
     rows.map((row) => {
-      const fields = row.fields as SheetFields;
-      return [
-        row.productId as string,
-        {
-          revisionId: row.id,
-          revisedOn: row.revisedOn,
-          signalWord: fields.signalWord?.value ?? null,
-          hazardCodes: fields.hazardCodes.map((field) => field.value),
-          precautionaryCodes: fields.precautionaryCodes.map((field) => field.value),
-          casNumbers: fields.ingredients.flatMap(({ value }) => (value.cas ? [value.cas] : [])),
-          protectionWords: fields.protectionWords.map((field) => field.value),
-        },
-      ];
+      return [row.productId as string, sheetFactsOf(row.id, row.revisedOn, row.fields as SheetFields)];
     }),
   );
 }
@@ -48,6 +47,11 @@ async function currentSheets(tx: Tx, productIds: readonly string[]): Promise<Map
 export async function readKitFacts(tx: Tx, ids: readonly string[] | null): Promise<KitFacts[]> {
   const rows = await tx.select().from(kits).where(and(eq(kits.organisationId, tx.organisationId), ids ? inArray(kits.id, [...ids]) : undefined)).orderBy(asc(kits.name), asc(kits.id));
   return toKitFacts(tx, rows);
+}
+/** One product as a part by itself, for its own label. */
+export async function readPartFacts(tx: Tx, productId: string): Promise<KitFacts['parts'][number] | undefined> {
+  const [product] = await tx.select().from(products).where(and(eq(products.organisationId, tx.organisationId), eq(products.id, productId)));
+  return product && { productId, productName: product.name, part: '', form: 'liquid', sheet: (await currentSheets(tx, [productId])).get(productId) ?? null };
 }
 async function toKitFacts(tx: Tx, rows: readonly KitRow[]): Promise<KitFacts[]> {
   if (rows.length === 0) return [];

@@ -32,7 +32,7 @@ export function sheetsRoutes(service: SheetsService, uploads: Uploads): Router {
 }
 
 /** A stranger's file: never sniffed, never run, never in our origin's powers. */
-function sendSheet(response: Response, { bytes, fileName, isPdf }: { bytes: Buffer; fileName: string; isPdf: boolean }): undefined {
+export function sendSheet(response: Response, { bytes, fileName, isPdf }: { bytes: Buffer; fileName: string; isPdf: boolean }): undefined {
   response
     .set({
       'Content-Type': isPdf ? 'application/pdf' : 'application/octet-stream',
