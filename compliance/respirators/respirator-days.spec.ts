@@ -32,6 +32,9 @@ describe('[SIL-20] respirator days', () => {
     expect(countRespiratorDays(days, '2026-12-01')).toMatchObject({ inAny12Months: 30, inCalendarYear: 15, isTriggered: true });
     // Fifteen days a year apart to the day never stand in one 12-month window together.
     expect(countRespiratorDays([...run('2025-03-01', 15), ...run('2026-03-15', 15)], '2026-12-01')).toMatchObject({ inAny12Months: 15, isTriggered: false });
+    // The day a year after the first belongs to the next 12 months.
+    expect(countRespiratorDays([...run('2026-01-05', 29), { on: '2027-01-05', basis: 'silica-table-1' }], '2026-12-01')).toMatchObject({ inAny12Months: 29, isTriggered: false });
+    expect(countRespiratorDays([...run('2026-01-05', 29), { on: '2027-01-04', basis: 'silica-table-1' }], '2026-12-01')).toMatchObject({ inAny12Months: 30, reachedOn: '2027-01-04' });
     expect(countRespiratorDays([{ on: '2025-12-01', basis: 'silica-table-1' }, { on: '2025-12-02', basis: 'silica-table-1' }], '2026-12-01').inLast12Months).toBe(1);
   });
 

@@ -19,6 +19,8 @@ describe('surface profiles', () => {
     expect(PROFILE_CHIPS.map((row) => row.profile)).toEqual([1, 2, 3, 4, 5, 6, 7, 8, 9, 10]);
     expect(PROFILE_CHIPS[1]!.name.en).toBe('grinding');
     expect(PROFILE_CHIPS[4]!.name.en).toBe('medium shot blast');
+    // Chips 1 to 6 in three sources, 7 to 10 in an instrument maker's list.
+    expect(PROFILE_CHIPS.filter((row) => row.source.note!.includes('three sources')).map((row) => row.profile)).toEqual([1, 2, 3, 4, 5, 6]);
   });
 
   it('proposes methods for a target, the gentlest first', () => {
@@ -58,7 +60,7 @@ describe('surface profiles', () => {
 
   // Guide from memory; 10 mil = 0.254 mm, 40 mil = 1.016 mm, 1/8 in = 3.175 mm, 1/4 in = 6.35 mm.
   it.each([
-    [0.254, 1, 3], [0.26, 3, 5], [1.016, 3, 5], [3.175, 4, 6], [6.35, 5, 9], [6.4, 5, 10],
+    [0.254, 1, 3], [0.255, 3, 5], [1.016, 3, 5], [1.017, 4, 6], [3.175, 4, 6], [3.176, 5, 9], [6.35, 5, 9], [6.351, 5, 10],
   ])('%d mm asks for CSP %d to %d', (thicknessMm, min, max) => {
     const row = profileForThickness(thicknessMm);
     expect([row.minProfile, row.maxProfile]).toEqual([min, max]);
