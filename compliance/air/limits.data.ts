@@ -33,10 +33,10 @@ const row = (substanceId: string, jurisdictionId: string, ...[scope, kind, value
 });
 
 const SILICA_IN_FORCE = '2017-09-23';
-const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'Values read; the date from which construction had to comply recalled.' });
+const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'Enforced in construction from 23 September 2017: OSHA memorandum of 25 June 2018.' });
 const NIOSH_MDI = sourced('NIOSH pocket guide and IDLH documentation, MDI', 'read');
 const OSHA_CHEMICAL_PAGE = (section: string): Source => usFederal(section, 'read', { note: 'As shown on the OSHA chemical page, which lists construction and general industry apart.' });
-const MDA = (paragraph: string): Source => usFederal('1926.60', 'from-memory', { paragraph });
+const MDA = (paragraph: string): Source => usFederal('1926.60', 'partly', { paragraph, note: 'Figures read in the proposal of 12 May 1989; that the final text kept them is recalled.' });
 
 /** Limits and ceilings for what floor work sets free, in force or advised. Places other than those with a pack are for orientation. */
 export const LIMIT_ROWS: readonly LimitRow[] = [

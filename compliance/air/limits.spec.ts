@@ -52,9 +52,9 @@ describe('[AIR-02] limits', () => {
     ['ipda/us-federal/construction/twa-8h', null, 'ppm', 'from-memory'],
     ['benzyl-alcohol/us-federal/construction/twa-8h', null, 'ppm', 'from-memory'],
     ['benzyl-alcohol/aiha/advice/twa-8h/vapor', 10, 'ppm', 'from-memory'],
-    ['mda/us-federal/construction/twa-8h', 10, 'ppb', 'from-memory'],
-    ['mda/us-federal/construction/stel-15-min', 100, 'ppb', 'from-memory'],
-    ['mda/us-federal/construction/action-level-8h', 5, 'ppb', 'from-memory'],
+    ['mda/us-federal/construction/twa-8h', 10, 'ppb', 'partly'],
+    ['mda/us-federal/construction/stel-15-min', 100, 'ppb', 'partly'],
+    ['mda/us-federal/construction/action-level-8h', 5, 'ppb', 'partly'],
     ['carbon-monoxide/us-federal/construction/twa-8h/vapor', 50, 'ppm', 'from-memory'],
   ])('%s: %d %s (%s)', (id, value, unit, verified) => {
     const row = LIMIT_ROWS.find((each) => each.id === `limit/${id}`)!;

@@ -93,7 +93,7 @@ const US_CALIFORNIA: JurisdictionPack = {
     missing('protection', 'Not read.', 'No se leyó.'),
     missing('records', 'Not read.', 'No se leyó.'),
     missing('medical', 'Not read.', 'No se leyó.'),
-    partial('meetings', 'A meeting every ten working days, recalled.', 'Una reunión cada diez días hábiles, de memoria.', sourced('8 CCR 1509', 'from-memory')),
+    partial('meetings', 'A meeting every ten working days; the rest of the section was not read.', 'Una reunión cada diez días hábiles; no se leyó el resto de la sección.', sourced('8 CCR 1509', 'read', { note: 'Quoted on the state department’s page and in the contractors board’s newsletter.' })),
   ],
   localDuties: [
     { id: 'us-california/dust-reduction', text: words('Power tools on concrete or masonry need dust reduction, beside the silica rule.', 'Las herramientas motorizadas sobre concreto o mampostería necesitan reducción de polvo, además de la norma de sílice.'), source: sourced('8 CCR 1530.1', 'partly', { note: 'That the section exists was read.' }) },

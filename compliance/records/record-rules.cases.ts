@@ -7,7 +7,7 @@ import { type RecordFacts } from './retention';
 const DAY = '2026-12-01';
 const READ = (paragraph: string) => usFederal('1910.1020', 'read', { paragraph });
 const record = (changes: Partial<RecordFacts>): RecordFacts => ({ record: 'exposure', jurisdictionId: 'us-federal', madeOn: '1996-12-01', employmentEndedOn: null, isReplaced: false, hasSubstitute: false, ...changes });
-const CAL = sourced('8 CCR 1509', 'from-memory');
+const CAL = sourced('8 CCR 1509', 'read');
 
 export const RECORD_CASES: readonly RuleCases[] = [
   casesOf(mayDiscardRecord, [

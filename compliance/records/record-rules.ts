@@ -75,7 +75,7 @@ export interface MeetingFacts {
 export const safetyMeetings: Rule<MeetingFacts> = {
   id: 'safety-meeting-cadence',
   title: words('Safety meetings held in time', 'Reuniones de seguridad a tiempo'),
-  source: sourced('the place’s pack', 'from-memory', { note: 'California: 8 CCR 1509, every ten working days. Federal law sets no interval.' }),
+  source: sourced('the place’s pack', 'partly', { note: 'California: 8 CCR 1509, every ten working days, read; that federal law sets no interval is recalled.' }),
   duties: ['GATE-09'],
   evaluate({ everyWorkingDays, lastHeldOn, holidays }, asOf) {
     if (everyWorkingDays === null) return notApplicable(words('The law here sets no interval.', 'La ley de aquí no fija un intervalo.'));

@@ -60,8 +60,8 @@ export const RETENTION_ROWS: readonly RetentionRow[] = [
   row('us-federal', 'register-of-use', years(30), 'register of use: identity, where and when', 'registro de uso: identidad, dónde y cuándo', ACCESS('(d)(1)(ii)(B)')),
   row('us-federal', 'medical', { kind: 'employment-plus', years: 30 }, 'medical record, clearance', 'registro médico, autorización', ACCESS('(d)(1)(i)', 'Open textbook restating the paragraph.')),
   row('us-federal', 'fit-test', { kind: 'until-replaced' }, 'fit test', 'prueba de ajuste', usFederal('1910.134', 'read', { paragraph: '(m)(2)(ii)' })),
-  row('us-federal', 'noise-measurement', years(2), 'noise measurement', 'medición de ruido', usFederal('1910.95', 'from-memory', { paragraph: '(m)(3)', note: 'General industry.' })),
-  row('us-federal', 'audiogram', { kind: 'employment-plus', years: 0 }, 'audiogram', 'audiograma', usFederal('1910.95', 'from-memory', { paragraph: '(m)(3)', note: 'General industry.' })),
+  row('us-federal', 'noise-measurement', years(2), 'noise measurement', 'medición de ruido', usFederal('1910.95', 'read', { paragraph: '(m)(3)', note: 'General industry. OSHA letter of 11 May 1983 and a university manual.' })),
+  row('us-federal', 'audiogram', { kind: 'employment-plus', years: 0 }, 'audiogram', 'audiograma', usFederal('1910.95', 'read', { paragraph: '(m)(3)', note: 'General industry. OSHA letter of 11 May 1983 and a university manual.' })),
   row('us-federal', 'training', { kind: 'no-period' }, 'hazard communication training, toolbox talk', 'capacitación en comunicación de peligros, charla', usFederal('1910.1200', 'from-memory', { note: 'No federal period.' })),
   row('us-federal', 'silica-plan', { kind: 'until-replaced' }, 'written exposure control plan', 'plan escrito de control de exposición', usFederal('1926.1153', 'read', { paragraph: '(g)(2)', note: 'Keeping old versions as evidence is practice.' })),
 
