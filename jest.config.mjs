@@ -23,8 +23,8 @@ export default {
       setupFilesAfterEnv: ['<rootDir>/test/support/web-setup.ts'],
       modulePathIgnorePatterns: ['<rootDir>/dist', '<rootDir>/.data'],
     },
-    { ...node, displayName: 'api', testTimeout: 60_000, testMatch: ['<rootDir>/test/api/**/*.spec.ts'] },
+    { ...node, displayName: 'api', setupFilesAfterEnv: ['<rootDir>/test/support/patience.ts'], testMatch: ['<rootDir>/test/api/**/*.spec.ts'] },
     { ...node, displayName: 'browser', testMatch: ['<rootDir>/test/browser/**/*.spec.ts'] },
-    { ...node, displayName: 'faults', testTimeout: 600_000, testMatch: ['<rootDir>/test/faults/**/*.spec.ts'] },
+    { ...node, displayName: 'faults', setupFilesAfterEnv: ['<rootDir>/test/support/patience.ts'], testMatch: ['<rootDir>/test/faults/**/*.spec.ts'] },
   ],
 };
