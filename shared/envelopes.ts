@@ -118,8 +118,8 @@ export const TabletDay = z.object({
         }),
       ),
       briefing: z.object({ at: Instant, noLineIds: z.array(z.string()) }).nullable(),
-      /** Tasks stopped by a "No", until the action is resolved. */
-      stopped: z.array(z.object({ taskId: Id, text: z.string(), actionId: Id })),
+      /** Tasks stopped by a "No", until the action is resolved; a "No" to a line about the whole job stops each of its tasks. `lineId` finds the line in the crew's language. */
+      stopped: z.array(z.object({ taskId: Id, lineId: z.string().nullable().default(null), text: z.string(), actionId: Id })),
       startedTaskIds: z.array(Id),
       sheets: z.array(z.object({ revisionId: Id, productName: z.string() })),
     }),

@@ -1,4 +1,5 @@
-import { and, asc, desc, eq, gte, inArray, isNotNull, isNull, lte } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, isNotNull, isNull, lte, or } from 'drizzle-orm';
+import { type Checklist } from '#compliance/answer';
 import { correctiveActions } from '#drizzle/schema/acknowledgements';
 import { answerSets, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
 import { jobs, shiftKits, shifts } from '#drizzle/schema/jobs';
@@ -59,7 +60,7 @@ export function tabletDayService({ config, database, clock }: Deps) {
     const asked = (await readAsked(tx, [version.id])).get(version.id) ?? [];
     const withPin = asked.length === 0 ? [] : await tx.select({ personId: pins.personId }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, asked.map((person) => person.personId))));
     const answers = await tx.select().from(answerSets).where(and(eq(answerSets.organisationId, tx.organisationId), eq(answerSets.versionId, version.id))).orderBy(asc(answerSets.capturedAt));
-    const stops = await tx.select().from(correctiveActions).where(and(eq(correctiveActions.organisationId, tx.organisationId), eq(correctiveActions.shiftId, shift.id), isNull(correctiveActions.resolvedAt), isNotNull(correctiveActions.taskId))).orderBy(asc(correctiveActions.openedAt));
+    const stops = await tx.select().from(correctiveActions).where(and(eq(correctiveActions.organisationId, tx.organisationId), eq(correctiveActions.shiftId, shift.id), isNull(correctiveActions.resolvedAt), or(isNotNull(correctiveActions.taskId), isNotNull(correctiveActions.lineId)))).orderBy(asc(correctiveActions.openedAt));
     const sheets = await tx
       .selectDistinct({ revisionId: revisions.id, productName: products.name })
       .from(shiftKits)
@@ -70,6 +71,7 @@ export function tabletDayService({ config, database, clock }: Deps) {
       .orderBy(asc(products.name));
     const briefing = answers.filter((set) => set.kind === 'briefing').at(-1);
     const noLines = (set: typeof answerSets.$inferSelect) => (JSON.parse(set.answers) as Answers).filter((answer) => answer.answer === 'no').map((answer) => answer.lineId);
+    const taskIds = (JSON.parse(version.checklist.toString('utf8')) as Checklist).tasks.map((task) => task.taskId);
     const competent = (shift.plan as ShiftPlan).competentPersonId;
     return {
       shiftId: shift.id,
@@ -80,7 +82,8 @@ export function tabletDayService({ config, database, clock }: Deps) {
       version: { id: version.id, number: version.number, publishedAt: version.publishedAt.toISOString(), texts: texts.map(({ language, sha256, bytes }) => ({ language: language as 'en' | 'es', sha256, text: bytes.toString('utf8') })) },
       people: asked.map(({ personId, ...person }) => ({ ...person, id: personId, isLead: personId === competent, hasPin: withPin.some((pin) => pin.personId === personId) })),
       briefing: briefing ? { at: briefing.capturedAt.toISOString(), noLineIds: noLines(briefing) } : null,
-      stopped: stops.map((stop) => ({ taskId: stop.taskId as string, text: stop.text, actionId: stop.id })),
+      // A "No" to a line about the whole job names no task: it stops each of them.
+      stopped: stops.flatMap((stop) => (stop.taskId ? [stop.taskId] : taskIds).map((taskId) => ({ taskId, lineId: stop.lineId, text: stop.text, actionId: stop.id }))),
       startedTaskIds: [...new Set(answers.filter((set) => set.kind === 'start-check' && set.taskId && noLines(set).length === 0).map((set) => set.taskId as string))],
       sheets,
     };

@@ -91,7 +91,7 @@ describe('a task', () => {
   });
 
   it('says a stop once when both the office and the tablet know it', () => {
-    const job = dayJob({ stopped: [{ taskId: ids.mixing, text: 'Text of shroud', actionId: ids.action }] });
+    const job = dayJob({ stopped: [{ taskId: ids.mixing, lineId: 'shroud', text: '"No" to: Shroud on.', actionId: ids.action }] });
     expect(mixing([posted({ kind: 'start-check', taskId: ids.mixing, answers: no('shroud') }, later)], job)?.stops).toHaveLength(1);
   });
 });

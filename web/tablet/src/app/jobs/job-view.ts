@@ -119,7 +119,9 @@ function noLineIds(envelope: Envelope): readonly string[] {
 function taskView(task: TextTask, job: DayJob, people: readonly PersonView[], newer: readonly Posted[], lines: ReadonlyMap<string, TextLine>): TaskView {
   const base = { task, people: people.filter((person) => task.personIds.includes(person.id)) };
   if (task.state !== 'ready') return { ...base, state: task.state, stops: [] };
-  const heard = job.stopped.filter((stop) => stop.taskId === task.taskId).map((stop): Stop => ({ text: stop.text, isHeard: true }));
+  const heard = job.stopped
+    .filter((stop) => stop.taskId === task.taskId)
+    .map((stop): Stop => ({ text: (stop.lineId && lines.get(stop.lineId)?.text) || stop.text, isHeard: true }));
   const own = newer.flatMap((one) => stopsOf(one, task.taskId, lines)).filter((stop) => !heard.some(({ text }) => text === stop.text));
   const stops = [...heard, ...own];
   if (stops.length > 0) return { ...base, state: 'stopped', stops };
