@@ -25,7 +25,8 @@ interface Amount extends Cell {
 
 interface Columns {
   amount: Segment | null;
-  name: Segment | null;
+  /** From where to where the column of names reaches: between its neighbours' headings, for headings may be centered. */
+  name: { from: number; to: number } | null;
 }
 
 const amountHeading = /%|\b(weight|wt|conc|concentration|concentracion|concentrations|content|contenido|teneur|gehalt|gew|konzentration|percent|porcentaje|range|amount|anteil|peso|poids|quantity|proportion|vol)\b/;
@@ -94,8 +95,12 @@ function columnsOf(lines: Line[], anchors: Anchor[]): Columns {
   const near = above.filter((line) => line.page === headingRow.page && Math.abs(line.box.y - headingRow.box.y) < headingRow.box.height * 3).flatMap((line) => line.segments);
   const isCell = (segment: Segment): boolean => segment.text.length < 40;
   const amount = near.find((segment) => isCell(segment) && amountHeading.test(fold(segment.text)) && !/tlv|pel|limit|ppm|mg|pressure|cas/.test(fold(segment.text))) ?? null;
-  const name = near.find((segment) => isCell(segment) && nameHeading.test(fold(segment.text)) && !casHeading.test(fold(segment.text))) ?? null;
-  return { amount, name };
+  const named = near.find((segment) => isCell(segment) && nameHeading.test(fold(segment.text)) && !casHeading.test(fold(segment.text)));
+  if (!named) return { amount, name: null };
+  const others = near.filter((segment) => segment !== named);
+  const from = Math.max(0, ...others.map(({ box }) => box.x + box.width).filter((end) => end <= named.box.x));
+  const to = Math.min(Infinity, ...others.map(({ box }) => box.x).filter((start) => start >= named.box.x + named.box.width));
+  return { amount, name: { from, to } };
 }
 
 /** Pairs numbers with amounts: same row first, then row by row where both columns have as many entries, then the nearest. */
@@ -187,7 +192,7 @@ function pairApart(lines: Line[], columns: Columns, open: Anchor[], all: Anchor[
 
 /** Cells that hold words of a name; in the name column where it is known. */
 function nameSegments(line: Line | undefined, { name }: Columns): Segment[] {
-  return (line?.segments ?? []).filter((segment) => isNameText(withoutCas(segment.text)) && (name === null || (segment.box.x < name.box.x + name.box.width && segment.box.x + segment.box.width > name.box.x - 30)));
+  return (line?.segments ?? []).filter((segment) => isNameText(withoutCas(segment.text)) && (name === null || (segment.box.x >= name.from - 6 && segment.box.x < name.to)));
 }
 
 /** Rows apart; a page turn counts as nothing. */
@@ -201,30 +206,49 @@ function isNear(anchor: Anchor, amount: Amount, all: Anchor[]): boolean {
 
 /** The name of the row: in the name column, else the first words on the line, else the nearest line above. */
 function nameOf(lines: Line[], anchor: Anchor, before: Anchor | undefined, after: Anchor | undefined, columns: Columns, amountRows: ReadonlySet<number>): { segment: Segment; text: string } | null {
-  const from = Math.max(before && before.row < anchor.row ? before.row + 1 : 0, anchor.row - 5);
+  const from = Math.max(before && before.row < anchor.row ? before.row + 1 : 0, anchor.row - (columns.name ? 12 : 5));
   for (let row = anchor.row; row >= from; row--) {
     const line = lines[row];
     const segment = line ? nameCell(line, anchor, columns) : null;
-    if (!segment) continue;
-    const rest = [segment.text];
+    if (!line || !segment) continue;
+    const rest = [...(row < anchor.row ? wordsAbove(lines, row, segment, from, amountRows) : []), segment.text];
     let last = segment;
     for (let below = row + 1; below < Math.min(lines.length, after && after.row > row ? after.row : lines.length, row + 4); below++) {
       const next = lines[below]?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 5);
       if (!next || next.page !== last.page || next.box.y - last.box.y > last.box.height * 2 || !isNameText(next.text) || /:|\.$/.test(next.text) || below === anchor.row) break;
       // A row with its own amount is another ingredient; a row that names the columns opens another table.
-      if (below > anchor.row && (next.text.length > 60 || amountRows.has(below) || lines[below]?.segments.some(({ text }) => casHeading.test(fold(text))))) break;
+      if (below > anchor.row && (next.text.length > 60 || amountRows.has(below) || isHeadingRow(lines[below]))) break;
       rest.push(next.text);
       last = next;
     }
-    return { segment, text: cleanName(rest.join(' '), anchor.cas) };
+    const text = cleanName(rest.join(' '), anchor.cas);
+    return text ? { segment, text } : null;
   }
   return null;
 }
 
+/** The lines of a name above its last one, where the number stands lower in the row. */
+function wordsAbove(lines: Line[], row: number, segment: Segment, from: number, amountRows: ReadonlySet<number>): string[] {
+  const words: string[] = [];
+  let last = segment;
+  for (let above = row - 1; above >= Math.max(from, row - 3); above--) {
+    const piece = lines[above]?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 5);
+    if (!piece) continue;
+    const isApart = piece.page !== last.page || last.box.y - piece.box.y > last.box.height * 2.2;
+    if (isApart || !isNameText(piece.text) || /[:.]$/.test(piece.text) || isHeadingRow(lines[above])) break;
+    words.unshift(piece.text);
+    last = piece;
+    if (amountRows.has(above)) break;
+  }
+  return words;
+}
+
+const isHeadingRow = (line: Line | undefined): boolean => line?.segments.some(({ text }) => casHeading.test(fold(text)) || (amountHeading.test(fold(text)) && !/\d/.test(text))) ?? false;
+
+/** The name on one line: in the name column where that is known, else the first words, else what stands beside the number. */
 function nameCell(line: Line, anchor: Anchor, columns: Columns): Segment | null {
-  const cells = line.segments.filter((segment) => isNameText(withoutCas(segment.text)));
-  const inColumn = columns.name ? cells.find((segment) => columns.name && segment.box.x < columns.name.box.x + columns.name.box.width && segment.box.x + segment.box.width > columns.name.box.x - 30) : undefined;
-  return inColumn ?? cells[0] ?? (isNameText(withoutCas(anchor.segment.text)) && line.segments.includes(anchor.segment) ? anchor.segment : null);
+  const own = line.segments.includes(anchor.segment) && isNameText(withoutCas(anchor.segment.text)) ? anchor.segment : null;
+  return nameSegments(line, columns)[0] ?? own;
 }
 
 const withoutCas = (text: string): string => text.replace(/\(?\s*(\(?cas\)?)?\s*(-?\s*(no|nr|n°|number|#|rn))?\.?\s*:?\s*\d{2,7}-\d{2}-\d\s*\)?/gi, ' ').trim();
@@ -233,5 +257,5 @@ const isNameText = (text: string): boolean => hasLetters(text) && wholeConcentra
 
 function cleanName(text: string, cas: string): string {
   const name = withoutCas(text).replaceAll(cas, ' ').replace(/\s*\b(\d+([.,]\d+)?\s?(-|–)\s?)?\d+([.,]\d+)?\s?%.*$/, '').replace(/\s+/g, ' ').replace(/^[\s:;,-]+|[\s:;,(-]+$/g, '').trim();
-  return name || text.trim();
+  return name;
 }

@@ -36,7 +36,7 @@ export function findLabelled(lines: Line[], label: RegExp, isLoose = false): Lab
       if (!match) return;
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
-      const mark = /^\s*(\([^)]{0,60}\))?\s*([:.\-–*]|$)/.exec(rest) ?? (otherThing.test(rest) ? null : /^ [a-z '/&()]{2,34}:/.exec(rest));
+      const mark = /^\s*(\([^)]{0,60}\))?\s*([:\-–*]|$)/.exec(rest) ?? (otherThing.test(rest) ? null : /^ [a-z '/&()]{2,34}:/.exec(rest));
       if (!mark && match[0].length < folded.length) {
         if (isLoose && /^ \S/.test(rest)) found.push({ line, index, values: [tail(segment, rest)], isBelow: false });
         return;
@@ -71,7 +71,7 @@ function valueOf(lines: Line[], index: number, at: number, printed: string, rest
   const line = lines[index];
   const segment = line?.segments[at];
   if (!line || !segment) return null;
-  const inline = rest ? /[:*]\s*(\S.*)$|^\s*[-–.]\s+(\S.*)$/.exec(afterLabel(printed, rest)) : null;
+  const inline = rest ? /[:*]\s*(\S.*)$|^\s*[-–]\s+(\S.*)$/.exec(afterLabel(printed, rest)) : null;
   const inlineText = (inline?.[1] ?? inline?.[2] ?? '').trim();
   if (inlineText) {
     const share = inlineText.length / segment.text.length;

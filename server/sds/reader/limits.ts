@@ -27,7 +27,7 @@ const terms: readonly (readonly [string, RegExp])[] = [
 const endOfLimits = /^(\d[\d.]*\s+)?(appropriate engineering|engineering (controls|measures)|exposure controls|personal protect|individual protection|respiratory protection|eye(\/face)? protection|hand protection|skin protection|ventilation|controles? tecnicos|controles? de ingenieria|proteccion|controles de la exposicion|mesures d'ordre technique|protection|technische|begrenzung|persönliche|augenschutz|atemschutz|handschutz)/;
 
 /** Limits of section 8: each figure with a unit of air, its kind, and the substance of its row or of the row above. */
-export function exposureLimits(parts: SheetParts): Field<ExposureLimit>[] {
+export function exposureLimits(parts: SheetParts, ingredientNames: readonly string[]): Field<ExposureLimit>[] {
   const lines = parts.sections.bodies.get('exposure') ?? [];
   const found: Field<ExposureLimit>[] = [];
   let substance: string | null = null;
@@ -55,11 +55,20 @@ export function exposureLimits(parts: SheetParts): Field<ExposureLimit>[] {
       const lineKind = kindOf(rowBefore);
       const kind = [lineKind ?? (above ? kindOf(above.text) : null) ?? rowKind, termOf(before.slice(-30)) ?? termOf(segment.text.slice(match.index + match[0].length, match.index + match[0].length + 24)) ?? (above ? termOf(above.text) : null) ?? termOf(sinceLastAmount(rowBefore))].filter((part) => part !== null).join(' ');
       const value = Number((match[1] ?? '').replace(',', '.'));
-      const limit: ExposureLimit = { substance, kind: kind || null, value: Number.isFinite(value) ? value : null, unit: unitOf(match[2] ?? ''), text: line.text };
-      found.push({ value: limit, page: line.page, box: segment.box, quote: line.text, confidence: substance && kind ? 0.8 : 0.55 });
+      const known = substance ? ingredientOf(substance, ingredientNames) : null;
+      const limit: ExposureLimit = { substance: known ?? substance, kind: kind || null, value: Number.isFinite(value) ? value : null, unit: unitOf(match[2] ?? ''), text: line.text };
+      found.push({ value: limit, page: line.page, box: segment.box, quote: line.text, confidence: known && kind ? 0.85 : 0.5 });
     }
   }
   return found;
+}
+
+/** A name wrapped in a narrow cell is only part of the ingredient's name; it counts when it is part of one only. */
+function ingredientOf(substance: string, names: readonly string[]): string | null {
+  const words = fold(substance);
+  const exact = names.find((name) => fold(name) === words);
+  const around = words.length < 5 ? [] : names.filter((name) => fold(name).includes(words) || words.includes(fold(name)));
+  return exact ?? (around.length === 1 ? (around[0] ?? null) : null);
 }
 
 const amountsIn = (line: Line): { segment: Segment; match: RegExpExecArray }[] => line.segments.flatMap((segment) => [...segment.text.matchAll(amount)].map((match) => ({ segment, match })));
@@ -78,8 +87,8 @@ function substanceIn(line: Line): string | null {
   if (!first) return null;
   const text = first.text.replace(amount, ' ').replace(/^[:\s]+/, '').trim();
   const folded = fold(text);
-  const isWords = hasLetters(text) && text.length < 70 && !/[.!?]$/.test(text) && kindOf(text) === null && termOf(text) === null;
-  const isHeading = /^(component|ingredient|chemical|substance|exposure|occupational|control parameter|limit|not |no |none|type|value|form|country|basis|source|\d+(\.\d+)*\s|components|nombre|ingrediente|parametros|valores|inhaltsstoff|see |date|reference|remark|note|total|respirable|inhalable|as |united|uk|us)\b/.test(folded);
+  const isWords = hasLetters(text) && text.length < 70 && !/[.!?:]$/.test(text) && kindOf(text) === null && termOf(text) === null;
+  const isHeading = /^(component|ingredient|chemical|substance|exposure|occupational|control parameter|limit|not |no |none|type|value|form|country|basis|source|\d+(\.\d+)*\s|components|nombre|ingrediente|parametros|valores|inhaltsstoff|see |date|reference|remark|note|total|respirable|inhalable|precautions|recommended|inhaltsstoffe?|ceil|as |united|uk|us)\b/.test(folded);
   if (casNumbersIn(line.text).length > 0 && isWords) return text.replace(/\(?\d{2,7}-\d{2}-\d\)?/, '').replace(/\(?\s*CAS[^)]*\)?\s*$/i, '').trim() || null;
   return isWords && !isHeading ? text.replace(/\s*\(\s*CAS\b[^)]*$/i, '') || null : null;
 }

@@ -38,6 +38,7 @@ export function readLines(pages: Line[][]): SheetReading {
   const sections = findSections(lines);
   const language = languageField(text, lines);
   const parts: SheetParts = { sections, lines, running, pages: pages.length, language: language?.value ?? 'en' };
+  const composition = ingredients(parts);
   return {
     state: 'read',
     pages: pages.length,
@@ -48,8 +49,8 @@ export function readLines(pages: Line[][]): SheetReading {
     revisionDate: revisionDate(parts),
     signalWord: signalWord(parts),
     ...hazardStatements(parts),
-    ingredients: ingredients(parts),
-    limits: exposureLimits(parts),
+    ingredients: composition,
+    limits: exposureLimits(parts, composition.flatMap(({ value }) => (value.name ? [value.name] : []))),
     ppeWords: ppeWords(parts),
     sections: sections.headings,
     text,

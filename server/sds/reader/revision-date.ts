@@ -21,7 +21,8 @@ interface Dated {
   role: DateRole;
   line: Line;
   box: Box;
-  quote: string;
+  /** The label before it, as printed. */
+  label: string;
   /** Whether only the bare word "date" stands before it. */
   isBare: boolean;
 }
@@ -44,7 +45,7 @@ export function revisionDate(parts: SheetParts): Field<string> | null {
     confidence -= 0.2;
     reasons.push('Several dates carry the same role; this is the latest.');
   } else if (revisions.length > 0 && dated.some(({ date }) => date.iso !== latest.date.iso)) {
-    reasons.push(`Several dates stand on the sheet. This one follows "${latest.quote.slice(0, 40).trim()}".`);
+    reasons.push(`Several dates stand on the sheet. This one follows "${latest.label}".`);
   }
   if (latest.date.other) {
     const resolved = resolvedBy(latest.date, dated) ?? order;
@@ -82,7 +83,7 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
       const own = segment.text.slice(from, date.start);
       const label = `${before} ${own}`;
       const role = roleOf(label) ?? roleOfColumn(lines, index, segment) ?? roleOfAbove(lines, index, segment);
-      if (role) found.push({ date, ...role, line, box: boxOf(segment, date), quote: (role.words + segment.text.slice(0, date.end)).trim() });
+      if (role) found.push({ date, ...role, line, box: boxOf(segment, date), label: lastLabel(role.words) });
       from = date.end;
       before = '';
     }
@@ -91,6 +92,8 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
   });
   return found;
 }
+
+const lastLabel = (words: string): string => words.replace(/[\s:.-]+$/, '').split(/:\s|\s{2,}/).at(-1)?.trim().slice(-40) ?? '';
 
 function roleOf(label: string): { role: DateRole; isBare: boolean; words: string } | null {
   const near = fold(label).slice(-70);

@@ -17,6 +17,7 @@ const edgeLines = 7;
  */
 export function splitRunningLines(pages: Line[][], isHeading: (line: Line) => boolean): RunningSplit {
   const counts = new Map<string, number>();
+  const fillers = fillerWords(pages);
   const edges = pages.map(edgesOf);
   for (const edge of edges) {
     for (const key of new Set([...edge].map(keyOf))) counts.set(key, (counts.get(key) ?? 0) + 1);
@@ -25,6 +26,7 @@ export function splitRunningLines(pages: Line[][], isHeading: (line: Line) => bo
   const running = new Map<string, Line>();
   const kept = pages.map((lines, index) =>
     lines.filter((line) => {
+      if (fillers.has(line.text)) return false;
       if (!edges[index]?.has(line) || (counts.get(keyOf(line)) ?? 0) < least || isHeading(line)) return true;
       const wording = fold(line.text);
       if (!running.has(wording)) running.set(wording, line);
@@ -32,6 +34,13 @@ export function splitRunningLines(pages: Line[][], isHeading: (line: Line) => bo
     }),
   );
   return { pages: kept, running: [...running.values()] };
+}
+
+/** A small word that stands alone on line after line ("space") is a template's unseen filler. */
+function fillerWords(pages: Line[][]): Set<string> {
+  const counts = new Map<string, number>();
+  for (const { text } of pages.flat()) if (/^\p{Ll}{3,12}$/u.test(text)) counts.set(text, (counts.get(text) ?? 0) + 1);
+  return new Set([...counts].filter(([, count]) => count >= 12).map(([text]) => text));
 }
 
 function edgesOf(lines: Line[]): Set<Line> {
