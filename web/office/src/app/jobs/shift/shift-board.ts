@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, model, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, model } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { v7 } from 'uuid';
 import { type ShiftAnswer } from '#compliance/answer';
@@ -31,7 +31,8 @@ export class ShiftBoard {
   readonly mayEdit = input(false);
   readonly openTaskId = model<string | null>(null);
 
-  protected readonly isCrewOpen = signal(false);
+  /** Opening a task closes the crew: one thing is changed at a time. */
+  protected readonly isCrewOpen = linkedSignal({ source: this.openTaskId, computation: () => false });
   protected readonly day = computed(() => dayName(this.editor.shift()?.date ?? ''));
   protected readonly lanes = computed(() => {
     const facts = this.editor.facts();

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { afterNextRender, ChangeDetectionStrategy, Component, computed, ElementRef, inject, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { type DustMethod, type EquipmentKind, type TaskKind } from '#compliance/facts';
 import { TASKS } from '#compliance/silica/tasks.data';
@@ -35,6 +35,7 @@ export class TaskEditor {
 
   protected readonly id = `kb-task-editor-${(lastId += 1)}`;
   protected readonly dustChoices = dustChoices;
+
   protected readonly name = computed(() => TASKS[this.task().kind].name.en);
   protected readonly tools = computed(() => this.things().equipment.filter(({ kind }) => !collecting.includes(kind)));
   protected readonly collectors = computed(() => this.things().equipment.filter(({ kind }) => collecting.includes(kind)));
@@ -50,6 +51,15 @@ export class TaskEditor {
       return { personId, name: this.nameOf(personId), stretches };
     }),
   );
+
+  constructor() {
+    const element = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
+    // It may have been opened from a row far below.
+    afterNextRender(() => {
+      element.scrollIntoView?.({ block: 'nearest' });
+      element.querySelector<HTMLElement>('.editor')?.focus({ preventScroll: true });
+    });
+  }
 
   protected set(change: Partial<PlannedTask>): void {
     this.changed.emit({ ...this.task(), ...change });

@@ -18,7 +18,7 @@ import { SheetUploads } from '../sheet-uploads';
           }
           @switch (upload.state) {
             @case ('done') {
-              <span class="kb-quiet">{{ upload.isKnown ? 'The same file was here already: ' + (upload.revision?.productName ?? upload.revision?.fileName) : 'stored' }}</span>
+              <span class="kb-quiet">{{ upload.isKnown ? 'The same file was here already: ' + (upload.revision?.productName ?? upload.revision?.fileName) : '' }}</span>
             }
             @case ('failed') {
               <span>{{ upload.trouble }}</span>
