@@ -16,6 +16,7 @@ const subjects: Routes = [
   subject('people', () => import('./people/people.routes').then((file) => file.routes)),
   subject('equipment', () => import('./equipment/equipment.routes').then((file) => file.routes)),
   subject('tablets', () => import('./tablets/tablets.routes').then((file) => file.routes)),
+  subject('rules', () => import('./rules/rules.routes').then((file) => file.routes)),
   subject('history', () => import('./history/history.routes').then((file) => file.routes)),
 ];
 

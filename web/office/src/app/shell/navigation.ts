@@ -21,6 +21,7 @@ export const navigation: readonly NavigationEntry[] = [
   { path: 'people', label: 'People', roles: everyone },
   { path: 'equipment', label: 'Equipment', roles: office },
   { path: 'tablets', label: 'Tablets', roles: office },
+  { path: 'rules', label: 'Rules and sources', roles: everyone },
   { path: 'history', label: 'History', roles: ['owner', 'safety-officer', 'auditor'] },
 ];
 
