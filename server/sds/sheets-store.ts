@@ -1,4 +1,4 @@
-import { and, desc, eq, ilike, lt, or, sql } from 'drizzle-orm';
+import { and, desc, eq, ilike, inArray, lt, or, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import type * as z from 'zod';
 import { people } from '#drizzle/schema/people';
@@ -58,6 +58,9 @@ export async function findRevision(tx: Tx, id: string): Promise<RevisionRow> {
   if (!row) throw new NotFoundError('sheet');
   return row;
 }
+/** In no order; those that are not there are left out. */
+export const findRevisions = async (tx: Tx, ids: readonly string[]): Promise<RevisionRow[]> =>
+  ids.length === 0 ? [] : selectRevisions(tx).where(and(eq(revisions.organisationId, tx.organisationId), inArray(revisions.id, [...ids])));
 export const findByHash = async (tx: Tx, sha256: string): Promise<RevisionRow | undefined> =>
   (await selectRevisions(tx).where(and(eq(revisions.organisationId, tx.organisationId), eq(revisions.sha256, sha256))))[0];
 

@@ -13,7 +13,7 @@ const percentRangeInside = new RegExp(`(?<![\\d.,/-])(?:${mark}\\s?)?${figure}${
 
 /** The text as an amount when it is nothing but one, at most 100; null otherwise. */
 export function wholeConcentration(text: string): string | null {
-  const match = whole.exec(text.trim().replace(/\s*[*†‡]+$/, ''));
+  const match = whole.exec(text.trim().replace(/\s*(trade secret|withheld|proprietary)?\s*[*†‡]*$/i, ''));
   return match?.[1] && isShare(match[1]) ? match[1].trim() : null;
 }
 

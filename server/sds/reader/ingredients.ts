@@ -143,8 +143,10 @@ function freeAmounts(cells: Cell[], columns: Columns): Amount[] {
   });
   const inColumn = columns.amount ? amounts.filter(({ segment }) => columns.amount !== null && overlaps(segment, columns.amount)) : [];
   if (inColumn.length > 0) return inColumn;
-  // Without a column, a bare figure may be anything: ask for a range, a percent sign or a comparison.
-  return amounts.filter(({ text }) => /%|[<>≤≥]|\d\s?(-|–|—|to)\s?[<≤]?\s?\d/.test(text));
+  // Without a column, a bare figure may be anything: ask for a range, a percent sign or a comparison, or for several
+  // such amounts in its own column.
+  const clear = amounts.filter(({ text }) => /%|[<>≤≥]|\d\s?(-|–|—|to)\s?[<≤]?\s?\d/.test(text));
+  return amounts.filter((amount) => clear.includes(amount) || clear.filter((other) => other.segment.box.x < amount.segment.box.x + amount.segment.box.width && other.segment.box.x + other.segment.box.width > amount.segment.box.x).length >= 2);
 }
 
 const overlaps = (segment: Segment, heading: Segment): boolean => {

@@ -112,6 +112,7 @@ function continued(lines: Line[], index: number, x: number): Segment[] {
     if (!line || !previous || !segment || line.page !== previous.page || line.box.y - previous.box.y > previous.box.height * 2.6) break;
     // A word in the label's column opens another value, unless it is small: then it ends the label above.
     if (line.segments.some((other) => other.box.x < x - 12 && (isLabel(other.text) || /^\P{L}*\p{Lu}/u.test(other.text)))) break;
+    if (/:\s*$/.test(segment.text)) break;
     values.push(segment);
     previous = line;
   }

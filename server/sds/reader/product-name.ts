@@ -18,7 +18,7 @@ const nameLabels: readonly { label: RegExp; confidence: number }[] = [
   },
   {
     label:
-      /^((ghs )?product identifier|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material|preparation|article|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
+      /^((ghs )?product identifier( used on the label)?|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material|preparation|article|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
     confidence: 0.75,
   },
 ];
@@ -58,19 +58,23 @@ function looselyLabelled(places: Line[][], parts: SheetParts): Field<string> | n
 function fieldOf(hit: Labelled, confidence: number): Field<string> | null {
   const [first] = hit.values;
   if (!first) return null;
-  const segments = [first, ...wrappedName(hit.values)];
+  const segments = [first, ...wrappedName(hit)];
   const value = cleanName(segments.map(({ text }) => text).join(' '));
   if (!value) return null;
   return { value, page: first.page, box: boxAround(segments), quote: segments.map(({ text }) => text).join(' '), confidence };
 }
 
-/** A name goes on in the next line only at ordinary line spacing and when it does not read like a label. */
-function wrappedName(values: Segment[]): Segment[] {
+/**
+ * A name goes on in the next line only at ordinary line spacing and when it does not read like a label; below a label
+ * of its own it must also go on in small letters, for there the next label stands at the same edge.
+ */
+function wrappedName({ values, isBelow }: Labelled): Segment[] {
   const wrapped: Segment[] = [];
   for (let at = 1; at < values.length && at < 3; at++) {
     const before = values[at - 1];
     const segment = values[at];
     if (!before || !segment || segment.box.y - before.box.y > before.box.height * 1.45 || Math.abs(segment.box.height - before.box.height) > 0.6) break;
+    if (isBelow && !/^\p{Ll}/u.test(segment.text)) break;
     if (isLabel(segment.text) || /[:.]/.test(segment.text) || before.text.length < 28) break;
     wrapped.push(segment);
   }

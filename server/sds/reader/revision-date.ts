@@ -107,10 +107,13 @@ function roleOf(label: string): { role: DateRole; isBare: boolean; words: string
   return null;
 }
 
-/** The rest of a label broken over two lines of its column. */
+/** The rest of a label broken over two lines of its column; a line below with a value of its own is another label. */
 function wrapped(lines: Line[], index: number, at: number): string {
   const segment = lines[index]?.segments[at];
-  const below = lines[index + 1]?.segments.find((other) => segment && Math.abs(other.box.x - segment.box.x) < 3);
+  const value = lines[index]?.segments[at + 1];
+  const next = lines[index + 1]?.segments ?? [];
+  if (value && next.some((other) => Math.abs(other.box.x - value.box.x) < 20)) return '';
+  const below = next.find((other) => segment && Math.abs(other.box.x - segment.box.x) < 3);
   if (!segment || !below || below.page !== segment.page || below.box.y - segment.box.y > segment.box.height * 1.9 || /\d{2}|:/.test(below.text)) return '';
   return ` ${below.text}`;
 }
