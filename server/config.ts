@@ -20,6 +20,8 @@ const Environment = z.object({
   WEB_ROOT: z.string().default('dist/web'),
   SHEET_READER_ENTRY: z.string().default('dist/server/sheet-reader.mjs'),
   VERIFIER: z.string().default('server/recordlog/verify.mjs'),
+  /** Longest time for reading one sheet; a killed worker's sheet is taken again after half as long again. */
+  SHEET_READ_SECONDS: z.coerce.number().int().min(1).max(600).default(40),
   UPLOAD_FOLDER: z.string().optional(),
   CHECKPOINT_SECONDS: z.coerce.number().positive().default(60),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),

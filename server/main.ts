@@ -6,7 +6,7 @@ import { systemClock } from './platform/clock';
 import { createDatabase, refuseTooMuchPower } from './platform/database';
 import { createLog } from './platform/log';
 import { createMail } from './platform/mail';
-import { createQueue } from './platform/queue';
+import { createQueue, patienceFor } from './platform/queue';
 import { createStorage } from './platform/storage';
 import { startWorker } from './worker';
 
@@ -21,7 +21,7 @@ try {
   process.exit(1);
 }
 const isWorker = config.KNEEBOARD_ROLE !== 'web';
-const queue = await createQueue(config.DATABASE_URL, { isServing: isWorker, onError: (error) => log.warn({ err: error }, 'queue') });
+const queue = await createQueue(config.DATABASE_URL, { isServing: isWorker, expireSeconds: patienceFor(config.SHEET_READ_SECONDS), onError: (error) => log.warn({ err: error }, 'queue') });
 const deps: Deps = {
   config,
   database,

@@ -6,14 +6,14 @@ import { createGuardedReader } from './sds/reader/guarded-reader';
 import { sheetsService } from './sds/sheets-service';
 import { readSheetWork } from './sds/sheets-work';
 
-/** The reader's hard limits: shorter than the queue's patience, so that a stuck sheet is named and not tried for ever. */
-const readerLimits = { wallClockMs: 40_000, maxRssBytes: 1_500 * 1024 * 1024 };
+const maxReaderRssBytes = 1_500 * 1024 * 1024;
 const sweepSeconds = 15;
 
 /** Background work: reading sheets, mailing checkpoints, signing checkpoints, interpreting what an ended process left. */
 export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   const { config, queue, log } = deps;
-  const reader = createGuardedReader({ ...readerLimits, entry: config.SHEET_READER_ENTRY });
+  // The reader's limit is shorter than the queue's patience, so that a stuck sheet is named and not tried for ever.
+  const reader = createGuardedReader({ wallClockMs: config.SHEET_READ_SECONDS * 1000, maxRssBytes: maxReaderRssBytes, entry: config.SHEET_READER_ENTRY });
   const recordlog = recordlogService(deps);
   const deliveries = deliveriesService(deps);
   await queue.serve('read-sheet', readSheetWork(deps, reader));

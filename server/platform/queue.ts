@@ -17,10 +17,10 @@ export interface Queue {
   stop(): Promise<void>;
 }
 
-/** Must be above the reader's own hard limit. */
-export const expireSeconds = 60;
+/** How long work may take before its worker counts as gone: half as long again as the reader may take for a sheet. */
+export const patienceFor = (sheetReadSeconds: number): number => Math.ceil(sheetReadSeconds * 1.5);
 
-export async function createQueue(url: string, options: { isServing: boolean; onError: (error: Error) => void }): Promise<Queue> {
+export async function createQueue(url: string, options: { isServing: boolean; expireSeconds: number; onError: (error: Error) => void }): Promise<Queue> {
   // The owner made the schema; the application role only uses it.
   const boss = new PgBoss({ connectionString: url, schema: 'pgboss', migrate: false, supervise: options.isServing, schedule: false, max: 4, maintenanceIntervalSeconds: 5, application_name: 'kneeboard-queue' });
   boss.on('error', options.onError);
@@ -31,7 +31,7 @@ export async function createQueue(url: string, options: { isServing: boolean; on
         retryLimit: 5,
         retryDelay: 2,
         retryBackoff: true,
-        expireInSeconds: expireSeconds,
+        expireInSeconds: options.expireSeconds,
         db: { executeSql: (text: string, values: unknown[]) => tx.client.query(text, values) },
       });
       // pg-boss answers null for a queue that nobody made.
