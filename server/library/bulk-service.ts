@@ -163,7 +163,7 @@ async function* zipEntries(path: string): AsyncGenerator<ZipEntry> {
       const name = cleanFileName(entry.fileName);
       // Folders, and what some archivers add for themselves.
       if (entry.fileName.endsWith('/') || /(?:^|\/)(?:__MACOSX\/|\.)/.test(entry.fileName)) continue;
-      const refusal = entry.isEncrypted() ? 'It is encrypted inside the zip.' : entry.uncompressedSize > maxUploadBytes ? `It is over ${maxUploadBytes / 1024 / 1024} MB.` : null;
+      const refusal = !/\.pdf$/i.test(name) ? 'Only PDF files are taken out of a zip. Add this one by itself if it is a sheet.' : entry.isEncrypted() ? 'It is encrypted inside the zip.' : entry.uncompressedSize > maxUploadBytes ? `It is over ${maxUploadBytes / 1024 / 1024} MB.` : null;
       yield { name, refusal, open: () => new Promise((resolve, reject) => zip.openReadStream(entry, (error, stream) => (error ? reject(new InputError(`It cannot be unpacked: ${error.message}`)) : resolve(stream)))) };
     }
   } finally {

@@ -5,6 +5,7 @@ import { addDays } from 'date-fns';
 import { v7 as newId } from 'uuid';
 import { createHash, randomBytes } from 'node:crypto';
 import { organisations } from '#drizzle/schema/organisations';
+import { tablets as tabletRows } from '#drizzle/schema/tablets';
 import { type PublishedVersion, type Shift, type ShiftPlan } from '#shared/jobs';
 import { type Kit } from '#shared/products';
 import { sealPin } from '#shared/pin-sealing';
@@ -123,6 +124,7 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
   const kitchenShift = await jobs.addShift(officer, kitchen.id, { date: today, copyFromShiftId: null });
   await jobs.editPlan(officer, kitchenShift.id, kitchenShift.version, kitchenDay(idOf, machines));
 
+  await deps.database.inOrganisation(organisationId, (tx) => tx.update(tabletRows).set({ lastHeardAt: deps.clock.now() }));
   // A newer sheet of part C has come in and waits for the officer: it adds a statement.
   await addSheet(deps, officer, { ...quarrybondPartC, revisedOn: daysAgo(3), supersedesOn: '2023-05-11' });
   await recordlogService(deps).makeCheckpoint(organisationId);

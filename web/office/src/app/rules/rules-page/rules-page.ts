@@ -51,8 +51,9 @@ export class RulesPage {
   protected dutiesOf(rule: ListedRule): string {
     return rule.duties.map((id) => `${id} ${duties.find((duty) => duty.id === id)?.duty ?? ''}`.trim()).join('; ');
   }
-  protected isUnsure(rule: ListedRule): boolean {
-    return unsure.has(rule.source.verified);
+  protected markOf({ source: { verified } }: ListedRule): { kind: StateKind; words: string } {
+    if (unsure.has(verified)) return { kind: 'caution', words: 'check the text' };
+    return verified === 'common-practice' ? { kind: 'plain', words: 'trade practice' } : { kind: 'done', words: verified === 'derived' ? 'derived' : 'source read' };
   }
   protected rowsOf(rows: readonly ListedRow[]): readonly ListedRow[] {
     return rows.slice(0, rowsShown);
