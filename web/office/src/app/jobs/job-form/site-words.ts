@@ -1,3 +1,4 @@
+import { listPlaces } from '#compliance/jurisdictions/pack';
 import { type SiteFacts } from '#shared/jobs';
 import { type Choice } from '../../pieces/fields/choice-field';
 import { withUnit } from '../../pieces/units';
@@ -25,12 +26,12 @@ export const surveyChoices: readonly Choice<SiteFacts['floor']['asbestos']>[] = 
 
 /** Places with a pack first. A place without one is offered honestly: it decides nothing by rule. */
 export const jurisdictionChoices: readonly Choice<string>[] = [
-  { value: 'us-federal', label: 'US federal rules' },
-  { value: 'no-pack', label: 'another place: no pack yet' },
+  ...listPlaces().map(({ id, name, hasPack, isComplete }) => ({ value: id, label: isComplete ? name.en : `${name.en}: ${hasPack ? 'pack incomplete' : 'no pack'}` })),
+  { value: 'no-pack', label: 'another place: no pack' },
 ];
 
 export function jurisdictionName(id: string): string {
-  return jurisdictionChoices.find((choice) => choice.value === id)?.label ?? `${id}: no pack yet`;
+  return jurisdictionChoices.find((choice) => choice.value === id)?.label ?? `${id}: no pack`;
 }
 
 /** Time zones of the United States, with the one already chosen and the browser's own. */
