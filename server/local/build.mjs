@@ -24,7 +24,7 @@ const parts = {
  * @param {readonly Part[]} [wanted]
  */
 export async function buildIfStale(wanted = /** @type {Part[]} */ (Object.keys(parts))) {
-  await underLock(`build ${root}`, async () => {
+  await underLock(`dist ${root}`, async () => {
     const stale = wanted.map((name) => ({ name, hash: sourceHash(root, parts[name].sources) })).filter(({ name, hash }) => !isBuilt(name, hash));
     if (stale.length === 0) return;
     await step(`Building ${stale.map(({ name }) => name).join(', ')}`, async () => {

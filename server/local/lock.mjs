@@ -1,6 +1,7 @@
 // @ts-check
 import { createHash } from 'node:crypto';
 import { connect, createServer } from 'node:net';
+import { step } from './progress.mjs';
 
 /**
  * Holds a lock that the kernel drops with the process, however it ends: a name in Linux's abstract socket space.
@@ -23,24 +24,37 @@ export async function tryLock(name, describe) {
 }
 
 /**
- * Waits until the lock is free, then runs the work under it.
+ * Waits until the lock is free, saying so, then runs the work under it.
  * @template T
  * @param {string} name
  * @param {() => Promise<T>} work
+ * @param {(text: string) => void} [write]
  * @returns {Promise<T>}
  */
-export async function underLock(name, work) {
-  for (;;) {
-    const lock = await tryLock(name, () => `process ${process.pid}`);
-    if ('release' in lock) {
-      try {
-        return await work();
-      } finally {
-        await lock.release();
-      }
-    }
-    await new Promise((resolve) => setTimeout(resolve, 250));
+export async function underLock(name, work, write) {
+  const lock = await enter(name, write);
+  try {
+    return await work();
+  } finally {
+    await lock.release();
   }
+}
+
+/**
+ * @param {string} name
+ * @param {((text: string) => void) | undefined} write
+ */
+async function enter(name, write) {
+  const take = () => tryLock(name, () => `process ${process.pid}`);
+  const first = await take();
+  if ('release' in first) return first;
+  return step(`Waiting for another one at work in this folder (${first.heldBy})`, async () => {
+    for (;;) {
+      await new Promise((resolve) => setTimeout(resolve, 250));
+      const lock = await take();
+      if ('release' in lock) return lock;
+    }
+  }, write);
 }
 
 /**

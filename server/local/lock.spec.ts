@@ -37,7 +37,10 @@ describe('underLock', () => {
       await new Promise((resolve) => setTimeout(resolve, 30));
       events.push(`${label} ends`);
     };
-    await Promise.all([underLock(name, work('a')), underLock(name, work('b'))]);
+    let said = '';
+    const write = (text: string) => void (said += text);
+    await Promise.all([underLock(name, work('a'), write), underLock(name, work('b'), write)]);
+    expect(said).toBe(`Waiting for another one at work in this folder (process ${process.pid})\n`);
     const [first, second] = events[0] === 'a begins' ? ['a', 'b'] : ['b', 'a'];
     expect(events).toEqual([`${first} begins`, `${first} ends`, `${second} begins`, `${second} ends`]);
   });

@@ -10,6 +10,8 @@ import { say, sayError } from './progress.mjs';
 import { closingLine, countReport, sumTotals } from './totals.mjs';
 
 const root = fileURLToPath(new URL('../..', import.meta.url)).replace(/\/$/, '');
+/** Generous: jest's five seconds fail honest tests on a machine that is busy with something else. */
+const testTimeoutMs = 30_000;
 const isLong = process.argv.includes('--faults-long');
 const jestArguments = process.argv.slice(2).filter((argument) => argument !== '--faults-long');
 const isFiltered = jestArguments.some((argument) => /^(-t|--testNamePattern)/.test(argument));
@@ -41,7 +43,7 @@ try {
       say(`\n${label}`);
       const report = join(folder, `jest-${totals.length}.json`);
       const select = projects.length === 0 ? [] : ['--selectProjects', ...projects];
-      const code = await jest([...jestArguments, ...extra, ...select, '--passWithNoTests', '--json', '--outputFile', report], { ...environment, ...env }, untilStopped);
+      const code = await jest([...jestArguments, ...extra, ...select, '--passWithNoTests', '--testTimeout', String(testTimeoutMs), '--json', '--outputFile', report], { ...environment, ...env }, untilStopped);
       if (existsSync(report)) totals.push(countReport(JSON.parse(readFileSync(report, 'utf8')), isFiltered));
       if (code !== 0) process.exitCode = 1;
       if (!existsSync(report)) break;
