@@ -33,6 +33,8 @@ import { productsService } from './products/products-service';
 import { recordlogService } from './recordlog/recordlog-service';
 import { sheetsRoutes } from './sds/sheets-routes';
 import { sheetsService } from './sds/sheets-service';
+import { searchRoutes } from './search/search-routes';
+import { searchService } from './search/search-service';
 import { passportFor, sessionRoutes } from './session/session-routes';
 import { sessionService } from './session/session-service';
 import { recogniseTablet, tabletsRoutes } from './tablets/tablets-routes';
@@ -79,6 +81,7 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
   const uploads = createUploads(uploadFolder);
   api.use(sheetsRoutes(sheets, uploads));
   const library = { reach: reachService(deps, checklists), keeping: keepingService(deps), requests: requestsService(deps, sheets), bulk: bulkService(deps, sheets), site: siteService(deps, sheets) };
+  api.use(searchRoutes(searchService(deps)));
   api.use(libraryRoutes(library, uploads, createUploads(uploadFolder, maxZipBytes)));
   api.use(productsRoutes(productsService(deps)));
   api.use(jobsRoutes(jobsService(deps), checklists));

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, Sha256 } from './common';
+import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, SearchText, Sha256 } from './common';
 import { RevisionSummary, revisionStates } from './sheets';
 
 /** One field that differs between the current revision and a newer one, in words. */
@@ -100,7 +100,7 @@ export const ImportProducts = z.strictObject({ products: z.array(z.strictObject(
 export const ImportedProducts = z.object({ added: z.number().int(), known: z.number().int() });
 
 export const SearchQuery = z.strictObject({
-  q: z.string().trim().min(2, 'Type at least two characters.').max(100),
+  q: SearchText.trim().min(1, 'Type what you look for.'),
   state: z.enum(revisionStates).optional(),
   language: z.enum(['en', 'es', 'fr', 'de']).optional(),
   signalWord: z.enum(['danger', 'warning', 'none']).optional(),

@@ -8,6 +8,8 @@ export interface BenchResult {
   /** The bar of quality.md: for the ratio where there is a reference, else for `ours`. */
   bar: number;
   ok: boolean;
+  /** Further figures worth seeing, each with its unit in its name. */
+  also?: Readonly<Record<string, number>>;
 }
 
 export interface Bench {

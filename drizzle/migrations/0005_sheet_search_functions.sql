@@ -1,0 +1,293 @@
+DO $$
+DECLARE t text;
+BEGIN
+  FOREACH t IN ARRAY ARRAY['sheet_search', 'sheet_words'] LOOP
+    EXECUTE format('ALTER TABLE public.%I ENABLE ROW LEVEL SECURITY', t);
+    EXECUTE format('ALTER TABLE public.%I FORCE ROW LEVEL SECURITY', t);
+    EXECUTE format($p$CREATE POLICY own_organisation ON public.%I USING (organisation_id = nullif(current_setting('app.organisation', true), '')::uuid) WITH CHECK (organisation_id = nullif(current_setting('app.organisation', true), '')::uuid)$p$, t);
+    -- Operators of text search are not leakproof: under the policy above no index would serve them. Nobody signs in as this
+    -- role; its one function asks for the organisation in scope itself.
+    EXECUTE format('CREATE POLICY search_reads ON public.%I FOR SELECT TO kneeboard_search USING (true)', t);
+    -- The owner is a member of that role and would see what it sees.
+    EXECUTE format($p$CREATE POLICY owner_as_all ON public.%I AS RESTRICTIVE TO CURRENT_USER USING (organisation_id = nullif(current_setting('app.organisation', true), '')::uuid)$p$, t);
+  END LOOP;
+END $$;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE ON sheet_search TO kneeboard_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT ON sheet_words TO kneeboard_app;
+--> statement-breakpoint
+GRANT SELECT (organisation_id, revision_id, product_id, state, language, signal_word, standing, uploaded_at, name, keys, document) ON sheet_search TO kneeboard_search;
+--> statement-breakpoint
+GRANT SELECT ON sheet_words TO kneeboard_search;
+--> statement-breakpoint
+GRANT USAGE ON SCHEMA public TO kneeboard_search;
+--> statement-breakpoint
+GRANT EXECUTE ON FUNCTION scope() TO kneeboard_search;
+--> statement-breakpoint
+-- Accents off, ligatures and wide forms as plain letters.
+CREATE FUNCTION search_plain(said text) RETURNS text LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = pg_catalog AS $$
+  SELECT regexp_replace(normalize(translate(said, '™℠®©', '    '), NFKD), '[\u0300-\u036f]', '', 'g')
+$$;
+--> statement-breakpoint
+CREATE FUNCTION search_fold(said text) RETURNS text LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = public, pg_catalog AS $$
+  SELECT btrim(regexp_replace(lower(search_plain(said)), '[^[:alnum:]]+', ' ', 'g'))
+$$;
+--> statement-breakpoint
+CREATE FUNCTION search_words(said text) RETURNS text[] LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = public, pg_catalog AS $$
+  SELECT coalesce(array_agg(left(word, 60) ORDER BY place), '{}') FROM regexp_split_to_table(search_fold(said), ' ') WITH ORDINALITY AS w(word, place) WHERE word <> ''
+$$;
+--> statement-breakpoint
+CREATE FUNCTION search_config(language text) RETURNS regconfig LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = pg_catalog AS $$
+  SELECT CASE language WHEN 'en' THEN 'english'::regconfig WHEN 'es' THEN 'spanish'::regconfig WHEN 'fr' THEN 'french'::regconfig WHEN 'de' THEN 'german'::regconfig ELSE 'simple'::regconfig END
+$$;
+--> statement-breakpoint
+-- English needs no second pass; elsewhere a word typed without its accents is found too.
+CREATE FUNCTION search_document(language text, said text) RETURNS tsvector LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = public, pg_catalog AS $$
+  SELECT array_to_tsvector(ARRAY['lang ' || CASE WHEN language IN ('en', 'es', 'fr', 'de') THEN language ELSE 'other' END]) || to_tsvector(search_config(language), said)
+    || CASE WHEN language = 'en' THEN ''::tsvector ELSE to_tsvector(search_config(language), search_plain(said)) END
+$$;
+--> statement-breakpoint
+-- Null when nothing is left to look for: only small words, or only words to leave out.
+CREATE FUNCTION search_query(language text, wanted text) RETURNS tsquery LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = public, pg_catalog AS $$
+  SELECT CASE WHEN querytree(asked) NOT IN ('', 'T') THEN asked && quote_literal('lang ' || language)::tsquery END
+    FROM (SELECT CASE WHEN language = 'en' THEN websearch_to_tsquery('english', wanted) ELSE websearch_to_tsquery(search_config(language), wanted) || websearch_to_tsquery(search_config(language), search_plain(wanted)) END AS asked) q
+$$;
+--> statement-breakpoint
+-- Writes one revision's row of sheet_search. The text is kept when none is given.
+CREATE FUNCTION index_sheet(revision uuid, read_text text DEFAULT NULL) RETURNS void LANGUAGE plpgsql SET search_path = public, pg_temp SET client_min_messages = warning AS $$
+DECLARE
+  r record;
+  name_words text[];
+  supplier_words text[];
+  said text;
+  body text;
+  words_of_sheet tsvector;
+BEGIN
+  SELECT v.*, p.name AS product_name, p.supplier AS product_supplier, v.fields -> 'productName' ->> 'value' AS read_name, v.fields -> 'supplier' ->> 'value' AS read_supplier,
+      coalesce(v.language, v.fields -> 'language' ->> 'value') AS in_language, coalesce(read_text, s.full_text) AS body_text, s.document, s.field_text, s.language AS indexed_language
+    INTO r
+    FROM revisions v
+    LEFT JOIN products p ON p.organisation_id = v.organisation_id AND p.id = v.product_id
+    LEFT JOIN sheet_search s ON s.organisation_id = v.organisation_id AND s.revision_id = v.id
+    WHERE v.organisation_id = scope() AND v.id = revision;
+  IF NOT FOUND THEN RETURN; END IF;
+  name_words := search_words(concat_ws(' ', r.product_name, r.read_name));
+  supplier_words := search_words(concat_ws(' ', r.product_supplier, r.read_supplier));
+  said := concat_ws(E'\n', regexp_replace(r.file_name, '[^[:alnum:]]+', ' ', 'g'),
+    (SELECT string_agg(concat_ws(' ', e -> 'value' ->> 'name', e -> 'value' ->> 'cas'), E'\n') FROM jsonb_array_elements(r.fields -> 'ingredients') e),
+    (SELECT string_agg(concat_ws(' ', e -> 'value' ->> 'substance', e -> 'value' ->> 'kind'), E'\n') FROM jsonb_array_elements(r.fields -> 'limits') e),
+    (SELECT string_agg(e -> 'value' ->> 'text', E'\n') FROM jsonb_array_elements(r.fields -> 'protectionWords') e));
+  IF read_text IS NULL AND r.field_text = said AND r.indexed_language IS NOT DISTINCT FROM r.in_language THEN
+    words_of_sheet := r.document;
+  ELSE
+    body := concat_ws(E'\n', said, r.body_text);
+    BEGIN
+      words_of_sheet := search_document(r.in_language, body);
+    EXCEPTION WHEN program_limit_exceeded THEN
+      -- More different words than one row can hold: no sheet, but no reason to fail either.
+      words_of_sheet := search_document(r.in_language, left(body, 50000));
+    END;
+  END IF;
+  INSERT INTO sheet_search AS s (organisation_id, revision_id, product_id, state, language, signal_word, standing, uploaded_at, name, supplier, keys, document, field_text, full_text)
+    VALUES (r.organisation_id, r.id, r.product_id, r.state, r.in_language, r.fields -> 'signalWord' ->> 'value',
+      CASE WHEN r.is_current THEN 0 WHEN r.state = 'confirmed' THEN 1 WHEN r.state = 'set-aside' THEN 3 ELSE 2 END, r.uploaded_at,
+      left(search_fold(coalesce(r.product_name, r.read_name, '')), 200), left(search_fold(coalesce(r.product_supplier, r.read_supplier, '')), 200),
+      array_to_tsvector(ARRAY(
+        SELECT 'n ' || word FROM unnest(name_words) word
+        UNION SELECT 's ' || word FROM unnest(supplier_words) word
+        UNION SELECT 'c ' || digits FROM jsonb_array_elements(r.fields -> 'ingredients') e, ltrim(regexp_replace(e -> 'value' ->> 'cas', '\D', '', 'g'), '0') digits WHERE digits <> ''
+        UNION SELECT 'k ' || lower(code) FROM jsonb_array_elements(r.fields -> 'hazardCodes') e, regexp_split_to_table(e ->> 'value', '\+') code
+        UNION SELECT 'k ' || lower(code) FROM jsonb_array_elements(r.fields -> 'precautionaryCodes') e, regexp_split_to_table(e ->> 'value', '\+') code)),
+      words_of_sheet, said, r.body_text)
+    ON CONFLICT (organisation_id, revision_id) DO UPDATE SET product_id = excluded.product_id, state = excluded.state, language = excluded.language, signal_word = excluded.signal_word,
+      standing = excluded.standing, name = excluded.name, supplier = excluded.supplier, keys = excluded.keys, document = excluded.document, field_text = excluded.field_text, full_text = excluded.full_text;
+  -- In one order, so that two who add the same words wait for each other and never both.
+  INSERT INTO sheet_words (organisation_id, word)
+    SELECT DISTINCT r.organisation_id, own.word FROM unnest(name_words || supplier_words) AS own(word)
+      WHERE length(own.word) >= 3 AND NOT EXISTS (SELECT 1 FROM sheet_words k WHERE k.organisation_id = r.organisation_id AND k.word = own.word)
+      ORDER BY own.word
+    ON CONFLICT DO NOTHING;
+END $$;
+--> statement-breakpoint
+CREATE FUNCTION index_changed_sheet() RETURNS trigger LANGUAGE plpgsql SET search_path = public, pg_temp AS $$
+BEGIN
+  PERFORM index_sheet(NEW.id);
+  RETURN NULL;
+END $$;
+--> statement-breakpoint
+CREATE TRIGGER index_sheet AFTER INSERT OR UPDATE OF state, fields, product_id, language, is_current ON revisions FOR EACH ROW EXECUTE FUNCTION index_changed_sheet();
+--> statement-breakpoint
+CREATE FUNCTION index_renamed_product() RETURNS trigger LANGUAGE plpgsql SET search_path = public, pg_temp AS $$
+BEGIN
+  PERFORM index_sheet(v.id) FROM revisions v WHERE v.organisation_id = NEW.organisation_id AND v.product_id = NEW.id ORDER BY v.id;
+  RETURN NULL;
+END $$;
+--> statement-breakpoint
+CREATE TRIGGER index_sheets AFTER UPDATE OF name, supplier ON products FOR EACH ROW EXECUTE FUNCTION index_renamed_product();
+--> statement-breakpoint
+-- Words of the organisation that a mistyped word may have meant, nearest first. Swapped neighbours count as one slip; figures
+-- are never guessed, because the next figure is another product.
+CREATE FUNCTION search_closest(typed text) RETURNS text[] LANGUAGE plpgsql STABLE SET search_path = public, pg_temp AS $$
+DECLARE
+  slips integer := CASE WHEN length(typed) < 3 OR typed ~ '^\d+$' THEN 0 WHEN length(typed) <= 5 THEN 1 WHEN length(typed) <= 8 THEN 2 ELSE 3 END;
+  nearest text[];
+BEGIN
+  IF slips = 0 THEN RETURN '{}'; END IF;
+  SELECT array_agg(word ORDER BY slipped, similarity(word, typed) DESC, word) INTO nearest
+    FROM (
+      SELECT word, slipped, min(slipped) OVER () AS least
+        FROM sheet_words w, levenshtein_less_equal(w.word, typed, greatest(slips, 2)) AS edits,
+          LATERAL (SELECT CASE WHEN edits = 2 AND search_is_swap(w.word, typed) THEN 1 ELSE edits END AS slipped) d
+        WHERE w.organisation_id = scope() AND length(w.word) BETWEEN length(typed) - slips AND length(typed) + slips AND w.word !~ '^\d+$'
+          AND slipped <= slips AND (length(typed) > 3 OR left(w.word, 1) = left(typed, 1) OR edits = 2)
+    ) found WHERE slipped = least;
+  IF nearest IS NULL AND length(typed) >= 5 THEN
+    -- Still being typed: the beginning of a longer word.
+    SELECT array_agg(word ORDER BY similarity(word, typed) DESC, word) INTO nearest FROM sheet_words w
+      WHERE w.organisation_id = scope() AND length(w.word) > length(typed) AND levenshtein_less_equal(left(w.word, length(typed)), typed, 1) <= 1;
+  END IF;
+  RETURN coalesce(nearest[1:5], '{}');
+END $$;
+--> statement-breakpoint
+-- Whether two words of one length differ by one pair of neighbours.
+CREATE FUNCTION search_is_swap(one text, other text) RETURNS boolean LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = pg_catalog AS $$
+  SELECT length(one) = length(other) AND EXISTS (SELECT 1 FROM generate_series(1, length(one) - 1) i
+    WHERE left(one, i - 1) || substr(one, i + 1, 1) || substr(one, i, 1) || substr(one, i + 2) = other)
+$$;
+--> statement-breakpoint
+-- One search over the organisation in scope: at most 500 revisions, best first. `wanted` is what was typed; `words` what is
+-- left of it without CAS numbers (digits, no leading zeros) and codes (single, lower case). Later ways of finding run only
+-- while there is room.
+CREATE FUNCTION search_sheets(wanted text, words text, cas text[], codes text[], in_state text, in_language text, in_signal text, among uuid[], is_among boolean, at_most integer)
+RETURNS TABLE (revision_id uuid, kind text, closest text) LANGUAGE plpgsql STABLE SECURITY DEFINER SET search_path = public, pg_temp SET client_min_messages = warning AS $$
+#variable_conflict use_column
+DECLARE
+  room integer := least(greatest(at_most, 1), 500);
+  found uuid[] := '{}';
+  batch uuid[];
+  folded text := search_fold(wanted);
+  typed text[] := (search_words(words))[1:12];
+  extra text := (SELECT string_agg(quote_literal(key), ' & ') FROM (SELECT 'c ' || c AS key FROM unnest(cas) c UNION ALL SELECT 'k ' || c FROM unnest(codes) c) keys);
+  asked tsquery;
+  meant text;
+  stage text;
+  language text;
+BEGIN
+  IF scope() IS NULL THEN RETURN; END IF;
+  FOREACH stage IN ARRAY ARRAY['name', 'keys', 'name-start', 'name-words', 'supplier', 'name-and-supplier', 'name-part', 'similar', 'text'] LOOP
+    EXIT WHEN room <= 0;
+    batch := NULL;
+    asked := NULL;
+    IF stage IN ('name', 'name-start') THEN
+      IF folded <> '' THEN
+        SELECT array_agg(hit.revision_id) INTO batch FROM (
+          SELECT s.revision_id FROM sheet_search s
+            WHERE s.organisation_id = scope() AND s.name ~>=~ folded AND s.name ~<~ (CASE WHEN stage = 'name' THEN folded || ' ' ELSE folded || chr(1114109) END) AND s.name <> ''
+              AND (in_state IS NULL OR s.state = in_state) AND (in_language IS NULL OR s.language = in_language) AND (in_signal IS NULL OR s.signal_word = in_signal)
+              AND (is_among IS NULL OR coalesce(s.product_id = ANY (among), false) = is_among) AND s.revision_id <> ALL (found)
+            ORDER BY s.standing, s.name, s.uploaded_at DESC LIMIT room) hit;
+      END IF;
+    ELSIF stage = 'text' THEN
+      FOREACH language IN ARRAY CASE WHEN in_language IS NULL THEN ARRAY['en', 'es', 'fr', 'de', 'other'] ELSE ARRAY[in_language] END LOOP
+        asked := coalesce(asked || search_query(language, wanted), asked, search_query(language, wanted));
+      END LOOP;
+      IF asked IS NOT NULL THEN
+        SELECT array_agg(hit.revision_id) INTO batch FROM (
+          SELECT s.revision_id FROM sheet_search s
+            WHERE s.organisation_id = scope() AND s.document @@ asked
+              AND (in_state IS NULL OR s.state = in_state) AND (in_language IS NULL OR s.language = in_language) AND (in_signal IS NULL OR s.signal_word = in_signal)
+              AND (is_among IS NULL OR coalesce(s.product_id = ANY (among), false) = is_among) AND s.revision_id <> ALL (found)
+            ORDER BY s.standing, s.uploaded_at DESC, s.revision_id LIMIT room) hit;
+      END IF;
+    ELSE
+      IF stage = 'keys' THEN
+        IF typed = '{}' AND extra IS NOT NULL THEN asked := extra::tsquery; END IF;
+      ELSIF stage = 'similar' THEN
+        -- Only where nothing else was found: a guess beside what was meant is noise.
+        IF found = '{}' THEN SELECT m.asked, m.meant INTO asked, meant FROM search_meant(typed) m; END IF;
+      ELSE
+        asked := search_terms(stage, typed);
+      END IF;
+      IF stage <> 'keys' AND asked IS NOT NULL AND extra IS NOT NULL THEN asked := asked && extra::tsquery; END IF;
+      IF asked IS NOT NULL THEN
+        SELECT array_agg(hit.revision_id) INTO batch FROM (
+          SELECT s.revision_id FROM sheet_search s
+            WHERE s.organisation_id = scope() AND s.keys @@ asked
+              AND (in_state IS NULL OR s.state = in_state) AND (in_language IS NULL OR s.language = in_language) AND (in_signal IS NULL OR s.signal_word = in_signal)
+              AND (is_among IS NULL OR coalesce(s.product_id = ANY (among), false) = is_among) AND s.revision_id <> ALL (found)
+            ORDER BY s.standing, s.name, s.uploaded_at DESC LIMIT room) hit;
+      END IF;
+    END IF;
+    CONTINUE WHEN batch IS NULL;
+    RETURN QUERY SELECT hit, stage, CASE WHEN stage = 'similar' THEN meant END FROM unnest(batch) hit;
+    found := found || batch;
+    room := room - cardinality(batch);
+  END LOOP;
+END $$;
+--> statement-breakpoint
+CREATE FUNCTION search_key(kind text, word text, is_open boolean) RETURNS text LANGUAGE sql IMMUTABLE PARALLEL SAFE SET search_path = pg_catalog AS $$
+  SELECT quote_literal(kind || ' ' || word) || CASE WHEN is_open THEN ':*' ELSE '' END
+$$;
+--> statement-breakpoint
+-- All typed words among the keys of one way of finding. Short words and figures match whole, except the last, which may still be being typed.
+CREATE FUNCTION search_terms(stage text, typed text[]) RETURNS tsquery LANGUAGE sql STABLE SET search_path = public, pg_temp AS $$
+  SELECT CASE WHEN count(*) > 0 AND count(*) = count(term) THEN string_agg(term, ' & ')::tsquery END FROM (
+    SELECT CASE stage
+        WHEN 'name-words' THEN search_key('n', word, is_open)
+        WHEN 'supplier' THEN search_key('s', word, is_open)
+        WHEN 'name-and-supplier' THEN '(' || search_key('n', word, is_open) || ' | ' || search_key('s', word, is_open) || ')'
+        WHEN 'name-part' THEN (SELECT '(' || string_agg(search_key('n', part, part = t.word AND is_open) || ' | ' || search_key('s', part, part = t.word AND is_open), ' | ') || ')'
+          FROM (SELECT t.word AS part UNION ALL (SELECT w.word FROM sheet_words w WHERE length(t.word) >= 3 AND w.organisation_id = scope() AND w.word LIKE '%' || t.word || '%' LIMIT 50)) parts)
+      END AS term
+      FROM (SELECT word, (place = cardinality(typed) OR length(word) >= 3 AND word !~ '^\d+$') AS is_open FROM unnest(typed) WITH ORDINALITY AS w(word, place)) t) terms
+$$;
+--> statement-breakpoint
+-- The typed words with each unknown one replaced by the nearest known ones; null when a word has none, or all are known.
+CREATE FUNCTION search_meant(typed text[], OUT asked tsquery, OUT meant text) LANGUAGE plpgsql STABLE SET search_path = public, pg_temp AS $$
+DECLARE
+  one text;
+  near text[];
+  is_replaced boolean := false;
+  terms text[] := '{}';
+BEGIN
+  FOREACH one IN ARRAY typed LOOP
+    IF length(one) < 3 OR one ~ '^\d+$' OR EXISTS (SELECT 1 FROM sheet_words w WHERE w.organisation_id = scope() AND w.word LIKE one || '%') THEN
+      near := ARRAY[one];
+      terms := terms || ('(' || search_key('n', one, true) || ' | ' || search_key('s', one, true) || ')');
+    ELSE
+      near := search_closest(one);
+      IF near = '{}' THEN RETURN; END IF;
+      is_replaced := true;
+      terms := terms || (SELECT '(' || string_agg(search_key('n', each, false) || ' | ' || search_key('s', each, false), ' | ') || ')' FROM unnest(near) each);
+    END IF;
+    meant := concat_ws(' ', meant, near[1]);
+  END LOOP;
+  IF is_replaced THEN asked := array_to_string(terms, ' & ')::tsquery; END IF;
+END $$;
+--> statement-breakpoint
+DO $$
+DECLARE f text;
+BEGIN
+  FOR f IN SELECT p.oid::regprocedure::text FROM pg_proc p WHERE p.pronamespace = 'public'::regnamespace AND p.proname IN ('search_plain', 'search_fold', 'search_words', 'search_config', 'search_document', 'search_query', 'search_closest', 'search_is_swap', 'search_terms', 'search_key', 'search_meant', 'search_sheets', 'index_sheet') LOOP
+    EXECUTE format('REVOKE ALL ON FUNCTION %s FROM PUBLIC', f);
+    EXECUTE format('GRANT EXECUTE ON FUNCTION %s TO kneeboard_app, kneeboard_search', f);
+  END LOOP;
+END $$;
+--> statement-breakpoint
+GRANT CREATE ON SCHEMA public TO kneeboard_search;
+--> statement-breakpoint
+ALTER FUNCTION search_sheets(text, text, text[], text[], text, text, text, uuid[], boolean, integer) OWNER TO kneeboard_search;
+--> statement-breakpoint
+REVOKE CREATE ON SCHEMA public FROM kneeboard_search;
+--> statement-breakpoint
+-- What is there already: its fields; the text of sheets read before this comes with the next reading.
+DO $$
+DECLARE one uuid;
+BEGIN
+  FOR one IN SELECT DISTINCT l.organisation_id FROM logins l LOOP
+    PERFORM set_config('app.organisation', one::text, true);
+    PERFORM index_sheet(v.id) FROM revisions v WHERE v.organisation_id = one;
+  END LOOP;
+  PERFORM set_config('app.organisation', '', true);
+END $$;
