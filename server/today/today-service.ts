@@ -11,6 +11,7 @@ import { type PersonActor } from '../http/actor';
 import { localDate } from '../jobs/jobs-service';
 import { readShift } from '../jobs/shift-store';
 import { type Tx } from '../platform/database';
+import { revisedSheets } from './revised-sheets';
 
 const dayMs = 24 * 3600 * 1000;
 const renewWithinDays = 30;
@@ -28,7 +29,8 @@ export function todayService({ database, clock }: Deps) {
       database.inOrganisation(actor.organisationId, async (tx) => {
         const now = clock.now();
         const shiftsNow = await currentShifts(tx, now);
-        const items = [...(await stops(tx)), ...shiftsNow.flatMap((shift) => shiftItems(shift, now)), ...(await libraryItems(tx)), ...(await keptAside(tx)), ...renewals(shiftsNow, now)];
+        const revised = await revisedSheets(tx, shiftsNow);
+        const items = [...(await stops(tx)), ...revised.items, ...shiftsNow.flatMap((shift) => shiftItems(shift, now).filter(({ id }) => id !== `again-${shift.id}` || !revised.shiftIds.has(shift.id))), ...(await libraryItems(tx)), ...(await keptAside(tx)), ...renewals(shiftsNow, now)];
         return {
           items: items.sort((a, b) => rank(a) - rank(b)).slice(0, 100),
           onSite: await Promise.all(shiftsNow.map((shift) => onSite(tx, shift, now))),

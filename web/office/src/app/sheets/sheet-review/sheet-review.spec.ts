@@ -4,6 +4,7 @@ import { DeferBlockBehavior, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
 import { afterEach, describe, expect, it } from '@jest/globals';
 import { type Role } from '#shared/common';
+import { type Reach } from '#shared/library';
 import { type Revision } from '#shared/sheets';
 import { SessionApi } from '../../session/session-api';
 import { SheetReview } from './sheet-review';
@@ -48,6 +49,13 @@ const revision: Revision = {
   },
 };
 
+const reach: Reach = {
+  previous: { revisionId, revisedOn: '2023-05-11', confirmedAt: '2023-06-01T12:00:00Z' },
+  changes: [{ field: 'hazardCodes', added: ['H350'], removed: [], isNewHazard: true }],
+  kits: [],
+  shifts: [{ shiftId: revisionId, jobId: revisionId, jobName: 'Process hall floor', date: '2026-12-03', publishedVersion: 1, changesChecklist: true, signed: 5, asked: 6 }],
+};
+
 describe('checking what was read', () => {
   afterEach(() => document.body.replaceChildren());
 
@@ -64,6 +72,9 @@ describe('checking what was read', () => {
     server.expectOne(`/api/sheets/${revisionId}`).flush(stored);
     const settle = async () => {
       await new Promise((resolve) => setTimeout(resolve));
+      // The page counts as busy until it knows what the sheet reaches.
+      TestBed.tick();
+      server.match(({ url }) => url.endsWith('/reach')).forEach((asked) => asked.flush(reach));
       await fixture.whenStable();
     };
     await settle();
@@ -131,6 +142,21 @@ describe('checking what was read', () => {
     await press('e');
     expect(element.querySelector('kb-value-editor')).toBeNull();
     expect(active()).toBe('Revised');
+  });
+
+  it('says before confirming what the sheet adds and whom it reaches, and applies nothing', async () => {
+    const { button, text } = await open();
+    expect(text()).toContain('The new sheet adds H350. One open job uses it; 5 signatures were given on the older one. Once it is confirmed and applied, the crew is asked');
+    expect(text()).toContain('new hazard');
+    expect(button('Apply to open jobs')).toBeUndefined();
+  });
+
+  it.each([
+    ['safety-officer', true],
+    ['auditor', false],
+  ] as const)('offers to apply the confirmed sheet: %s %s', async (role, isOffered) => {
+    const { button } = await open(role, { ...revision, state: 'confirmed', isCurrent: true, productId: revisionId });
+    expect(button('Apply to open jobs') !== undefined).toBe(isOffered);
   });
 
   it('opens every value as a field when the sheet could not be read', async () => {

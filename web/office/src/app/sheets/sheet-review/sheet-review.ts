@@ -15,6 +15,7 @@ import { momentShort } from '../../pieces/dates';
 import { FormTrouble } from '../../pieces/form-trouble';
 import { Unready } from '../../pieces/unready';
 import { NavigationCounts } from '../../shell/navigation-counts';
+import { ReachPanel } from '../reach/reach-panel';
 import { readerTrouble } from '../sheet-words';
 import { SheetsApi } from '../sheets-api';
 import { ConfirmDialog, type ConfirmOutcome, type ConfirmQuestion } from './confirm-dialog';
@@ -28,7 +29,7 @@ const pollMilliseconds = 1500;
 /** One sheet: the page on one side, what was read from it on the other; a person confirms it value by value. */
 @Component({
   selector: 'kb-sheet-review',
-  imports: [FormTrouble, MatButton, Note, PageHeader, PageViewer, ReviewList, RouterLink, Unready],
+  imports: [FormTrouble, MatButton, Note, PageHeader, PageViewer, ReachPanel, ReviewList, RouterLink, Unready],
   templateUrl: './sheet-review.html',
   styleUrl: './sheet-review.scss',
   host: { '(document:keydown)': 'key($event)' },
@@ -152,6 +153,10 @@ export class SheetReview {
     if ('problem' in outcome) return this.refuse(outcome.problem);
     form.markAsPristine();
     this.take(outcome.confirmed);
+    this.refreshCounts();
+  }
+
+  protected refreshCounts(): void {
     void this.counts.refresh();
   }
 
