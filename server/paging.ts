@@ -1,3 +1,4 @@
+import { LocalDate } from '#shared/common';
 import { InputError } from './errors';
 
 /** Opaque keyset cursor over sort keys. */
@@ -7,6 +8,7 @@ export const writeCursor = (keys: readonly (string | number)[]): string => Buffe
 const forms = {
   id: (key: unknown) => typeof key === 'string' && /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i.test(key),
   text: (key: unknown) => typeof key === 'string' && /^[^\p{Cc}\p{Cs}]*$/u.test(key),
+  day: (key: unknown) => LocalDate.safeParse(key).success,
   instant: (key: unknown) => typeof key === 'string' && /^\d{4}-\d\d-\d\dT[\d:.]{12}Z$/.test(key) && key > '0001' && !Number.isNaN(Date.parse(key)),
   index: (key: unknown) => Number.isSafeInteger(key),
 } as const;

@@ -46,7 +46,7 @@ export function reachService({ database, clock }: Deps, checklists: ChecklistsSe
 
     uses: (actor: PersonActor, { after, limit, productId, jobId }: z.output<typeof ProductUsesQuery>): Promise<Page<ProductUse>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
-        const cursor = readCursor(after, 'text', 'id');
+        const cursor = readCursor(after, 'day', 'id');
         const rows = await tx
           .select({ use: productUses, revisedOn: revisions.revisedOn })
           .from(productUses)

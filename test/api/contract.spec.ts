@@ -35,6 +35,8 @@ afterAll(async () => {
   await service.stop();
 });
 
+/** More than any list takes, in less than the largest request. */
+const manyOf = (item: unknown): unknown[] => Array.from({ length: Math.min(6_000, Math.floor(900_000 / (JSON.stringify(item).length + 1))) }, () => item);
 const agentFor = ({ access }: Endpoint): Agent => (access === 'public' ? pageAgent(service) : access === 'tablet' ? own.tablet.agent : own.organisation.signedIn[(access as readonly Role[])[0] as Role].agent);
 const example = async (name: EndpointName): Promise<Example & { agent: Agent }> => {
   const made = await examples[name](own);
@@ -147,7 +149,7 @@ describe.each(rows(hasJsonBody))('%s', (name) => {
     const { agent, ...input } = await example(name);
     const before = await snapshot();
     for (const { path, value, with: put } of placesIn(input.body)) {
-      const tooMuch = typeof value === 'string' ? [huge] : typeof value === 'number' ? [1e308, -1e308] : Array.isArray(value) && value.length > 0 && !JSON.stringify(value).includes('kneeboard-envelope') ? [Array.from({ length: 400 }, () => value[0] as unknown)] : [];
+      const tooMuch = typeof value === 'string' ? [huge] : typeof value === 'number' ? [1e308, -1e308] : Array.isArray(value) && value.length > 0 ? [manyOf(value[0])] : [];
       for (const wrong of tooMuch) {
         const { errors } = expectProblem(await call(agent, name, { ...input, body: put(wrong) }), 400);
         expect({ path, errors, isNamed: names(errors, path) }).toMatchObject({ isNamed: true });
@@ -210,12 +212,13 @@ describe.each(rows(({ needsVersion }) => needsVersion === true))('%s', (name) =>
 });
 
 describe.each(rows(({ query }) => query !== undefined))('%s', (name) => {
-  const hasPages = table.find(([each]) => each === name)?.[1].answer !== 'bytes';
+  const fields = Object.keys((endpoints[name] as { query?: { shape?: object } }).query?.shape ?? {});
+  const hasPages = fields.includes('after');
 
   it('refuses by name what its address does not know', async () => {
     const { agent, ...input } = await example(name);
     const wrong: [string, string][] = [['sort', 'name'], ['offset', '-1'], ['organisationId', other.organisation.id]];
-    const limits: [string, string][] = hasPages ? ['1000000000', '0', '-1', '1.5', 'all', '', 'NaN', '1e3'].map((limit) => ['limit', limit]) : [];
+    const limits: [string, string][] = fields.includes('limit') ? ['1000000000', '0', '-1', '1.5', 'all', '', 'NaN', '1e3'].map((limit) => ['limit', limit]) : [];
     for (const [key, value] of [...wrong, ...limits]) {
       const { errors } = expectProblem(await call(agent, name, { ...input, query: { ...input.query, [key]: value } }), 400);
       expect({ key, value, isNamed: names(errors, key) }).toEqual({ key, value, isNamed: true });
@@ -250,8 +253,8 @@ describe.each(rows(({ query }) => query !== undefined))('%s', (name) => {
 
   it('takes hostile words to look for as words', async () => {
     const { agent } = await example(name);
-    if (!('q' in ((endpoints[name] as { query?: { shape?: object } }).query?.shape ?? {}))) return;
-    for (const q of ["'; DROP TABLE people; --", '%', '_', '\\', '<script>', '(((']) expect((await call(agent, name, { query: { q } })).status).toBe(200);
+    if (!fields.includes('q')) return;
+    for (const q of ["'; DROP TABLE people; --", '%%', '__', '\\\\', '<script>', '(((', ':*&|!']) expect((await call(agent, name, { query: { q } })).status).toBe(200);
     for (const q of ['\u0000', 'x'.repeat(101)]) expect(names(expectProblem(await call(agent, name, { query: { q } }), 400).errors, 'q')).toBe(true);
   });
 });

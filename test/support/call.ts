@@ -10,6 +10,7 @@ export interface CallInput {
   readonly query?: Readonly<Record<string, string | number>>;
   readonly body?: unknown;
   readonly file?: { readonly bytes: Uint8Array; readonly fileName: string };
+  readonly headers?: Readonly<Record<string, string>>;
   /** Sent as If-Match. */
   readonly version?: number | undefined;
 }
@@ -25,6 +26,7 @@ export async function call(agent: Agent, name: EndpointName, input: CallInput = 
   const endpoint: Endpoint = endpoints[name];
   const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
   let request = agent[method](pathOf(name, input.params));
+  if (input.headers) request = request.set({ ...input.headers });
   if (input.query) request = request.query(input.query);
   if (input.version !== undefined) request = request.set('If-Match', `"${input.version}"`);
   if (endpoint.answer === 'bytes') request = request.buffer(true).parse(collect);

@@ -1,4 +1,5 @@
 import { v7 as newId } from 'uuid';
+import { makeLink } from '#server/platform/links';
 import { type EndpointName } from '#shared/endpoints';
 import { type CallInput, type Agent, ok } from './call';
 import { equipmentEdit, jobEdit, kitEdit, personEdit, sheetEdit } from './edits';
@@ -46,7 +47,8 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   },
   confirmRevision: async ({ organisation, ids }) => {
     const { id, version } = await organisation.sheetToEnter();
-    return { params: { revisionId: id }, version, body: { fields: sheetEdit(), product: { id: ids['productId'] } } };
+    return { params: { revisionId: id }, version, // Older than the one that counts, so that it does not take its place.
+    body: { fields: sheetEdit({ revisedOn: '2019-03-18' }), product: { id: ids['productId'] } } };
   },
   setRevisionAside: async ({ organisation }) => {
     const { id, version } = await organisation.sheetToEnter();
@@ -61,6 +63,30 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
     const { revision } = await ok(officerOf(world), 'uploadSheet', { file: { bytes: Buffer.from(`%PDF-1.4 again ${newId()}`), fileName: 'sheet.pdf' } });
     return { params: { revisionId: revision.id } };
   },
+  searchSheets: () => ({ query: { limit: 1, q: 'quarrybond' } }),
+  readReach: ({ ids }) => ({ params: pick(ids, 'revisionId') }),
+  applyRevision: ({ ids }) => ({ params: pick(ids, 'revisionId') }),
+  listProductUses: ({ ids }) => ({ query: { limit: 1, jobId: ids['jobId'] ?? '', productId: ids['productId'] ?? '' } }),
+  listLibraryTasks: () => ({ query: { limit: 1 } }),
+  readLibraryPolicy: () => ({}),
+  setLibraryPolicy: () => ({ body: { reviewAfterYears: 3 } }),
+  listRequests: ({ ids }) => ({ query: { limit: 1, state: 'open', productId: ids['productId'] ?? '' } }),
+  askSupplier: ({ ids }) => ({ body: { productId: ids['productId'], email: 'sheets@northlode.example', message: 'Please send the current sheet.', language: 'es' } }),
+  withdrawRequest: async (world) => ({ params: { requestId: (await openRequest(world)).id } }),
+  openRequest: async (world) => ({ body: { token: (await openRequest(world)).token } }),
+  answerRequest: async (world) => ({ headers: { 'X-Kneeboard-Link': (await openRequest(world)).token }, file: { bytes: Buffer.from(`%PDF-1.4 answer ${newId()}`), fileName: 'sheet.pdf' } }),
+  uploadZip: async (world) => ({ file: { bytes: await ok(officerOf(world), 'exportSheetsZip'), fileName: 'sheets.zip' } }),
+  exportSheetsZip: () => ({}),
+  exportProductsCsv: () => ({}),
+  previewImport: () => ({ file: { bytes: Buffer.from('name,supplier\r\nQuarrybond 41,"Northlode Resins, Inc."\r\n'), fileName: 'products.csv' } }),
+  importProducts: () => ({ body: { products: [{ name: `Quarrybond ${newId()}`, supplier: 'Northlode Resins, Inc.' }] } }),
+  readSiteCode: ({ ids }) => ({ params: pick(ids, 'jobId') }),
+  makeSiteCode: ({ ids }) => ({ params: pick(ids, 'jobId') }),
+  revokeSiteCode: async ({ organisation }) => ({ params: { jobId: (await organisation.job()).id } }),
+  openSite: async (world) => ({ body: { token: await siteToken(world) } }),
+  readSiteSheet: async (world) => ({ headers: { 'X-Kneeboard-Link': await siteToken(world) }, params: pick(world.ids, 'revisionId') }),
+  readKitLabel: ({ ids }) => ({ params: pick(ids, 'kitId'), query: { state: 'wet' } }),
+  readProductLabel: ({ ids }) => ({ params: pick(ids, 'productId') }),
   listProducts: () => ({ query: { limit: 1 } }),
   addProduct: () => ({ body: { name: `Quarrybond ${newId()}`, supplier: 'Northlode Resins, Inc.' } }),
   listKits: () => ({ query: { limit: 1 } }),
@@ -121,6 +147,17 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   deliver: ({ tablet, day, ids }) => ({ agent: tablet.agent, body: { sentAt: new Date().toISOString(), envelopes: [tablet.couldNotSign(day.version, ids['personId'] ?? '')] } }),
   readTabletSheet: ({ tablet, ids }) => ({ agent: tablet.agent, params: pick(ids, 'revisionId') }),
 };
+
+/** A request with the link that its mail would carry. */
+async function openRequest(world: World): Promise<{ id: string; token: string }> {
+  const { id, expiresAt } = await ok(officerOf(world), 'askSupplier', { body: { productId: world.ids['productId'], email: 'sheets@northlode.example', message: 'Please send the current sheet.', language: 'en' } });
+  const { database } = world.organisation.service.deps;
+  return { id, token: await database.inOrganisation(world.organisation.id, (tx) => makeLink(tx, 'sheet-request', id, new Date(expiresAt))) };
+}
+async function siteToken(world: World): Promise<string> {
+  const { address } = await ok(officerOf(world), 'makeSiteCode', { params: { jobId: world.ids['jobId'] ?? '' } });
+  return address?.split('#')[1] ?? '';
+}
 
 async function openAction(world: World) {
   await world.tablet.deliver(world.tablet.couldNotSign(world.day.version, world.ids['personId'] ?? ''));

@@ -24,6 +24,7 @@ export async function makeWorld(service: Service): Promise<World> {
   const tablet = await organisation.tablet();
   const { receipts } = await tablet.deliverAll([await tablet.signed(day.version, lead.personId), tablet.couldNotSign(day.version, crew.id)]);
   const actions = await ok(officer.agent, 'listActions');
+  const request = await ok(officer.agent, 'askSupplier', { body: { productId: product, email: 'sheets@northlode.example', message: 'Please send the current sheet.', language: 'en' } });
   // A checkpoint, so that there is a receipt to take.
   await ok(auditor.agent, 'checkRecord');
   return {
@@ -43,6 +44,7 @@ export async function makeWorld(service: Service): Promise<World> {
       shiftId: day.shift.id,
       versionId: day.version.id,
       actionId: actions.items[0]?.id ?? '',
+      requestId: request.id,
       acknowledgementId: receipts[0]?.acknowledgementId ?? '',
       language: 'en',
     },
