@@ -1,7 +1,8 @@
 // @ts-check
 import { createHash } from 'node:crypto';
 import { connect, createServer } from 'node:net';
-import { step } from './progress.mjs';
+import { isEnding } from './processes.mjs';
+import { step, Stopped } from './progress.mjs';
 
 /**
  * Holds a lock that the kernel drops with the process, however it ends: a name in Linux's abstract socket space.
@@ -51,6 +52,7 @@ async function enter(name, write) {
   return step(`Waiting for another one at work in this folder (${first.heldBy})`, async () => {
     for (;;) {
       await new Promise((resolve) => setTimeout(resolve, 250));
+      if (isEnding()) throw new Stopped();
       const lock = await take();
       if ('release' in lock) return lock;
     }

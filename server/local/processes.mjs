@@ -66,6 +66,9 @@ export function endRunningCommands() {
   setTimeout(() => running.forEach((child) => child.kill('SIGKILL')), 2000).unref();
 }
 
+/** Whether a Ctrl-C came: whoever waits should give up. */
+export const isEnding = () => areCommandsEnding;
+
 /**
  * A command line that ends with its parent. Read also by postgres.mjs, which adds the change of user.
  * @param {NodeJS.Signals} signal
