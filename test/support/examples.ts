@@ -47,8 +47,9 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   },
   confirmRevision: async ({ organisation, ids }) => {
     const { id, version } = await organisation.sheetToEnter();
-    return { params: { revisionId: id }, version, // Older than the one that counts, so that it does not take its place.
-    body: { fields: sheetEdit({ revisedOn: '2019-03-18' }), product: { id: ids['productId'] } } };
+    // Older than the one that counts, so that it does not take its place.
+    const fields = sheetEdit({ revisedOn: '2019-03-18' });
+    return { params: { revisionId: id }, version, body: { fields, product: { id: ids['productId'] } } };
   },
   setRevisionAside: async ({ organisation }) => {
     const { id, version } = await organisation.sheetToEnter();
