@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, type ElementRef, computed, input, output, signal, viewChild } from '@angular/core';
+import { type Language } from '#compliance/outcome';
 
 /** A place to drop files on, with a button for those who do not drag. What is not accepted is named, not dropped in silence. */
 @Component({
@@ -23,6 +24,7 @@ export class FileDrop {
   readonly accept = input('');
   readonly isMultiple = input(true);
   readonly isDisabled = input(false);
+  readonly language = input<Language>('en');
   /** Never empty. */
   readonly files = output<readonly File[]>();
 
@@ -32,7 +34,9 @@ export class FileDrop {
     const names = this.refused();
     if (names.length === 0) return '';
     const shown = names.slice(0, 3).join(', ');
-    return names.length > 3 ? `Not taken: ${shown} and ${names.length - 3} more.` : `Not taken: ${shown}.`;
+    const more = names.length - 3;
+    if (this.language() === 'es') return `No se aceptó: ${shown}${more > 0 ? ` y ${more} más` : ''}.`;
+    return `Not taken: ${shown}${more > 0 ? ` and ${more} more` : ''}.`;
   });
 
   protected choose(): void {

@@ -22,6 +22,8 @@ const subjects: Routes = [
 
 export const routes: Routes = [
   { path: 'sign-in', title: 'Sign in', loadComponent: () => import('./session/sign-in').then((file) => file.SignIn) },
+  { path: 'site', title: 'Safety data sheets of this job', loadComponent: () => import('./public/site/site-page').then((file) => file.SitePage) },
+  { path: 'send-sheet', title: 'Send a safety data sheet', loadComponent: () => import('./public/send-sheet/send-sheet').then((file) => file.SendSheet) },
   {
     path: '',
     component: Shell,

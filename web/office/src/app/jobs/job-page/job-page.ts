@@ -16,13 +16,14 @@ import { Unready } from '../../pieces/unready';
 import { FactsDialog } from '../job-form/facts-dialog';
 import { floorWords, jurisdictionName, settingWords } from '../job-form/site-words';
 import { JobsApi } from '../jobs-api';
+import { SiteCodeLine } from '../site-code/site-code-line';
 
 type ShiftLine = NonNullable<JobSummary['latestShift']>;
 
 /** One job: what is known of the place, and its shifts by date. */
 @Component({
   selector: 'kb-job-page',
-  imports: [Empty, MatButton, Note, PageHeader, RouterLink, State, Unready],
+  imports: [Empty, MatButton, Note, PageHeader, RouterLink, SiteCodeLine, State, Unready],
   templateUrl: './job-page.html',
   styleUrl: './job-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

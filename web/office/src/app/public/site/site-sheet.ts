@@ -1,0 +1,87 @@
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
+import { firstValueFrom } from 'rxjs';
+import { type SitePage } from '#shared/library';
+import { Empty } from '#ui/empty';
+import { PageViewer } from '#ui/page-viewer/page-viewer';
+import { ReaderLanguage } from '../reader-language';
+import { SiteApi } from './site-api';
+import { siteWords } from './site-words';
+
+/** Sheets already fetched with this page: they open again without signal. */
+const fetched = new Map<string, ArrayBuffer>();
+
+/** One sheet of the job, shown on the page itself: a phone's own viewer could not send the code's secret. */
+@Component({
+  selector: 'kb-site-sheet',
+  imports: [Empty, PageViewer],
+  template: `
+    <div class="kb-actions kb-no-print"><button type="button" class="kb-button outlined" (click)="closed.emit()">← {{ words().back }}</button></div>
+    <h1 class="name">{{ sheet().productName }}</h1>
+    @if (bytes(); as bytes) {
+      @defer {
+        <kb-page-viewer [source]="bytes" [name]="sheet().productName" [language]="language()"><button type="button" class="kb-button text" (click)="save(bytes)">{{ words().save }}</button></kb-page-viewer>
+      } @placeholder {
+        <kb-empty state="loading" [heading]="words().openingSheet" />
+      }
+      <div class="kb-actions kb-no-print"><button type="button" class="kb-button text" (click)="save(bytes)">{{ words().save }}</button></div>
+    } @else if (hasFailed()) {
+      <kb-empty state="offline" [heading]="words().sheetFailed" [detail]="words().sheetFailedNext" [retryLabel]="words().again" (retry)="load()" />
+    } @else {
+      <kb-empty state="loading" [heading]="words().openingSheet" />
+    }
+  `,
+  styles: `
+    :host {
+      display: flex;
+      flex-direction: column;
+      gap: 0.75rem;
+    }
+
+    .name {
+      font-size: 1.25rem;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class SiteSheet {
+  private readonly api = inject(SiteApi);
+  protected readonly language = inject(ReaderLanguage).language;
+
+  readonly sheet = input.required<SitePage['sheets'][number]>();
+  readonly token = input.required<string>();
+  readonly closed = output<void>();
+
+  protected readonly words = computed(() => siteWords[this.language()]);
+  protected readonly bytes = signal<ArrayBuffer | null>(null);
+  protected readonly hasFailed = signal(false);
+
+  constructor() {
+    effect(() => {
+      this.sheet();
+      untracked(() => void this.load());
+    });
+  }
+
+  protected async load(): Promise<void> {
+    const { revisionId } = this.sheet();
+    this.hasFailed.set(false);
+    this.bytes.set(fetched.get(revisionId) ?? null);
+    if (fetched.has(revisionId)) return;
+    try {
+      const bytes = await firstValueFrom(this.api.sheet(this.token(), revisionId));
+      fetched.set(revisionId, bytes);
+      if (this.sheet().revisionId === revisionId) this.bytes.set(bytes);
+    } catch {
+      this.hasFailed.set(true);
+    }
+  }
+
+  protected save(bytes: ArrayBuffer): void {
+    const link = document.createElement('a');
+    link.href = URL.createObjectURL(new Blob([bytes], { type: 'application/pdf' }));
+    link.download = `${this.sheet().productName}.pdf`;
+    link.click();
+    // After the browser has taken it.
+    setTimeout(() => URL.revokeObjectURL(link.href), 10_000);
+  }
+}
