@@ -84,7 +84,7 @@ function isoDate(year: number, month: number, day: number): string | null {
 /** Whether this sheet writes the day or the month first, from its own dates, its language and the law it cites. */
 export function dateOrder(text: string, language: string): DateOrder {
   const counts = { dayFirst: 0, monthFirst: 0 };
-  for (const match of foldKeepingLength(text).matchAll(figures)) {
+  for (const match of text.matchAll(figures)) {
     const [a, b] = [Number(match[1]), Number(match[3])];
     if (match[2] === '.' || (a > 12 && b <= 12)) counts.dayFirst++;
     else if (b > 12 && a <= 12) counts.monthFirst++;
@@ -92,11 +92,15 @@ export function dateOrder(text: string, language: string): DateOrder {
   if (counts.dayFirst > 0 && counts.monthFirst === 0) return { isDayFirst: true, confidence: 0.92, because: 'Other dates on this sheet write the day first.' };
   if (counts.monthFirst > 0 && counts.dayFirst === 0) return { isDayFirst: false, confidence: 0.92, because: 'Other dates on this sheet write the month first.' };
   if (language !== 'en') return { isDayFirst: true, confidence: 0.85, because: 'Sheets in this language write the day first.' };
-  const american = count(text, /\b(29 ?c\.?f\.?r|osha|hcs|usa|u\.s\.a?|chemtrec|infotrac|tsca|sara 31\d|proposition 65|prop 65|\d{5}-\d{4}|united states)\b/gi);
-  const european = count(text, /\b(1907\/2006|1272\/2008|reach annex|2015\/830|2020\/878|453\/2010|united kingdom|ireland|coshh|eh40|australia|new zealand)\b/gi);
+  const first = text.slice(0, enoughLetters);
+  const american = count(first, /\b(29 ?c\.?f\.?r|osha|hcs|usa|u\.s\.a?|chemtrec|infotrac|tsca|sara 31\d|proposition 65|prop 65|\d{5}-\d{4}|united states)\b/gi);
+  const european = count(first, /\b(1907\/2006|1272\/2008|reach annex|2015\/830|2020\/878|453\/2010|united kingdom|ireland|coshh|eh40|australia|new zealand)\b/gi);
   if (american > european) return { isDayFirst: false, confidence: 0.8, because: 'The sheet cites American rules, so the month is read first.' };
   if (european > american) return { isDayFirst: true, confidence: 0.8, because: 'The sheet cites European rules, so the day is read first.' };
   return { isDayFirst: false, confidence: 0.5, because: 'Nothing on the sheet says whether day or month comes first.' };
 }
+
+/** The first pages name the law a sheet obeys. */
+const enoughLetters = 20_000;
 
 const count = (text: string, words: RegExp): number => text.match(words)?.length ?? 0;

@@ -17,7 +17,7 @@ export interface LanguageGuess {
 }
 
 /** The first pages decide; the rest of a long sheet costs time and says the same. */
-const enoughLetters = 15_000;
+const enoughLetters = 6_000;
 
 /** The language most small words belong to; null for a text too short or too mixed to say. */
 export function languageOf(text: string): LanguageGuess | null {

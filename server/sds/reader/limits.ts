@@ -24,6 +24,9 @@ const terms: readonly (readonly [string, RegExp])[] = [
   ['STEL', /\bstel\b|short[- ]term|15 ?min|\bct\b|kurzzeit|court terme|corta duracion/],
   ['TWA', /\btwa\b|8 ?-?h(r|our)?s?\b|time[- ]weighted|\bppt\b|langzeit/],
 ];
+/** Quick looks before the slow ones. */
+const anyKind = /osha|pel|acgih|tlv|niosh|rel|wel|eh40|mak|agw|trgs|vl[ae]|vme|lmpe|nom-|idlh|dnel/i;
+const anyTerm = /ceil|\(c\)|c:|techo|pico|stel|term|min|ct|kurz|dura|twa|h|ppt|weig|lang/i;
 const endOfLimits = /^(\d[\d.]*\s+)?(appropriate engineering|engineering (controls|measures)|exposure controls|personal protect|individual protection|respiratory protection|eye(\/face)? protection|hand protection|skin protection|ventilation|controles? tecnicos|controles? de ingenieria|proteccion|controles de la exposicion|mesures d'ordre technique|protection|technische|begrenzung|persönliche|augenschutz|atemschutz|handschutz)/;
 
 /** Limits of section 8: each figure with a unit of air, its kind, and the substance of its row or of the row above. */
@@ -71,13 +74,15 @@ function ingredientOf(substance: string, names: readonly string[]): string | nul
   return exact ?? (around.length === 1 ? (around[0] ?? null) : null);
 }
 
-const amountsIn = (line: Line): { segment: Segment; match: RegExpExecArray }[] => line.segments.flatMap((segment) => [...segment.text.matchAll(amount)].map((match) => ({ segment, match })));
+const amountsIn = (line: Line): { segment: Segment; match: RegExpExecArray }[] => line.segments.flatMap((segment) => (/\d/.test(segment.text) ? [...segment.text.matchAll(amount)] : []).map((match) => ({ segment, match })));
 
 /** What stands between the figure before and this one: that figure's words are its own. */
 const sinceLastAmount = (rowBefore: string): string => rowBefore.slice(Math.max(0, ...[...rowBefore.matchAll(amount)].map((match) => match.index + match[0].length)));
 
-const kindOf = (text: string): string | null => kinds.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
-const termOf = (text: string): string | null => terms.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
+const kindOf = (text: string): string | null => (anyKind.test(text) ? kindIn(text) : null);
+const kindIn = (text: string): string | null => kinds.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
+const termOf = (text: string): string | null => (anyTerm.test(text) ? termIn(text) : null);
+const termIn = (text: string): string | null => terms.find(([, words]) => words.test(fold(text)))?.[0] ?? null;
 
 const unitOf = (printed: string): string => printed.toLowerCase().replace(/\s/g, '').replace(/m3|m³/, 'm³').replace(/^[µμu]g/, 'µg');
 

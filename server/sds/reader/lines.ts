@@ -26,8 +26,7 @@ export function withoutOverprints(items: TextItem[]): TextItem[] {
   const byHeight = new Map<number, TextItem[]>();
   for (const item of items) {
     const slot = Math.round(item.baseline / 4);
-    const letters = squeezed(item.text);
-    const isRepeat = [slot - 1, slot, slot + 1].some((near) => byHeight.get(near)?.some((other) => overprints(item, letters, other)));
+    const isRepeat = repeats(item, byHeight.get(slot - 1)) || repeats(item, byHeight.get(slot)) || repeats(item, byHeight.get(slot + 1));
     if (isRepeat) continue;
     kept.push(item);
     const list = byHeight.get(slot);
@@ -37,13 +36,15 @@ export function withoutOverprints(items: TextItem[]): TextItem[] {
   return kept;
 }
 
-function overprints(item: TextItem, letters: string, other: TextItem): boolean {
+const repeats = (item: TextItem, others: TextItem[] | undefined): boolean => others?.some((other) => overprints(item, other)) ?? false;
+
+function overprints(item: TextItem, other: TextItem): boolean {
   const tolerance = Math.min(item.height, other.height) * 0.3;
   if (Math.abs(item.baseline - other.baseline) > tolerance) return false;
   const start = Math.max(item.x, other.x);
   const end = Math.min(item.x + item.width, other.x + other.width);
   if (end - start < item.width * 0.7) return false;
-  return squeezed(other.text).includes(letters);
+  return squeezed(other.text).includes(squeezed(item.text));
 }
 
 const squeezed = (text: string): string => text.replace(/\s+/g, '');
@@ -101,8 +102,11 @@ export function around(a: Box, b: Box): Box {
   return { x, y, width: Math.max(a.x + a.width, b.x + b.width) - x, height: Math.max(a.y + a.height, b.y + b.height) - y };
 }
 
+const isTidy = /^[!-~]+(?: [!-~]+)*$/;
+
 /** Odd blanks and soft hyphens out, control characters out, ligature and width forms normalised by pdfjs already. */
 function tidy(text: string): string {
+  if (isTidy.test(text)) return text;
   return text
     .replace(/[\u00a0\u2000-\u200a\u202f\u205f\u3000\t\r\n]/g, ' ')
     .replace(/[\u00ad\u200b-\u200f\u202a-\u202e\u2060\u2066-\u2069\ufeff]/g, '')

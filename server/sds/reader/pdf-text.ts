@@ -49,7 +49,8 @@ export async function pdfText(bytes: Uint8Array, limits: PdfTextLimits): Promise
   // pdfjs takes the buffer over, so it gets its own copy.
   const task = getDocument({
     data: new Uint8Array(bytes),
-    ...assetFolders(),
+    cMapUrl: assetFolders().cMapUrl,
+    disableFontFace: true,
     isEvalSupported: false,
     useSystemFonts: false,
     verbosity: VerbosityLevel.ERRORS,

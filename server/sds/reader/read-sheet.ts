@@ -32,7 +32,7 @@ export async function readSheet(bytes: Uint8Array, options: ReadSheetOptions = {
 /** The reading of lines that are already in order; pages without letters make the sheet one without a text layer. */
 export function readLines(pages: Line[][]): SheetReading {
   const text = pages.map((lines) => lines.map((line) => line.text).join('\n')).join('\f');
-  if ((text.match(/\p{L}/gu) ?? []).length < leastLetters) return emptyReading('no-text-layer', pages.length);
+  if (!hasEnoughLetters.test(text)) return emptyReading('no-text-layer', pages.length);
   const { pages: kept, running } = splitRunningLines(pages, isSectionHeading);
   const lines = kept.flat();
   const sections = findSections(lines);
@@ -58,7 +58,7 @@ export function readLines(pages: Line[][]): SheetReading {
 }
 
 /** Fewer letters than this on the whole sheet are a stamp or a page number over pictures, not a text layer. */
-const leastLetters = 60;
+const hasEnoughLetters = /(?:\p{L}\P{L}*){60}/u;
 
 function languageField(text: string, lines: Line[]): Field<string> | null {
   const guess = languageOf(text);

@@ -25,9 +25,12 @@ const linesOf = (items: TextItem[]): Line[] => groupRows(items).map(toLine).filt
 const isRule = (line: Line): boolean => /^[\s._\-–—=*•|]*$/.test(line.text);
 
 const leastProseRows = 8;
+/** Points; narrower columns are cells. */
+const leastColumn = 150;
 
 /** Where the white strip between two columns of prose stands, if the page has one near its middle. */
 function proseGutter(lines: Line[], width: number): number | null {
+  if (!mayHoldColumns(lines, width)) return null;
   const starts = new Map<number, number>();
   for (const line of lines) {
     for (const segment of line.segments) {
@@ -40,6 +43,20 @@ function proseGutter(lines: Line[], width: number): number | null {
   const candidates = [...starts].filter(([, count]) => count >= leastProseRows / 2).map(([start]) => start * 2 - 3);
   candidates.sort((a, b) => a - b);
   return candidates.find((gutter) => bandsAcross(lines, gutter).some((band) => isProse(band, gutter))) ?? null;
+}
+
+/** A cheap look first: both halves of the page hold some long pieces. Most pages do not. */
+function mayHoldColumns(lines: Line[], width: number): boolean {
+  let left = 0;
+  let right = 0;
+  for (const line of lines) {
+    for (const { box } of line.segments) {
+      if (box.width < leastColumn * 0.75 || box.width > width * 0.6) continue;
+      if (box.x > width * 0.35) right++;
+      else if (box.x + box.width < width * 0.65) left++;
+    }
+  }
+  return left >= 4 && right >= 4 && left + right >= leastProseRows * 1.5;
 }
 
 /** Runs of lines that keep clear of the gutter, each followed by the line that crosses it. */
@@ -71,5 +88,5 @@ function fullness(segments: Segment[]): number {
   const start = Math.min(...segments.map((segment) => segment.box.x));
   const end = Math.max(...segments.map((segment) => segment.box.x + segment.box.width));
   const full = segments.filter((segment) => segment.box.x + segment.box.width - start > (end - start) * 0.75 && segment.box.x - start < (end - start) * 0.25);
-  return end - start > 150 && full.length >= 4 ? full.length / segments.length : 0;
+  return end - start > leastColumn && full.length >= 4 ? full.length / segments.length : 0;
 }

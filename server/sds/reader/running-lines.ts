@@ -20,14 +20,15 @@ export function splitRunningLines(pages: Line[][], isHeading: (line: Line) => bo
   const fillers = fillerWords(pages);
   const edges = pages.map(edgesOf);
   for (const edge of edges) {
-    for (const key of new Set([...edge].map(keyOf))) counts.set(key, (counts.get(key) ?? 0) + 1);
+    for (const key of new Set(edge.values())) counts.set(key, (counts.get(key) ?? 0) + 1);
   }
   const least = Math.max(2, Math.ceil(pages.length * 0.5));
   const running = new Map<string, Line>();
   const kept = pages.map((lines, index) =>
     lines.filter((line) => {
       if (fillers.has(line.text)) return false;
-      if (!edges[index]?.has(line) || (counts.get(keyOf(line)) ?? 0) < least || isHeading(line)) return true;
+      const key = edges[index]?.get(line);
+      if (key === undefined || (counts.get(key) ?? 0) < least || isHeading(line)) return true;
       const wording = fold(line.text);
       if (!running.has(wording)) running.set(wording, line);
       return false;
@@ -43,9 +44,10 @@ function fillerWords(pages: Line[][]): Set<string> {
   return new Set([...counts].filter(([, count]) => count >= 12).map(([text]) => text));
 }
 
-function edgesOf(lines: Line[]): Set<Line> {
+/** The lines at the top and foot of a page with what they are compared by. */
+function edgesOf(lines: Line[]): Map<Line, string> {
   const byHeight = [...lines].sort((a, b) => a.box.y - b.box.y);
-  return new Set([...byHeight.slice(0, edgeLines), ...byHeight.slice(-edgeLines)]);
+  return new Map([...byHeight.slice(0, edgeLines), ...byHeight.slice(-edgeLines)].map((line) => [line, keyOf(line)]));
 }
 
 /** Figures are page numbers as a rule; heights are compared to six points. */
