@@ -173,7 +173,7 @@ export class PinEntry {
 
   private async passes(person: PersonView, hash: string, sealed: SealedPin): Promise<boolean> {
     const answer = await this.desk.check(person.id, hash, sealed);
-    if (answer.outcome === 'wrong') this.trouble.set(answer.detail ?? this.say().pin.wrong(person.name));
+    if (answer.outcome === 'wrong') this.trouble.set(this.say().pin.wrong(person.name, answer.detail));
     if (answer.outcome === 'paused') this.pause(answer.seconds);
     return answer.outcome === 'right' || answer.outcome === 'unchecked';
   }

@@ -141,6 +141,7 @@ export const en = {
     no: 'No, not yet',
     yes: 'Yes',
     previous: 'Previous line',
+    mask: (mask: string) => `Mask: ${mask}`,
     stopped: (task: string) => `${task} is stopped.`,
     thanks: 'Thank you for stopping it.',
     open: (task: string) => `${task} may start.`,
@@ -217,7 +218,8 @@ export const en = {
     plain: 'Too easy to guess. Choose another.',
     differs: 'The two PINs differ. Choose again.',
     checking: 'Checking the PIN.',
-    wrong: (name: string) => `This is not ${name}’s PIN.`,
+    /** `detail` is the office's own sentence, in English, with how many tries are left. */
+    wrong: (name: string, detail: string | null) => detail ?? `This is not ${name}’s PIN.`,
     paused: (seconds: number) => `Too many wrong PINs. Wait ${seconds} seconds.`,
     later: 'No signal: the PIN is checked when it arrives at the office.',
     keypad: 'PIN keypad',

@@ -143,6 +143,7 @@ export const es: Messages = {
     no: 'No, todavía no',
     yes: 'Sí',
     previous: 'Punto anterior',
+    mask: (mask) => `Máscara: ${mask}`,
     stopped: (task) => `Detenida: ${task}.`,
     thanks: 'Gracias por detenerla.',
     open: (task) => `Puede empezar: ${task}.`,
@@ -219,7 +220,11 @@ export const es: Messages = {
     plain: 'Es muy fácil de adivinar. Elija otro.',
     differs: 'Los dos PIN no son iguales. Elija otra vez.',
     checking: 'Revisando el PIN.',
-    wrong: (name) => `Este no es el PIN de ${name}.`,
+    wrong: (name, detail) => {
+      const tries = /\d+/.exec(detail ?? '')?.[0];
+      const left = tries === '1' ? ' Queda 1 intento.' : ` Quedan ${tries} intentos.`;
+      return `Este no es el PIN de ${name}.${tries ? left : ''}`;
+    },
     paused: (seconds) => `Demasiados PIN incorrectos. Espere ${seconds} segundos.`,
     later: 'Sin señal: el PIN se revisa cuando llegue a la oficina.',
     keypad: 'Teclado para el PIN',
