@@ -52,6 +52,7 @@ export const libraryEndpoints = {
   takeRevisionBack: { method: 'DELETE', path: '/api/sheets/:revisionId/set-aside', access: officer, answer: Revision, needsVersion: true },
   readRevisionAgain: { method: 'POST', path: '/api/sheets/:revisionId/reading', access: officer, answer: Revision },
   listProducts: { method: 'GET', path: '/api/products', access: everyone, query: ProductsQuery, answer: pageOf(Product) },
+  readProduct: { method: 'GET', path: '/api/products/:productId', access: everyone, answer: Product },
   addProduct: { method: 'POST', path: '/api/products', access: officer, body: AddProduct, answer: Product },
   listKits: { method: 'GET', path: '/api/kits', access: everyone, query: PageQuery, answer: pageOf(Kit) },
   addKit: { method: 'POST', path: '/api/kits', access: officer, body: KitEdit, answer: Kit },

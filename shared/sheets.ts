@@ -60,6 +60,8 @@ export const RevisionSummary = z.object({
   productName: z.string().nullable(),
   supplier: z.string().nullable(),
   revisedOn: LocalDate.nullable(),
+  /** BCP 47; null while nobody knows. */
+  language: z.string().nullable(),
   /** Fields under the confidence that asks a person to look. */
   toLookAt: z.number().int(),
   isCurrent: z.boolean(),
@@ -81,7 +83,7 @@ export type Revision = z.infer<typeof Revision>;
 export const UploadedSheet = z.object({ revision: RevisionSummary, isKnown: z.boolean() });
 export type UploadedSheet = z.infer<typeof UploadedSheet>;
 
-export const SheetsQuery = PageQuery.extend({ state: z.enum(revisionStates).optional(), q: SearchText.optional() });
+export const SheetsQuery = PageQuery.extend({ state: z.enum(revisionStates).optional(), q: SearchText.optional(), productId: Id.optional() });
 
 /** Values as a person confirms or enters them; places of untouched values are kept by the server. */
 export const SheetEdit = z.strictObject({
@@ -97,6 +99,9 @@ export const SheetEdit = z.strictObject({
   protectionWords: z.array(z.strictObject({ topic: z.enum(protectionTopics), text: Line(1000) })).max(40),
 });
 export type SheetEdit = z.infer<typeof SheetEdit>;
+/** What a sheet cannot be confirmed without. */
+export const neededToConfirm = ['productName', 'supplier', 'language', 'revisedOn', 'signalWord'] as const satisfies readonly (keyof SheetEdit)[];
+export const neededMessage = 'Read this from the sheet and fill it in.';
 
 /** Confirming names the product this sheet belongs to, or makes it. */
 export const ConfirmSheet = z.strictObject({

@@ -135,6 +135,13 @@ export function productsService({ database }: Deps) {
         const items = await toProducts(tx, rows);
         return toPage(rows, limit, (row) => [row.name, row.id], (row) => items.get(row.id) as Product);
       }),
+    read: (actor: PersonActor, id: string): Promise<Product> =>
+      database.inOrganisation(actor.organisationId, async (tx) => {
+        const rows = await tx.select().from(products).where(and(eq(products.organisationId, tx.organisationId), eq(products.id, id)));
+        const product = (await toProducts(tx, rows)).get(id);
+        if (!product) throw new NotFoundError('product');
+        return product;
+      }),
     add: (actor: PersonActor, edit: { name: string; supplier: string }): Promise<Product> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer');

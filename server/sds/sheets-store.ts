@@ -38,6 +38,7 @@ export function toSummary(row: RevisionRow): RevisionSummary {
     productName: row.productName ?? fields.productName?.value ?? null,
     supplier: row.supplier ?? fields.supplier?.value ?? null,
     revisedOn: revision.revisedOn ?? fields.revisedOn?.value ?? null,
+    language: revision.language ?? fields.language?.value ?? null,
     toLookAt: revision.state === 'read' ? countToLookAt(fields) : 0,
     isCurrent: revision.isCurrent,
     uploadedAt: revision.uploadedAt.toISOString(),
@@ -65,7 +66,7 @@ export const findByHash = async (tx: Tx, sha256: string): Promise<RevisionRow | 
   (await selectRevisions(tx).where(and(eq(revisions.organisationId, tx.organisationId), eq(revisions.sha256, sha256))))[0];
 
 /** Newest first. Text is looked for in file name, product and supplier. */
-export function listRevisions(tx: Tx, { after, limit, state, q }: z.output<typeof SheetsQuery>): Promise<RevisionRow[]> {
+export function listRevisions(tx: Tx, { after, limit, state, q, productId }: z.output<typeof SheetsQuery>): Promise<RevisionRow[]> {
   const cursor = readCursor(after, 'instant', 'id');
   const like = q ? `%${q.replace(/[\\%_]/g, '\\$&')}%` : undefined;
   return selectRevisions(tx)
@@ -73,6 +74,7 @@ export function listRevisions(tx: Tx, { after, limit, state, q }: z.output<typeo
       and(
         eq(revisions.organisationId, tx.organisationId),
         state ? eq(revisions.state, state) : undefined,
+        productId ? eq(revisions.productId, productId) : undefined,
         like ? or(ilike(revisions.fileName, like), ilike(products.name, like), ilike(products.supplier, like), sql`${revisions.fields} -> 'productName' ->> 'value' ILIKE ${like}`) : undefined,
         cursor ? or(lt(revisions.uploadedAt, new Date(String(cursor[0]))), and(eq(revisions.uploadedAt, new Date(String(cursor[0]))), lt(revisions.id, String(cursor[1])))) : undefined,
       ),

@@ -89,6 +89,7 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   readKitLabel: ({ ids }) => ({ params: pick(ids, 'kitId'), query: { state: 'wet' } }),
   readProductLabel: ({ ids }) => ({ params: pick(ids, 'productId') }),
   listProducts: () => ({ query: { limit: 1 } }),
+  readProduct: ({ ids }) => ({ params: pick(ids, 'productId') }),
   addProduct: () => ({ body: { name: `Quarrybond ${newId()}`, supplier: 'Northlode Resins, Inc.' } }),
   listKits: () => ({ query: { limit: 1 } }),
   addKit: ({ ids }) => ({ body: kitEdit(ids['productId'] ?? '') }),

@@ -26,6 +26,7 @@ const revision: Revision = {
   productName: 'Quarrybond 40 Part C',
   supplier: 'Northlode Resins',
   revisedOn: '2026-11-28',
+  language: 'en',
   toLookAt: 2,
   isCurrent: false,
   uploadedAt: '2026-12-01T12:00:00Z',
