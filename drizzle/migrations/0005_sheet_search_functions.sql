@@ -145,7 +145,8 @@ BEGIN
   IF nearest IS NULL AND length(typed) >= 5 THEN
     -- Still being typed: the beginning of a longer word.
     SELECT array_agg(word ORDER BY similarity(word, typed) DESC, word) INTO nearest FROM sheet_words w
-      WHERE w.organisation_id = scope() AND length(w.word) > length(typed) AND levenshtein_less_equal(left(w.word, length(typed)), typed, 1) <= 1;
+      WHERE w.organisation_id = scope() AND length(w.word) > length(typed)
+        AND (levenshtein_less_equal(left(w.word, length(typed)), typed, 1) <= 1 OR levenshtein_less_equal(left(w.word, length(typed) + 1), typed, 1) <= 1 OR search_is_swap(left(w.word, length(typed)), typed));
   END IF;
   RETURN coalesce(nearest[1:5], '{}');
 END $$;
@@ -170,12 +171,13 @@ DECLARE
   typed text[] := (search_words(words))[1:12];
   extra text := (SELECT string_agg(quote_literal(key), ' & ') FROM (SELECT 'c ' || c AS key FROM unnest(cas) c UNION ALL SELECT 'k ' || c FROM unnest(codes) c) keys);
   asked tsquery;
+  meant_anywhere tsquery;
   meant text;
   stage text;
   language text;
 BEGIN
   IF scope() IS NULL THEN RETURN; END IF;
-  FOREACH stage IN ARRAY ARRAY['name', 'keys', 'name-start', 'name-words', 'supplier', 'name-and-supplier', 'name-part', 'similar', 'text'] LOOP
+  FOREACH stage IN ARRAY ARRAY['name', 'keys', 'name-start', 'name-words', 'supplier', 'name-and-supplier', 'name-part', 'similar-name', 'similar', 'text'] LOOP
     EXIT WHEN room <= 0;
     batch := NULL;
     asked := NULL;
@@ -203,9 +205,11 @@ BEGIN
     ELSE
       IF stage = 'keys' THEN
         IF typed = '{}' AND extra IS NOT NULL THEN asked := extra::tsquery; END IF;
-      ELSIF stage = 'similar' THEN
+      ELSIF stage = 'similar-name' THEN
         -- Only where nothing else was found: a guess beside what was meant is noise.
-        IF found = '{}' THEN SELECT m.asked, m.meant INTO asked, meant FROM search_meant(typed) m; END IF;
+        IF found = '{}' THEN SELECT m.in_name, m.anywhere, m.meant INTO asked, meant_anywhere, meant FROM search_meant(typed) m; END IF;
+      ELSIF stage = 'similar' THEN
+        asked := meant_anywhere;
       ELSE
         asked := search_terms(stage, typed);
       END IF;
@@ -220,7 +224,7 @@ BEGIN
       END IF;
     END IF;
     CONTINUE WHEN batch IS NULL;
-    RETURN QUERY SELECT hit, stage, CASE WHEN stage = 'similar' THEN meant END FROM unnest(batch) hit;
+    RETURN QUERY SELECT hit, stage, CASE WHEN stage IN ('similar-name', 'similar') THEN meant END FROM unnest(batch) hit;
     found := found || batch;
     room := room - cardinality(batch);
   END LOOP;
@@ -244,26 +248,28 @@ CREATE FUNCTION search_terms(stage text, typed text[]) RETURNS tsquery LANGUAGE 
 $$;
 --> statement-breakpoint
 -- The typed words with each unknown one replaced by the nearest known ones; null when a word has none, or all are known.
-CREATE FUNCTION search_meant(typed text[], OUT asked tsquery, OUT meant text) LANGUAGE plpgsql STABLE SET search_path = public, pg_temp AS $$
+CREATE FUNCTION search_meant(typed text[], OUT in_name tsquery, OUT anywhere tsquery, OUT meant text) LANGUAGE plpgsql STABLE SET search_path = public, pg_temp AS $$
 DECLARE
   one text;
   near text[];
+  is_known boolean;
   is_replaced boolean := false;
-  terms text[] := '{}';
+  names text[] := '{}';
+  all_terms text[] := '{}';
 BEGIN
   FOREACH one IN ARRAY typed LOOP
-    IF length(one) < 3 OR one ~ '^\d+$' OR EXISTS (SELECT 1 FROM sheet_words w WHERE w.organisation_id = scope() AND w.word LIKE one || '%') THEN
-      near := ARRAY[one];
-      terms := terms || ('(' || search_key('n', one, true) || ' | ' || search_key('s', one, true) || ')');
-    ELSE
-      near := search_closest(one);
-      IF near = '{}' THEN RETURN; END IF;
-      is_replaced := true;
-      terms := terms || (SELECT '(' || string_agg(search_key('n', each, false) || ' | ' || search_key('s', each, false), ' | ') || ')' FROM unnest(near) each);
-    END IF;
+    is_known := length(one) < 3 OR one ~ '^\d+$' OR EXISTS (SELECT 1 FROM sheet_words w WHERE w.organisation_id = scope() AND w.word LIKE one || '%');
+    near := CASE WHEN is_known THEN ARRAY[one] ELSE search_closest(one) END;
+    IF near = '{}' THEN RETURN; END IF;
+    is_replaced := is_replaced OR NOT is_known;
+    names := names || (SELECT '(' || string_agg(search_key('n', each, is_known), ' | ') || ')' FROM unnest(near) each);
+    all_terms := all_terms || (SELECT '(' || string_agg(search_key('n', each, is_known) || ' | ' || search_key('s', each, is_known), ' | ') || ')' FROM unnest(near) each);
     meant := concat_ws(' ', meant, near[1]);
   END LOOP;
-  IF is_replaced THEN asked := array_to_string(terms, ' & ')::tsquery; END IF;
+  IF is_replaced THEN
+    in_name := array_to_string(names, ' & ')::tsquery;
+    anywhere := array_to_string(all_terms, ' & ')::tsquery;
+  END IF;
 END $$;
 --> statement-breakpoint
 DO $$

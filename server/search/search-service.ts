@@ -32,7 +32,8 @@ export type SearchService = ReturnType<typeof searchService>;
 
 function matchedInWords({ kind, closest }: Found, { casNumbers, codes }: SearchTerms): string {
   const keys = [...casNumbers.map((number) => `CAS number ${number}`), ...codes.map((code) => `code ${code.toUpperCase()}`)];
-  const words = { name: 'name', keys: '', 'name-start': 'name', 'name-words': 'name', supplier: 'supplier', 'name-and-supplier': 'name and supplier', 'name-part': 'part of a name', similar: `similar to what you typed: ${closest ?? ''}`, text: 'text of the sheet' }[kind];
+  const similar = `similar to what you typed: ${closest ?? ''}`;
+  const words = { name: 'name', keys: '', 'name-start': 'name', 'name-words': 'name', supplier: 'supplier', 'name-and-supplier': 'name and supplier', 'name-part': 'part of a name', 'similar-name': similar, similar, text: 'text of the sheet' }[kind];
   const said = kind === 'text' || kind === 'name' ? words : [words, ...keys].filter(Boolean).join(', ');
   return said.charAt(0).toUpperCase() + said.slice(1);
 }

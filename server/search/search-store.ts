@@ -8,11 +8,11 @@ import { type Tx } from '../platform/database';
 import { type SearchTerms } from './search-terms';
 
 /** The ways of finding, best first; the database function search_sheets() goes through them in this order. */
-export type FoundBy = 'name' | 'keys' | 'name-start' | 'name-words' | 'supplier' | 'name-and-supplier' | 'name-part' | 'similar' | 'text';
+export type FoundBy = 'name' | 'keys' | 'name-start' | 'name-words' | 'supplier' | 'name-and-supplier' | 'name-part' | 'similar-name' | 'similar' | 'text';
 export interface Found {
   readonly revisionId: string;
   readonly kind: FoundBy;
-  /** With `similar`: the words that were looked for instead. */
+  /** With the two of `similar`: the words that were looked for instead. */
   readonly closest: string | null;
 }
 
