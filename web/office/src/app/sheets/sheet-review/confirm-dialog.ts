@@ -25,6 +25,10 @@ export type ConfirmOutcome = { readonly confirmed: Revision } | { readonly probl
   imports: [FormTrouble, MatButton, MatDialogActions, MatDialogContent, MatDialogTitle, ReactiveFormsModule, SearchField, TextField],
   templateUrl: './confirm-dialog.html',
   styles: `
+    legend {
+      margin-bottom: 0.5rem;
+    }
+
     .choice {
       display: flex;
       gap: 10px;

@@ -1,4 +1,4 @@
-import { type Place, type SheetFields, type SheetEdit } from '#shared/sheets';
+import { neededToConfirm, type Place, type SheetFields, type SheetEdit } from '#shared/sheets';
 import type * as z from 'zod';
 import { splitCodes, type SheetForm } from './sheet-form';
 
@@ -33,8 +33,7 @@ const labels: Readonly<Record<ReviewKey, string>> = {
 };
 export const languageNames: Readonly<Record<NonNullable<SheetEdit['language']>, string>> = { en: 'English', es: 'Español', fr: 'Français', de: 'Deutsch' };
 export const signalWordNames: Readonly<Record<NonNullable<SheetEdit['signalWord']>, string>> = { danger: 'Danger', warning: 'Warning', none: 'none' };
-/** Without one of these no sheet can be confirmed. */
-const wanted: ReadonlySet<ReviewKey> = new Set<ReviewKey>(['productName', 'supplier', 'language', 'revisedOn', 'signalWord']);
+const wanted: ReadonlySet<ReviewKey> = new Set<ReviewKey>(neededToConfirm);
 
 type ReadField = { readonly place: z.infer<typeof Place> | null; readonly confidence: number; readonly because: string | null };
 

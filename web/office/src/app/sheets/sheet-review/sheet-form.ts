@@ -1,5 +1,5 @@
 import { type FormArray, type FormGroup, type NonNullableFormBuilder } from '@angular/forms';
-import { SheetEdit, type SheetFields } from '#shared/sheets';
+import { neededMessage, neededToConfirm, SheetEdit, type SheetFields } from '#shared/sheets';
 
 type Values = ReturnType<typeof valuesOf>;
 export type IngredientValue = SheetEdit['ingredients'][number];
@@ -65,6 +65,13 @@ export function checkedEdit(form: SheetForm): SheetEdit | null {
     placeMessage(form, path, issue.message, 'schema');
   }
   return null;
+}
+
+/** Marks what is still empty though no sheet can be confirmed without it; whether nothing is. */
+export function hasAllNeeded(form: SheetForm): boolean {
+  const missing = neededToConfirm.filter((name) => form.controls[name].value === null);
+  for (const name of missing) placeMessage(form, [name], neededMessage, 'schema');
+  return missing.length === 0;
 }
 
 /** Puts a message on the control a path names, or on the row it belongs to; whether one was found. */

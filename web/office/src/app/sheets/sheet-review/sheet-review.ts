@@ -22,7 +22,7 @@ import { ConfirmDialog, type ConfirmOutcome, type ConfirmQuestion } from './conf
 import { ReviewList } from './review-list';
 import { ReviewProgress } from './review-progress';
 import { reviewRows, type ReviewKey } from './review-rows';
-import { checkedEdit, placeMessage, sheetForm, type SheetForm } from './sheet-form';
+import { checkedEdit, hasAllNeeded, placeMessage, sheetForm, type SheetForm } from './sheet-form';
 
 const pollMilliseconds = 1500;
 
@@ -145,7 +145,7 @@ export class SheetReview {
       return;
     }
     const fields = checkedEdit(form);
-    if (!fields) return this.showBad('Some values need another look. They are marked.');
+    if (!hasAllNeeded(form) || !fields) return this.showBad('Some values need another look. They are marked.');
     this.refusal.set('');
     const data: ConfirmQuestion = { revision, fields };
     const outcome = await firstValueFrom(this.dialogs.open<ConfirmDialog, ConfirmQuestion, ConfirmOutcome>(ConfirmDialog, { data, width: '38rem', maxWidth: '96vw' }).afterClosed());
