@@ -36,7 +36,8 @@ export const acknowledgements = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.organisationId, t.id] }),
-    uniqueIndex('acknowledgements_one_signature').on(t.organisationId, t.versionId, t.personId).where(sql`kind = 'signed'`),
+    // A signature whose PIN was wrong does not stand: the right one may still come.
+    uniqueIndex('acknowledgements_one_standing').on(t.organisationId, t.versionId, t.personId).where(sql`kind = 'signed' AND pin_state <> 'not-confirmed'`),
     uniqueIndex('acknowledgements_by_entry').on(t.organisationId, t.entryIndex),
     index('acknowledgements_by_person').on(t.organisationId, t.personId, t.shiftDate, t.entryIndex),
     index('acknowledgements_by_job').on(t.organisationId, t.jobId, t.shiftDate, t.entryIndex),

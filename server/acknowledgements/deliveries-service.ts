@@ -69,7 +69,9 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     for (const { delivery, keptAside, acknowledgement, answers, pin, actions, drafts } of interpretations) {
       if (decided.has(delivery.id)) continue;
       const receipt: Receipt = { id: delivery.id, outcome: keptAside === undefined ? 'recorded' : 'kept-aside', acknowledgementId: null, entryIndex: null, pinState: null, isSuperseded: false, note: keptAside ?? null };
-      const standing = acknowledgement?.kind === 'signed' ? await signatureOf(tx, acknowledgement.versionId, acknowledgement.personId) : undefined;
+      const before = acknowledgement?.kind === 'signed' ? await signatureOf(tx, acknowledgement.versionId, acknowledgement.personId) : undefined;
+      // A signature with the wrong PIN does not stand in the way of one with the right PIN.
+      const standing = before?.pinState === 'not-confirmed' && acknowledgement?.pinState !== 'not-confirmed' ? undefined : before;
       if (standing) {
         Object.assign(receipt, { outcome: 'second', acknowledgementId: standing.id, entryIndex: standing.entryIndex, pinState: standing.pinState, isSuperseded: standing.wasSuperseded, note: `${standing.personName} had signed this version already, at ${standing.capturedAt.toISOString()}${standing.tabletName ? ` on ${standing.tabletName}` : ''}. This one is kept beside it.` });
       } else {
@@ -89,7 +91,7 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     return receipts;
   }
   const signatureOf = async (tx: Tx, versionId: string, personId: string) =>
-    (await tx.select().from(acknowledgements).where(and(eq(acknowledgements.organisationId, tx.organisationId), eq(acknowledgements.versionId, versionId), eq(acknowledgements.personId, personId), eq(acknowledgements.kind, 'signed'))))[0];
+    (await tx.select().from(acknowledgements).where(and(eq(acknowledgements.organisationId, tx.organisationId), eq(acknowledgements.versionId, versionId), eq(acknowledgements.personId, personId), eq(acknowledgements.kind, 'signed'))).orderBy(sql`${acknowledgements.pinState} = 'not-confirmed'`, asc(acknowledgements.entryIndex)).limit(1))[0];
 
   /** One bad envelope must not hold the others back: it is set aside by itself, with the fault in the log. */
   async function interpretEach(organisationId: string, ids: readonly string[]): Promise<Receipt[]> {

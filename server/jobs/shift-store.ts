@@ -151,7 +151,7 @@ export async function readAsked(tx: Tx, versionIds: readonly string[]): Promise<
   const result = new Map<string, Asked[]>();
   for (const person of asked) {
     const own = answers.filter((answer) => answer.versionId === person.versionId && answer.personId === person.personId);
-    const answer = own.find((each) => each.kind !== 'could-not-sign') ?? own.at(-1);
+    const answer = own.find((each) => each.kind !== 'could-not-sign' && each.pinState !== 'not-confirmed') ?? own.at(-1);
     const state: Asked['state'] = !answer ? 'not-yet' : answer.kind === 'could-not-sign' ? 'could-not-sign' : answer.pinState === 'not-confirmed' ? 'not-confirmed' : 'signed';
     result.set(person.versionId, [...(result.get(person.versionId) ?? []), { personId: person.personId, name: person.name, language: person.language as 'en' | 'es', state, at: answer?.capturedAt.toISOString() ?? null }]);
   }

@@ -247,6 +247,11 @@ describe('a PIN', () => {
     expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '1111' }))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
     expect(await tablet.deliver(await tablet.signed(day.version, crew))).toMatchObject({ outcome: 'recorded', pinState: 'not-set' });
     expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === lead)?.state).toBe('not-confirmed');
+    // Signing again with the right PIN settles it; only then does a further one stand beside it.
+    expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '1112' }))).toMatchObject({ outcome: 'second', pinState: 'not-confirmed' });
+    expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '2468' }))).toMatchObject({ outcome: 'recorded', pinState: 'confirmed' });
+    expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === lead)?.state).toBe('signed');
+    expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '2468' }))).toMatchObject({ outcome: 'second', pinState: 'confirmed' });
   });
 
   it.each<[string, (tablet: TestTablet, hash: string) => Promise<Record<string, unknown>>]>([

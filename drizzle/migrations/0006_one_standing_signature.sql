@@ -1,0 +1,2 @@
+DROP INDEX "acknowledgements_one_signature";--> statement-breakpoint
+CREATE UNIQUE INDEX "acknowledgements_one_standing" ON "acknowledgements" USING btree ("organisation_id","version_id","person_id") WHERE kind = 'signed' AND pin_state <> 'not-confirmed';
