@@ -13,6 +13,10 @@ const fromReader = <T, U = T>({ value, page, box, quote, confidence, because }: 
 const one = <T>(field: Field<T> | null): SheetField<T> | null => field && fromReader(field, (value) => value);
 const many = <T, U = T>(fields: readonly Field<T>[], change: (value: T) => U): SheetField<U>[] => fields.map((field) => fromReader(field, change));
 
+const notText = /(?![\n\r\t\f])[\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]/gu;
+/** Without what a PDF may hold and the database refuses, or a page would be fooled by: controls, halves of a character pair, overrides of the text's direction. */
+export const asPlainText = <T>(value: T): T => JSON.parse(JSON.stringify(value), (_, each: unknown) => (typeof each === 'string' ? each.replace(notText, ' ') : each)) as T;
+
 /** What the reader answered, in the contract's form. Text from a PDF is cut to lengths a form can carry. */
 export function fieldsFromReading(reading: SheetReading): SheetFields {
   return {

@@ -5,7 +5,7 @@ import { type Work } from '../platform/queue';
 import { DamagedObjectError } from '../platform/storage';
 import { indexRevision } from '../search/search-store';
 import { type SheetReading } from './reader/reading';
-import { fieldsFromReading } from './sheet-fields';
+import { asPlainText, fieldsFromReading } from './sheet-fields';
 import { objectKey } from './sheets-service';
 
 export interface SheetReader {
@@ -30,7 +30,7 @@ export const readSheetWork =
     async function readStored(): Promise<Pick<typeof revisions.$inferInsert, 'state' | 'readerState' | 'pages' | 'fields'> & { readerState: string; text: string | null }> {
       try {
         const bytes = await storage.getVerified(objectKey(organisationId, revision!.sha256), revision!.sha256);
-        const reading = await reader.read(bytes);
+        const reading = asPlainText(await reader.read(bytes));
         const isRead = reading.state === 'read';
         return { state: isRead ? 'read' : 'needs-entry', readerState: reading.state, pages: reading.pages || null, fields: isRead ? fieldsFromReading(reading) : null, text: isRead ? reading.text : null };
       } catch (error) {
