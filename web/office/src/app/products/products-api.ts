@@ -19,6 +19,10 @@ export class ProductsApi {
     return this.client.call('listProducts', { query: { q: q || undefined, limit: 12 } });
   }
 
+  read(productId: string): Observable<Product> {
+    return this.client.call('readProduct', { params: { productId } });
+  }
+
   add(product: { readonly name: string; readonly supplier: string }): Observable<Product> {
     return this.client.call('addProduct', { body: product });
   }

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, DestroyRef, effect, inject, input, untracked } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { Router } from '@angular/router';
+import { Router, RouterLink } from '@angular/router';
 import { Empty } from '#ui/empty';
 import { FileDrop } from '#ui/file-drop';
 import { PageHeader } from '#ui/page-header';
@@ -8,17 +8,17 @@ import { Access } from '../../contract/access';
 import { PagedList } from '../../contract/paged-list';
 import { SearchField } from '../../pieces/search-field';
 import { Unready } from '../../pieces/unready';
-import { SheetUploads } from '../sheet-uploads';
 import { SheetsApi, type RevisionState } from '../sheets-api';
 import { SheetRows } from './sheet-rows';
-import { UploadList } from './upload-list';
+import { SheetUploads } from '../uploads/sheet-uploads';
+import { UploadList } from '../uploads/upload-list';
 
 const pollMilliseconds = 2500;
 
 /** Every safety data sheet: what waits for a person first, then what is being read, in use and set aside. */
 @Component({
   selector: 'kb-sheet-library',
-  imports: [Empty, FileDrop, MatButton, PageHeader, SearchField, SheetRows, Unready, UploadList],
+  imports: [Empty, FileDrop, MatButton, PageHeader, RouterLink, SearchField, SheetRows, Unready, UploadList],
   templateUrl: './sheet-library.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -30,6 +30,7 @@ export class SheetLibrary {
 
   readonly q = input('', { transform: (value: string | undefined) => value ?? '' });
 
+  protected readonly mayKeep = computed(() => this.access.may('listLibraryTasks'));
   protected readonly mayUpload = computed(() => this.access.may('uploadSheet'));
   private readonly listOf = (state: RevisionState) => new PagedList(this.q, (q: string, after) => this.api.list(state, q, after));
   private readonly toCheck = this.listOf('read');
