@@ -1,12 +1,18 @@
 import fs from 'node:fs/promises';
 import path from 'node:path';
+import { readSheetOrPictures } from '../sds/reader/ocr';
 import { readSheet } from '../sds/reader/read-sheet';
 import { sheetLine } from '../sds/reader/sheet-line';
 
-/** `npm run -s sds:read -- FILE…`: one JSON line a file. Exit code 1 when a file could not be opened. */
-async function main(files: string[]): Promise<number> {
+/**
+ * `npm run -s sds:read -- [--ocr] FILE…`: one JSON line a file; with --ocr a sheet of pictures is recognised, some seconds
+ * a page. Exit code 1 when a file could not be opened.
+ */
+async function main(words: string[]): Promise<number> {
+  const read = words.includes('--ocr') ? readSheetOrPictures : readSheet;
+  const files = words.filter((word) => word !== '--ocr');
   if (files.length === 0) {
-    console.error('usage: npm run -s sds:read -- FILE…');
+    console.error('usage: npm run -s sds:read -- [--ocr] FILE…');
     return 1;
   }
   let exitCode = 0;
@@ -16,7 +22,7 @@ async function main(files: string[]): Promise<number> {
       exitCode = 1;
       return null;
     });
-    if (bytes) console.log(JSON.stringify(sheetLine(path.basename(file), await readSheet(bytes))));
+    if (bytes) console.log(JSON.stringify(sheetLine(path.basename(file), await read(bytes))));
   }
   return exitCode;
 }

@@ -3,9 +3,10 @@
  * Boxes are PDF points (1/72 inch) from the top left corner of the page; pages count from 1.
  */
 
-/** Why there is, or is not, anything to show. Only `read` carries values. */
+/** Why there is, or is not, anything to show. Only `read` and `read-by-ocr` (from pictures of the pages) carry values. */
 export type ReadingState =
   | 'read'
+  | 'read-by-ocr'
   | 'no-text-layer'
   | 'encrypted'
   | 'damaged'
@@ -63,6 +64,9 @@ export interface SectionHeading {
   heading: string;
   page: number;
 }
+
+/** Whether a reading carries values. */
+export const carriesValues = (state: ReadingState): boolean => state === 'read' || state === 'read-by-ocr';
 
 export type SignalWord = 'danger' | 'warning' | 'none';
 

@@ -1,4 +1,4 @@
-import { type SheetReading } from './reading';
+import { carriesValues, type SheetReading } from './reading';
 
 /** One reading as a flat record with snake-case names, for JSON Lines. */
 export interface SheetLine {
@@ -33,6 +33,6 @@ export function sheetLine(file: string, reading: SheetReading): SheetLine {
     h_codes: reading.hazardCodes.map((code) => code.value).filter((code) => !code.startsWith('EUH')),
     cas_numbers: [...new Set(reading.ingredients.map(({ value }) => value.cas))],
     components: reading.ingredients.map(({ value }) => ({ cas: value.cas, concentration: value.concentration })),
-    section_count: reading.state === 'read' ? reading.sections.length : null,
+    section_count: carriesValues(reading.state) ? reading.sections.length : null,
   };
 }
