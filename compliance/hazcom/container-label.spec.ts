@@ -18,6 +18,10 @@ describe('[HAZ-03] label on a container of mixed or decanted material', () => {
     expect(label.blockedBy).toEqual([]);
   });
 
+  it('names a product by itself without an empty part', () => {
+    expect(containerLabelFor(powder.map((part) => ({ ...part, part: '', productName: 'Northlode Slab Degreaser' })), 'wet').identifier).toBe('Northlode Slab Degreaser');
+  });
+
   it('says other things of the dry powder than of the wet mix', () => {
     const label = containerLabelFor(powder, 'dry');
     expect(label.statements.map(({ code }) => code)).not.toContain('H334');

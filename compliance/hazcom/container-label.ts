@@ -37,7 +37,7 @@ export function containerLabelFor(parts: readonly PartFacts[], state: MaterialSt
   const ordered = [...codes].sort();
   const { signalWord, pictograms } = labelElements(ordered.map((code) => ({ code, category: null })));
   return {
-    identifier: parts.map((part) => (part.productName.endsWith(` ${part.part}`) ? part.productName : `${part.productName} (${part.part})`)).join(' + '),
+    identifier: parts.map((part) => (part.part === '' || part.productName.endsWith(` ${part.part}`) ? part.productName : `${part.productName} (${part.part})`)).join(' + '),
     state: STATE_WORDS[state],
     signalWord,
     pictograms,

@@ -17,12 +17,13 @@ import { FormTrouble } from '../../pieces/form-trouble';
 import { SearchField } from '../../pieces/search-field';
 import { Unready } from '../../pieces/unready';
 import { withUnit } from '../../pieces/units';
+import { ExportLinks } from '../export-links';
 import { ProductsApi } from '../products-api';
 
 /** Kits first, because crews work with kits; then every product with its sheet in use. */
 @Component({
   selector: 'kb-product-list',
-  imports: [Empty, FormTrouble, MatButton, PageHeader, Pictogram, ReactiveFormsModule, RouterLink, SearchField, State, TextField, Unready],
+  imports: [Empty, ExportLinks, FormTrouble, MatButton, PageHeader, Pictogram, ReactiveFormsModule, RouterLink, SearchField, State, TextField, Unready],
   templateUrl: './product-list.html',
   styleUrl: './product-list.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

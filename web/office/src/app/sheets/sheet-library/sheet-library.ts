@@ -8,6 +8,7 @@ import { Access } from '../../contract/access';
 import { PagedList } from '../../contract/paged-list';
 import { SearchField } from '../../pieces/search-field';
 import { Unready } from '../../pieces/unready';
+import { ExportLinks } from '../../products/export-links';
 import { SheetsApi, type RevisionState } from '../sheets-api';
 import { SheetRows } from './sheet-rows';
 import { SheetUploads } from '../uploads/sheet-uploads';
@@ -18,7 +19,7 @@ const pollMilliseconds = 2500;
 /** Every safety data sheet: what waits for a person first, then what is being read, in use and set aside. */
 @Component({
   selector: 'kb-sheet-library',
-  imports: [Empty, FileDrop, MatButton, PageHeader, RouterLink, SearchField, SheetRows, Unready, UploadList],
+  imports: [Empty, ExportLinks, FileDrop, MatButton, PageHeader, RouterLink, SearchField, SheetRows, Unready, UploadList],
   templateUrl: './sheet-library.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
