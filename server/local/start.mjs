@@ -1,6 +1,6 @@
 // @ts-check
 /** `npm start`: from a fresh clone to a running Kneeboard with its demo. Needs nothing but Node.js until the packages are there. */
-import { mkdirSync, readFileSync, realpathSync } from 'node:fs';
+import { accessSync, constants, mkdirSync, readFileSync, realpathSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ensurePostgres } from './debian.mjs';
@@ -121,9 +121,10 @@ function dataFolder() {
   const folder = resolve(process.env['INIT_CWD'] ?? '.', process.env['KNEEBOARD_DATA'] || join(root, '.data'));
   try {
     mkdirSync(folder, { recursive: true, mode: 0o711 });
+    accessSync(folder, constants.W_OK | constants.X_OK);
     return realpathSync(folder);
   } catch (error) {
-    throw new Refusal(`The data folder ${folder} cannot be made (${error instanceof Error ? error.message : String(error)}); set KNEEBOARD_DATA to another one.`);
+    throw new Refusal(`The data folder ${folder} cannot be used (${error instanceof Error ? error.message : String(error)}); set KNEEBOARD_DATA to another one.`);
   }
 }
 
