@@ -4,10 +4,12 @@ import { type Tx } from './database';
 /** Background work, by queue name. Payloads carry ids only. */
 export interface Work {
   'read-sheet': { organisationId: string; revisionId: string };
+  /** A sheet without text, read from pictures of its pages: minutes, so it holds up no other. */
+  'ocr-sheet': { organisationId: string; revisionId: string };
   'mail-checkpoint': { organisationId: string; size: number };
   'mail-request': { organisationId: string; requestId: string };
 }
-export const queueNames = ['read-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
+export const queueNames = ['read-sheet', 'ocr-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
 
 export interface Queue {
   /** Queued in the caller's transaction: with its rows or not at all. */
@@ -18,9 +20,12 @@ export interface Queue {
 }
 
 /** How long work may take before its worker counts as gone: half as long again as the reader may take for a sheet. */
-export const patienceFor = (sheetReadSeconds: number): number => Math.ceil(sheetReadSeconds * 1.5);
+export const patienceFor =
+  (limits: { SHEET_READ_SECONDS: number; SHEET_OCR_SECONDS: number }) =>
+  (name: keyof Work): number =>
+    Math.ceil(1.5 * (name === 'ocr-sheet' ? limits.SHEET_OCR_SECONDS : limits.SHEET_READ_SECONDS));
 
-export async function createQueue(url: string, options: { isServing: boolean; expireSeconds: number; onError: (error: Error) => void }): Promise<Queue> {
+export async function createQueue(url: string, options: { isServing: boolean; expireSeconds: (name: keyof Work) => number; onError: (error: Error) => void }): Promise<Queue> {
   // The owner made the schema; the application role only uses it.
   const boss = new PgBoss({ connectionString: url, schema: 'pgboss', migrate: false, supervise: options.isServing, schedule: false, max: 4, maintenanceIntervalSeconds: 5, application_name: 'kneeboard-queue' });
   boss.on('error', options.onError);
@@ -31,15 +36,19 @@ export async function createQueue(url: string, options: { isServing: boolean; ex
         retryLimit: 5,
         retryDelay: 2,
         retryBackoff: true,
-        expireInSeconds: options.expireSeconds,
+        expireInSeconds: options.expireSeconds(name),
         db: { executeSql: (text: string, values: unknown[]) => tx.client.query(text, values) },
       });
       // pg-boss answers null for a queue that nobody made.
       if (!id) throw new Error(`The queue ${name} does not exist: run db:migrate.`);
     },
     async serve(name, work) {
-      await boss.work<Work[typeof name]>(name, { batchSize: 1, pollingIntervalSeconds: 0.5 }, async ([job]) => {
-        if (job) await work(job.data);
+      let worker = '';
+      worker = await boss.work<Work[typeof name]>(name, { batchSize: 1, pollingIntervalSeconds: 0.5 }, async ([job]) => {
+        if (!job) return;
+        await work(job.data);
+        // The next one at once: two sheets a second would be the queue's pace, not the reader's.
+        boss.notifyWorker(worker);
       });
     },
     stop: () => boss.stop({ graceful: true, timeout: 10_000, wait: true }),

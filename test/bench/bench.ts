@@ -27,11 +27,25 @@ export function median(figures: readonly number[]): number {
   return (lower + upper) / 2;
 }
 
+/** The figure that this share (0 to 1) of all does not exceed. */
+export function percentile(figures: readonly number[], share: number): number {
+  const sorted = [...figures].sort((a, b) => a - b);
+  return sorted[Math.min(sorted.length - 1, Math.ceil(sorted.length * share) - 1)] ?? Number.NaN;
+}
+
 /** Seconds that `work` takes. */
 export async function secondsOf(work: () => unknown): Promise<number> {
   const start = performance.now();
   await work();
   return (performance.now() - start) / 1000;
+}
+
+/** Processor seconds of this process that `work` takes: other programs of a busy machine do not count. */
+export async function processorSecondsOf(work: () => unknown): Promise<number> {
+  const before = process.cpuUsage();
+  await work();
+  const { user, system } = process.cpuUsage(before);
+  return (user + system) / 1e6;
 }
 
 /** Medians of both over alternating rounds, so that a busy minute hits both alike. */

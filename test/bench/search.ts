@@ -4,7 +4,7 @@ import { createDatabase, type Database } from '#server/platform/database';
 import { searchService } from '#server/search/search-service';
 import { SearchQuery } from '#shared/library';
 import { commonWord, figures, makeManySheets, rareWord, type ManySheets } from '#test/support/many-sheets';
-import { median, type Bench } from './bench';
+import { median, percentile, type Bench } from './bench';
 import { withServices } from './services';
 
 const BAR = 12;
@@ -112,8 +112,4 @@ async function timeOf(work: () => Promise<unknown>): Promise<number> {
   const start = performance.now();
   await work();
   return performance.now() - start;
-}
-export function percentile(figuresSeen: readonly number[], share: number): number {
-  const sorted = [...figuresSeen].sort((a, b) => a - b);
-  return sorted[Math.min(sorted.length - 1, Math.ceil(sorted.length * share) - 1)] ?? Number.NaN;
 }
