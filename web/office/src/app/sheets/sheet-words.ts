@@ -1,8 +1,11 @@
 import { type ReaderState, type RevisionSummary } from '#shared/sheets';
 import { type StateKind } from '#ui/state';
 
+/** Languages of sheets, as the office writes them. */
+export const languageNames: Readonly<Record<string, string>> = { en: 'English', es: 'Spanish', fr: 'French', de: 'German' };
+
 /** Why the reader gave up, and what to do: one sentence each. */
-export const readerWords: Readonly<Record<Exclude<ReaderState, 'read'>, { readonly short: string; readonly sentence: string }>> = {
+export const readerWords: Readonly<Record<Exclude<ReaderState, 'read' | 'read-by-ocr'>, { readonly short: string; readonly sentence: string }>> = {
   'no-text-layer': { short: 'a scan without text', sentence: 'This file is a picture of a sheet, without text to read. Enter what it says by hand, beside the page.' },
   encrypted: { short: 'locked with a password', sentence: 'This file is locked with a password. Ask the supplier for an open one, or enter what it says by hand.' },
   damaged: { short: 'damaged', sentence: 'This file is damaged and could not be read. Ask the supplier for it again, or enter what it says by hand.' },
@@ -15,14 +18,23 @@ export const readerWords: Readonly<Record<Exclude<ReaderState, 'read'>, { readon
 
 /** Why a revision could not be read; null when it was, or is on its way. */
 export function readerTrouble({ readerState }: RevisionSummary): { readonly short: string; readonly sentence: string } | null {
-  return readerState === null || readerState === 'read' ? null : readerWords[readerState];
+  return readerState === null || readerState === 'read' || readerState === 'read-by-ocr' ? null : readerWords[readerState];
+}
+
+/** Said above the values of a sheet that was a picture. */
+export const picturesWords = 'Read from pictures of the pages; check every value.';
+
+/** How far the reading is: page by page when the sheet has no text. */
+export function pageUnderWay({ pages, pagesRead }: RevisionSummary): string {
+  if (pagesRead === null) return 'being read';
+  return pagesRead === 0 ? 'a scan, waits its turn' : `reading page ${pagesRead} of ${pages ?? pagesRead}`;
 }
 
 /** State of a revision in words, for a list. */
 export function revisionState(revision: RevisionSummary): { readonly kind: StateKind; readonly words: string } {
   switch (revision.state) {
     case 'waiting':
-      return { kind: 'plain', words: 'being read' };
+      return { kind: 'plain', words: pageUnderWay(revision) };
     case 'read':
       return revision.toLookAt === 0 ? { kind: 'caution', words: 'check and confirm' } : { kind: 'caution', words: revision.toLookAt === 1 ? '1 value wants a look' : `${revision.toLookAt} values want a look` };
     case 'needs-entry':

@@ -20,7 +20,7 @@ import { Unready } from '../../pieces/unready';
 import { LibraryApi } from '../../sheets/library-api';
 import { AskTheSupplier, type AskQuestion } from '../../sheets/requests/ask-supplier-dialog';
 import { RequestRows } from '../../sheets/requests/request-rows';
-import { revisionState } from '../../sheets/sheet-words';
+import { languageNames, revisionState } from '../../sheets/sheet-words';
 import { SheetsApi } from '../../sheets/sheets-api';
 import { ProductsApi } from '../products-api';
 import { sheetsByLanguage } from './sheets-by-language';
@@ -58,6 +58,7 @@ export class ProductPage {
   protected readonly dayOf = dayOf;
   protected readonly momentShort = momentShort;
   protected readonly revisionState = revisionState;
+  protected readonly languageNames = languageNames;
 
   constructor() {
     effect(() => {

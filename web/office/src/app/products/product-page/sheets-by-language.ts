@@ -1,4 +1,5 @@
 import { type RevisionSummary } from '#shared/sheets';
+import { languageNames } from '../../sheets/sheet-words';
 
 /** The sheet in use in one language; null: there is none, though crews read it. */
 export interface LanguageSheet {
@@ -7,7 +8,6 @@ export interface LanguageSheet {
   readonly current: RevisionSummary | null;
 }
 
-const names: Readonly<Record<string, string>> = { en: 'English', es: 'Spanish', fr: 'French', de: 'German' };
 /** Crews read these two: a missing one is shown as missing. */
 const wanted = ['en', 'es'] as const;
 
@@ -15,5 +15,5 @@ const wanted = ['en', 'es'] as const;
 export function sheetsByLanguage(confirmed: readonly RevisionSummary[]): readonly LanguageSheet[] {
   const current = confirmed.filter(({ isCurrent }) => isCurrent);
   const others = [...new Set(current.map(({ language }) => language ?? ''))].filter((language) => !(wanted as readonly string[]).includes(language)).sort();
-  return [...wanted, ...others].map((language) => ({ language, name: names[language] ?? (language || 'Language not known'), current: current.find((revision) => (revision.language ?? '') === language) ?? null }));
+  return [...wanted, ...others].map((language) => ({ language, name: languageNames[language] ?? (language || 'Language not known'), current: current.find((revision) => (revision.language ?? '') === language) ?? null }));
 }

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, DestroyRef, effect, inject, input, untracked } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, DestroyRef, effect, ElementRef, inject, input, signal, untracked } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import { Empty } from '#ui/empty';
@@ -9,6 +9,10 @@ import { PagedList } from '../../contract/paged-list';
 import { SearchField } from '../../pieces/search-field';
 import { Unready } from '../../pieces/unready';
 import { ExportLinks } from '../../products/export-links';
+import { walkResults } from '../search/result-keys';
+import { type SheetSearch } from '../search/search-api';
+import { SearchResults } from '../search/search-results';
+import { knownChoice } from '../search/search-words';
 import { SheetsApi, type RevisionState } from '../sheets-api';
 import { SheetRows } from './sheet-rows';
 import { SheetUploads } from '../uploads/sheet-uploads';
@@ -19,8 +23,9 @@ const pollMilliseconds = 2500;
 /** Every safety data sheet: what waits for a person first, then what is being read, in use and set aside. */
 @Component({
   selector: 'kb-sheet-library',
-  imports: [Empty, ExportLinks, FileDrop, MatButton, PageHeader, RouterLink, SearchField, SheetRows, Unready, UploadList],
+  imports: [Empty, ExportLinks, FileDrop, MatButton, PageHeader, RouterLink, SearchField, SearchResults, SheetRows, Unready, UploadList],
   templateUrl: './sheet-library.html',
+  host: { '(keydown)': 'walk($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SheetLibrary {
@@ -29,11 +34,19 @@ export class SheetLibrary {
   private readonly access = inject(Access);
   protected readonly uploads = inject(SheetUploads);
 
-  readonly q = input('', { transform: (value: string | undefined) => value ?? '' });
+  private readonly page = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
+
+  // From the address, so that a search can be sent to somebody or come back to.
+  readonly q = input('', { transform: (value: string | undefined) => value?.trim().slice(0, 100) ?? '' });
+  readonly state = input('', { transform: (value: string | undefined) => knownChoice('state', value) });
+  readonly language = input('', { transform: (value: string | undefined) => knownChoice('language', value) });
+  readonly signalWord = input('', { transform: (value: string | undefined) => knownChoice('signalWord', value) });
+  readonly isInUse = input('', { transform: (value: string | undefined) => knownChoice('isInUse', value) });
+  protected readonly search = computed(() => ({ q: this.q(), state: this.state() || undefined, language: this.language() || undefined, signalWord: this.signalWord() || undefined, isInUse: this.isInUse() || undefined }) as SheetSearch);
 
   protected readonly mayKeep = computed(() => this.access.may('listLibraryTasks'));
   protected readonly mayUpload = computed(() => this.access.may('uploadSheet'));
-  private readonly listOf = (state: RevisionState) => new PagedList(this.q, (q: string, after) => this.api.list(state, q, after));
+  private readonly listOf = (state: RevisionState) => new PagedList(signal(''), (q: string, after) => this.api.list(state, q, after));
   private readonly toCheck = this.listOf('read');
   private readonly toEnter = this.listOf('needs-entry');
   private readonly beingRead = this.listOf('waiting');
@@ -68,8 +81,13 @@ export class SheetLibrary {
     });
   }
 
-  protected search(q: string): void {
-    void this.router.navigate([], { queryParams: { q: q || null }, queryParamsHandling: 'merge', replaceUrl: true });
+  /** Into the address; the last search is one step back, not each letter of it. */
+  protected look(changes: Readonly<Record<string, string | null>>): void {
+    void this.router.navigate([], { queryParams: changes, queryParamsHandling: 'merge', replaceUrl: this.q() !== '' });
+  }
+
+  protected walk(event: KeyboardEvent): void {
+    walkResults(this.page, event);
   }
 
   protected reload(): void {

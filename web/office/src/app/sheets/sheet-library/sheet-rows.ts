@@ -3,14 +3,14 @@ import { RouterLink } from '@angular/router';
 import { type RevisionSummary } from '#shared/sheets';
 import { State } from '#ui/state';
 import { dayOf, momentShort } from '../../pieces/dates';
-import { revisionState } from '../sheet-words';
+import { languageNames, revisionState } from '../sheet-words';
 
 /** Revisions as a list: product or file, supplier, date, state in words. */
 @Component({
   selector: 'kb-sheet-rows',
   imports: [RouterLink, State],
   template: `
-    <ul class="kb-rows" style="--kb-columns: minmax(12rem, 1.6fr) minmax(8rem, 1fr) 8rem 13rem" [attr.aria-label]="label()">
+    <ul class="kb-rows" style="--kb-columns: minmax(12rem, 1.6fr) minmax(8rem, 1fr) 11rem 13rem" [attr.aria-label]="label()">
       @for (row of rows(); track row.revision.id) {
         <li>
           <a [routerLink]="row.revision.id"><b>{{ row.revision.productName ?? row.revision.fileName }}</b></a>
@@ -31,7 +31,7 @@ export class SheetRows {
     this.revisions().map((revision) => ({
       revision,
       state: revisionState(revision),
-      date: revision.revisedOn ? `of ${dayOf(revision.revisedOn)}` : `added ${momentShort(revision.uploadedAt)}`,
+      date: [revision.language === null || revision.language === 'en' ? '' : (languageNames[revision.language] ?? revision.language), revision.revisedOn ? `of ${dayOf(revision.revisedOn)}` : `added ${momentShort(revision.uploadedAt)}`].filter(Boolean).join(', '),
     })),
   );
 }

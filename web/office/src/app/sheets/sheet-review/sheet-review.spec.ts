@@ -22,6 +22,7 @@ const revision: Revision = {
   pages: 3,
   state: 'read',
   readerState: 'read',
+  pagesRead: null,
   productId: null,
   productName: 'Quarrybond 40 Part C',
   supplier: 'Northlode Resins',

@@ -16,7 +16,7 @@ import { FormTrouble } from '../../pieces/form-trouble';
 import { Unready } from '../../pieces/unready';
 import { NavigationCounts } from '../../shell/navigation-counts';
 import { ReachPanel } from '../reach/reach-panel';
-import { readerTrouble } from '../sheet-words';
+import { pageUnderWay, picturesWords, readerTrouble } from '../sheet-words';
 import { SheetsApi } from '../sheets-api';
 import { ConfirmDialog, type ConfirmOutcome, type ConfirmQuestion } from './confirm-dialog';
 import { ReviewList } from './review-list';
@@ -62,6 +62,12 @@ export class SheetReview {
   protected readonly trouble = computed(() => {
     const revision = this.revision();
     return revision ? readerTrouble(revision) : null;
+  });
+  protected readonly picturesWords = picturesWords;
+  protected readonly waitingWords = computed(() => {
+    const revision = this.revision();
+    if (!revision || revision.pagesRead === null) return 'This sheet is being read. What is found shows here in a moment; you may leave.';
+    return `This sheet has no text, so its pages are read as pictures: ${pageUnderWay(revision)}. It takes some minutes; you may leave.`;
   });
   protected readonly isOpen = computed(() => this.revision()?.state === 'read' || this.revision()?.state === 'needs-entry');
   protected readonly isByHand = computed(() => this.revision()?.state === 'needs-entry');

@@ -10,7 +10,7 @@ import { uploadSummary, zipWords } from './upload-words';
 
 const ines = '0190a0a0-0000-7000-8000-000000000001';
 const dov = '0190a0a0-0000-7000-8000-000000000002';
-const revision = (fileName: string): RevisionSummary => ({ id: ines, fileName, sha256: 'a'.repeat(64), byteLength: 3, pages: null, state: 'waiting', readerState: null, productId: null, productName: null, supplier: null, revisedOn: null, language: null, toLookAt: 0, isCurrent: false, uploadedAt: '2026-12-03T12:00:00Z', uploadedBy: 'Ines Halloran', confirmedAt: null, confirmedBy: null, version: 1 });
+const revision = (fileName: string): RevisionSummary => ({ id: ines, fileName, sha256: 'a'.repeat(64), byteLength: 3, pages: null, pagesRead: null, state: 'waiting', readerState: null, productId: null, productName: null, supplier: null, revisedOn: null, language: null, toLookAt: 0, isCurrent: false, uploadedAt: '2026-12-03T12:00:00Z', uploadedBy: 'Ines Halloran', confirmedAt: null, confirmedBy: null, version: 1 });
 const pdf = (name: string) => new File(['%PDF'], name, { type: 'application/pdf' });
 
 /** The browser's database, which outlives a page. */
