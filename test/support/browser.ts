@@ -10,7 +10,7 @@ const flags = ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-ru
 /** The office's screen and the tablet on its side. */
 export const sizes = { desk: { width: 1440, height: 900 }, tablet: { width: 1180, height: 820 } } as const;
 export const siteTimeZone = 'America/Chicago';
-const patienceMs = 20_000;
+const patienceMs = 30_000;
 
 /** Runs the journey when there is a Chromium; otherwise one test says why it did not run, and counts as skipped. */
 export function withChromium(journey: string, describeJourney: () => void): void {

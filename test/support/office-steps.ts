@@ -101,7 +101,10 @@ export async function dragEnd(page: Page, block: Locator, byMinutes: number): Pr
   await page.mouse.up();
 }
 
-export async function endMinute(block: Locator): Promise<number> {
+/** Waits until a block says these times. */
+export const hasValue = (block: Locator, times: string): Promise<void> => block.and(block.page().locator(`[aria-valuetext="${times}"]`)).waitFor();
+
+async function endMinute(block: Locator): Promise<number> {
   const [, hours, minutes] = / to (\d\d):(\d\d)$/.exec((await block.getAttribute('aria-valuetext')) ?? '') ?? [];
   return Number(hours) * 60 + Number(minutes);
 }

@@ -36,7 +36,7 @@ export async function startRunningService(): Promise<RunningService> {
     const url = `http://127.0.0.1:${port}`;
     const child = spawn(process.execPath, bundle('main'), {
       cwd: projectRoot,
-      stdio: ['ignore', 'pipe', 'inherit'],
+      stdio: ['ignore', 'pipe', 'pipe'],
       env: {
         PATH: process.env['PATH'],
         NODE_ENV: 'production',
@@ -58,6 +58,8 @@ export async function startRunningService(): Promise<RunningService> {
     });
     const faults: string[] = [];
     child.stdout.on('data', (piece: Buffer) => faults.push(...piece.toString().trim().split('\n')));
+    let lastWords = '';
+    child.stderr.on('data', (piece: Buffer) => (lastWords = (lastWords + piece.toString()).slice(-4000)));
     const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
     const stop = async (): Promise<void> => {
       child.kill('SIGTERM');
@@ -65,7 +67,7 @@ export async function startRunningService(): Promise<RunningService> {
       await removeAll();
     };
     try {
-      await Promise.race([untilReady(url), ended.then((code) => Promise.reject(new Error(`The service ended with ${code}: ${faults.join('\n')}`)))]);
+      await Promise.race([untilReady(url), ended.then((code) => Promise.reject(new Error(`The service ended with ${code}: ${faults.join('\n')}\n${lastWords}`)))]);
     } catch (error) {
       await stop();
       throw error;
