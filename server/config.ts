@@ -22,6 +22,8 @@ const Environment = z.object({
   VERIFIER: z.string().default('server/recordlog/verify.mjs'),
   /** Longest time for reading one sheet; a killed worker's sheet is taken again after half as long again. */
   SHEET_READ_SECONDS: z.coerce.number().int().min(1).max(600).default(40),
+  /** The same for a sheet read from pictures of its pages. */
+  SHEET_OCR_SECONDS: z.coerce.number().int().min(1).max(3600).default(600),
   UPLOAD_FOLDER: z.string().optional(),
   CHECKPOINT_SECONDS: z.coerce.number().positive().default(60),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),

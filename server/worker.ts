@@ -4,7 +4,7 @@ import { requestsService } from './library/requests-service';
 import { recordlogService } from './recordlog/recordlog-service';
 import { createGuardedReader } from './sds/reader/guarded-reader';
 import { sheetsService } from './sds/sheets-service';
-import { readSheetWork } from './sds/sheets-work';
+import { ocrSheetWork, readSheetWork } from './sds/sheets-work';
 
 const maxReaderRssBytes = 1_500 * 1024 * 1024;
 const sweepSeconds = 15;
@@ -14,9 +14,11 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   const { config, queue, log } = deps;
   // The reader's limit is shorter than the queue's patience, so that a stuck sheet is named and not tried for ever.
   const reader = createGuardedReader({ wallClockMs: config.SHEET_READ_SECONDS * 1000, maxRssBytes: maxReaderRssBytes, entry: config.SHEET_READER_ENTRY });
+  const pictureReader = createGuardedReader({ wallClockMs: config.SHEET_OCR_SECONDS * 1000, maxRssBytes: maxReaderRssBytes, entry: config.SHEET_READER_ENTRY, withPictures: true });
   const recordlog = recordlogService(deps);
   const deliveries = deliveriesService(deps);
   await queue.serve('read-sheet', readSheetWork(deps, reader));
+  await queue.serve('ocr-sheet', ocrSheetWork(deps, pictureReader));
   await queue.serve('mail-checkpoint', (data) => recordlog.mailCheckpoint(data));
   const requests = requestsService(deps, sheetsService(deps));
   await queue.serve('mail-request', (data) => requests.mailRequest(data));
@@ -25,7 +27,7 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   return async () => {
     stopCheckpoints();
     stopSweep();
-    await reader.close();
+    await Promise.all([reader.close(), pictureReader.close()]);
   };
 
   /** Runs again and again, never twice at once; a fault is logged and tried at the next turn. */

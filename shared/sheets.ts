@@ -45,7 +45,7 @@ export type SheetFields = z.infer<typeof SheetFields>;
  * confirmed: checked by a named person; set-aside: not used (kept).
  */
 export const revisionStates = ['waiting', 'read', 'needs-entry', 'confirmed', 'set-aside'] as const;
-export const readerStates = ['read', 'no-text-layer', 'encrypted', 'damaged', 'not-a-pdf', 'too-large', 'too-slow', 'too-much-memory', 'unavailable'] as const;
+export const readerStates = ['read', 'read-by-ocr', 'no-text-layer', 'encrypted', 'damaged', 'not-a-pdf', 'too-large', 'too-slow', 'too-much-memory', 'unavailable'] as const;
 export type ReaderState = (typeof readerStates)[number];
 
 export const RevisionSummary = z.object({
@@ -54,6 +54,8 @@ export const RevisionSummary = z.object({
   sha256: Sha256,
   byteLength: z.number().int(),
   pages: z.number().int().nullable(),
+  /** While a sheet is read from pictures of its pages: the page under way, 0 before the first; otherwise null. */
+  pagesRead: z.number().int().nullable(),
   state: z.enum(revisionStates),
   readerState: z.enum(readerStates).nullable(),
   productId: Id.nullable(),

@@ -27,6 +27,8 @@ export const revisions = pgTable(
     state: text().notNull(),
     readerState: text(),
     pages: integer(),
+    /** The page being recognised, from 1, 0 while it waits its turn; null unless the sheet is read from pictures of its pages now. */
+    pagesRead: integer(),
     fields: jsonb(),
     productId: uuid(),
     language: text(),

@@ -11,7 +11,7 @@ import { loadDemo } from '../local/demo/load-demo';
 const config = readConfig({ ...process.env, LOG_LEVEL: 'warn' });
 const log = createLog(config.LOG_LEVEL);
 const database = createDatabase(config.DATABASE_URL);
-const queue = await createQueue(config.DATABASE_URL, { isServing: false, expireSeconds: patienceFor(config.SHEET_READ_SECONDS), onError: (error) => log.warn({ err: error }, 'queue') });
+const queue = await createQueue(config.DATABASE_URL, { isServing: false, expireSeconds: patienceFor(config), onError: (error) => log.warn({ err: error }, 'queue') });
 try {
   const organisations = await database.atTheDoor('SELECT door_organisations()', []);
   const isThere = async () => (await database.atTheDoor('SELECT 1 FROM door_find_login($1)', [signIns[0]?.email])).length > 0;

@@ -16,7 +16,7 @@ import { databaseErrorCode, type Tx } from '../platform/database';
 import { DamagedObjectError } from '../platform/storage';
 import { appendEntry } from '../recordlog/recordlog-store';
 import { applyEdit } from './sheet-fields';
-import { fieldsOf, findByHash, findRevision, listRevisions, toRevision, toSummary, type RevisionRow } from './sheets-store';
+import { fieldsOf, findByHash, findRevision, hasValues, listRevisions, toRevision, toSummary, type RevisionRow } from './sheets-store';
 
 export const objectKey = (organisationId: string, sha256: string) => `${organisationId}/${sha256}`;
 
@@ -139,7 +139,8 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
         demandRole(actor, 'safety-officer');
         const row = await findRevision(tx, id);
         demandState(row, ['set-aside'], 'This sheet is not set aside.');
-        const state = row.revision.readerState === 'read' ? 'read' : row.revision.readerState === null ? 'waiting' : 'needs-entry';
+        const { readerState, pagesRead } = row.revision;
+        const state = hasValues(readerState) ? 'read' : readerState === null || pagesRead !== null ? 'waiting' : 'needs-entry';
         if (state === 'waiting') await queue.add(tx, 'read-sheet', { organisationId: tx.organisationId, revisionId: id });
         return change(tx, id, version, { state });
       }),
@@ -151,7 +152,7 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
         demandState(row, ['needs-entry', 'waiting'], 'This sheet was read already.');
         if (row.revision.readerState === 'not-a-pdf') throw new RefusedError('This file is not a PDF: there is nothing to read. Fill the fields in by hand, or add the sheet as a PDF.');
         await queue.add(tx, 'read-sheet', { organisationId: tx.organisationId, revisionId: id });
-        return change(tx, id, row.revision.version, { state: 'waiting', readerState: null });
+        return change(tx, id, row.revision.version, { state: 'waiting', readerState: null, pagesRead: null });
       }),
   };
 }

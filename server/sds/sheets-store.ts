@@ -23,6 +23,9 @@ export type RevisionRow = Awaited<ReturnType<typeof selectRevisions>>[number];
 
 export const fieldsOf = (row: RevisionRow): SheetFields => (row.revision.fields as SheetFields | null) ?? noFields();
 
+/** Whether the reader found values, in text or in pictures of the pages. */
+export const hasValues = (readerState: string | null): boolean => readerState === 'read' || readerState === 'read-by-ocr';
+
 export function toSummary(row: RevisionRow): RevisionSummary {
   const { revision } = row;
   const fields = fieldsOf(row);
@@ -32,6 +35,7 @@ export function toSummary(row: RevisionRow): RevisionSummary {
     sha256: revision.sha256,
     byteLength: revision.byteLength,
     pages: revision.pages,
+    pagesRead: revision.pagesRead,
     state: revision.state as RevisionSummary['state'],
     readerState: revision.readerState as RevisionSummary['readerState'],
     productId: revision.productId,
@@ -50,7 +54,7 @@ export function toSummary(row: RevisionRow): RevisionSummary {
 }
 export const toRevision = (row: RevisionRow, today: string): Revision => {
   const fields = fieldsOf(row);
-  const isFilled = row.revision.state !== 'waiting' && (row.revision.readerState === 'read' || row.revision.state === 'confirmed');
+  const isFilled = row.revision.state !== 'waiting' && (hasValues(row.revision.readerState) || row.revision.state === 'confirmed');
   return { ...toSummary(row), fields, remarks: isFilled ? remarksOn(fields, today) : [] };
 };
 

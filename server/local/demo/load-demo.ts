@@ -145,7 +145,7 @@ async function addSheet(deps: Deps, officer: PersonActor, spec: DemoSheetSpec): 
     await writeFile(path, bytes);
     const sheets = sheetsService(deps);
     const { revision } = await sheets.upload(officer, { path, byteLength: bytes.byteLength, fileName: spec.fileName });
-    await readSheetWork(deps, { read: readSheet, close: async () => undefined })({ organisationId: officer.organisationId, revisionId: revision.id });
+    await readSheetWork(deps, { read: (bytes) => readSheet(bytes), close: async () => undefined })({ organisationId: officer.organisationId, revisionId: revision.id });
     return await sheets.read(officer, revision.id);
   } finally {
     await rm(folder, { recursive: true, force: true });

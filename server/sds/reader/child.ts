@@ -1,4 +1,5 @@
 import { readFile } from 'node:fs/promises';
+import { readSheetOrPictures } from './ocr';
 import { readSheet } from './read-sheet';
 import { emptyReading, type SheetReading } from './reading';
 
@@ -11,9 +12,11 @@ export interface ReadRequest {
   source: Uint8Array | string;
   maxBytes?: number;
   maxPages?: number;
+  /** Reads a sheet without a text layer from pictures of its pages. */
+  withPictures?: boolean;
 }
 
-export type ChildMessage = { kind: 'ready' } | { kind: 'answer'; id: number; reading: SheetReading };
+export type ChildMessage = { kind: 'ready' } | { kind: 'page'; id: number; page: number; pages: number } | { kind: 'answer'; id: number; reading: SheetReading };
 
 const say = (message: ChildMessage): void => void process.send?.(message);
 
@@ -22,15 +25,14 @@ process.on('message', (request: ReadRequest) => {
 });
 process.on('disconnect', () => process.exit(0));
 
-async function answer({ id, source, maxBytes, maxPages }: ReadRequest): Promise<void> {
-  const reading = await read(source, { ...(maxBytes === undefined ? {} : { maxBytes }), ...(maxPages === undefined ? {} : { maxPages }) });
-  say({ kind: 'answer', id, reading });
+async function answer({ id, source, withPictures, ...limits }: ReadRequest): Promise<void> {
+  say({ kind: 'answer', id, reading: await read(source, (bytes) => (withPictures ? readSheetOrPictures(bytes, { ...limits, onPage: (page, pages) => say({ kind: 'page', id, page, pages }) }) : readSheet(bytes, limits))) });
 }
 
 /** A reader that stumbles over a file says "damaged" and lives on. */
-async function read(source: Uint8Array | string, limits: { maxBytes?: number; maxPages?: number }): Promise<SheetReading> {
+async function read(source: Uint8Array | string, readBytes: (bytes: Uint8Array) => Promise<SheetReading>): Promise<SheetReading> {
   try {
-    return await readSheet(typeof source === 'string' ? await readFile(source) : source, limits);
+    return await readBytes(typeof source === 'string' ? await readFile(source) : source);
   } catch {
     return emptyReading('damaged');
   }

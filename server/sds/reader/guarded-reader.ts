@@ -13,11 +13,16 @@ export interface GuardedReaderOptions {
   entry: string;
   maxBytes?: number;
   maxPages?: number;
+  /** Reads sheets without a text layer from pictures of their pages; its child ends after each, for it is large. */
+  withPictures?: boolean;
 }
+
+/** Told before each page read from a picture, from 1. */
+export type PageHeard = (page: number, pages: number) => void;
 
 export interface GuardedReader {
   /** Bytes, or the path of a file the child reads itself. Never rejects for a bad file; one sheet at a time. */
-  read(source: Uint8Array | string): Promise<SheetReading>;
+  read(source: Uint8Array | string, onPage?: PageHeard): Promise<SheetReading>;
   close(): Promise<void>;
 }
 
@@ -49,12 +54,12 @@ export function createGuardedReader(options: GuardedReaderOptions): GuardedReade
     return warm;
   }
 
-  async function readNow(source: Uint8Array | string): Promise<SheetReading> {
+  async function readNow(source: Uint8Array | string, onPage?: PageHeard): Promise<SheetReading> {
     if (isClosed) throw new Error('The sheet reader is closed.');
     const process = await living();
-    const outcome = await watchedRead(process, { id: nextId++, source, ...limitsOf(options) }, options);
+    const outcome = await watchedRead(process, { id: nextId++, source, ...limitsOf(options) }, options, onPage);
     if (hasEnded(process)) forget();
-    else if ((await residentBytes(process.pid)) > options.maxRssBytes * tiredShare) {
+    else if (options.withPictures || (await residentBytes(process.pid)) > options.maxRssBytes * tiredShare) {
       forget();
       process.kill('SIGKILL');
     }
@@ -62,8 +67,8 @@ export function createGuardedReader(options: GuardedReaderOptions): GuardedReade
   }
 
   return {
-    read(source) {
-      const turn = queue.then(() => readNow(source));
+    read(source, onPage) {
+      const turn = queue.then(() => readNow(source, onPage));
       queue = turn.catch(() => undefined);
       return turn;
     },
@@ -78,9 +83,10 @@ export function createGuardedReader(options: GuardedReaderOptions): GuardedReade
 
 const hasEnded = (child: ChildProcess): boolean => child.exitCode !== null || child.signalCode !== null || !child.connected;
 
-const limitsOf = ({ maxBytes, maxPages }: GuardedReaderOptions): Partial<ReadRequest> => ({
+const limitsOf = ({ maxBytes, maxPages, withPictures }: GuardedReaderOptions): Partial<ReadRequest> => ({
   ...(maxBytes === undefined ? {} : { maxBytes }),
   ...(maxPages === undefined ? {} : { maxPages }),
+  ...(withPictures === undefined ? {} : { withPictures }),
 });
 
 /** Starts the child with nothing of the parent's environment but the search path: it handles strangers' files. */
@@ -117,7 +123,7 @@ async function startChild({ entry, maxRssBytes }: GuardedReaderOptions): Promise
   return child;
 }
 
-async function watchedRead(child: ChildProcess, request: ReadRequest, { wallClockMs, maxRssBytes }: GuardedReaderOptions): Promise<SheetReading> {
+async function watchedRead(child: ChildProcess, request: ReadRequest, { wallClockMs, maxRssBytes }: GuardedReaderOptions, onPage?: PageHeard): Promise<SheetReading> {
   return new Promise((resolve) => {
     const clock = setTimeout(() => stop('too-slow'), wallClockMs);
     const watch = setInterval(() => {
@@ -140,6 +146,7 @@ async function watchedRead(child: ChildProcess, request: ReadRequest, { wallCloc
       child.kill('SIGKILL');
     };
     const heard = (message: ChildMessage): void => {
+      if (message.kind === 'page' && message.id === request.id && !isDone) onPage?.(message.page, message.pages);
       if (message.kind === 'answer' && message.id === request.id) finish(message.reading);
     };
     // V8 aborts itself when its heap is full, the kernel kills when the machine is; any other end is the file's doing.

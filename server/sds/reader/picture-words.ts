@@ -19,7 +19,7 @@ export interface WordReader {
   close(): Promise<void>;
 }
 
-/** Below this a word is dirt, a rule or a piece of a drawing. */
+/** Below this a number is not to be trusted, and a short word is dirt, a rule or a piece of a drawing. */
 const leastSureness = 0.3;
 /** Height from the foot of g to the top of A, in em: common to text faces, from memory. */
 const rowOfEm = 0.93;
@@ -60,8 +60,8 @@ export function pageOf({ page, width, height, scale }: Omit<PagePicture, 'pgm'>,
     const lineSlope = (baseline.y1 - baseline.y0) / Math.max(1, baseline.x1 - baseline.x0);
     return words.flatMap(({ text, confidence, bbox }): PictureWord[] => {
       const sureness = confidence / 100;
-      const word = withoutRules(text);
-      if (word === '' || sureness < leastSureness) return [];
+      const word = capitalI(withoutRules(text));
+      if (word === '' || (sureness < leastSureness && !/\p{L}{4}/u.test(word))) return [];
       const middle = (bbox.x0 + bbox.x1) / 2;
       const foot = baseline.y0 + lineSlope * (middle - baseline.x0);
       return [{ page, text: word, x: bbox.x0 / scale, y: (foot - em * 0.8) / scale, width: (bbox.x1 - bbox.x0) / scale, height: em / scale, baseline: (foot - slope * middle) / scale, sureness }];
@@ -76,6 +76,9 @@ function slopeOf(lines: readonly RecognisedLine[]): number {
   slopes.sort((a, b) => a - b);
   return slopes[Math.floor(slopes.length / 2)] ?? 0;
 }
+
+/** No word of these languages starts with a small l before such a letter: it is a capital I. */
+const capitalI = (word: string): string => word.replace(/^l(?=[bcdfghjkmnpqrstvwxz])/, 'I');
 
 /** Rules of tables and frames come as bars and dashes beside or instead of words. */
 function withoutRules(text: string): string {

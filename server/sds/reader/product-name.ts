@@ -18,7 +18,7 @@ const nameLabels: readonly { label: RegExp; confidence: number }[] = [
   },
   {
     label:
-      /^((ghs )?product identifier( used on the label)?|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material|preparation|article|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
+      /^((ghs )?product identifier( used on the label)?|(primary )?identifiers?( ?\(s\))? used on the label|identificador( sga)? del producto|identificateur( sgh)? d[eu] produit|produktidentifikator|identity|common name|material|preparation|article|substance name|name of (the )?(substance|mixture)|mixture name|product|produit|producto|produkt|name|nombre|designation)\b/,
     confidence: 0.75,
   },
 ];

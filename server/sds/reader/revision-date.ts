@@ -9,12 +9,15 @@ export type DateRole = 'revision' | 'issue' | 'print' | 'supersedes' | 'other';
 /** Words that say what a date is, the ones that decide against a revision first; folded. */
 const roleWords: readonly (readonly [DateRole, RegExp])[] = [
   ['supersedes', /super[sc]ede|replaces|previous|prior (version|revision|date)|anterior|sustituye|reemplaza|remplace|annule|ersetzt|vorherige|letzte ausgabe|last issue|first (issue|compil|version|edition)|primera (emision|edicion)|premiere (edition|emission)|erstausgabe|original (issue|date)|sostituisce|vervangt/],
-  ['other', /expir|valid (until|to|thru)|effective until|vencim|caduc|gultig bis|next review|review due|proxima|download|transport|shipment|\bregulation|directive|\bcfr\b|\brule\b|hazard communication|standard|reglament|verordnung|amend(ed|ing) by/],
+  ['other', /expir|valid (until|to|thru)|effective until|vencim|caduc|gultig bis|next review|review due|proxima|download|transport|shipment|\bregulation|directive|\bcfr\b|\brule\b|hazard communication|standard|reglament|verordnung|amend(ed|ing) by|\bon or (after|before)\b/],
   ['print', /print|impres|imprim|druck|stampa|afdruk/],
   ['revision', /revis|\brev\b|rev\.|overhaul|updat|actualiz|mise a jour|misa a jour|ueberarbeit|uberarbeit|bearbeitet|bearbeitungsdatum|version (date|vom|du|from)|date of (the )?version|fecha de version|aggiorna|herzien|last (changed?|modified|review)|date reviewed|reviewed (on|date)|geandert|stand:|\bstand\b/],
-  ['issue', /issue|issuing|prepar|emision|emitid|elabora|edicion|emission|edition|etabli|redaction|ausgabe|erstell|ausstell|creation|creacion|created|published|publica|\beffective|completed|compiled|approved|date written|\bemissione|datum vom/],
+  ['issue', /issue|issuing|issuance|prepar|emision|emitid|elabora|edicion|emission|edition|etabli|redaction|ausgabe|erstell|ausstell|creation|creacion|created|published|publica|\beffective|completed|compiled|approved|date written|\bemissione|datum vom/],
   ['issue', /\b(date|fecha|datum|data|dated)\s*[:.]?\s*$/],
 ];
+
+/** A date after more letters than this stands in a sentence, which no heading cell above explains. */
+const longestCellWords = 40;
 
 interface Dated {
   date: WrittenDate;
@@ -82,7 +85,7 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
     for (const date of dates) {
       const own = segment.text.slice(from, date.start);
       const label = `${before} ${own}`;
-      const role = roleOf(label) ?? roleOfColumn(lines, index, segment) ?? roleOfAbove(lines, index, segment);
+      const role = roleOf(label) ?? (own.trim().length > longestCellWords ? null : roleOfColumn(lines, index, segment)) ?? roleOfAbove(lines, index, segment);
       if (role) found.push({ date, ...role, line, box: boxOf(segment, date), label: lastLabel(role.words) });
       from = date.end;
       before = '';

@@ -1,0 +1,1 @@
+ALTER TABLE "revisions" ADD COLUMN "pages_read" integer;
