@@ -26,7 +26,7 @@ export interface Owner {
         <li>
           <kb-state [kind]="action.resolvedAt ? 'done' : 'stop'">{{ action.resolvedAt ? 'Resolved' : 'Stopped' }}</kb-state>
           <span>
-            <b>{{ action.taskName ? action.taskName + ': ' : '' }}{{ action.text }}</b>
+            <b>{{ action.taskName ? action.taskName + ': ' : '' }}{{ action.text }}</b>&ngsp;
             <span class="kb-quiet">{{ action.openedBy }}, {{ momentShort(action.openedAt) }}</span>
             @if (action.resolvedAt) {
               <br />{{ action.evidence }} <span class="kb-quiet">{{ action.resolvedBy }}, {{ momentShort(action.resolvedAt) }}</span>
