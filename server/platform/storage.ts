@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { GetObjectCommand, HeadObjectCommand, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
+import { GetObjectCommand, HeadObjectCommand, ListObjectsV2Command, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
 import { UnavailableError } from '../errors';
 
 /** Objects are named by their content: `organisation/sha256`. */
@@ -10,6 +10,9 @@ export interface Storage {
   putText(key: string, text: string): Promise<void>;
   /** Reads and hashes again; bytes whose hash is not the wanted one are never served. */
   getVerified(key: string, sha256: string): Promise<Buffer>;
+  getText(key: string): Promise<string>;
+  /** Keys that begin with the prefix, all of them. */
+  list(prefix: string): Promise<string[]>;
   has(key: string): Promise<boolean>;
 }
 
@@ -57,6 +60,21 @@ export function createStorage(settings: StorageSettings): Storage {
         const bytes = Buffer.from(await (answer.Body?.transformToByteArray() ?? new Uint8Array()));
         if (createHash('sha256').update(bytes).digest('hex') !== sha256) throw new DamagedObjectError(Key);
         return bytes;
+      }),
+    getText: (Key) =>
+      reachable(async () => {
+        const answer = await client.send(new GetObjectCommand({ Bucket, Key }));
+        return (await answer.Body?.transformToString()) ?? '';
+      }),
+    list: (Prefix) =>
+      reachable(async () => {
+        const keys: string[] = [];
+        for (let ContinuationToken: string | undefined; ; ) {
+          const page = await client.send(new ListObjectsV2Command({ Bucket, Prefix, ...(ContinuationToken ? { ContinuationToken } : {}) }));
+          keys.push(...(page.Contents ?? []).flatMap(({ Key }) => Key ?? []));
+          ContinuationToken = page.NextContinuationToken;
+          if (!page.IsTruncated || !ContinuationToken) return keys;
+        }
       }),
     has: async (Key) => {
       try {

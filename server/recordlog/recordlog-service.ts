@@ -1,6 +1,6 @@
 import { spawn } from 'node:child_process';
 import { createWriteStream } from 'node:fs';
-import { mkdtemp, rm } from 'node:fs/promises';
+import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
@@ -17,6 +17,7 @@ import { logSigner, signCheckpoint } from './checkpoint';
 import { exportLog, type LogEntry } from './export';
 import { consistencyProof, inclusionProof, merkleRoot, StreamingRoot } from './merkle';
 import { readCheckpoints, readEntries, readLeafHashes } from './recordlog-store';
+import { findFalseRow } from './shown-rows-check';
 
 const entriesAtOnce = 2_000;
 /** Old checkpoints in an export: the newest ones and a spread of the rest, so that a long log stays a readable file. */
@@ -42,6 +43,13 @@ export function recordlogService({ config, database, storage, mail, queue, clock
       return { size: head.size, note };
     });
     if (made) log.info({ organisation: organisationId, size: made.size }, 'checkpoint signed');
+  }
+
+  /** Checkpoints from the bucket: the newest and a spread of the rest. Whoever rewrites the database does not reach these. */
+  async function keptOutside(organisationId: string): Promise<string[]> {
+    const keys = (await storage.list(`${organisationId}/checkpoints/`)).sort();
+    const step = Math.max(1, Math.ceil(keys.length / maxEarlierCheckpoints));
+    return Promise.all(keys.filter((_, at) => (keys.length - 1 - at) % step === 0).map((key) => storage.getText(key)));
   }
 
   async function* entries(organisationId: string, size: number): AsyncGenerator<LogEntry> {
@@ -83,7 +91,8 @@ export function recordlogService({ config, database, storage, mail, queue, clock
       });
       if (!found) return;
       const { organisation, checkpoint } = found;
-      await storage.putText(`${organisationId}/checkpoints/${String(size).padStart(12, '0')}.txt`, checkpoint.note);
+      // The root stands in the name: a checkpoint of a rewritten log lies beside the one it contradicts, never over it.
+      await storage.putText(`${organisationId}/checkpoints/${String(size).padStart(12, '0')}-${checkpoint.root.toString('hex')}.txt`, checkpoint.note);
       await mail.send({
         to: organisation.auditorEmails,
         subject: `${organisation.name}: checkpoint of ${size} records`,
@@ -121,24 +130,35 @@ export function recordlogService({ config, database, storage, mail, queue, clock
       });
     },
 
-    /** Runs the standalone verifier over the whole exported log: what an auditor would run, in a process of its own. */
+    /**
+     * Runs the standalone verifier over the whole exported log, what an auditor would run, in a process of its own; holds
+     * the log against the checkpoints that left the database; then holds the rows that pages show against the log.
+     */
     async check(actor: PersonActor): Promise<RecordCheck> {
       const key = signerOf(actor.organisationId).key.vkey;
+      // Asked for first: a checkpoint made later may cover more than the log that is read below.
+      const outside = await keptOutside(actor.organisationId);
       await makeCheckpoint(actor.organisationId);
       const [head, notes] = await database.inOrganisation(actor.organisationId, async (tx) => [(await tx.select().from(recordlogHeads))[0], await readCheckpoints(tx)] as const);
       const newest = notes.at(-1);
-      if (!head || !newest) return { entries: 0, root: '', checkpoint: null, isGood: true, trouble: null, key };
+      if (!head || !newest) {
+        const trouble = outside.length > 0 ? 'The log is empty, but signed checkpoints of it were kept outside the database: it was removed.' : await findFalseRow(database, actor.organisationId);
+        return { entries: 0, root: '', checkpoint: null, isGood: trouble === null, trouble, key };
+      }
       const folder = await mkdtemp(join(tmpdir(), 'kneeboard-check-'));
       try {
         const file = join(folder, 'log.jsonl');
         await pipeline(Readable.from(await this.export(actor)), createWriteStream(file));
-        const { code, output } = await runVerifier([file, '--key', key]);
+        const earlier = outside.map((_, at) => join(folder, `checkpoint-${at}.txt`));
+        for (const [at, path] of earlier.entries()) await writeFile(path, outside[at] ?? '');
+        const { code, output } = await runVerifier([file, '--key', key, ...earlier.flatMap((path) => ['--earlier', path])]);
+        const trouble = code === 0 ? await findFalseRow(database, actor.organisationId) : (output.split('\n')[0] || 'The check could not be run.').replaceAll(`${folder}/`, '');
         return {
           entries: newest.size,
           root: newest.root.toString('hex'),
           checkpoint: { note: newest.note, size: newest.size, createdAt: newest.createdAt.toISOString() },
-          isGood: code === 0,
-          trouble: code === 0 ? null : (output.split('\n')[0] ?? 'The check could not be run.'),
+          isGood: trouble === null,
+          trouble,
           key,
         };
       } finally {
