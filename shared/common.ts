@@ -3,7 +3,8 @@ import * as z from 'zod';
 // A strict CSP forbids compiled parsers: zod must not probe for `Function`.
 z.config({ jitless: true });
 
-export const Id = z.uuid();
+/** Written small: two spellings of one id would slip past every comparison outside the database. */
+export const Id = z.uuid().toLowerCase();
 // Years before this are slips of the keyboard, and the database has no year 0.
 const firstYear = '1700';
 /** Local calendar date, ISO. */

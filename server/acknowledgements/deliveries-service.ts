@@ -15,10 +15,10 @@ import { readCursor, toPage } from '../paging';
 import { pinDigest, isSamePinDigest } from '../people/pin-digest';
 import { unsealPin } from '../people/pin-unsealing';
 import { databaseErrorCode, type Tx } from '../platform/database';
+import { takeGuess, wasRight } from '../platform/guesses';
 import { appendEntries, lockHead } from '../recordlog/recordlog-store';
-import { interpret, readPins, type Delivery, type Interpretation } from './interpret';
+import { freePinTries, interpret, pinGuessKey, readEnvelope, readPins, type Delivery, type Interpretation } from './interpret';
 
-const freePinTries = 5;
 const deliveredAs = { id: deliveries.id, bytes: deliveries.bytes, receivedAt: deliveries.receivedAt, sentAt: deliveries.sentAt, tabletId: deliveries.tabletId, tabletName: tablets.name };
 
 export function deliveriesService({ config, database, clock, log }: Deps) {
@@ -52,7 +52,7 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
         .innerJoin(tablets, and(eq(tablets.organisationId, deliveries.organisationId), eq(tablets.id, deliveries.tabletId)))
         .leftJoin(deliveryOutcomes, and(eq(deliveryOutcomes.organisationId, deliveries.organisationId), eq(deliveryOutcomes.deliveryId, deliveries.id)))
         .where(and(eq(deliveries.organisationId, tx.organisationId), inArray(deliveries.id, [...ids]), isNull(deliveryOutcomes.deliveryId)));
-      const ordered = rows.sort((a, b) => sequenceOf(a) - sequenceOf(b));
+      const ordered = rows.map(readEnvelope).sort((a, b) => (a.envelope?.sequence ?? 0) - (b.envelope?.sequence ?? 0));
       if (ordered.length === 0) return [];
       const pinsBefore = await readPins(tx, ordered);
       const interpretations: Interpretation[] = [];
@@ -155,11 +155,11 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
 
     /** Says at once whether the PIN is the person's own. Five wrong tries per person and tablet, then waiting. */
     async checkPin(actor: TabletActor, { personId, sealedPin, textSha256, nonce }: z.output<typeof CheckPin>): Promise<void> {
-      const key = `pin ${personId} on ${actor.tabletId}`;
-      const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, freePinTries]);
-      if (wait?.seconds) throw new SlowDownError(`Too many wrong PINs. Wait ${wait.seconds} ${wait.seconds === 1 ? 'second' : 'seconds'}.`, wait.seconds);
+      const key = pinGuessKey(personId, actor.tabletId);
       const [stored] = await database.inOrganisation(actor.organisationId, (tx) => tx.select().from(pins).where(and(eq(pins.organisationId, tx.organisationId), eq(pins.personId, personId))));
       if (!stored) throw new RefusedError('This person has no PIN yet: set one first.', { reason: 'pin-not-set' });
+      const guess = await takeGuess(database, key, freePinTries);
+      if (guess.isPaused) throw new SlowDownError(`Too many wrong PINs. Wait ${guess.waitSeconds} ${guess.waitSeconds === 1 ? 'second' : 'seconds'}.`, guess.waitSeconds);
       let opened: ReturnType<typeof unsealPin> | undefined;
       try {
         opened = unsealPin(sealedPin, config.keys.pinSealingKey);
@@ -168,11 +168,10 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
       }
       const fits = opened && opened.textHash === textSha256 && opened.nonce === nonce && isSamePinDigest(stored.digest, pinDigest(config.keys.pinPepper, actor.organisationId, personId, opened.pin));
       if (fits) {
-        await database.atTheDoor('SELECT door_succeeded($1)', [key]);
+        await wasRight(database, key);
         return;
       }
-      const [failed] = await database.atTheDoor<{ failures: number }>('SELECT door_failed($1) AS failures', [key]);
-      const left = Math.max(0, freePinTries - (failed?.failures ?? 0));
+      const left = Math.max(0, freePinTries - guess.failures);
       throw new RefusedError(`This is not the right PIN. ${left === 1 ? '1 try is' : `${left} tries are`} left before a pause.`, { reason: 'pin-wrong', triesLeft: left });
     },
 
@@ -193,8 +192,6 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
   };
 }
 export type DeliveriesService = ReturnType<typeof deliveriesService>;
-
-const sequenceOf = ({ bytes }: Delivery): number => Number(/"sequence"\s*:\s*(\d{1,15})/.exec(bytes.toString('utf8'))?.[1] ?? 0);
 
 /** Whether the fault is the database's or the network's for now, and the tablet should simply send again. */
 function isPassing(error: unknown): boolean {

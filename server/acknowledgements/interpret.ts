@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { and, eq, inArray } from 'drizzle-orm';
+import { and, eq, inArray, sql } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
 import { type Checklist } from '#compliance/answer';
 import { type acknowledgements, type correctiveActions } from '#drizzle/schema/acknowledgements';
@@ -27,6 +27,9 @@ type Kind<K extends Envelope['kind']> = Extract<Envelope, { kind: K }>;
 type PinState = NonNullable<Receipt['pinState']>;
 type ActionRow = typeof correctiveActions.$inferInsert;
 
+/** A delivery and what stands in it; `unread` says why when it is not understood. */
+export type ReadDelivery = Delivery & ({ readonly envelope: Envelope; readonly unread?: undefined } | { readonly envelope?: undefined; readonly unread: string });
+
 /** What a delivery will write once the log's head is locked. */
 export interface Interpretation {
   readonly delivery: Delivery;
@@ -47,18 +50,24 @@ const reasonWords: Record<(typeof couldNotSignReasons)[number], string> = {
 };
 const pinSetHash = createHash('sha256').update('pin-set').digest('hex');
 
-/** Reads one envelope against the organisation's records. Writes nothing; what is not understood is kept aside with the reason. */
-export async function interpret(tx: Tx, keys: Config['keys'], delivery: Delivery, pinsBefore: Map<string, string>): Promise<Interpretation> {
-  const aside = (because: string): Interpretation => ({ delivery, keptAside: because, actions: [], drafts: [] });
+/** Reads the bytes once: what is judged later is what was understood here, never another reading of the same bytes. */
+export function readEnvelope(delivery: Delivery): ReadDelivery {
   let json: unknown;
   try {
     json = JSON.parse(delivery.bytes.toString('utf8'));
   } catch {
-    return aside('It is not readable: perhaps it was cut off on the tablet.');
+    return { ...delivery, unread: 'It is not readable: perhaps it was cut off on the tablet.' };
   }
   const parsed = Envelope.safeParse(json);
-  if (!parsed.success) return aside(`This version of the service does not understand it: ${parsed.error.issues.slice(0, 3).map((issue) => issue.path.join('.') || issue.message).join(', ')}.`);
-  const envelope = parsed.data;
+  if (parsed.success) return { ...delivery, envelope: parsed.data };
+  return { ...delivery, unread: `This version of the service does not understand it: ${parsed.error.issues.slice(0, 3).map((issue) => issue.path.join('.') || issue.message).join(', ')}.` };
+}
+
+/** Judges one envelope against the organisation's records. Writes nothing but wrong guesses at PINs; what is not understood is kept aside with the reason. */
+export async function interpret(tx: Tx, keys: Config['keys'], delivery: ReadDelivery, pinsBefore: Map<string, KnownPin>): Promise<Interpretation> {
+  const aside = (because: string): Interpretation => ({ delivery, keptAside: because, actions: [], drafts: [] });
+  if (!delivery.envelope) return aside(delivery.unread);
+  const { envelope } = delivery;
   if (envelope.id !== delivery.id) return aside('Its own number differs from the one it was sent under.');
   const [person] = await tx.select().from(people).where(and(eq(people.organisationId, tx.organisationId), eq(people.id, envelope.personId)));
   if (!person) return aside('It names a person who is not known here.');
@@ -84,7 +93,7 @@ export async function interpret(tx: Tx, keys: Config['keys'], delivery: Delivery
     if (!asked) return aside(`${person!.name} was not asked to sign this checklist.`);
     const newest = await newestVersion(tx, version.shiftId);
     const wasSuperseded = newest !== undefined && newest.number > version.number;
-    const pinState: PinState = sent.kind === 'signed' ? judgePin(sent.personId, sent.sealedPin, sent.textSha256, sent.nonce) : 'not-set';
+    const pinState: PinState = sent.kind === 'signed' ? await judgePin(sent.personId, sent.sealedPin, sent.textSha256, sent.nonce) : 'not-set';
     const id = newId();
     const reason = sent.kind === 'could-not-sign' ? [reasonWords[sent.reason], sent.note].filter(Boolean).join(': ') : null;
     const acknowledgement = {
@@ -136,22 +145,30 @@ export async function interpret(tx: Tx, keys: Config['keys'], delivery: Delivery
     return { delivery, answers, actions, drafts: [draft, ...actions.map(actionDraft)] };
   }
 
-  function interpretPin(sent: Kind<'pin-set'>, name: string): Interpretation {
+  async function interpretPin(sent: Kind<'pin-set'>, name: string): Promise<Interpretation> {
     const opened = openSeal(sent.sealedPin, pinSetHash, sent.nonce);
     if (opened === undefined) return aside(`The PIN of ${name} could not be opened. Ask them to set it again.`);
     if (!/^\d{4,8}$/.test(opened)) return aside(`The PIN of ${name} is not four to eight digits. Ask them to set it again.`);
     if (pinsBefore.has(sent.personId)) return aside(`${name} has a PIN already. If they forgot it, reset it in the office; they then set a new one.`);
-    if (sent.witnessPersonId !== null && judgePin(sent.witnessPersonId, sent.witnessSealedPin ?? '', pinSetHash, sent.witnessNonce ?? '') === 'not-confirmed') return aside(`The PIN that was to witness ${name}'s new one was not the witness's own. Ask them to set it again.`);
+    const { witnessPersonId } = sent;
+    // Who is named as witness has shown their own PIN: anything less would put a witness on record who saw nothing.
+    const isWitnessed = witnessPersonId === null || (witnessPersonId !== sent.personId && (await judgePin(witnessPersonId, sent.witnessSealedPin ?? '', pinSetHash, sent.witnessNonce ?? '')) === 'confirmed');
+    if (!isWitnessed) return aside(`The PIN that was to witness ${name}'s new one was not the witness's own. Ask them to set it again.`);
     const digest = pinDigest(keys.pinPepper, tx.organisationId, sent.personId, opened);
-    pinsBefore.set(sent.personId, digest);
-    return { delivery, pin: { organisationId: tx.organisationId, personId: sent.personId, digest, setAt: delivery.receivedAt, witnessPersonId: sent.witnessPersonId, tabletId: delivery.tabletId }, actions: [], drafts: [] };
+    pinsBefore.set(sent.personId, { digest, isPaused: false });
+    return { delivery, pin: { organisationId: tx.organisationId, personId: sent.personId, digest, setAt: delivery.receivedAt, witnessPersonId, tabletId: delivery.tabletId }, actions: [], drafts: [] };
   }
 
-  function judgePin(personId: string, sealed: string, textHash: string, nonce: string): PinState {
+  /** Wrong guesses count with those asked online; while that pause lasts no PIN counts as right, or guesses could hide in deliveries. */
+  async function judgePin(personId: string, sealed: string, textHash: string, nonce: string): Promise<PinState> {
     const stored = pinsBefore.get(personId);
     if (!stored) return 'not-set';
     const pin = openSeal(sealed, textHash, nonce);
-    return pin !== undefined && isSamePinDigest(stored, pinDigest(keys.pinPepper, tx.organisationId, personId, pin)) ? 'confirmed' : 'not-confirmed';
+    if (pin === undefined || stored.isPaused) return 'not-confirmed';
+    if (isSamePinDigest(stored.digest, pinDigest(keys.pinPepper, tx.organisationId, personId, pin))) return 'confirmed';
+    const { rows } = await tx.execute<{ failures: number }>(sql`SELECT door_failed(${pinGuessKey(personId, delivery.tabletId)}) AS failures`);
+    stored.isPaused = (rows[0]?.failures ?? 0) > freePinTries;
+    return 'not-confirmed';
   }
   /** The PIN, when the seal opens and stands for this very text and nonce. */
   function openSeal(sealed: string, textHash: string, nonce: string): string | undefined {
@@ -173,10 +190,23 @@ const actionDraft = (action: ActionRow): EntryDraft => {
 };
 const sha256 = (bytes: string | Uint8Array) => createHash('sha256').update(bytes).digest('hex');
 
-/** Digests of the PINs that the people named in these envelopes have now. */
-export async function readPins(tx: Tx, deliveries: readonly Delivery[]): Promise<Map<string, string>> {
-  const ids = deliveries.flatMap(({ bytes }) => [...bytes.toString('utf8').matchAll(/"(?:personId|witnessPersonId)"\s*:\s*"([0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12})"/gi)].map((found) => found[1] as string));
-  if (ids.length === 0) return new Map();
-  const rows = await tx.select().from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, ids)));
-  return new Map(rows.map((row) => [row.personId, row.digest]));
+/** A PIN on record; `isPaused` while too many wrong ones came from this tablet. */
+interface KnownPin {
+  readonly digest: string;
+  isPaused: boolean;
+}
+/** Wrong PINs before waiting begins, for one person on one tablet, asked online or delivered. */
+export const freePinTries = 5;
+export const pinGuessKey = (personId: string, tabletId: string): string => `pin ${personId} on ${tabletId}`;
+
+/** The PINs that the people named in these envelopes have now. All came from one tablet, or each is judged by itself. */
+export async function readPins(tx: Tx, deliveries: readonly ReadDelivery[]): Promise<Map<string, KnownPin>> {
+  const ids = deliveries.flatMap(({ envelope }) => (envelope ? [envelope.personId, ...(envelope.kind === 'pin-set' && envelope.witnessPersonId ? [envelope.witnessPersonId] : [])] : []));
+  const tabletId = deliveries[0]?.tabletId;
+  if (ids.length === 0 || !tabletId) return new Map();
+  const rows = await tx
+    .select({ personId: pins.personId, digest: pins.digest, waitSeconds: sql<number | null>`door_wait('pin ' || ${pins.personId} || ' on ' || ${tabletId}::text, ${freePinTries})` })
+    .from(pins)
+    .where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, ids)));
+  return new Map(rows.map(({ personId, digest, waitSeconds }) => [personId, { digest, isPaused: (waitSeconds ?? 0) > 0 }]));
 }

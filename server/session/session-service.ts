@@ -6,6 +6,7 @@ import { type ChangePassword, type Session, type SignIn } from '#shared/session'
 import { type Deps } from '../deps';
 import { InputError, SignedOutError, SlowDownError } from '../errors';
 import { type PersonActor } from '../http/actor';
+import { takeGuess, wasRight } from '../platform/guesses';
 import { hashPassword, refuseWeakPassword, verifyPassword } from './passwords';
 
 /** Wrong tries before waiting begins: few for one account from one address, more for an address as a whole. */
@@ -37,24 +38,27 @@ export function sessionService({ database, clock, log }: Deps) {
     /** Throws SlowDownError before looking, SignedOutError for a wrong address or password alike. */
     async signIn({ email, password }: SignIn, address: string): Promise<PersonActor> {
       const account = email.toLowerCase();
-      const guesses = [
-        { key: `account ${account} from ${address}`, free: freeTries.account },
+      const slowDown = (seconds: number) => new SlowDownError(`Too many wrong tries. Wait ${seconds} ${seconds === 1 ? 'second' : 'seconds'}, then try again.`, seconds);
+      const own = `account ${account} from ${address}`;
+      const wider = [
         { key: `address ${address}`, free: freeTries.address },
         { key: `account ${account}`, free: freeTries.anywhere },
       ];
-      for (const { key, free } of guesses) {
+      for (const { key, free } of wider) {
         const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, free]);
-        if (wait?.seconds) throw new SlowDownError(`Too many wrong tries. Wait ${wait.seconds} ${wait.seconds === 1 ? 'second' : 'seconds'}, then try again.`, wait.seconds);
+        if (wait?.seconds) throw slowDown(wait.seconds);
       }
+      const guess = await takeGuess(database, own, freeTries.account);
+      if (guess.isPaused) throw slowDown(guess.waitSeconds);
       const [login] = await database.atTheDoor<{ organisation_id: string; person_id: string; password_hash: string }>('SELECT * FROM door_find_login($1)', [account]);
       const fits = await verifyPassword(login?.password_hash, password);
       const member = login && fits ? await readMember(login.organisation_id, login.person_id) : undefined;
       if (!login || !member?.isActive) {
-        for (const { key } of guesses) await database.atTheDoor('SELECT door_failed($1)', [key]);
+        for (const { key } of wider) await database.atTheDoor('SELECT door_failed($1)', [key]);
         log.warn({ address }, 'sign-in refused');
         throw new SignedOutError('This e-mail address and password do not belong together. Check both, or ask your owner for a new password.');
       }
-      await database.atTheDoor('SELECT door_succeeded($1)', [guesses[0]?.key]);
+      await wasRight(database, own);
       return toActor(login.organisation_id, login.person_id, member);
     },
 
@@ -67,13 +71,13 @@ export function sessionService({ database, clock, log }: Deps) {
     /** Ends every session of this person; answers from when new ones are good (ms). */
     async changePassword(actor: PersonActor, { current, next }: ChangePassword): Promise<number> {
       const key = `password change ${actor.personId}`;
-      const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, freeTries.account]);
-      if (wait?.seconds) throw new SlowDownError(`Too many wrong tries. Wait ${wait.seconds} seconds, then try again.`, wait.seconds);
+      const guess = await takeGuess(database, key, freeTries.account);
+      if (guess.isPaused) throw new SlowDownError(`Too many wrong tries. Wait ${guess.waitSeconds} seconds, then try again.`, guess.waitSeconds);
       const member = await readMember(actor.organisationId, actor.personId);
       if (!(await verifyPassword(member?.passwordHash, current))) {
-        await database.atTheDoor('SELECT door_failed($1)', [key]);
         throw new InputError('The password was not changed.', [{ path: 'current', message: 'This is not your present password.' }]);
       }
+      await wasRight(database, key);
       refuseWeakPassword(next, { email: member?.email ?? '', name: actor.personName }, 'next');
       const hash = await hashPassword(next);
       return database.inOrganisation(actor.organisationId, async (tx) => {
