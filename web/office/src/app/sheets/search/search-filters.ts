@@ -9,7 +9,7 @@ import { filterChoices, filterNames, type FilterName } from './search-words';
     @for (name of names; track name) {
       <div>
         <label [for]="'sheet-' + name">{{ filters[name].label }}</label>
-        <select class="kb-field" [id]="'sheet-' + name" (change)="changed.emit({ [name]: $any($event.target).value || null })">
+        <select class="kb-field" [id]="'sheet-' + name" (change)="choose(name, $any($event.target).value)">
           @for (choice of filters[name].choices; track choice[0]) {
             <option [value]="choice[0]" [selected]="choice[0] === (search()[name] ?? '')">{{ choice[1] }}</option>
           }
@@ -60,4 +60,8 @@ export class SearchFilters {
   protected readonly filters = filterChoices;
   protected readonly none = { state: null, language: null, signalWord: null, isInUse: null };
   protected readonly isFiltered = computed(() => filterNames.some((name) => Boolean(this.search()[name])));
+
+  protected choose(name: FilterName, value: string): void {
+    this.changed.emit({ [name]: value || null });
+  }
 }

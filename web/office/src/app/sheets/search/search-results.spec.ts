@@ -10,7 +10,7 @@ import { closestWords, countSaid, knownChoice, snippetPieces } from './search-wo
 
 const id = (number: number) => `0190a0a0-0000-7000-8000-00000000000${number}`;
 const hit = (number: number, productName: string, matched: string, snippet: string | null = null): SearchAnswer['items'][number] => ({
-  revision: { id: id(number), fileName: 'sheet.pdf', sha256: 'a'.repeat(64), byteLength: 3, pages: 1, state: 'confirmed', readerState: 'read', productId: null, productName, supplier: 'Northlode Resins', revisedOn: '2024-03-18', language: 'en', toLookAt: 0, isCurrent: true, uploadedAt: '2026-12-03T12:00:00Z', uploadedBy: 'Ines Halloran', confirmedAt: '2026-12-03T13:00:00Z', confirmedBy: 'Ines Halloran', version: 2 },
+  revision: { id: id(number), fileName: 'sheet.pdf', sha256: 'a'.repeat(64), byteLength: 3, pages: 1, pagesRead: null, state: 'confirmed', readerState: 'read', productId: null, productName, supplier: 'Northlode Resins', revisedOn: '2024-03-18', language: 'en', toLookAt: 0, isCurrent: true, uploadedAt: '2026-12-03T12:00:00Z', uploadedBy: 'Ines Halloran', confirmedAt: '2026-12-03T13:00:00Z', confirmedBy: 'Ines Halloran', version: 2 },
   matched,
   snippet,
 });
