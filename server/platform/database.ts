@@ -18,8 +18,9 @@ export interface Database {
 
 export function createDatabase(url: string, options: { max?: number; onError?: (error: Error) => void } = {}): Database {
   const pool = new pg.Pool({ connectionString: url, max: options.max ?? 20, connectionTimeoutMillis: 5_000, application_name: 'kneeboard' });
-  // Without a listener a dropped idle connection would end the process.
+  // Without listeners a dropped connection would end the process: the pool's is for idle ones, the client's for one that is between two statements.
   pool.on('error', (error) => options.onError?.(error));
+  pool.on('connect', (client) => client.on('error', (error) => options.onError?.(error)));
   return {
     pool,
     async inOrganisation(organisationId, work) {
