@@ -254,6 +254,19 @@ describe('a PIN', () => {
     expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '2468' }))).toMatchObject({ outcome: 'second', pinState: 'confirmed' });
   });
 
+  it('that was wrong does not stand in the way of the right one; a right one stands against any later', async () => {
+    const own = await scene();
+    const { tablet, day, lead } = own;
+    await tablet.deliver(await tablet.pinSet(lead, '2468'));
+    const state = async () => (await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === lead)?.state;
+    expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '1111' }))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
+    expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '2222' }))).toMatchObject({ outcome: 'second', pinState: 'not-confirmed' });
+    expect(await tablet.deliver(await tablet.signed(day.version, lead))).toMatchObject({ outcome: 'recorded', pinState: 'confirmed' });
+    expect(await state()).toBe('signed');
+    for (const pin of ['1111', '2468']) expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin }))).toMatchObject({ outcome: 'second', pinState: 'confirmed' });
+    expect(await history(own)).toHaveLength(2);
+  });
+
   it.each<[string, (tablet: TestTablet, hash: string) => Promise<Record<string, unknown>>]>([
     ['for another text', (tablet) => tablet.seal('2468', 'b'.repeat(64))],
     ['with another nonce', async (tablet, hash) => ({ ...(await tablet.seal('2468', hash)), nonce: 'f'.repeat(32) })],
