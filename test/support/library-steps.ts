@@ -30,7 +30,7 @@ export interface JobWithKit {
   readonly version: PublishedVersion;
 }
 
-/** An open job whose shift of today mixes the kit and grinds; published. */
+/** An open job whose shift of today grinds and mixes the kit; published. */
 export async function publishedJob(seat: Seat, name: string, kitId: string, personIds: readonly string[]): Promise<JobWithKit> {
   const [lead = ''] = personIds;
   const job = await answerOf<Job>(callFrom(seat, 'addJob', { body: jobEdit({ name }) }));
@@ -45,7 +45,7 @@ export async function publishedJob(seat: Seat, name: string, kitId: string, pers
     kits: [{ kitId, count: null }],
     tasks: [
       { ...bare, id: newId(), kind: 'floor-grinding', assignments: [{ personId: lead, startMinute: 420, endMinute: 550 }], equipmentId: grinder.id, collectorId: collector.id, dustMethod: 'vacuum' },
-      { ...bare, id: newId(), kind: 'clean-up', assignments: personIds.map((personId) => ({ personId, startMinute: 600, endMinute: 660 })), kitId },
+      { ...bare, id: newId(), kind: 'liquid-mixing', assignments: personIds.map((personId) => ({ personId, startMinute: 600, endMinute: 660 })), kitId },
     ],
   };
   const shift = await answerOf<Shift>(callFrom(seat, 'editShiftPlan', { params: { shiftId: made.id }, version: made.version, body: plan }));
