@@ -1,15 +1,15 @@
 import { createRequire } from 'node:module';
 import path from 'node:path';
-import { greyOf, pgmOf, withoutScreens } from './grey-picture';
+import { greyOf, withoutScreens, type GreyPicture } from './grey-picture';
 
-/** One page drawn in grey. `pgm` is a binary PGM file; `scale` its pixels per PDF point. */
+/** One page drawn in grey; `scale` is its pixels per PDF point. */
 export interface PagePicture {
   page: number;
   /** Size of the page, PDF points. */
   width: number;
   height: number;
   scale: number;
-  pgm: Uint8Array;
+  picture: GreyPicture;
 }
 
 export interface PagePictures {
@@ -58,7 +58,7 @@ export async function openPagePictures(bytes: Uint8Array): Promise<PagePictures>
       await page.render({ canvas: canvas as unknown as HTMLCanvasElement, viewport, background: 'white' }).promise;
       page.cleanup();
       const { data } = canvas.getContext('2d').getImageData(0, 0, canvas.width, canvas.height);
-      return { page: number, width, height, scale, pgm: pgmOf(withoutScreens(greyOf(data, canvas.width, canvas.height))) };
+      return { page: number, width, height, scale, picture: withoutScreens(greyOf(data, canvas.width, canvas.height)) };
     },
     close: () => task.destroy(),
   };

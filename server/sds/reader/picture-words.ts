@@ -2,6 +2,7 @@ import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
 import path from 'node:path';
 import { withRepairedCas } from './cas-repair';
+import { pgmOf } from './grey-picture';
 import { type PagePicture } from './page-pictures';
 import { type TextItem, type TextPage } from './pdf-text';
 
@@ -15,7 +16,7 @@ export interface PictureWord extends TextItem {
 export type PicturePage = Omit<TextPage, 'items'> & { items: PictureWord[] };
 
 export interface WordReader {
-  wordsOf(picture: PagePicture): Promise<PicturePage>;
+  wordsOf(drawn: PagePicture): Promise<PicturePage>;
   close(): Promise<void>;
 }
 
@@ -33,11 +34,11 @@ export async function openWordReader(language: OcrLanguage): Promise<WordReader>
   const worker = await createWorker(language, OEM.LSTM_ONLY, { langPath, gzip: true, cacheMethod: 'none', errorHandler: () => undefined });
   await worker.setParameters({ tessedit_pageseg_mode: PSM.AUTO });
   return {
-    async wordsOf(picture) {
-      await worker.setParameters({ user_defined_dpi: String(Math.round(picture.scale * 72)) });
-      const { data } = await worker.recognize(Buffer.from(picture.pgm), {}, { blocks: true, text: false });
+    async wordsOf(drawn) {
+      await worker.setParameters({ user_defined_dpi: String(Math.round(drawn.scale * 72)) });
+      const { data } = await worker.recognize(Buffer.from(pgmOf(drawn.picture)), {}, { blocks: true, text: false });
       const lines = (data.blocks ?? []).flatMap(({ paragraphs }) => paragraphs.flatMap((paragraph) => paragraph.lines));
-      return pageOf(picture, lines);
+      return pageOf(drawn, lines);
     },
     async close() {
       await worker.terminate();
@@ -53,7 +54,7 @@ export interface RecognisedLine {
 }
 
 /** Words in PDF points; a page that lies askew is set straight for the rows, not for the boxes. */
-export function pageOf({ page, width, height, scale }: Omit<PagePicture, 'pgm'>, lines: readonly RecognisedLine[]): PicturePage {
+export function pageOf({ page, width, height, scale }: Omit<PagePicture, 'picture'>, lines: readonly RecognisedLine[]): PicturePage {
   const slope = slopeOf(lines);
   const items = lines.flatMap(({ baseline, rowAttributes, words }) => {
     const em = rowAttributes.rowHeight / rowOfEm;

@@ -1,0 +1,44 @@
+import { createCanvas } from '@napi-rs/canvas';
+import { openPagePictures } from '#server/sds/reader/page-pictures';
+import { pdfOf } from './odd-pdfs';
+
+/** The first pages of a PDF as pictures in another, without a letter of text: what a scanner makes of a printed sheet. */
+export async function pictureSheet(bytes: Uint8Array, pages: number): Promise<Uint8Array> {
+  const pictures = await openPagePictures(bytes);
+  const scans: Buffer[] = [];
+  for (let number = 1; number <= Math.min(pages, pictures.pages); number++) scans.push(pngOf((await pictures.draw(number)).picture));
+  await pictures.close();
+  return pdfOf((doc) => {
+    for (const scan of scans) doc.addPage({ size: 'LETTER', margin: 0 }).image(scan, 0, 0, { width: 612, height: 792 });
+  }, { autoFirstPage: false });
+}
+
+/** A page of strokes, dots and rings that say nothing. */
+export const scribbledSheet = (): Promise<Uint8Array> =>
+  pdfOf((doc) => {
+    let seed = 7;
+    const next = (below: number): number => (seed = (seed * 48271) % 2147483647) % below;
+    const canvas = createCanvas(1275, 1650);
+    const pen = canvas.getContext('2d');
+    pen.fillStyle = 'white';
+    pen.fillRect(0, 0, canvas.width, canvas.height);
+    for (let at = 0; at < 400; at++) {
+      pen.beginPath();
+      if (at % 2 === 0) pen.arc(next(1275), next(1650), 4 + next(20), 0, next(7));
+      else pen.moveTo(next(1275), next(1650));
+      pen.lineTo(next(1275), next(1650) % 300);
+      pen.stroke();
+      pen.fillStyle = 'black';
+      pen.fillRect(next(1275), next(1650), next(12), next(12));
+    }
+    doc.image(canvas.toBuffer('image/png'), 0, 0, { width: 612, height: 792 });
+  });
+
+function pngOf({ width, height, pixels }: { width: number; height: number; pixels: Uint8Array }): Buffer {
+  const canvas = createCanvas(width, height);
+  const pen = canvas.getContext('2d');
+  const image = pen.createImageData(width, height);
+  pixels.forEach((grey, at) => image.data.set([grey, grey, grey, 255], at * 4));
+  pen.putImageData(image, 0, 0);
+  return canvas.toBuffer('image/png');
+}
