@@ -165,6 +165,17 @@ describe('SignSheet', () => {
     expect(text).not.toContain('Gear is missing');
   });
 
+  it('writes a reason once, however often a gloved finger bounces', async () => {
+    await page.press('Abe');
+    await page.press('I can’t sign yet');
+    const host = fixture.nativeElement as HTMLElement;
+    host.querySelector<HTMLInputElement>('input[type="radio"]')?.click();
+    const tell = [...host.querySelectorAll('button')].find((button) => button.textContent?.trim() === 'Tell them');
+    for (let tap = 0; tap < 3; tap += 1) tell?.click();
+    await page.settle();
+    expect(written().map(({ kind }) => kind)).toEqual(['could-not-sign']);
+  });
+
   it('offers no way off the page while somebody signs', async () => {
     expect(await page.hasWayOut()).toBe(true);
     await page.press('Abe');

@@ -56,6 +56,8 @@ export class SignSheet {
   private readonly language = signal<Language>('en');
   private readonly strokes = signal<{ readonly strokes: Ink; readonly question: string } | null>(null);
   protected readonly trouble = signal('');
+  /** While something is being written: a finger that bounces writes it once. */
+  private isKeeping = false;
   private readonly lastOutcome = signal<Outcome | null>(null);
 
   protected readonly kicker = computed(() => {
@@ -158,8 +160,10 @@ export class SignSheet {
 
   /** What was signed is on disk before anybody is told so; then it is sent if it can be. */
   private async keep(sitting: Sitting, drafts: readonly Draft[], words: (at: string) => string): Promise<void> {
+    if (this.isKeeping) return;
     const language = this.text()?.language ?? 'en';
     const say = messagesIn(language).sign;
+    this.isKeeping = true;
     try {
       const envelope = (await this.outbox.add(drafts)).at(-1);
       this.lastOutcome.set({ kind: 'done', text: words(clockTime(envelope?.capturedAt ?? '', language)), language, envelopeId: envelope?.id ?? null });
@@ -169,6 +173,8 @@ export class SignSheet {
       if (!(error instanceof NotKept) && !(error instanceof TooLong)) throw error;
       this.trouble.set(error instanceof TooLong ? say.tooLong : say.notKept);
       this.step.set('read');
+    } finally {
+      this.isKeeping = false;
     }
   }
 

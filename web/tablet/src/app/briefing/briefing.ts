@@ -45,6 +45,8 @@ export class Briefing {
 
   protected readonly given = signal<Readonly<Record<string, Given>>>({});
   protected readonly trouble = signal('');
+  /** While the answers are written: a second tap on Done is not a second briefing. */
+  private isKeeping = false;
   private readonly chosenLead = signal<string | null>(null);
   private readonly draftOf = signal<string | null>(null);
 
@@ -94,7 +96,7 @@ export class Briefing {
   protected async finish(): Promise<void> {
     const view = this.view();
     const say = this.words.say();
-    if (!view) return;
+    if (!view || this.isKeeping) return;
     const open = view.text.morning.find(({ id }) => !this.given()[id]);
     const personId = this.leadId();
     if (open) {
@@ -107,9 +109,11 @@ export class Briefing {
       return;
     }
     const answers = view.text.morning.map(({ id }) => ({ lineId: id, answer: this.given()[id]?.answer ?? 'no', note: this.given()[id]?.note.trim() || null }));
+    this.isKeeping = true;
     try {
       await this.outbox.add([{ kind: 'briefing', versionId: view.job.version.id, personId, answers, shiftId: view.job.shiftId }]);
     } catch (error) {
+      this.isKeeping = false;
       if (!(error instanceof NotKept)) throw error;
       this.trouble.set(say.sign.notKept);
       return;

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input, linkedSignal, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { Empty } from '#ui/empty';
 import { Mark } from '#ui/mark';
@@ -22,6 +22,9 @@ interface Answered {
   readonly note: string | null;
 }
 
+/** The buttons stay in one place while the lines change: a gloved finger that bounces must not answer a line nobody saw. */
+const bounceMs = 500;
+
 /** The live lines that unlock one task, one at a time, answered where the work is. A critical "No" stops the task at once. */
 @Component({
   selector: 'kb-start-check',
@@ -40,24 +43,28 @@ export class StartCheck {
   protected readonly found = injectJob(this.shiftId);
   protected readonly languages = tabletLanguages.map((code) => ({ code, name: messagesIn(code).languageName }));
 
-  protected readonly at = signal(0);
   protected readonly outcome = signal<'open' | 'noted' | 'stopped' | null>(null);
   protected readonly isSent = signal(false);
   protected readonly trouble = signal('');
-  private readonly answered = signal<readonly Answered[]>([]);
   private readonly chosenChecker = signal<string | null>(null);
 
   protected readonly view = computed(() => {
     const found = this.found();
     return found.state === 'good' ? found.view : null;
   });
+  private readonly versionId = computed(() => this.view()?.job.version.id ?? null);
+  /** A newer version may ask other lines: what was answered of the old one begins anew, or it would fit neither. */
+  protected readonly at = linkedSignal<string | null, number>({ source: this.versionId, computation: () => 0 });
+  private readonly answered = linkedSignal<string | null, readonly Answered[]>({ source: this.versionId, computation: () => [] });
   protected readonly one = computed(() => this.view()?.tasks.find(({ task }) => task.taskId === this.taskId()) ?? null);
   protected readonly line = computed<TextLine | null>(() => this.one()?.task.live[this.at()] ?? null);
   protected readonly checkerId = computed(() => this.chosenChecker() ?? this.view()?.lead?.id ?? this.one()?.people[0]?.id ?? null);
+  /** By id: the day that is heard again brings the same line anew, and must take nothing away that was typed. */
+  private readonly lineId = computed(() => this.line()?.id ?? null);
   /** Whose masks are on, for a line about masks; forgotten with each line. */
-  protected readonly masksOn = linkedSignal<TextLine | null, readonly string[]>({ source: this.line, computation: () => [] });
-  protected readonly note = linkedSignal<TextLine | null, string>({ source: this.line, computation: () => '' });
-  protected readonly isNoteOpen = linkedSignal<TextLine | null, boolean>({ source: this.line, computation: () => false });
+  protected readonly masksOn = linkedSignal<string | null, readonly string[]>({ source: this.lineId, computation: () => [] });
+  protected readonly note = linkedSignal<string | null, string>({ source: this.lineId, computation: () => '' });
+  protected readonly isNoteOpen = linkedSignal<string | null, boolean>({ source: this.lineId, computation: () => false });
 
   protected readonly kicker = computed(() => {
     const view = this.view();
@@ -75,7 +82,19 @@ export class StartCheck {
     const contact = this.whoToCall.contact();
     return contact ? say.anytime(this.taskNames(), contact) : say.anytimeNobody(this.taskNames());
   });
+  /** Whether the line has just come, or the answers are being kept: taps do nothing then. */
+  protected readonly isSettling = signal(true);
+
   protected readonly spoken = computed(() => [this.line()?.text, this.line()?.why].filter(Boolean).join(' '));
+
+  constructor() {
+    effect((onCleanup) => {
+      this.lineId();
+      this.isSettling.set(true);
+      const timer = setTimeout(() => this.isSettling.set(false), bounceMs);
+      onCleanup(() => clearTimeout(timer));
+    });
+  }
 
   protected toggleMask(name: string): void {
     this.masksOn.update((names) => (names.includes(name) ? names.filter((one) => one !== name) : [...names, name]));
@@ -93,7 +112,8 @@ export class StartCheck {
   protected async answer(answer: 'yes' | 'no'): Promise<void> {
     const line = this.line();
     const task = this.one()?.task;
-    if (!line || !task) return;
+    if (!line || !task || this.isSettling()) return;
+    this.isSettling.set(true);
     const note = [...this.masksOn(), this.note().trim()].filter(Boolean).join(', ') || null;
     const answers = [...this.answered(), { lineId: line.id, answer, note }];
     const isStop = answer === 'no' && line.isCritical;
@@ -108,12 +128,13 @@ export class StartCheck {
   private async keep(answers: readonly Answered[], isStop: boolean): Promise<void> {
     const view = this.view();
     const personId = this.checkerId();
-    if (!view || !personId) return;
+    if (!view || !personId) return this.isSettling.set(false);
     try {
       await this.outbox.add([{ kind: 'start-check', versionId: view.job.version.id, personId, taskId: this.taskId(), answers: [...answers], shiftId: view.job.shiftId }]);
     } catch (error) {
       if (!(error instanceof NotKept)) throw error;
       this.trouble.set(this.words.say().sign.notKept);
+      this.isSettling.set(false);
       return;
     }
     this.trouble.set('');
