@@ -3,8 +3,8 @@ import { createHash } from 'node:crypto';
 import { readdirSync } from 'node:fs';
 import { GetObjectCommand, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
 import { v7 as newId } from 'uuid';
-import { emptyReading } from '#server/sds/reader/reading';
-import { readSheetWork } from '#server/sds/sheets-work';
+import { emptyReading, type SheetReading } from '#server/sds/reader/reading';
+import { ocrSheetWork, readSheetWork } from '#server/sds/sheets-work';
 import { type Revision, type SheetEdit } from '#shared/sheets';
 import { call, expectProblem, ok } from '#test/support/call';
 import { buildDemoSheet, quarrybondPartB, type DemoSheetSpec } from '#test/support/demo-sheets';
@@ -158,15 +158,47 @@ describe('reading and confirming', () => {
   });
 
   it.each([
-    ['no text layer', '%PDF-1.4\n1 0 obj<</Type/Catalog/Pages 2 0 R>>endobj 2 0 obj<</Type/Pages/Kids[3 0 R]/Count 1>>endobj 3 0 obj<</Type/Page/Parent 2 0 R/MediaBox[0 0 99 99]>>endobj\ntrailer<</Root 1 0 R>>', 'no-text-layer'],
+    ['no text layer, after its pictures said nothing', '%PDF-1.4\n1 0 obj<</Type/Catalog/Pages 2 0 R>>endobj 2 0 obj<</Type/Pages/Kids[3 0 R]/Count 1>>endobj 3 0 obj<</Type/Page/Parent 2 0 R/MediaBox[0 0 99 99]>>endobj\ntrailer<</Root 1 0 R>>', 'no-text-layer'],
     ['nothing but its first bytes', '%PDF-1.7 cut off', 'damaged'],
   ])('a PDF with %s is named and waits for entry by hand', async (_, text, readerState) => {
     const organisation = await makeOrganisation(service);
     const { revision } = await upload(organisation, Buffer.from(`${text}\n%${newId()}`));
     await service.readSheetNow(organisation.id, revision.id);
+    await ocrSheetWork(service.deps, { read: async () => emptyReading('no-text-layer', 1), close: async () => undefined })({ organisationId: organisation.id, revisionId: revision.id });
     const found = await read(organisation, revision.id);
-    expect(found).toMatchObject({ state: 'needs-entry', readerState });
+    expect(found).toMatchObject({ state: 'needs-entry', readerState, pagesRead: null });
     expect(found.fields).toMatchObject({ productName: null, hazardCodes: [], ingredients: [] });
+  });
+
+  it('a scan goes to work of its own, shows the page under way, and comes back marked; running twice changes nothing', async () => {
+    const organisation = await makeOrganisation(service);
+    const { revision } = await upload(organisation, Buffer.from(`%PDF-1.4 ${newId()}`));
+    const work = { organisationId: organisation.id, revisionId: revision.id };
+    const answer = (reading: SheetReading) => ({ read: async () => reading, close: async () => undefined });
+    const queued = async () => (await service.deps.database.inOrganisation(organisation.id, (tx) => tx.client.query(`SELECT 1 FROM pgboss.job WHERE name = 'ocr-sheet' AND data->>'revisionId' = $1`, [revision.id]))).rowCount;
+    await readSheetWork(service.deps, answer(emptyReading('no-text-layer', 8)))(work);
+    expect(await read(organisation, revision.id)).toMatchObject({ state: 'waiting', readerState: 'no-text-layer', pages: 8, pagesRead: 0 });
+    expect(await queued()).toBe(1);
+    const field = { value: 'Quarrybond 40', page: 3, box: { x: 0, y: 0, width: 1, height: 1 }, quote: 'Quarrybond 40', confidence: 0.7, because: 'Read by OCR from a picture of the page.' };
+    const reading: SheetReading = { ...emptyReading('read-by-ocr', 8), productName: field, text: 'Quarrybond 40' };
+    await ocrSheetWork(service.deps, {
+      read: async (_, onPage) => {
+        onPage?.(3, 8);
+        // The count is written beside the reading, so it is looked for until it is there.
+        for (let tries = 0; tries < 100 && (await read(organisation, revision.id)).pagesRead !== 3; tries += 1) await new Promise((resolve) => setTimeout(resolve, 50));
+        expect(await read(organisation, revision.id)).toMatchObject({ state: 'waiting', pages: 8, pagesRead: 3 });
+        return reading;
+      },
+      close: async () => undefined,
+    })(work);
+    const found = await read(organisation, revision.id);
+    expect(found).toMatchObject({ state: 'read', readerState: 'read-by-ocr', pagesRead: null, productName: 'Quarrybond 40', fields: { productName: { confidence: 0.7, because: field.because } } });
+    expect(found.remarks.length).toBeGreaterThan(0);
+    await ocrSheetWork(service.deps, answer(emptyReading('damaged', 8)))(work);
+    expect(await read(organisation, revision.id)).toEqual(found);
+    const params = { revisionId: revision.id };
+    const aside = await ok(organisation.officer.agent, 'setRevisionAside', { params, version: found.version });
+    expect(await ok(organisation.officer.agent, 'takeRevisionBack', { params, version: aside.version })).toMatchObject({ state: 'read' });
   });
 
   it('keeps text of a PDF as text: script, NUL and halves of characters do not stop it (F20)', async () => {

@@ -68,7 +68,7 @@ export function companyName(text: string): string | null {
   name = (afterForm?.[1] ?? name).replace(/[\s,;:-]+$/, '').trim();
   const folded = fold(name);
   if (name.length < 2 || name.length > 80 || !hasLetters(name) || isLabel(name)) return null;
-  if (/^\d(?![a-z]{1,3}\b)|@|www\.|https?:|^(same|see|not|no|none|n\/?a|identification|section|address|(distributor|manufacturer|importer|supplier)s?$|for |and |of |the supplier|safety|data|information|undertaking|p\.?o|tel|phone|siehe|wie |igual|idem)\b|\d{3}[- .]\d{3,4}/.test(folded)) return null;
+  if (/^\d(?![a-z]{1,3}\b)|@|www\.|https?:|^(same|see|not|no|none|n\/?a|identification|section|address|for |and |of |the supplier|safety|data|information|undertaking|p\.?o|tel|phone|siehe|wie |igual|idem)\b|\d{3}[- .]\d{3,4}/.test(folded)) return null;
   return name;
 }
 
