@@ -20,10 +20,14 @@ describe('what a revision reaches, in words', () => {
     { name: 'nobody signed', shifts: [shift(1, { signed: 0 })], rest: 'One open job uses it; nobody has signed there yet. Applying it asks the crew to be briefed and sign again.' },
     { name: 'two shifts of one job are one crew', shifts: [shift(1, { date: '2026-12-03' }), shift(1, { date: '2026-12-04' })], rest: 'One open job uses it; 10 signatures were given on the older one. Applying it asks the crew to be briefed and sign again.' },
     { name: 'three jobs', shifts: [shift(1), shift(2), shift(3)], rest: 'Three open jobs use it; 15 signatures were given on the older one. Applying it asks all 3 crews to be briefed and sign again.' },
-    { name: 'not published anywhere', shifts: [shift(1, { publishedVersion: null, signed: 0 })], rest: 'One open job uses it; no published checklist changes.' },
+    { name: 'not published anywhere', shifts: [shift(1, { publishedVersion: null, signed: 0 })], rest: 'One open job uses it; no published checklist changes. Brief the crews on the new hazard all the same: 29 CFR 1910.1200(h)(1).' },
     { name: 'published, but its text stays the same: its signatures are not counted', shifts: [shift(1), shift(2, { changesChecklist: false, signed: 9 })], rest: 'Two open jobs use it; 5 signatures were given on the older one. Applying it asks the crew to be briefed and sign again.' },
     { name: 'no job', shifts: [], rest: 'No open job uses it.' },
   ])('$name', ({ shifts, rest }) => expect(reachNote(reachOf({ shifts }), true)?.rest).toBe(rest));
+
+  it('asks for no briefing when no hazard is new', () => {
+    expect(reachNote(reachOf({ changes: [], shifts: [shift(1, { changesChecklist: false })] }), true)?.rest).toBe('One open job uses it; no published checklist changes.');
+  });
 
   it('promises nothing before the sheet is confirmed', () => {
     expect(reachNote(reachOf({ shifts: [shift(1), shift(2)] }), false)?.rest).toContain('Once it is confirmed and applied, both crews are asked to be briefed and sign again.');

@@ -63,7 +63,7 @@ export function reachNote(reach: Reach, isConfirmed: boolean): ReachNote | null 
   const lead = leadOf(reach, hazards);
   const use = counts.jobs === 0 ? 'No open job uses it.' : `${capital(countWords(counts.jobs, 'open job uses', 'open jobs use'))} it`;
   if (counts.jobs === 0) return { kind: hazards?.isNewHazard ? 'caution' : 'plain', lead, rest: use };
-  if (counts.published === 0) return { kind: hazards?.isNewHazard && !isConfirmed ? 'caution' : 'plain', lead, rest: `${use}; no published checklist changes.` };
+  if (counts.published === 0) return { kind: hazards?.isNewHazard ? 'caution' : 'plain', lead, rest: `${use}; no published checklist changes.${hazards?.isNewHazard ? ' Brief the crews on the new hazard all the same: 29 CFR 1910.1200(h)(1).' : ''}` };
   const signatures = counts.signed === 0 ? 'nobody has signed there yet' : `${counts.signed} ${counts.signed === 1 ? 'signature was' : 'signatures were'} given on the older one`;
   const crews = counts.crews === 1 ? 'the crew' : counts.crews === 2 ? 'both crews' : `all ${counts.crews} crews`;
   const next = isConfirmed ? `Applying it asks ${crews} to be briefed and sign again.` : `Once it is confirmed and applied, ${crews} ${counts.crews === 1 ? 'is' : 'are'} asked to be briefed and sign again.`;

@@ -50,9 +50,12 @@ export class AskTheSupplier {
     <h2 matDialogTitle>Ask the supplier</h2>
     <form novalidate [formGroup]="form" (ngSubmit)="ask()">
       <mat-dialog-content><div class="kb-stack">
+        <div>
+          <b>{{ question.productName }}</b>
+          <div class="kb-quiet">{{ question.supplier }}</div>
+        </div>
         <p>
-          <b>{{ question.productName }}</b
-          >, {{ question.supplier }}. They get an e-mail with a link that takes one PDF without an account. It works once, for 30 days, and shows only your company's name, this product and your message.
+          They get an e-mail with a link that takes one PDF without an account. It works once, for 30 days, and shows only your company's name, this product and your message.
         </p>
         <kb-form-trouble [words]="sending.refusal()" />
         <kb-text-field label="Supplier's e-mail address" kind="email" formControlName="email" />
