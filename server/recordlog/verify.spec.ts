@@ -75,7 +75,7 @@ describe('a good log', () => {
   });
 });
 
-describe('tampered with, hashes left as they were', () => {
+describe('[REC-04] tampered with, hashes left as they were', () => {
   it('names an entry whose record was changed', async () => {
     const record = Buffer.from('{"signed":999}').toString('base64');
     const lines = edit(await new TestLog(30).export(), 17, (line) => line.replace(/"record":"[^"]*"/, `"record":"${record}"`));

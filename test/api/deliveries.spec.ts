@@ -38,7 +38,7 @@ const logOf = async ({ organisation }: Scene) => {
 };
 
 describe('a signature', () => {
-  it('is recorded once, with its PIN, its text, its times, one log entry, and is seen by nobody else', async () => {
+  it('[REC-03] is recorded once, with its PIN, its text, its times, one log entry, and is seen by nobody else', async () => {
     const own = await scene();
     const { tablet, day, crew, organisation } = own;
     await tablet.deliver(await tablet.pinSet(crew, '2468'));
