@@ -200,7 +200,7 @@ describe('another organisation', () => {
   });
   it('the function is its role’s, whose path is fixed, which nobody signs in as and which sees nothing else', async () => {
     const { rows } = await superuser.query(`SELECT pg_get_userbyid(proowner) AS owner, prosecdef, proconfig, has_function_privilege('public', oid, 'EXECUTE') AS "isPublic" FROM pg_proc WHERE proname = 'search_sheets'`);
-    expect(rows).toEqual([{ owner: 'kneeboard_search', prosecdef: true, proconfig: ['search_path=public, pg_temp', 'client_min_messages=warning'], isPublic: false }]);
+    expect(rows).toEqual([{ owner: 'kneeboard_search', prosecdef: true, proconfig: ['search_path=public, pg_temp', 'client_min_messages=warning', 'plan_cache_mode=force_generic_plan'], isPublic: false }]);
     const { rows: seen } = await superuser.query(`SELECT table_name AS name, array_agg(DISTINCT privilege_type::text) AS rights FROM information_schema.column_privileges WHERE grantee = 'kneeboard_search' GROUP BY 1 ORDER BY 1`);
     expect(seen).toEqual([{ name: 'sheet_search', rights: ['SELECT'] }, { name: 'sheet_words', rights: ['SELECT'] }]);
     const { rows: owned } = await superuser.query(`SELECT count(*)::int AS owned FROM pg_class WHERE relowner = 'kneeboard_search'::regrole`);
