@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, output, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, ElementRef, input, output, signal, viewChild } from '@angular/core';
 import { type Mark as MarkName } from '#compliance/answer';
 import { type Language } from '#compliance/outcome';
 import { Mark } from '#ui/mark';
@@ -29,6 +29,7 @@ export class SignPane {
   readonly notMe = output<void>();
 
   private readonly ink = viewChild.required(InkBox);
+  private readonly inkPlace = viewChild.required<InkBox, ElementRef<HTMLElement>>(InkBox, { read: ElementRef });
   protected readonly isAnswered = signal(false);
   protected readonly trouble = signal('');
   protected readonly say = computed(() => messagesIn(this.text().language));
@@ -52,6 +53,13 @@ export class SignPane {
   });
   protected readonly question = computed(() => (this.tasks().length > 0 ? this.say().sign.own : this.say().sign.ownNoTasks));
   protected readonly spoken = computed(() => [this.taskWords(), ...this.ownLines(), this.text().text.sentence].join('. '));
+
+  /** The box is next: it comes clear of the row of buttons that stays in sight. */
+  protected matches(): void {
+    this.isAnswered.set(true);
+    this.trouble.set('');
+    this.inkPlace().nativeElement.scrollIntoView?.({ block: 'nearest' });
+  }
 
   protected done(): void {
     const strokes = this.ink().strokes();
