@@ -43,7 +43,7 @@ const answers = z.array(z.object({ lineId: z.string().max(300), answer: z.enum([
 export const BriefingEnvelope = z.looseObject({ ...envelope, kind: z.literal('briefing'), versionId: Id, personId: Id, answers });
 /** The live lines that unlock a task, answered at its start. */
 export const StartCheckEnvelope = z.looseObject({ ...envelope, kind: z.literal('start-check'), versionId: Id, personId: Id, taskId: Id, answers });
-/** A PIN chosen by the person on the tablet; the witness seals their own. `textSha256` of the seal is SHA-256 of "pin-set". */
+/** A PIN chosen by the person on the tablet; the witness seals their own. Both seal over the owner (pinSetText in pin-sealing.ts). */
 export const PinSetEnvelope = z.looseObject({
   ...envelope,
   kind: z.literal('pin-set'),

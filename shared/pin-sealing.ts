@@ -11,9 +11,15 @@ export interface PinStatement {
   pin: string;
   /** SHA-256, hex, of the text that is signed: the PIN counts for this text only. */
   textHash: string;
-  /** New for every signature; the server takes it once. */
+  /** New for every seal: the envelope names it too, so that the two belong together. */
   nonce: string;
 }
+
+/**
+ * What stands, hashed, in a seal where a signature's text hash would when a PIN is set: whose it is. Owner and witness
+ * both seal over it, so that a witness's seal taken from one tablet's storage witnesses nobody else.
+ */
+export const pinSetText = (ownerPersonId: string): string => `pin-set ${ownerPersonId.toLowerCase()}`;
 
 export const PIN_SEAL = {
   version: 1,

@@ -7,6 +7,7 @@ import { type answerSets, checklistPeople, checklistTexts, checklistVersions } f
 import { jobs } from '#drizzle/schema/jobs';
 import { people, pins } from '#drizzle/schema/people';
 import { type couldNotSignReasons, Envelope, type Receipt } from '#shared/envelopes';
+import { pinSetText } from '#shared/pin-sealing';
 import { type Config } from '../config';
 import { newestVersion } from '../jobs/shift-store';
 import { pinDigest, isSamePinDigest } from '../people/pin-digest';
@@ -48,7 +49,6 @@ const reasonWords: Record<(typeof couldNotSignReasons)[number], string> = {
   'feels-unsafe': 'feels unsafe',
   other: 'another reason',
 };
-const pinSetHash = createHash('sha256').update('pin-set').digest('hex');
 
 /** Reads the bytes once: what is judged later is what was understood here, never another reading of the same bytes. */
 export function readEnvelope(delivery: Delivery): ReadDelivery {
@@ -146,13 +146,14 @@ export async function interpret(tx: Tx, keys: Config['keys'], delivery: ReadDeli
   }
 
   async function interpretPin(sent: Kind<'pin-set'>, name: string): Promise<Interpretation> {
-    const opened = openSeal(sent.sealedPin, pinSetHash, sent.nonce);
+    const textHash = sha256(pinSetText(sent.personId));
+    const opened = openSeal(sent.sealedPin, textHash, sent.nonce);
     if (opened === undefined) return aside(`The PIN of ${name} could not be opened. Ask them to set it again.`);
     if (!/^\d{4,8}$/.test(opened)) return aside(`The PIN of ${name} is not four to eight digits. Ask them to set it again.`);
     if (pinsBefore.has(sent.personId)) return aside(`${name} has a PIN already. If they forgot it, reset it in the office; they then set a new one.`);
     const { witnessPersonId } = sent;
     // Who is named as witness has shown their own PIN: anything less would put a witness on record who saw nothing.
-    const isWitnessed = witnessPersonId === null || (witnessPersonId !== sent.personId && (await judgePin(witnessPersonId, sent.witnessSealedPin ?? '', pinSetHash, sent.witnessNonce ?? '')) === 'confirmed');
+    const isWitnessed = witnessPersonId === null || (witnessPersonId !== sent.personId && (await judgePin(witnessPersonId, sent.witnessSealedPin ?? '', textHash, sent.witnessNonce ?? '')) === 'confirmed');
     if (!isWitnessed) return aside(`The PIN that was to witness ${name}'s new one was not the witness's own. Ask them to set it again.`);
     const digest = pinDigest(keys.pinPepper, tx.organisationId, sent.personId, opened);
     pinsBefore.set(sent.personId, { digest, isPaused: false });

@@ -270,7 +270,7 @@ describe('a PIN', () => {
   it.each<[string, (tablet: TestTablet, hash: string) => Promise<Record<string, unknown>>]>([
     ['for another text', (tablet) => tablet.seal('2468', 'b'.repeat(64))],
     ['with another nonce', async (tablet, hash) => ({ ...(await tablet.seal('2468', hash)), nonce: 'f'.repeat(32) })],
-    ['for setting a PIN', (tablet) => tablet.seal('2468', pinSetHash)],
+    ['for setting a PIN', (tablet) => tablet.seal('2468', pinSetHash('0195d4e0-0000-7000-8000-000000000001'))],
     ['that was changed', async (tablet, hash) => ({ sealedPin: (await tablet.seal('2468', hash)).sealedPin.replace(/.{6}$/, 'AAAAAA'), nonce: 'f'.repeat(32) })],
   ])('sealed %s confirms nothing', async (_, seal) => {
     const { tablet, day, lead } = await scene();
@@ -293,7 +293,7 @@ describe('a PIN', () => {
     const { tablet, lead, crew } = await scene();
     await tablet.deliver(await tablet.pinSet(lead, '2468'));
     const witness = async (pin: string) => {
-      const { sealedPin, nonce } = await tablet.seal(pin, pinSetHash);
+      const { sealedPin, nonce } = await tablet.seal(pin, pinSetHash(crew));
       return { witnessPersonId: lead, witnessSealedPin: sealedPin, witnessNonce: nonce };
     };
     expect(await tablet.deliver(await tablet.pinSet(crew, '8642', await witness('1111')))).toMatchObject({ outcome: 'kept-aside' });

@@ -28,7 +28,7 @@ async function scene(): Promise<Scene> {
   return { organisation, tablet, crew, second, lead, day: await organisation.publishedDay({ crew: [crew, second] }) };
 }
 const witnessed = async (tablet: TestTablet, personId: string, witnessPersonId: string, guess: string) => {
-  const { sealedPin, nonce } = await tablet.seal(guess, pinSetHash);
+  const { sealedPin, nonce } = await tablet.seal(guess, pinSetHash(personId));
   return tablet.pinSet(personId, '8642', { witnessPersonId, witnessSealedPin: sealedPin, witnessNonce: nonce });
 };
 const stateOf = async ({ tablet }: Scene, personId: string) => (await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === personId)?.state;
@@ -96,6 +96,13 @@ describe('a witness', () => {
     expect(await tablet.deliver(await witnessed(tablet, crew, second, '1357'))).toMatchObject({ outcome: 'kept-aside' });
     expect(await tablet.deliver(await witnessed(tablet, crew, crew, '8642'))).toMatchObject({ outcome: 'kept-aside' });
     expect(await tablet.deliver(await witnessed(tablet, crew, lead, '2468'))).toMatchObject({ outcome: 'recorded' });
+  });
+  it('sealed for one person witnesses nobody else: a seal copied from a tablet’s storage is of no use', async () => {
+    const { tablet, crew, second, lead } = await scene();
+    const { sealedPin, nonce } = await tablet.seal('2468', pinSetHash(crew));
+    const copied = { witnessPersonId: lead, witnessSealedPin: sealedPin, witnessNonce: nonce };
+    expect(await tablet.deliver(await tablet.pinSet(second, '1357', copied))).toMatchObject({ outcome: 'kept-aside' });
+    expect(await tablet.deliver(await tablet.pinSet(crew, '8642', copied))).toMatchObject({ outcome: 'recorded' });
   });
 });
 

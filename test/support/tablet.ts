@@ -7,8 +7,8 @@ import { pinPublicKeySpki } from '#server/people/pin-unsealing';
 import { ok, type Agent } from './call';
 import { pageAgent, type Organisation } from './organisation';
 
-/** What a seal for setting a PIN stands for: SHA-256 of "pin-set" (shared/envelopes.ts). */
-export const pinSetHash = createHash('sha256').update('pin-set').digest('hex');
+/** What a seal for setting a PIN stands for: SHA-256 of "pin-set" and its owner (shared/pin-sealing.ts). */
+export const pinSetHash = (ownerPersonId: string): string => createHash('sha256').update(`pin-set ${ownerPersonId}`).digest('hex');
 export const strokes = [{ points: [{ x: 1, y: 2, time: 0 }, { x: 9, y: 5.5, time: 16, pressure: 0.4 }] }];
 
 export interface SentEnvelope {
@@ -56,7 +56,7 @@ export class TestTablet {
     return this.envelope('start-check', { versionId: version.id, personId, taskId, answers });
   }
   async pinSet(personId: string, pin: string, content: Content = {}): Promise<SentEnvelope> {
-    return this.envelope('pin-set', { personId, ...(await this.seal(pin, pinSetHash)), witnessPersonId: null, ...content });
+    return this.envelope('pin-set', { personId, ...(await this.seal(pin, pinSetHash(personId))), witnessPersonId: null, ...content });
   }
 
   deliverAll(envelopes: readonly SentEnvelope[], sentAt = this.organisation.service.clock.now()): Promise<Receipts> {

@@ -8,7 +8,7 @@ import { organisations } from '#drizzle/schema/organisations';
 import { tablets as tabletRows } from '#drizzle/schema/tablets';
 import { type PublishedVersion, type Shift, type ShiftPlan } from '#shared/jobs';
 import { type Kit } from '#shared/products';
-import { sealPin } from '#shared/pin-sealing';
+import { pinSetText, sealPin } from '#shared/pin-sealing';
 import { type Revision, type SheetEdit } from '#shared/sheets';
 import { deliveriesService } from '../../acknowledgements/deliveries-service';
 import { checklistsService } from '../../checklists/checklists-service';
@@ -32,7 +32,7 @@ import { degreaser, primer, quarrybondPartA, quarrybondPartB, quarrybondPartC, q
 
 const timeZone = 'America/Chicago';
 const at = (hours: number, minutes = 0) => hours * 60 + minutes;
-const pinSetHash = createHash('sha256').update('pin-set').digest('hex');
+const pinSetHash = (personId: string) => createHash('sha256').update(pinSetText(personId)).digest('hex');
 
 /** Loads the invented scenario through the services, as people would have: days of signing before today, and a sheet that waits. */
 export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date): void } }): Promise<void> {
@@ -90,7 +90,7 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
   };
 
   const signers = ['Dov Lindqvist', 'Marisol Tena', 'Abe Kowalczyk', 'Tomasz Reyes', 'Per Aldana'];
-  for (const name of signers) await deliver(addDays(realNow, -9), 'pin-set', { personId: idOf(name), ...(await seal(name, pinSetHash)), witnessPersonId: null });
+  for (const name of signers) await deliver(addDays(realNow, -9), 'pin-set', { personId: idOf(name), ...(await seal(name, pinSetHash(idOf(name)))), witnessPersonId: null });
 
   /** One day that was published, briefed and signed; `signedBy` in order. */
   async function pastDay(jobId: string, days: number, plan: ShiftPlan, signedBy: readonly string[]): Promise<Shift> {

@@ -3,7 +3,7 @@ import { sha256Hex } from '../checklists/opened-text';
 import { Connection } from '../connection/connection';
 import { CallFailed, TabletApi } from '../connection/tablet-api';
 import { Day } from '../day/day';
-import { sealPin } from '#shared/pin-sealing';
+import { pinSetText, sealPin } from '#shared/pin-sealing';
 
 /** A PIN shut away to the server's key; the tablet cannot open it again. */
 export interface SealedPin {
@@ -17,8 +17,6 @@ export type PinAnswer =
   | { readonly outcome: 'wrong'; readonly detail: string | null }
   | { readonly outcome: 'paused'; readonly seconds: number };
 
-/** Stands in the seal where a signature's text hash would: a PIN being set belongs to no text. */
-export const pinSetText = 'pin-set';
 const pauseWhenUnsaidSeconds = 60;
 
 /** Seals PINs as they are typed and, with signal, asks whether they are right. Keeps none. */
@@ -36,8 +34,9 @@ export class PinDesk {
     return { sealedPin: await sealPin({ pin, textHash: textSha256, nonce }, day.sealingKey), nonce };
   }
 
-  pinSetHash(): Promise<string> {
-    return sha256Hex(pinSetText);
+  /** Stands in the seal where a signature's text hash would: a PIN being set belongs to its owner, not to a text. */
+  pinSetHash(ownerPersonId: string): Promise<string> {
+    return sha256Hex(pinSetText(ownerPersonId));
   }
 
   async check(personId: string, textSha256: string, sealed: SealedPin): Promise<PinAnswer> {

@@ -143,7 +143,7 @@ export class PinEntry {
       this.later.set(null);
       return;
     }
-    this.chosenSeals = { forSetting: await this.desk.seal(pin, await this.desk.pinSetHash()), forSigning: await this.desk.seal(pin, this.textSha256()) };
+    this.chosenSeals = { forSetting: await this.desk.seal(pin, await this.desk.pinSetHash(this.person().id)), forSigning: await this.desk.seal(pin, this.textSha256()) };
     if (this.witness()) this.later.set('witness');
     else this.giveChosen(null, null);
   }
@@ -151,7 +151,7 @@ export class PinEntry {
   private async takeWitness(pin: string): Promise<void> {
     const witness = this.witness();
     if (!witness) return;
-    const hash = await this.desk.pinSetHash();
+    const hash = await this.desk.pinSetHash(this.person().id);
     const [asked, sealed] = await this.sealTwice(pin, hash);
     if (await this.passes(witness, hash, asked)) this.giveChosen(witness, sealed);
   }
@@ -166,7 +166,7 @@ export class PinEntry {
     });
   }
 
-  /** One to ask with and one to keep: the server takes each nonce once. */
+  /** One to ask with and one to keep: what goes over the wire now says nothing about what is kept. */
   private sealTwice(pin: string, hash: string): Promise<[SealedPin, SealedPin]> {
     return Promise.all([this.desk.seal(pin, hash), this.desk.seal(pin, hash)]);
   }
