@@ -6,7 +6,7 @@ import { type Work } from '../platform/queue';
 import { DamagedObjectError } from '../platform/storage';
 import { indexRevision } from '../search/search-store';
 import { carriesValues, type SheetReading } from './reader/reading';
-import { fieldsFromReading } from './sheet-fields';
+import { asPlainText, fieldsFromReading } from './sheet-fields';
 import { objectKey } from './sheets-service';
 
 export interface SheetReader {
@@ -65,7 +65,7 @@ async function readWaiting({ database, storage, log }: Deps, work: ReadWork, rea
   /** Null when the stored file is damaged or missing, which is for a person. */
   async function readStored(sha256: string): Promise<SheetReading | null> {
     try {
-      return await reader.read(await storage.getVerified(objectKey(organisationId, sha256), sha256), onPage);
+      return asPlainText(await reader.read(await storage.getVerified(objectKey(organisationId, sha256), sha256), onPage));
     } catch (error) {
       // Out of reach is tried again by the queue.
       if (!(error instanceof DamagedObjectError) && !(error instanceof Error && error.name === 'NoSuchKey')) throw error;

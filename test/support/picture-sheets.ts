@@ -2,7 +2,7 @@ import { createCanvas } from '@napi-rs/canvas';
 import { openPagePictures } from '#server/sds/reader/page-pictures';
 import { pdfOf } from './odd-pdfs';
 
-/** The first pages of a PDF as pictures in another, without a letter of text: what a scanner makes of a printed sheet. */
+/** The first pages of a PDF as pictures in another, without a letter of text, and a blank one: what a scanner makes of a printed sheet. */
 export async function pictureSheet(bytes: Uint8Array, pages: number): Promise<Uint8Array> {
   const pictures = await openPagePictures(bytes);
   const scans: Buffer[] = [];
@@ -10,6 +10,7 @@ export async function pictureSheet(bytes: Uint8Array, pages: number): Promise<Ui
   await pictures.close();
   return pdfOf((doc) => {
     for (const scan of scans) doc.addPage({ size: 'LETTER', margin: 0 }).image(scan, 0, 0, { width: 612, height: 792 });
+    doc.addPage({ size: 'LETTER', margin: 0 });
   }, { autoFirstPage: false });
 }
 
@@ -22,7 +23,7 @@ export const scribbledSheet = (): Promise<Uint8Array> =>
     const pen = canvas.getContext('2d');
     pen.fillStyle = 'white';
     pen.fillRect(0, 0, canvas.width, canvas.height);
-    for (let at = 0; at < 400; at++) {
+    for (let at = 0; at < 60; at++) {
       pen.beginPath();
       if (at % 2 === 0) pen.arc(next(1275), next(1650), 4 + next(20), 0, next(7));
       else pen.moveTo(next(1275), next(1650));
@@ -38,7 +39,7 @@ function pngOf({ width, height, pixels }: { width: number; height: number; pixel
   const canvas = createCanvas(width, height);
   const pen = canvas.getContext('2d');
   const image = pen.createImageData(width, height);
-  pixels.forEach((grey, at) => image.data.set([grey, grey, grey, 255], at * 4));
+  new Uint32Array(image.data.buffer).set(Uint32Array.from(pixels, (grey) => (0xff000000 | (grey << 16) | (grey << 8) | grey) >>> 0));
   pen.putImageData(image, 0, 0);
   return canvas.toBuffer('image/png');
 }

@@ -3,12 +3,12 @@ import { existsSync } from 'node:fs';
 import { readFile } from 'node:fs/promises';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { readSheetOrPictures } from './ocr';
-import { sheetLine } from './sheet-line';
-import { fold } from './words';
+import { readSheetOrPictures } from '#server/sds/reader/ocr';
+import { sheetLine } from '#server/sds/reader/sheet-line';
+import { fold } from '#server/sds/reader/words';
 
 /** Real sheets with values read by hand; they belong to their suppliers and are not part of the project. */
-const samples = fileURLToPath(new URL('../../../../shared/samples/sds', import.meta.url));
+const samples = fileURLToPath(new URL('../../../shared/samples/sds', import.meta.url));
 const isPresent = existsSync(path.join(samples, 'truth.jsonl'));
 const isLong = Number(process.env['FAULT_ROUNDS'] ?? '5') > 5;
 const reason = !isPresent ? ' (not run: ../shared/samples is absent)' : !isLong ? ' (not run: takes minutes, runs with npm run test:faults)' : '';
