@@ -35,11 +35,16 @@ export class SignSheetHarness extends ComponentHarness {
     return (await this.locatorForAll('a')()).length > 0;
   }
 
-  /** Sealing, storage and sending run on their own tasks: until they are through, a few turns of the clock. */
+  /** Sealing, storage and sending run on their own tasks: a few turns of the clock without news, and never while the PIN is being checked. */
   async settle(): Promise<void> {
-    for (let turn = 0; turn < 12; turn += 1) {
+    let before = '';
+    for (let quiet = 0, turn = 0; quiet < 12 && turn < 1000; turn += 1) {
       await new Promise((resolve) => setTimeout(resolve, 4));
       await this.forceStabilize();
+      const now = await this.text();
+      const isChecking = (await this.locatorForOptional('kb-pin-entry [role="status"] p')()) !== null;
+      quiet = now === before && !isChecking ? quiet + 1 : 0;
+      before = now;
     }
   }
 }
