@@ -5,7 +5,7 @@ import { Role, type Page } from '#shared/common';
 import { type Person, type PersonEdit, type PeopleQuery, type SetLogin } from '#shared/people';
 import type * as z from 'zod';
 import { type Deps } from '../deps';
-import { ConflictError, InputError, NotFoundError, RefusedError } from '../errors';
+import { ConflictError, ForbiddenError, InputError, NotFoundError, RefusedError } from '../errors';
 import { demandRole, type PersonActor } from '../http/actor';
 import { readCursor, toPage } from '../paging';
 import { type Tx } from '../platform/database';
@@ -65,6 +65,7 @@ export function peopleService({ database, log }: Deps) {
     edit: (actor: PersonActor, id: string, version: number, edit: PersonEdit): Promise<Person> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'owner', 'safety-officer');
+        if (!edit.isActive) await refuseLosingOwner(tx, actor, id);
         const [row] = await tx
           .update(people)
           .set({ ...edit, version: sql`${people.version} + 1` })
@@ -104,6 +105,15 @@ export function peopleService({ database, log }: Deps) {
         return toPerson(tx, row);
       }),
   };
+
+  /** Sign-ins are the owner's business: nobody else ends an owner's, and the last one stays. */
+  async function refuseLosingOwner(tx: Tx, actor: PersonActor, id: string): Promise<void> {
+    const { rows } = await tx.execute<{ person_id: string; role: string }>(sql`SELECT * FROM door_members()`);
+    const owners = rows.filter((login) => login.role === 'owner').map((login) => login.person_id);
+    if (!owners.includes(id)) return;
+    if (actor.role !== 'owner') throw new ForbiddenError('This person is an owner. Another owner can make them inactive.');
+    if (owners.length === 1) throw new RefusedError('This is the last owner. Give another person the owner role first.');
+  }
 
   async function removeLogin(tx: Tx, actor: PersonActor, id: string): Promise<void> {
     if (id === actor.personId) throw new RefusedError('You cannot take away your own sign-in. Another owner can.');

@@ -27,6 +27,15 @@ describe('people', () => {
     expect(await ok(owner.agent, 'readPerson', { params: { personId: added.id } })).toEqual(edited);
   });
 
+  it('keep an owner: an officer cannot make one inactive, and nobody the last one', async () => {
+    const { owner, officer } = await makeOrganisation(service);
+    const { id, version, login: _, hasPin: __, ...person } = await ok(owner.agent, 'readPerson', { params: { personId: owner.personId } });
+    const inactive = { params: { personId: id }, version, body: { ...person, isActive: false } };
+    expectProblem(await call(officer.agent, 'editPerson', inactive), 403);
+    expectProblem(await call(owner.agent, 'editPerson', inactive), 422);
+    expect(await ok(owner.agent, 'readPerson', { params: { personId: id } })).toMatchObject({ isActive: true, login: { role: 'owner' } });
+  });
+
   it('with script, SQL and wild cards in their names are stored and shown as text (F20)', async () => {
     const { owner, lead } = await makeOrganisation(service);
     const names = ['<script>alert(1)</script>', "Robert'); DROP TABLE people; --", '100 % _ \\ "quoted"', 'Ñandú Šárka 李 🧱', '{{constructor}}', '=1+1'];
