@@ -94,7 +94,7 @@ describe('the words of a search', () => {
     expect(snippetPieces('a \u2068b\u2069 c \u2068d\u2069')).toEqual([{ text: 'a ', isMatch: false }, { text: 'b', isMatch: true }, { text: ' c ', isMatch: false }, { text: 'd', isMatch: true }]);
   });
   it('counts, and says when there is more', () => {
-    expect([countSaid({ items: [], hasMore: false }), countSaid({ items: [hit(1, 'A', 'Name')], hasMore: true })]).toEqual(['No sheet matches.', 'More than 1 sheets match. The best are shown.']);
+    expect([countSaid({ items: [], hasMore: false }), countSaid({ items: [hit(1, 'A', 'Name')], hasMore: true })]).toEqual(['No sheet matches.', 'More than 1 match. The best are shown.']);
     expect(closestWords({ items: [hit(1, 'A', 'Name')], hasMore: false })).toBeNull();
   });
   it('takes from the address only what a filter knows', () => {

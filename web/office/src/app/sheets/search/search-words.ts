@@ -17,7 +17,7 @@ export function snippetPieces(snippet: string): readonly { readonly text: string
 /** How many were found, as it is read out. */
 export function countSaid({ items, hasMore }: SearchAnswer): string {
   if (items.length === 0) return 'No sheet matches.';
-  if (hasMore) return `More than ${items.length} sheets match. The best are shown.`;
+  if (hasMore) return `More than ${items.length} match. The best are shown.`;
   return items.length === 1 ? '1 sheet matches.' : `${items.length} sheets match.`;
 }
 
