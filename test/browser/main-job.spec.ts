@@ -284,8 +284,8 @@ withChromium('The main job', () => {
 
     step('the crew lead pairs the tablet, picks the job and answers the morning lines', async () => {
       const { page } = seats.tablet;
-      await page.goto('/tablet/');
       seats.tablet.complaints.expect(/401 .*\/api\/tablet\//);
+      await page.goto('/tablet/');
       await page.getByRole('link', { name: 'Pair this tablet' }).last().click();
       await page.getByLabel('Code from the office').fill(code);
       await expectAccessible(page, 'Pair this tablet');
@@ -329,8 +329,8 @@ withChromium('The main job', () => {
       expect(await pane.textContent()).toMatch(/sus tareas: pulir las orillas/);
       sentenceSigned = ((await pane.locator('.sentence').textContent()) ?? '').trim();
       expect(sentenceSigned).toMatch(/en un idioma que entiendo\./);
-      await expectAccessible(page, 'Signing in Spanish');
       await savePicture(page, 'tablet-sign');
+      await expectAccessible(page, 'Signing in Spanish');
       await givePin(page, { name: marisol, language: 'es', pin: pins[marisol] ?? '', newPin: { witness: { name: dov, pin: pins[dov] ?? '' } } });
       await page.getByText(/^Marisol Tena firmó a las \d\d:\d\d\. Enviado\.$/).waitFor();
       expect(await signerRow(page, marisol).textContent()).toMatch(/signed.*sent/s);
@@ -388,7 +388,7 @@ withChromium('The main job', () => {
       await waiting.getByRole('link').click();
       const action = office.getByRole('list', { name: 'Corrective actions' }).getByRole('listitem').filter({ hasText: asked });
       await action.getByText('Stopped').waitFor();
-      expect(await action.textContent()).toContain(`Floor grinding: "No" to: ${asked} gauge 5 under the mark`);
+      expect(await action.textContent()).toContain(`Floor grinding: "No" to: ${asked} gauge 5 under the mark ${dov},`);
       await action.getByRole('button', { name: /^Resolve/ }).click();
       const dialog = office.getByRole('dialog');
       await dialog.getByLabel('What was done, and how it was checked').fill('Filter changed; 415 cfm with the vane anemometer at the hose end, Dov Lindqvist.');

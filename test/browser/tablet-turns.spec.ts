@@ -100,6 +100,10 @@ withChromium('The tablet, when things go another way', () => {
       await page.getByRole('button', { name: 'Not me' }).click();
 
       await drawSignature(page, { name: dov, language: 'en' });
+      for (const scheme of ['light', 'dark', 'light'] as const) {
+        await page.emulateMedia({ colorScheme: scheme, reducedMotion: 'reduce' });
+        await page.waitForFunction(inkStandsOut, scheme);
+      }
       await page.getByRole('button', { name: 'Done' }).click();
       await typePin(page, `${dov}, choose a PIN`, 'PIN keypad', '123');
       await page.getByText('A PIN has 4 to 6 digits.').waitFor();
@@ -197,3 +201,11 @@ withChromium('The tablet, when things go another way', () => {
     });
   });
 });
+
+/** Whether the ink in the signature box is dark on the light ground, light on the dark one. */
+function inkStandsOut(scheme: 'light' | 'dark'): boolean {
+  const canvas = document.querySelector('canvas');
+  const pixels = canvas?.getContext('2d')?.getImageData(0, 0, canvas.width, canvas.height).data ?? [];
+  const greens = Array.from({ length: pixels.length / 4 }, (_, at) => at * 4).filter((at) => (pixels[at + 3] ?? 0) > 200).map((at) => pixels[at + 1] ?? 0);
+  return greens.length > 50 && greens.every((green) => (scheme === 'light' ? green < 110 : green > 140));
+}

@@ -47,7 +47,6 @@ export async function typePin(page: Page, heading: string, keypad: string, pin: 
 
 /** A stroke like a signature, with the mouse. */
 async function scribble(page: Page, canvas: Locator): Promise<void> {
-  await canvas.scrollIntoViewIfNeeded();
   const box = await canvas.boundingBox();
   if (!box) throw new Error('There is no signature box.');
   const at = (step: number): [number, number] => [box.x + 30 + step * 12, box.y + box.height / 2 + Math.sin(step / 1.7) * (box.height / 4)];
