@@ -1,5 +1,7 @@
 import { type ChecklistLine, type ShiftAnswer, type TaskAnswer } from '../answer';
 import { type EquipmentFacts, type ShiftFacts } from '../facts';
+import { hazardWords } from '../hazcom/hazard-words';
+import { trainingAtNewHazard } from '../hazcom/sheet-rules';
 import { type Words } from '../outcome';
 import { sourced, usFederal, type Source } from '../source';
 import { inside, listed, words } from '../words';
@@ -11,7 +13,7 @@ const line = (each: Line): ChecklistLine => ({ taskId: null, mark: null, isCriti
 /** What the morning can know: it is here, it is whole, it fits. What only the start of a task can know is asked there. */
 export function morningLines(facts: ShiftFacts, answer: ShiftAnswer, maskNames: readonly string[]): readonly ChecklistLine[] {
   const open = answer.tasks.filter(({ state }) => state === 'ready');
-  return [...gateLines(answer), ...machineLines(facts, open), ...materialLines(open), ...peopleLines(open, maskNames)];
+  return [...gateLines(answer), ...machineLines(facts, open), ...kitLines(facts, answer), ...materialLines(open), ...peopleLines(open, maskNames)];
 }
 
 const ASKED_GATES = ['competent-person-named', 'floor-survey', 'host-hazards-asked', 'engines-indoors', 'first-aid-named'];
@@ -42,6 +44,25 @@ function machineLines(facts: ShiftFacts, open: readonly TaskAnswer[]): readonly 
       : [line({ id: 'machines', ruleId: 'machine-manual-on-file', text: words(`Guard, cord and ground-fault plug are good: ${names(tools).en}.`, `Guarda, cable y protección en buen estado: ${names(tools).es}.`), why: words('A bad cord or no guard can kill.', 'Un mal cable o sin guarda puede matar.'), source: usFederal('1926.300', 'from-memory', { paragraph: 'and 1926.302, .303, .404' }) })]),
   ];
 }
+
+/** What each kit can do, from its confirmed sheets: a sheet that brings a new hazard changes this line, so the crew is briefed again. */
+function kitLines(facts: ShiftFacts, { kits }: ShiftAnswer): readonly ChecklistLine[] {
+  return facts.kits.flatMap((kit) => {
+    const said = hazardWords(kits.find(({ kitId }) => kitId === kit.id)?.hazardCodes ?? []);
+    if (said.length === 0) return [];
+    return [
+      line({
+        id: `kit/${kit.id}`,
+        ruleId: trainingAtNewHazard.id,
+        isCritical: false,
+        text: words(`We told the crew about ${kit.name}. It ${said.map((each) => each.en).join('. It ')}.`, `Explicamos ${kit.name} al equipo. ${said.map((each) => capital(each.es)).join('. ')}.`),
+        why: words('The sheets of its parts say so. A new hazard is told before work.', 'Lo dicen las hojas de sus partes. Un peligro nuevo se explica antes.'),
+        source: trainingAtNewHazard.source,
+      }),
+    ];
+  });
+}
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
 function materialLines(open: readonly TaskAnswer[]): readonly ChecklistLine[] {
   const findingOf = (ruleId: string) => open.flatMap(({ findings }) => findings).find((finding) => finding.ruleId === ruleId && finding.outcome === 'met');
