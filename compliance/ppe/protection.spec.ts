@@ -83,6 +83,27 @@ describe('[PPE-01] protection from work and sheets', () => {
     expect(saysNotNeeded(text)).toBe(expected);
   });
 
+  it('[PPE-01] ranks what replaces what: the tighter eye cover, the glove for the worst the hand meets', () => {
+    // common practice, no source: which glove stands above which; goggles seal where glasses do not.
+    expect(PROTECTION.map(({ id, mark, rank }) => `${mark} ${rank} ${id}`).sort()).toEqual([
+      'boots 1 safety-boots',
+      'clothing 1 coverall',
+      'clothing 1 coverall-wet-cement',
+      'ears 1 ear-muffs',
+      'eyes 1 safety-glasses',
+      'eyes 1 safety-glasses-clean-up',
+      'eyes 2 goggles',
+      'eyes 2 goggles-wet-cement',
+      'face 1 face-shield',
+      'face 1 face-shield-blasting',
+      'hands 1 work-gloves',
+      'hands 2 leather-gloves',
+      'hands 3 waterproof-gloves',
+      'hands 4 chemical-gloves',
+      'hands 5 alkali-gloves',
+    ]);
+  });
+
   it('each row has its own id, a name and reason in both languages, a source, and a rank that tells rows of its mark apart by name', () => {
     expect(new Set(PROTECTION.map(({ id }) => id)).size).toBe(PROTECTION.length);
     for (const { name, reason, source } of PROTECTION) expect([name.en, name.es, reason.en, reason.es, source.citation].every((text) => text !== '')).toBe(true);
