@@ -35,10 +35,17 @@ export function dilutionAirflowCfm(vapor: {
   return { idealCfm, requiredCfm: idealCfm * vapor.mixingFactor };
 }
 
-/**
- * Fresh air that keeps a vapor at `targetPpm`: Q = 24,450 × G × K ÷ (MW × C), m³/h, G in g/h.
- * Refused for dust and mist, and for anything whose statements name a sensitizer.
- */
+/** Where dilution is no control at all: dust, mist, and anything whose statements name a sensitizer. Null where it may serve. */
+export function dilutionRefusal(form: 'vapor' | 'dust' | 'mist', hazardCodes: readonly string[]): Extract<DilutionAnswer, { isAllowed: false }> | null {
+  if (form !== 'vapor') {
+    return { isAllowed: false, reason: { en: 'Fresh air does not control dust or mist. Capture it where it arises.', es: 'El aire fresco no controla el polvo ni la niebla. Captúrelo donde se produce.' }, source: UNSUITABLE_SOURCE };
+  }
+  const sensitizers = singleCodes(hazardCodes).filter((code) => SENSITIZER_CODES.includes(code));
+  if (sensitizers.length === 0) return null;
+  return { isAllowed: false, reason: { en: `Fresh air is not enough for a sensitizer (${sensitizers.join(', ')}). Capture it where it arises.`, es: `El aire fresco no basta para un sensibilizante (${sensitizers.join(', ')}). Captúrelo donde se produce.` }, source: UNSUITABLE_SOURCE };
+}
+
+/** Fresh air that keeps a vapor at `targetPpm`: Q = 24,450 × G × K ÷ (MW × C), m³/h, G in g/h. Refused where dilution is no control. */
 export function dilutionVentilation(contaminant: {
   readonly form: 'vapor' | 'dust' | 'mist';
   readonly hazardCodes: readonly string[];
@@ -52,13 +59,8 @@ export function dilutionVentilation(contaminant: {
   checkNumber('molarMassGPerMol', molarMassGPerMol, { above: 0 });
   checkNumber('targetPpm', targetPpm, { above: 0 });
   checkNumber('mixingFactor', mixingFactor, { min: 1, max: 10 });
-  if (form !== 'vapor') {
-    return { isAllowed: false, reason: { en: 'Fresh air does not control dust or mist. Capture it where it arises.', es: 'El aire fresco no controla el polvo ni la niebla. Captúrelo donde se produce.' }, source: UNSUITABLE_SOURCE };
-  }
-  const sensitizers = singleCodes(hazardCodes).filter((code) => SENSITIZER_CODES.includes(code));
-  if (sensitizers.length > 0) {
-    return { isAllowed: false, reason: { en: `Fresh air is not enough for a sensitizer (${sensitizers.join(', ')}). Capture it where it arises.`, es: `El aire fresco no basta para un sensibilizante (${sensitizers.join(', ')}). Captúrelo donde se produce.` }, source: UNSUITABLE_SOURCE };
-  }
+  const refusal = dilutionRefusal(form, hazardCodes);
+  if (refusal !== null) return refusal;
   const idealM3PerH = (MOLAR_VOLUME_L * 1_000 * evaporationGPerH) / (molarMassGPerMol * targetPpm);
   return { isAllowed: true, idealM3PerH, requiredM3PerH: idealM3PerH * mixingFactor, source: DILUTION_METRIC_SOURCE };
 }

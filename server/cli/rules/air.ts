@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { airflowDemand, meetsAirflow } from '#compliance/air/airflow';
-import { dilutionVentilation } from '#compliance/air/dilution';
+import { DILUTION_SOURCE, dilutionAirflowCfm, dilutionRefusal, dilutionVentilation } from '#compliance/air/dilution';
 import { limitsOf } from '#compliance/air/limits';
 import { additiveMixture, MIXTURE_SOURCE } from '#compliance/air/mixture';
 import { monitoringSchedule } from '#compliance/air/monitoring';
@@ -8,7 +8,7 @@ import { noticeDate } from '#compliance/air/notice-date';
 import { findSubstance, SUBSTANCES } from '#compliance/air/substances.data';
 import { LONG_SHIFT_SOURCE, shiftTwa, TWA_SOURCE } from '#compliance/air/twa';
 import { findPack } from '#compliance/jurisdictions/pack';
-import { cfmFromM3PerH } from '#compliance/quantities/units';
+import { cfmFromM3PerH, m3PerHFromCfm } from '#compliance/quantities/units';
 import { publicHolidays } from '../../platform/holidays';
 import { calculation, day, jurisdictionId, minutes, RefusedInput, unsaid, type Calculation } from './calculation';
 
@@ -89,15 +89,25 @@ const dilution = calculation({
   schema: z.strictObject({
     form: z.enum(['vapor', 'dust', 'mist']),
     hazardCodes: z.array(z.string()).describe('statements of its sheet, for example ["H336"]'),
-    evaporationGPerH: z.number().min(0).describe('g/h'),
+    evaporationGPerH: unsaid(z.number().min(0).describe('g/h, for the metric form; or the next two')),
+    evaporationPintsPerMin: unsaid(z.number().min(0).describe('US pints per minute, for the form with 403·10⁶')),
+    specificGravity: unsaid(z.number().positive().max(5).describe('of the liquid, goes with pints')),
     molarMassGPerMol: z.number().positive().describe('g/mol'),
     targetPpm: z.number().positive().describe('ppm'),
     mixingFactor: z.number().min(1).max(10).describe('K: 1 ideal to 10 poor mixing'),
   }),
   example: { form: 'vapor', hazardCodes: ['H336'], evaporationGPerH: 936.9, molarMassGPerMol: 133.4, targetPpm: 350, mixingFactor: 5 },
-  run: (input) => {
-    const answer = dilutionVentilation(input);
-    return answer.isAllowed ? { ...answer, requiredCfm: cfmFromM3PerH(answer.requiredM3PerH) } : answer;
+  run: ({ evaporationGPerH, evaporationPintsPerMin, specificGravity, ...vapor }) => {
+    if ((evaporationGPerH === null) === (evaporationPintsPerMin === null)) throw new RefusedInput([{ field: 'evaporationGPerH', message: 'say the evaporation once: in g/h, or in pints per minute with the specific gravity' }]);
+    if (evaporationGPerH !== null) {
+      const answer = dilutionVentilation({ ...vapor, evaporationGPerH });
+      return answer.isAllowed ? { ...answer, requiredCfm: cfmFromM3PerH(answer.requiredM3PerH) } : answer;
+    }
+    if (specificGravity === null || evaporationPintsPerMin === null) throw new RefusedInput([{ field: 'specificGravity', message: 'is needed where the evaporation is in pints' }]);
+    const refusal = dilutionRefusal(vapor.form, vapor.hazardCodes);
+    if (refusal !== null) return refusal;
+    const { idealCfm, requiredCfm } = dilutionAirflowCfm({ ...vapor, specificGravity, evaporationPintsPerMin });
+    return { isAllowed: true, idealM3PerH: m3PerHFromCfm(idealCfm), requiredM3PerH: m3PerHFromCfm(requiredCfm), source: DILUTION_SOURCE, requiredCfm };
   },
 });
 

@@ -22,6 +22,15 @@ describe('the rules on the command line', () => {
     expect(await answer(name, example)).not.toHaveProperty('refused');
   });
 
+  it('takes the evaporation once: in grams for the metric form, or in pints for the printed example', async () => {
+    const vapor = { form: 'vapor', hazardCodes: ['H336'], molarMassGPerMol: 133.4, targetPpm: 350, mixingFactor: 5 };
+    // Industrial ventilation manual, dilution for health: 1.5 pints an hour, SG 1.32 → about 1,425 cfm (formula read, example from memory, tolerance 1 %).
+    const { requiredCfm } = (await answer('dilution', { ...vapor, evaporationPintsPerMin: 0.025, specificGravity: 1.32 })) as { requiredCfm: number };
+    expect(Math.abs(requiredCfm / 1425 - 1)).toBeLessThan(0.01);
+    for (const wrong of [{}, { evaporationGPerH: 1, evaporationPintsPerMin: 1 }]) expect((await run('dilution', JSON.stringify({ ...vapor, ...wrong }))).stderr).toContain('"evaporationGPerH"');
+    expect((await run('dilution', JSON.stringify({ ...vapor, evaporationPintsPerMin: 0.025 }))).stderr).toContain('"specificGravity"');
+  });
+
   it.each(CALCULATIONS.map((each) => [each.name, each.example] as const))('%s refuses an unknown field by its name', async (name, example) => {
     expect(await answer(name, { ...(example as object), colour: 'red' })).toEqual({ exitCode: 2, refused: [{ field: 'colour', message: 'unknown field' }] });
   });
