@@ -16,6 +16,6 @@ export function answerKit(shift: ShiftContext, kit: KitFacts, day: string): KitA
     hazardCodes: hazards?.codes ?? [],
     pictograms: hazards?.pictograms ?? [],
     partsWithoutSheet: hazards?.partsWithoutSheet ?? [],
-    findings: present(KIT_RULES.map((rule) => ask(rule, { ...shift, kit }, { packVersion: shift.pack.version, day, about: kit.id }))),
+    findings: present(KIT_RULES.map((rule) => ask(rule, { ...shift, kit }, { pack: shift.pack, day, about: kit.id }))),
   };
 }

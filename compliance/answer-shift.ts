@@ -3,13 +3,14 @@ import { answerKit } from './answer-kit';
 import { describeTask } from './answer-words';
 import { type PersonFacts, type ShiftFacts } from './facts';
 import { doubleBookingRule, employerRule, type PersonInTask } from './gates/people';
+import { protectionInPlace, respiratorInPlace } from './jurisdictions/law-of-place';
 import { NOTICE } from './notice';
 import { topics, type Finding } from './outcome';
 import { protectionFor } from './ppe/protection';
 import { protectionRule } from './ppe/protection-rule';
 import { respiratorOf, taskRespirator } from './ppe/task-respirator';
 import { decideIncidental, decideSilica, type SilicaDecision } from './silica/decision';
-import { doubleBookings } from './silica/minutes';
+import { doubleBookings, NO_TABLE_1_TIME } from './silica/minutes';
 import { type SilicaTask } from './silica/silica-context';
 import { controlChecks, table1ControlRule } from './silica/table1-rules';
 import { TASKS } from './silica/tasks.data';
@@ -25,13 +26,13 @@ import { PERSON_IN_TASK_RULES, SHIFT_RULES, TASK_RULES } from './shift-rules';
 export function answerShift(facts: ShiftFacts, asOf: string): ShiftAnswer {
   const shift = shiftContext(facts);
   const day = isPlainDay(facts.date) ? facts.date : asOf.slice(0, 10);
-  const place = { packVersion: shift.pack.version, day };
+  const place = { pack: shift.pack, day };
   const gates = present(SHIFT_RULES.map((rule) => ask(rule, shift, place)));
   const isShiftHeld = gates.some(({ isHolding }) => isHolding);
   const tasks = silicaTasks(shift).map((context) => answerTask(context, day, isShiftHeld));
-  const { id, version, name, isComplete, gap } = shift.pack;
+  const { id, version, name, isComplete, gap, federalText, orientation } = shift.pack;
   return {
-    pack: { id, version, name, isComplete, gap },
+    pack: { id, version, name, isComplete, gap, federalText, orientation },
     tasks: tasks.map(({ answer }) => answer),
     people: facts.people.map((person) => answerPerson(shift, person, tasks, day)),
     gates,
@@ -57,14 +58,14 @@ interface AnsweredTask {
 
 function answerTask(context: SilicaTask, day: string, isShiftHeld: boolean): AnsweredTask {
   const { task, people, pack } = context;
-  const place = { packVersion: pack.version, day, taskId: task.id };
-  const answers = people.map((person) => ({ person, respirator: respiratorOf(context, person) }));
-  const respirator = taskRespirator(answers, respiratorOf(context, null));
+  const place = { pack, day, taskId: task.id };
+  const answers = people.map((person) => ({ person, respirator: respiratorInPlace(pack, respiratorOf(context, person)) }));
+  const respirator = taskRespirator(answers, respiratorInPlace(pack, respiratorOf(context, null)));
   const byPerson = answers.map((each) => {
     const facts: PersonInTask = { ...context, ...each };
     return { personId: each.person.id, respirator: each.respirator, findings: present(PERSON_IN_TASK_RULES.map((rule) => ask(rule, facts, { ...place, personId: each.person.id }))) };
   });
-  const protection = protectionFor(context, respirator);
+  const protection = protectionInPlace(pack, protectionFor(context, respirator));
   const controls = controlChecks(context).map((check) => ask(table1ControlRule, { ...context, check }, { ...place, about: check.demand }));
   const findings = inOrder([...present([...TASK_RULES.map((rule) => ask(rule, context, place)), ...controls, ask(protectionRule, { ...context, protection }, place)]), ...byPerson.flatMap((each) => each.findings)]);
   const isHeld = context.traits.isWork && (isShiftHeld || findings.some(({ isHolding }) => isHolding));
@@ -108,8 +109,10 @@ function inOrder(findings: readonly Finding[]): readonly Finding[] {
 }
 
 function answerPerson(shift: ShiftContext, person: PersonFacts, tasks: readonly AnsweredTask[], day: string): PersonAnswer {
-  const place = { packVersion: shift.pack.version, day, personId: person.id };
-  const time = shift.table1TimeByPerson.get(person.id) ?? { minutes: 0, minutesElsewhere: 0, passesAtMinute: null };
+  const place = { pack: shift.pack, day, personId: person.id };
+  // Where the law knows no Table 1, its four hours mean nothing.
+  const hasTable1 = shift.pack.silica !== null && shift.pack.silica.table1Rows.length > 0;
+  const time = (hasTable1 ? shift.table1TimeByPerson.get(person.id) : undefined) ?? NO_TABLE_1_TIME;
   const bookings = doubleBookings(shift.facts, person);
   const own = tasks.flatMap(({ answer, byPerson }) => byPerson.filter(({ personId }) => personId === person.id).map((each) => ({ ...each, taskId: answer.taskId })));
   const nameOf = (idOrJob: string): string => {

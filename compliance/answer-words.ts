@@ -13,7 +13,8 @@ export function describeTask(context: SilicaTask, findings: readonly Finding[], 
   const holding = findings.filter(({ isHolding }) => isHolding);
   const isScopeOnly = silica.kind === 'undecided' && silica.question === 'scope' && !held.isShiftHeld && holding.every(({ ruleId }) => ruleId === 'silica-signed-basis');
   if (isScopeOnly) return { state: 'not-decided', label: words('Not decided', 'Sin decidir'), summary: scopeSummary(context, findings) };
-  const reasons = [...new Map(holding.map(({ reason }) => [reason.en, reason])).values()];
+  const unique = [...new Map(holding.map(({ reason }) => [reason.en, reason])).values()];
+  const reasons = unique.filter(({ en }, index) => !unique.slice(0, index).some((earlier) => earlier.en.includes(en)));
   const shiftHold = held.isShiftHeld ? words('The whole shift is held.', 'Todo el turno está detenido.') : null;
   const outside = silica.kind === 'undecided' && silica.question === 'assessment' ? words('Not a Table 1 task.', 'No es tarea de la Tabla 1.') : null;
   return { state: 'may-not-start', label: words('May not start', 'No puede empezar'), summary: sentences(shiftHold, ...reasons.slice(0, 2), outside) };

@@ -3,7 +3,17 @@ import { type Source } from './source';
 
 /** What the rules answer for one shift; the same on the office page (live) and on the server (again). */
 export interface ShiftAnswer {
-  readonly pack: { readonly id: string; readonly version: string; readonly name: Words; readonly isComplete: boolean; readonly gap: Words | null };
+  readonly pack: {
+    readonly id: string;
+    readonly version: string;
+    readonly name: Words;
+    readonly isComplete: boolean;
+    readonly gap: Words | null;
+    /** What the US federal text is here: the law, shown for orientation, or another country's. */
+    readonly federalText: 'law' | 'orientation' | 'foreign';
+    /** The place's own silica figure where no pack holds its law; decides nothing. */
+    readonly orientation: { readonly words: Words; readonly source: Source } | null;
+  };
   readonly tasks: readonly TaskAnswer[];
   readonly people: readonly PersonAnswer[];
   /** Lines about the whole shift: floor, engines, host, first aid, floor profile. */

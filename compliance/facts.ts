@@ -21,7 +21,11 @@ export interface ShiftFacts {
   readonly firstAid: FirstAidFacts;
   /** The host's hazards toward the crew, in the host's words; null when nobody asked yet. */
   readonly hostHazards: string | null;
+  /** Mask that the site or its owner demands in dusty work beside the law, in their words; absent or null where nobody named such a rule. */
+  readonly siteMaskRule?: string | null;
   readonly competentPersonId: string | null;
+  /** Who inspects while the competent person runs a machine; absent or null when nobody is named. */
+  readonly inspectionCoverId?: string | null;
   readonly people: readonly PersonFacts[];
   readonly tasks: readonly TaskFacts[];
   readonly kits: readonly KitFacts[];
@@ -69,6 +73,8 @@ export interface TaskFacts {
   readonly id: string;
   readonly kind: TaskKind;
   readonly assignments: readonly Assignment[];
+  /** Time worked so far as somebody logged it; absent or empty when nothing is logged. Counts beside the plan, never instead of it. */
+  readonly logged?: readonly Assignment[];
   /** The machine or hand tool; null when none is chosen. */
   readonly equipmentId: string | null;
   /** The dust collector or vacuum on it. */

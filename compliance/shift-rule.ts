@@ -1,6 +1,8 @@
 import { type IsoDate } from './iso-date';
 import { type Finding, type Topic, type Words } from './outcome';
 import { type Rule, type Verdict } from './rule';
+import { findingInPlace } from './jurisdictions/law-of-place';
+import { type ShiftPack } from './silica/shift-pack';
 import { type Source } from './source';
 
 /** A rule that speaks one line of the shift: what it tells the crew, where the line stands, and whether it holds work. */
@@ -15,7 +17,7 @@ export interface ShiftRule<Facts> extends Rule<Facts> {
 }
 
 export interface FindingPlace {
-  readonly packVersion: string;
+  readonly pack: ShiftPack;
   readonly day: IsoDate;
   readonly taskId?: string;
   readonly personId?: string;
@@ -23,11 +25,11 @@ export interface FindingPlace {
   readonly about?: string;
 }
 
-/** Asks the rule and writes its answer as a line of the shift; null where the rule does not apply. */
+/** Asks the rule and writes its answer as a line of the shift, as the law of the place lets it stand; null where the rule does not apply. */
 export function ask<Facts>(rule: ShiftRule<Facts>, facts: Facts, place: FindingPlace): Finding | null {
   const verdict = rule.evaluate(facts, place.day);
   if (verdict.outcome === 'not-applicable') return null;
-  return {
+  const finding: Finding = {
     id: [rule.id, place.taskId, place.personId, place.about].filter((part) => part !== undefined).join('/'),
     ruleId: rule.id,
     topic: rule.topic,
@@ -41,8 +43,9 @@ export function ask<Facts>(rule: ShiftRule<Facts>, facts: Facts, place: FindingP
     whatWouldChange: verdict.whatWouldChange,
     whoDecides: verdict.whoDecides,
     source: rule.sourceOf?.(facts, verdict) ?? rule.source,
-    packVersion: place.packVersion,
+    packVersion: place.pack.version,
   };
+  return findingInPlace(place.pack, finding, rule.holds);
 }
 
 /** Leaves out what did not apply. */

@@ -11,7 +11,9 @@ export type Verified =
   /** Arithmetic from a cited formula or definition. */
   | 'derived'
   /** A fact or habit of the trade; no law or standard is claimed for it. */
-  | 'common-practice';
+  | 'common-practice'
+  /** No text of this place is on file: the line decides nothing. */
+  | 'not-on-file';
 
 /** Where a value or rule comes from. Every value in compliance/ carries one, by itself or through its table. */
 export interface Source {
@@ -58,4 +60,5 @@ export const VERIFIED_WORDS: Readonly<Record<Verified, string>> = {
   'from-memory': 'from memory',
   derived: 'derived',
   'common-practice': 'common practice',
+  'not-on-file': 'no text on file',
 };

@@ -159,7 +159,7 @@ describe('a checklist text with one piece broken', () => {
 });
 
 describe('words a tired crew understands', () => {
-  const checklists = [make(shiftFacts()), make(decided()), ...(['indoors', 'outdoors'] as const).flatMap((setting) => (['vacuum', 'water'] as const).map((method) => make(everyKind(setting, method))))];
+  const checklists = [make(shiftFacts()), make(decided()), make(shiftFacts({ jurisdictionId: 'new-zealand' })), make(shiftFacts({ jurisdictionId: 'us-michigan' })), ...(['indoors', 'outdoors'] as const).flatMap((setting) => (['vacuum', 'water'] as const).map((method) => make(everyKind(setting, method))))];
   const data: readonly Words[] = [...LIVE_LINES.flatMap(({ text, why }) => [text, why]), ...Object.values(DEMAND_WORDS)];
   const unique = (language: Language): readonly string[] => [...new Set([...checklists.flatMap((checklist) => linesOf(checklist, language)), ...data.map((each) => each[language])])];
 

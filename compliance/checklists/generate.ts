@@ -1,5 +1,6 @@
 import { type Checklist, type ChecklistPerson, type ChecklistTask, type ShiftAnswer, type TaskAnswer } from '../answer';
 import { type PersonFacts, type ShiftFacts, type TaskFacts } from '../facts';
+import { sourceInPlace } from '../jurisdictions/law-of-place';
 import { NOTICE, signedSentence } from '../notice';
 import { TASKS } from '../silica/tasks.data';
 import { clock, duration, eachLanguage, inside, listed, sentences, words } from '../words';
@@ -28,11 +29,11 @@ export function generateChecklist(facts: ShiftFacts, answer: ShiftAnswer): Check
     competentPersonName: competent?.name ?? null,
     packId: answer.pack.id,
     packVersion: answer.pack.version,
-    morning: morningLines(facts, { ...answer, tasks: ordered.map((each) => each.answer) }, maskNames(facts, answer, masks)),
-    tasks: ordered.map((each) => checklistTask(each.task, each.answer, facts, masks)),
+    morning: morningLines(facts, { ...answer, tasks: ordered.map((each) => each.answer) }, maskNames(facts, answer, masks)).map((line) => ({ ...line, source: sourceInPlace(answer.pack, line.source) })),
+    tasks: ordered.map((each) => checklistTask(each.task, each.answer, facts, masks, answer.pack)),
     people: facts.people.map((person) => checklistPerson(person, ordered, answer)),
     sentence: signedSentence(competent?.name ?? null),
-    notice: answer.pack.gap === null ? NOTICE : sentences(answer.pack.gap, NOTICE),
+    notice: answer.pack.gap === null ? NOTICE : sentences(answer.pack.gap, answer.pack.orientation?.words ?? null, NOTICE),
   };
 }
 
@@ -59,7 +60,7 @@ function maskNames(facts: ShiftFacts, { tasks }: ShiftAnswer, masks: MaskNeeds):
   return facts.people.filter(({ id }) => open.some(({ taskId }) => masks.has(need(taskId, id)))).map(({ name }) => name);
 }
 
-function checklistTask(task: TaskFacts, answer: TaskAnswer, facts: ShiftFacts, masks: MaskNeeds): ChecklistTask {
+function checklistTask(task: TaskFacts, answer: TaskAnswer, facts: ShiftFacts, masks: MaskNeeds, pack: ShiftAnswer['pack']): ChecklistTask {
   const ids = new Set(task.assignments.map(({ personId }) => personId));
   return {
     taskId: task.id,
@@ -69,7 +70,7 @@ function checklistTask(task: TaskFacts, answer: TaskAnswer, facts: ShiftFacts, m
     personIds: facts.people.filter(({ id }) => ids.has(id)).map(({ id }) => id),
     respirator: answer.respirator.label,
     protection: answer.protection.map(({ mark, name }) => ({ mark, name })),
-    live: liveLines(task, answer, facts, (personId) => masks.has(need(task.id, personId))),
+    live: liveLines(task, answer, facts, (personId) => masks.has(need(task.id, personId))).map((line) => ({ ...line, source: sourceInPlace(pack, line.source) })),
   };
 }
 

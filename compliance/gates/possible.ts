@@ -27,6 +27,7 @@ export function impossibleFields(facts: ShiftFacts): readonly string[] {
     ...repeated('kits.id', facts.kits.map(({ id }) => id)),
     ...repeated('equipment.id', facts.equipment.map(({ id }) => id)),
     ...facts.tasks.flatMap((task) => task.assignments.flatMap((assignment) => [...(isPossible(assignment) ? [] : [`tasks.${task.id}.assignments`]), ...(people.has(assignment.personId) ? [] : [`tasks.${task.id}.personId`])])),
+    ...facts.tasks.flatMap((task) => ((task.logged ?? []).every((span) => isPossible(span) && people.has(span.personId)) ? [] : [`tasks.${task.id}.logged`])),
     ...facts.people.flatMap((person) => (person.elsewhere.every(isPossible) ? [] : [`people.${person.id}.elsewhere`])),
     ...facts.kits.flatMap((kit) => [
       ...ofPositive(`kits.${kit.id}.volumeL`, kit.volumeL),

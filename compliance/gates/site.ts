@@ -1,8 +1,9 @@
+import { type ShiftFacts, type TaskFacts } from '../facts';
 import { met, undecided, unmet, WHO } from '../rule';
 import { type ShiftContext } from '../shift-context';
 import { type ShiftRule } from '../shift-rule';
-import { usFederal } from '../source';
-import { words } from '../words';
+import { sourced, usFederal } from '../source';
+import { sentences, words } from '../words';
 
 /** The host's hazards toward the crew are asked before work; "none" is an answer, silence is not. */
 export const hostHazardsRule: ShiftRule<ShiftContext> = {
@@ -42,6 +43,8 @@ export const competentPersonRule: ShiftRule<ShiftContext> = {
   },
 };
 
+const machineTasks = ({ tasks }: ShiftFacts, personId: string | undefined): readonly TaskFacts[] => tasks.filter(({ equipmentId, assignments }) => equipmentId !== null && assignments.some((each) => each.personId === personId));
+
 /** A competent person who runs a machine cannot inspect at the same time: who does? */
 export const inspectionCoverRule: ShiftRule<ShiftContext> = {
   id: 'inspection-cover',
@@ -52,9 +55,17 @@ export const inspectionCoverRule: ShiftRule<ShiftContext> = {
   holds: false,
   evaluate({ facts, peopleById }) {
     const person = facts.competentPersonId === null ? undefined : peopleById.get(facts.competentPersonId);
-    const machines = facts.tasks.filter(({ equipmentId, assignments }) => equipmentId !== null && assignments.some(({ personId }) => personId === person?.id));
-    const inputs = { 'competent person': person?.name ?? null, 'tasks at a machine': machines.length };
+    const machines = machineTasks(facts, person?.id);
+    const cover = peopleById.get(facts.inspectionCoverId ?? '');
+    const inputs = { 'competent person': person?.name ?? null, 'tasks at a machine': machines.length, 'inspects meanwhile': cover?.name ?? null };
     if (person === undefined || machines.length === 0) return met(words('Free to inspect all shift.', 'Libre para revisar todo el turno.'), { inputs });
+    if (cover !== undefined && cover.id !== person.id) {
+      const theirs = machineTasks(facts, cover.id).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === cover.id));
+      const ours = machines.flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === person.id));
+      const isBusy = ours.some((span) => theirs.some((other) => span.startMinute < other.endMinute && other.startMinute < span.endMinute));
+      if (!isBusy) return met(words(`${cover.name} inspects while ${person.name} runs a machine.`, `${cover.name} revisa mientras ${person.name} maneja una máquina.`), { inputs });
+      return undecided(words(`${cover.name} runs a machine at the same time as ${person.name}.`, `${cover.name} maneja una máquina al mismo tiempo que ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name someone who is free then.', 'Nombre a alguien que esté libre entonces.') });
+    }
     return undecided(words(`${person.name} runs a machine today.`, `${person.name} maneja una máquina hoy.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name who inspects in that time.', 'Nombre quién revisa en ese tiempo.') });
   },
   line: (_context, { outcome }) => (outcome === 'met' ? words('Inspections are covered.', 'Las revisiones están cubiertas.') : words('Who inspects while the competent person runs a machine?', '¿Quién revisa mientras la persona competente maneja?')),
@@ -64,7 +75,7 @@ export const inspectionCoverRule: ShiftRule<ShiftContext> = {
 export const packRule: ShiftRule<ShiftContext> = {
   id: 'rules-of-the-place',
   title: words('Which law this is', 'Qué ley es esta'),
-  source: usFederal('1953', 'from-memory', { note: 'A state plan may replace the federal text; other countries have their own law.' }),
+  source: sourced('Law of the place', 'derived', { note: 'A state plan may replace the federal text (29 CFR 1953, from memory); other countries have their own law.' }),
   duties: ['LOC-01', 'LOC-02'],
   topic: 'gate',
   // Holds through the silica tasks, which stay undecided without a pack.
@@ -75,8 +86,12 @@ export const packRule: ShiftRule<ShiftContext> = {
     if (law !== null) return law;
     const gap = pack.gap ?? words('The pack is not complete.', 'Las reglas no están completas.');
     return pack.silica === null
-      ? undecided(gap, WHO.localAuthority, { inputs, whatWouldChange: words('A pack for this place.', 'Reglas para este lugar.') })
+      ? undecided(sentences(gap, pack.orientation?.words ?? null), WHO.localAuthority, { inputs, whatWouldChange: words('A pack for this place.', 'Reglas para este lugar.') })
       : unmet(gap, { inputs, whatWouldChange: words('A complete pack.', 'Reglas completas.') });
   },
-  line: ({ pack }, { outcome }) => (outcome === 'met' ? pack.name : words(`${pack.name.en}: check the local law.`, `${pack.name.es}: revise la ley local.`)),
+  line: ({ pack }, { outcome }) => {
+    if (outcome === 'met') return pack.name;
+    return pack.silica === null ? words(`No pack for ${pack.name.en}: check the local law.`, `Sin reglas para ${pack.name.es}: revise la ley local.`) : words(`${pack.name.en}: check the local law.`, `${pack.name.es}: revise la ley local.`);
+  },
+  sourceOf: ({ pack }) => pack.orientation?.source ?? packRule.source,
 };

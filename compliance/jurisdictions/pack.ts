@@ -14,6 +14,8 @@ export type FoundPack =
       /** The place's own silica figure where one was found: for orientation, it decides nothing. */
       readonly orientation: readonly LimitRow[];
       readonly gap: Words;
+      /** Whether it is a US state, where the federal text is shown for orientation. */
+      readonly isUs: boolean;
     };
 
 /** The pack of a place, or its absence said plainly. Never another place's pack. */
@@ -29,6 +31,7 @@ export function findPack(jurisdictionId: string): FoundPack {
     kind: 'no-pack',
     jurisdictionId,
     place,
+    isUs,
     orientation: LIMIT_ROWS.filter((row) => row.substanceId === 'rcs' && row.jurisdictionId === jurisdictionId),
     gap: isUs
       ? words('No pack: federal text shown for orientation, check the state’s.', 'Sin reglas propias: el texto federal es solo de guía; consulte las del estado.')

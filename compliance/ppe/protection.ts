@@ -76,6 +76,6 @@ export function protectionFor(context: TaskContext, respirator: RespiratorAnswer
 }
 
 function maskItem({ label, source, outcome }: RespiratorAnswer): ProtectionItem {
-  const reason = outcome === 'by-policy' ? words('Company rule for this dust.', 'Regla de la empresa para este polvo.') : words('The air here asks for it.', 'El aire aquí la exige.');
+  const reason = outcome === 'by-policy' ? words('A rule of the site or the company for this dust.', 'Regla del sitio o de la empresa para este polvo.') : words('The air here asks for it.', 'El aire aquí la exige.');
   return { mark: 'respirator', name: eachLanguage((language) => label[language].charAt(0).toUpperCase() + label[language].slice(1)), reason, source };
 }

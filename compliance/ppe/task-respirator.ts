@@ -34,7 +34,10 @@ const POLICY: Readonly<Partial<Record<TaskKind, RespiratorAnswer['source']>>> = 
   'collector-emptying': usFederal('1926.57', 'parallel-text', { paragraph: '(f)(5)(iii)', note: 'Dust-filter masks for short dusty work such as dumping collectors: read in WAC 296-818-20010 note 2. Worn by policy.' }),
 };
 
-/** A person's respirator in a task: silica first, then the sheets for vapor, then the house's own rule. */
+/** "None" in Table 1 is none under Table 1: the site, its owner or another law may still ask a mask. */
+const SITE_RULE = sourced('Rule of the site or its owner', 'read', { note: 'As written down for this job.' });
+
+/** A person's respirator in a task: silica first, then the sheets for vapor, then the site's rule, then the house's own. */
 export function respiratorOf(context: SilicaTask, person: PersonFacts | null): RespiratorAnswer {
   const { silica, facts, traits, kitHazards, task, table1TimeByPerson, pack } = context;
   const minutes = person === null ? 0 : (table1TimeByPerson.get(person.id)?.minutes ?? 0);
@@ -45,6 +48,8 @@ export function respiratorOf(context: SilicaTask, person: PersonFacts | null): R
   const demand = sheetRespiratorDemand(context);
   if (demand.kind === 'required') return bySheet(forSilica, demand);
   if (forSilica.outcome === 'required') return forSilica;
+  const siteRule = traits.isDusty ? (facts.siteMaskRule?.trim() ?? '') : '';
+  if (siteRule !== '') return { outcome: 'by-policy', apf: null, label: words(`site rule: ${siteRule}`, `regla del sitio: ${siteRule}`), source: SITE_RULE };
   const policy = POLICY[task.kind];
   if (policy !== undefined) {
     const half = apfName(10, pack.silica?.factors ?? null);

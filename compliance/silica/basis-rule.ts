@@ -62,7 +62,7 @@ export const basisRule: ShiftRule<SilicaTask> = {
   evaluate({ silica, facts, task, pack }) {
     if (!hangsOnBasis(silica)) return notApplicable(words('Not decided by a signed basis.', 'No se decide con una base firmada.'));
     if (silica.kind === 'no-pack') {
-      return undecided(words('Kneeboard holds no silica law for this place.', 'Kneeboard no tiene la ley de sílice de este lugar.'), WHO.localAuthority, {
+      return undecided(sentences(pack.gap, pack.orientation?.words ?? null), WHO.localAuthority, {
         inputs: { place: facts.jurisdictionId },
         whatWouldChange: words('A pack for this place.', 'Reglas para este lugar.'),
       });

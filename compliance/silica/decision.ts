@@ -42,10 +42,11 @@ export function decideSilica(context: TaskContext): SilicaDecision {
   const { task, traits, pack } = context;
   if (traits.silica === 'none') return task.failedControl === null ? { kind: 'none' } : { kind: 'control-failed', control: task.failedControl };
   if (task.failedControl !== null) return { kind: 'control-failed', control: task.failedControl };
-  if (traits.silica === 'housekeeping') return { kind: 'housekeeping' };
   if (pack.silica === null) return { kind: 'no-pack' };
+  // The housekeeping paragraph is US text: under another law sweeping up is silica work like any other.
+  if (traits.silica === 'housekeeping' && pack.federalText !== 'foreign') return { kind: 'housekeeping' };
   if (traits.silica === 'table-1' && pack.silica.table1Rows.length > 0) return decideTable1(context, pack.silica);
-  return byBasis(context, pack.silica, [task.kind], traits.silica === 'scope' ? 'scope' : 'assessment');
+  return byBasis(context, pack.silica, [task.kind], traits.silica === 'table-1' || traits.silica === 'assessed' ? 'assessment' : 'scope');
 }
 
 function byBasis(context: TaskContext, law: SilicaLaw, kinds: readonly TaskKind[], question: 'scope' | 'assessment'): SilicaDecision {

@@ -46,7 +46,7 @@ describe('[SIL-04] Table 1 minutes of a person ((c)(3); overlapping time counts 
       people: [person],
       tasks: [taskFacts({ kind: 'floor-grinding', assignments: [{ personId: 'dov', ...span(300, 441) }, { personId: 'other', ...span(0, 900) }] }), taskFacts({ kind: 'shot-blasting', assignments: [{ personId: 'dov', ...span(500, 700) }] })],
     });
-    expect(table1Time(facts, person)).toEqual({ minutes: 241, minutesElsewhere: 100, passesAtMinute: 440 });
+    expect(table1Time(facts, person)).toEqual({ minutes: 241, minutesLoggedBeyondPlan: 0, minutesElsewhere: 100, passesAtMinute: 440 });
   });
 
   it('notices two places at once, here and on another job, but not a break beside work', () => {

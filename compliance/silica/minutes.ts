@@ -1,4 +1,4 @@
-import { type PersonFacts, type ShiftFacts, type TaskKind } from '../facts';
+import { type Assignment, type PersonFacts, type ShiftFacts, type TaskKind } from '../facts';
 import { FOUR_HOURS_MINUTES } from './table1';
 
 /** Kinds of floor work that stand in Table 1. Counted by kind, so that a machine outside its row never shortens anyone's sum. */
@@ -43,20 +43,39 @@ export function minuteOfPassing(intervals: readonly Interval[], limitMinutes = F
   return null;
 }
 
+/** Minutes that conversions cost; less than this is no minute begun. */
+const NOISE_MINUTES = 1e-6;
+
+/** A begun minute counts whole: nobody holds a stopwatch, so every doubt goes to the stricter side. */
+export function wholeMinutes({ startMinute, endMinute }: Interval): Interval {
+  return { startMinute: Math.floor(startMinute + NOISE_MINUTES), endMinute: Math.ceil(endMinute - NOISE_MINUTES) };
+}
+
 export interface Table1Time {
-  /** All jobs together. */
+  /** All jobs together, planned and logged. */
   readonly minutes: number;
+  /** The part that was logged outside the planned times. */
+  readonly minutesLoggedBeyondPlan: number;
   /** The part on other jobs. */
   readonly minutesElsewhere: number;
   readonly passesAtMinute: number | null;
 }
 
-/** Table 1 time of a person over all jobs of the shift: the person, not the job, carries the minutes. */
+export const NO_TABLE_1_TIME: Table1Time = { minutes: 0, minutesLoggedBeyondPlan: 0, minutesElsewhere: 0, passesAtMinute: null };
+
+/**
+ * Table 1 time of a person over all jobs of the shift: the person, not the job, carries the minutes.
+ * Planned and logged times count together: a log that ends early takes nothing off the plan, one that runs on adds to it.
+ */
 export function table1Time(facts: ShiftFacts, person: PersonFacts): Table1Time {
   const elsewhere = person.elsewhere.filter(({ kind }) => TABLE_1_KINDS.has(kind));
-  const here = facts.tasks.filter(({ kind }) => TABLE_1_KINDS.has(kind)).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === person.id));
-  const all = [...here, ...elsewhere];
-  return { minutes: totalMinutes(all), minutesElsewhere: totalMinutes(elsewhere), passesAtMinute: minuteOfPassing(all) };
+  const tasks = facts.tasks.filter(({ kind }) => TABLE_1_KINDS.has(kind));
+  const own = (spans: readonly Assignment[]): readonly Interval[] => spans.filter(({ personId }) => personId === person.id);
+  const whole = (spans: readonly Interval[]): readonly Interval[] => spans.filter(isPossible).map(wholeMinutes);
+  const planned = whole([...tasks.flatMap(({ assignments }) => own(assignments)), ...elsewhere]);
+  const all = [...planned, ...whole(tasks.flatMap(({ logged = [] }) => own(logged)))];
+  const minutes = totalMinutes(all);
+  return { minutes, minutesLoggedBeyondPlan: minutes - totalMinutes(planned), minutesElsewhere: totalMinutes(whole(elsewhere)), passesAtMinute: minuteOfPassing(all) };
 }
 
 export interface DoubleBooking extends Interval {

@@ -1,9 +1,10 @@
 import { respiratorTypes, type RespiratorType } from '../facts';
+import { type LimitRow } from '../air/limits.data';
 import { findPack } from '../jurisdictions/pack';
 import { type JurisdictionPack } from '../jurisdictions/packs.data';
 import { type Words } from '../outcome';
 import { APF_COMPARISON, apfRowsOf, type FacePiece, type RespiratorDevice } from '../respirators/apf.data';
-import { type Source } from '../source';
+import { sourceLine, type Source } from '../source';
 import { words } from '../words';
 
 /** What the shift's rules need from the law of a place. */
@@ -13,6 +14,10 @@ export interface ShiftPack {
   readonly name: Words;
   readonly isComplete: boolean;
   readonly gap: Words | null;
+  /** What the US federal text is here: the law, a state's likely least, or another country's. */
+  readonly federalText: 'law' | 'orientation' | 'foreign';
+  /** The place's own silica figure where no pack holds its law: for orientation, it decides nothing. */
+  readonly orientation: { readonly words: Words; readonly source: Source } | null;
   /** Null where no pack holds this place's silica law: silica work there is undecided, never judged by another country's figures. */
   readonly silica: SilicaLaw | null;
 }
@@ -71,12 +76,26 @@ function lawOf({ silica, apfJurisdictionId }: JurisdictionPack): SilicaLaw {
   return { actionLevel: silica.actionLevelMicrogramsPerM3, limit: silica.limitMicrogramsPerM3, limitSource: silica.limitSource, table1Rows: silica.table1Rows, factors: factorsOf(apfJurisdictionId) };
 }
 
+const UNITS: Readonly<Partial<Record<LimitRow['unit'], string>>> = { 'ug/m3': 'µg/m³', 'mg/m3': 'mg/m³' };
+
+function orientationOf(rows: readonly LimitRow[]): ShiftPack['orientation'] {
+  const row = rows.find(({ kind }) => kind === 'twa-8h');
+  if (row === undefined) return null;
+  const figure = `${row.value} ${UNITS[row.unit] ?? row.unit}`;
+  const cited = sourceLine(row.source);
+  return {
+    words: words(`Its silica limit, for orientation only: ${figure} as 8-hour average (${cited}).`, `Su límite de sílice, solo como guía: ${figure} en promedio de 8 horas (${cited}).`),
+    source: row.source,
+  };
+}
+
 /** The pack of a place; a place without one gets a pack that decides nothing and says so. */
 export function shiftPack(jurisdictionId: string): ShiftPack {
   const found = findPack(jurisdictionId);
   if (found.kind === 'no-pack') {
-    return { id: jurisdictionId, version: 'none', name: found.place?.name ?? words('No pack for this place', 'Sin reglas para este lugar'), isComplete: false, gap: found.gap, silica: null };
+    const name = found.place?.name ?? words('this place', 'este lugar');
+    return { id: jurisdictionId, version: 'none', name, isComplete: false, gap: found.gap, federalText: found.isUs ? 'orientation' : 'foreign', orientation: orientationOf(found.orientation), silica: null };
   }
   const { pack, isComplete, gap } = found;
-  return { id: pack.id, version: pack.version, name: pack.name, isComplete, gap, silica: lawOf(pack) };
+  return { id: pack.id, version: pack.version, name: pack.name, isComplete, gap, federalText: pack.id.startsWith('us-') ? 'law' : 'foreign', orientation: null, silica: lawOf(pack) };
 }

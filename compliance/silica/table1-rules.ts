@@ -8,6 +8,7 @@ import { requiredAirflow, type ControlCheck } from './table1-controls';
 import { type LeftTable1 } from './decision';
 import { silicaRespirator } from './respirator';
 import { type SilicaPerson, type SilicaTask } from './silica-context';
+import { NO_TABLE_1_TIME } from './minutes';
 import { FOUR_HOURS_MINUTES, table1Place } from './table1';
 import { DEMAND_WORDS } from './table1-demands.data';
 import { type Table1Demand } from './table1.data';
@@ -162,12 +163,12 @@ export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
   holds: false,
   evaluate({ silica, person, table1TimeByPerson, facts, pack }) {
     if (silica.kind !== 'table-1') return notApplicable(words('Not a Table 1 task.', 'No es tarea de la Tabla 1.'));
-    const time = table1TimeByPerson.get(person.id) ?? { minutes: 0, minutesElsewhere: 0, passesAtMinute: null };
+    const time = table1TimeByPerson.get(person.id) ?? NO_TABLE_1_TIME;
     const answer = silicaRespirator(silica, table1Place(facts.setting), time.minutes, pack.silica?.factors ?? null);
     return met(
       words(`${person.name}: ${duration(time.minutes)} of Table 1 work today, all jobs.`, `${person.name}: ${duration(time.minutes)} de trabajo de la Tabla 1 hoy, en todas las obras.`),
       {
-        inputs: { 'Table 1 time, minutes': time.minutes, 'of it on other jobs, minutes': time.minutesElsewhere, setting: facts.setting, row: silica.option.row },
+        inputs: { 'Table 1 time, minutes': time.minutes, 'of it on other jobs, minutes': time.minutesElsewhere, 'of it logged past the plan, minutes': time.minutesLoggedBeyondPlan, setting: facts.setting, row: silica.option.row },
         results: { 'protection factor, at least': answer.apf },
         whatWouldChange: time.minutes > FOUR_HOURS_MINUTES ? words('4 h or less in all.', '4 h o menos en total.') : words('More than 4 h in all.', 'Más de 4 h en total.'),
       },
