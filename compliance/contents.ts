@@ -69,7 +69,7 @@ export function yearlyRule({ everyYears = 1, ...described }: Described & { reado
       const dueOn = addYears(checkIsoDate('lastDoneOn', lastDoneOn), everyYears);
       const extra = { inputs: { 'last done': lastDoneOn }, dueOn };
       if (lastDoneOn > asOf) throw new InputError('lastDoneOn', `is later than ${asOf}`);
-      return asOf <= dueOn ? met(words(`Done; next by ${dueOn}.`, `Hecho; la próxima antes del ${dueOn}.`), extra) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse antes del ${dueOn}.`), { ...extra, whatWouldChange: words('Do it and record the day.', 'Hágalo y anote el día.') });
+      return asOf <= dueOn ? met(words(`Done; next by ${dueOn}.`, `Hecho; la próxima a más tardar el ${dueOn}.`), extra) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Do it and record the day.', 'Hágalo y anote el día.') });
     },
   };
 }

@@ -86,7 +86,7 @@ export type DilutionFacts = Parameters<typeof dilutionVentilation>[0] & { readon
 export const dilutionEnough: Rule<DilutionFacts> = {
   id: 'dilution-ventilation',
   title: words('Fresh air where fresh air can do it', 'Aire fresco donde el aire fresco basta'),
-  source: usFederal('1926.57', 'read', { paragraph: '(b), (d)', note: 'Runs during the whole operation; the amount by the industrial ventilation formula.' }),
+  source: usFederal('1926.57', 'read', { paragraph: '(a), (d)', note: '(a) keeps the air within the limits, (d) lets ventilation run during the whole operation and after it; (b) is local exhaust. The amount by the industrial ventilation formula.' }),
   duties: ['AIR-04'],
   evaluate({ suppliedM3PerH, ...contaminant }) {
     const answer = dilutionVentilation(contaminant);

@@ -18,8 +18,10 @@ export const monitoringDue: Rule<MonitoringFacts> = {
   duties: ['SIL-08'],
   evaluate({ results, limits }, asOf) {
     const schedule = monitoringSchedule(results, limits, asOf);
-    const latest = results.length === 0 ? null : Math.max(...results.map((each) => each.twaMicrogramsPerM3));
-    const extra = { inputs: { 'results on file': results.length, 'highest, µg/m³ as 8-hour average': latest }, dueOn: schedule.dueOn };
+    // The most recent day decides, not the highest result ever ((d)(2)(iii)(C)-(E)).
+    const lastDay = results.map((each) => each.sampledOn).sort().at(-1) ?? null;
+    const latest = lastDay === null ? null : Math.max(...results.filter((each) => each.sampledOn === lastDay).map((each) => each.twaMicrogramsPerM3));
+    const extra = { inputs: { 'results on file': results.length, 'most recent sample on': lastDay, 'most recent, µg/m³ as 8-hour average': latest }, dueOn: schedule.dueOn };
     if (schedule.step === 'sample-first') return undecided(schedule.reason, WHO.hygienist, { ...extra, whatWouldChange: words('A first sample of each shift, job and area.', 'Una primera muestra por turno, puesto y zona.') });
     if (schedule.isOverdue) return unmet(schedule.reason, { ...extra, whatWouldChange: words('Sample again.', 'Muestree de nuevo.') });
     return met(schedule.reason, extra);
@@ -66,8 +68,8 @@ export const noticeOfAssessment: Rule<NoticeFacts> = {
   evaluate({ assessmentCompletedOn, scope, holidays, toldOn, isAboveLimit, namesCorrectiveAction }, asOf) {
     const { dueOn, earlierDueOn } = noticeDate(assessmentCompletedOn, scope, (day) => holidays.includes(day));
     const extra = { inputs: { 'assessment completed': assessmentCompletedOn, 'told on': toldOn, 'above the limit': isAboveLimit }, dueOn, results: { 'earlier reading': earlierDueOn } };
-    if ((toldOn ?? asOf) > dueOn) return unmet(words(`Was due by ${dueOn}.`, `Debía informarse antes del ${dueOn}.`), { ...extra, whatWouldChange: words('Post it now, and keep the date.', 'Publíquelo ya y guarde la fecha.') });
-    if (toldOn === null) return undecided(words(`Not told yet: by ${earlierDueOn} at the safest.`, `Aún sin informar: lo más seguro, antes del ${earlierDueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Post it, or hand it to each person.', 'Publíquelo o entréguelo a cada persona.') });
+    if ((toldOn ?? asOf) > dueOn) return unmet(words(`Was due by ${dueOn}.`, `Debía informarse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Post it now, and keep the date.', 'Publíquelo ya y guarde la fecha.') });
+    if (toldOn === null) return undecided(words(`Not told yet: by ${earlierDueOn} at the safest.`, `Aún sin informar: lo más seguro, a más tardar el ${earlierDueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Post it, or hand it to each person.', 'Publíquelo o entréguelo a cada persona.') });
     if (isAboveLimit && namesCorrectiveAction === null) return undecided(words('Does the notice say what is done to bring the exposure down?', '¿Dice el aviso qué se hace para bajar la exposición?'), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Read the notice.', 'Lea el aviso.') });
     if (isAboveLimit && namesCorrectiveAction === false) return unmet(words('Above the limit, the notice must say what is done about it.', 'Sobre el límite, el aviso debe decir qué se hace al respecto.'), { ...extra, whatWouldChange: words('Add the corrective action.', 'Añada la medida correctiva.') });
     return met(words(`Told on ${toldOn}.`, `Informado el ${toldOn}.`), extra);

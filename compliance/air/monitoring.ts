@@ -99,9 +99,9 @@ function endedReason(ended: 'initial' | 'two-below'): Words {
 
 function repeatReason(kind: keyof typeof REPEAT_MONTHS, value: number, dueOn: IsoDate): Words {
   const shown = `${value} µg/m³`;
-  if (kind === 'aboveLimit') return { en: `${shown} as 8-hour average is above the limit: sample again by ${dueOn}.`, es: `${shown} como promedio de 8 horas supera el límite: muestree de nuevo antes del ${dueOn}.` };
-  if (kind === 'atOrAboveActionLevel') return { en: `${shown} as 8-hour average is at or above the action level: sample again by ${dueOn}.`, es: `${shown} como promedio de 8 horas llega al nivel de acción o lo pasa: muestree de nuevo antes del ${dueOn}.` };
-  return { en: `${shown} is below the action level, but it takes two in a row, seven days apart: sample again by ${dueOn}.`, es: `${shown} está bajo el nivel de acción, pero hacen falta dos seguidos con siete días entre ellos: muestree de nuevo antes del ${dueOn}.` };
+  if (kind === 'aboveLimit') return { en: `${shown} as 8-hour average is above the limit: sample again by ${dueOn}.`, es: `${shown} como promedio de 8 horas supera el límite: muestree de nuevo a más tardar el ${dueOn}.` };
+  if (kind === 'atOrAboveActionLevel') return { en: `${shown} as 8-hour average is at or above the action level: sample again by ${dueOn}.`, es: `${shown} como promedio de 8 horas llega al nivel de acción o lo pasa: muestree de nuevo a más tardar el ${dueOn}.` };
+  return { en: `${shown} is below the action level, but it takes two in a row, seven days apart: sample again by ${dueOn}.`, es: `${shown} está bajo el nivel de acción, pero hacen falta dos seguidos con siete días entre ellos: muestree de nuevo a más tardar el ${dueOn}.` };
 }
 
 /** A change at the work that can raise exposure. */

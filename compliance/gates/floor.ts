@@ -6,7 +6,7 @@ import { type ShiftRule } from '../shift-rule';
 import { sourced, usFederal, type Source } from '../source';
 import { sentences, words } from '../words';
 
-const ASBESTOS: Source = usFederal('1926.1101', 'partly', { paragraph: '(g)(8)(i), (k)', note: 'Vinyl and asphalt flooring and mastic in buildings to 1980 are presumed to hold asbestos; read through the agency\'s letter of 18 May 2005.' });
+const ASBESTOS: Source = usFederal('1926.1101', 'partly', { paragraph: '(g)(8)(i), (k)', note: 'Vinyl and asphalt flooring and mastic in buildings to 1980 are presumed to hold asbestos; read through the agency\'s letters of 18 May 2005 and 1 August 1997 and its slide on rebutting the presumption, (k)(5).' });
 const LEAD: Source = usFederal('1926.62', 'partly', { paragraph: '(d)(2)' });
 const BOTH: Source = sourced('29 CFR 1926.1101 and 1926.62', 'partly', { paragraph: '(g)(8)(i), (k); (d)(2)', note: 'Asbestos read through a letter of the agency; lead in part.' });
 
@@ -29,8 +29,18 @@ function unproven(floor: FloorFacts): Words | null {
   return isAnswered && (floor.surveyReference ?? '').trim() === '' ? words('Nobody wrote down who looked, or the report.', 'Nadie anotó quién revisó, ni el informe.') : null;
 }
 
+const PRESUMED_TO = 1980;
+
+/** Flooring and its mastic to 1980 count as asbestos until a survey says no; that none was needed is no survey ((k)(1), (k)(5)). */
+function isPresumed({ covering, builtYear, asbestos }: FloorFacts): boolean {
+  return asbestos === 'not-needed' && (covering === 'tile' || covering === 'black-mastic') && (builtYear === null || builtYear <= PRESUMED_TO);
+}
+
 function judge(floor: FloorFacts): Verdict {
   const inputs = floorInputs(floor);
+  if (floor.asbestos !== 'present' && floor.lead !== 'present' && isPresumed(floor)) {
+    return undecided(words('Tile and mastic to 1980 count as asbestos until a survey says no.', 'Loseta y pegamento hasta 1980 cuentan como asbesto hasta que un estudio diga que no.'), WHO.competentPerson, { inputs, whatWouldChange: words('A survey with samples, or papers that it was laid later.', 'Un estudio con muestras, o papeles de que se puso después.') });
+  }
   if (floor.asbestos === 'present' || floor.lead === 'present') {
     return unmet(whatIsOpen(floor), { inputs, whatWouldChange: words('Other rules and trained people take over this floor.', 'Otras reglas y gente preparada toman este piso.') });
   }
@@ -41,7 +51,7 @@ function judge(floor: FloorFacts): Verdict {
 }
 
 function sourceOf(floor: FloorFacts): Source {
-  const isAsbestosOpen = BLOCKS.includes(floor.asbestos);
+  const isAsbestosOpen = BLOCKS.includes(floor.asbestos) || isPresumed(floor);
   const isLeadOpen = BLOCKS.includes(floor.lead);
   if (isAsbestosOpen === isLeadOpen) return BOTH;
   return isAsbestosOpen ? ASBESTOS : LEAD;

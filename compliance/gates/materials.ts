@@ -42,7 +42,7 @@ export const sheetsRule: ShiftRule<TaskContext> = {
 export const flammableRule: ShiftRule<TaskContext> = {
   id: 'flammable-vapor-and-sparks',
   title: words('Flammable vapor and sparks', 'Vapor inflamable y chispas'),
-  source: usFederal('1926.152', 'from-memory', { paragraph: '(f)(3)', note: 'Ignition sources kept away for flammable liquids of categories 1 to 3.' }),
+  source: usFederal('1926.152', 'parallel-text', { paragraph: '(f)(3)', note: 'Read in 8 CCR 1935(c), same words: categories 1 to 3, no open flame or other ignition within 50 feet, more where conditions warrant it.' }),
   duties: ['GATE-03'],
   topic: 'gate',
   holds: true,
@@ -62,7 +62,7 @@ export const flammableRule: ShiftRule<TaskContext> = {
     return met(words(`The liquid catches fire (${codes}). No sparks at the same time.`, `El líquido se prende (${codes}). Sin chispas al mismo tiempo.`), { inputs });
   },
   line: ({ traits }, { outcome }) =>
-    outcome === 'met' ? words('Air moving before the lid comes off. No flame, no grinder near.', 'Aire andando antes de abrir. Sin llama ni pulidora cerca.') : words(`${traits.name.en} may not start: sparks near flammable vapor.`, `${traits.name.es}: no puede empezar, hay chispas cerca del vapor.`),
+    outcome === 'met' ? words('Air moving before the lid comes off. No flame, no grinder within 50 feet.', 'Aire andando antes de abrir. Sin llama ni pulidora a 50 pies.') : words(`${traits.name.en} may not start: sparks near flammable vapor.`, `${traits.name.es}: no puede empezar, hay chispas cerca del vapor.`),
 };
 
 /** Vapor is decided apart from dust: what the sheets ask, and that a dust filter does not stop it. */

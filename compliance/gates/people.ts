@@ -72,7 +72,9 @@ export const silicaTrainingRule: ShiftRule<PersonInTask> = {
   topic: 'people',
   holds: true,
   evaluate(context, day) {
-    const { person } = context;
+    const { person, silica } = context;
+    // A signed basis below the action level takes the work out of the whole rule, its training too ((a)).
+    if (silica.kind === 'basis' && silica.decision.kind === 'outside-scope') return notApplicable(words('The silica rule does not apply to this work.', 'La regla de sílice no aplica a este trabajo.'));
     if (!isSilicaWork(context)) return notApplicable(words('No silica work.', 'Sin trabajo con sílice.'));
     const inputs = { 'silica training on': person.silicaTrainedOn };
     return since(person.silicaTrainedOn, day)

@@ -1,4 +1,4 @@
-import { met, undecided, unmet, WHO, type Rule } from '../rule';
+import { met, notApplicable, undecided, unmet, WHO, type Rule } from '../rule';
 import { usFederal } from '../source';
 import { words } from '../words';
 import { noiseShift, type NoisePeriod } from './dose';
@@ -52,6 +52,8 @@ export const hearingProtection: Rule<HearingProtectionFacts> = {
   duties: ['NOI-03'],
   evaluate({ twaDba, plugNrrDb, muffNrrDb, arePlugsFitted }) {
     const inputs = { 'average, dBA': twaDba, 'plug NRR': plugNrrDb, 'muff NRR': muffNrrDb };
+    // (a) asks protectors only where noise stays above Table D-2; federal construction law has no 85 dBA level.
+    if (twaDba <= LIMIT_DBA) return notApplicable(words('Not above 90 dBA: construction law asks for none.', 'No pasa de 90 dBA: la ley de construcción no pide ninguna.'), { inputs, whatWouldChange: words('More noise, a state rule, or the house rule.', 'Más ruido, una regla estatal o la de la casa.') });
     const single = plugNrrDb ?? muffNrrDb;
     if (single === null) return unmet(words('No hearing protection is planned.', 'No hay protección auditiva prevista.'), { inputs, whatWouldChange: words('Plugs or muffs.', 'Tapones u orejeras.') });
     const isDual = plugNrrDb !== null && muffNrrDb !== null;

@@ -23,7 +23,7 @@ export interface ProtectionRow {
 
 const EYES = usFederal('1926.102', 'from-memory', { paragraph: '(a)(1); 1926.95(a), (c)' });
 const SHEET = sourced('Confirmed safety data sheets of this job', 'read', { paragraph: 'section 2', note: 'Which statement asks which protection: UN GHS Annex 3, P280 and response statements, partly read.' });
-const BLASTING = usFederal('1926.57', 'parallel-text', { paragraph: '(f)(6)', note: 'Read in WAC 296-818-20010.' });
+const BLASTING = usFederal('1926.57', 'parallel-text', { paragraph: '(f)(6)', note: 'Read in WAC 296-818-20010: gloves and aprons of heavy canvas or leather, or equivalent protection, against the impact of abrasive. The closed machine stands for the apron (judgement); an open nozzle needs one.' });
 const NOISE = usFederal('1926.52', 'read', { paragraph: '(b); 1926.101', note: 'Handheld grinding 95 to 99 dBA measured (NIOSHTIC 20043139); no published figure for walk-behind machines and blasters: measure, or take the maker\'s.' });
 const BOOTS = usFederal('1926.96', 'from-memory');
 const WET_CEMENT = sourced('Statements of Portland cement on supplier sheets', 'from-memory', { note: 'Cement is alkaline when wet; OSHA memorandum of 16 Apr 2007 names protective equipment and sanitation for it.' });

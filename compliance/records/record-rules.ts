@@ -40,9 +40,9 @@ export const accessInTime: Rule<AccessFacts> = {
     const { dueOn, earlierDueOn } = accessDueOn(requestedOn, (day) => holidays.includes(day));
     const extra = { inputs: { 'requested on': requestedOn, 'given on': givenOn }, dueOn, results: { 'earlier reading': earlierDueOn } };
     if (givenOn !== null && checkIsoDate('givenOn', givenOn) <= dueOn) return met(words(`Given on ${givenOn}.`, `Entregado el ${givenOn}.`), extra);
-    if ((givenOn ?? asOf) > dueOn && !isDelayExplained) return unmet(words(`Was due by ${dueOn}.`, `Debía entregarse antes del ${dueOn}.`), { ...extra, whatWouldChange: words('Give it now, and say why it took longer.', 'Entréguelo ya y diga por qué tardó más.') });
+    if ((givenOn ?? asOf) > dueOn && !isDelayExplained) return unmet(words(`Was due by ${dueOn}.`, `Debía entregarse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Give it now, and say why it took longer.', 'Entréguelo ya y diga por qué tardó más.') });
     if (givenOn !== null) return met(words('Given later; the reason and date were told.', 'Entregado después; se dijeron la razón y la fecha.'), extra);
-    return undecided(words(`Not given yet: by ${earlierDueOn} at the safest.`, `Aún sin entregar: lo más seguro, antes del ${earlierDueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Hand over the export.', 'Entregue la exportación.') });
+    return undecided(words(`Not given yet: by ${earlierDueOn} at the safest.`, `Aún sin entregar: lo más seguro, a más tardar el ${earlierDueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Hand over the export.', 'Entregue la exportación.') });
   },
 };
 
@@ -60,7 +60,7 @@ export const rightsNotice: Rule<RightsNoticeFacts> = {
     const dueOn = rightsNoticeDueOn(employedOn, lastToldOn);
     const extra = { inputs: { 'employed on': employedOn, 'last told': lastToldOn }, dueOn };
     const wasToldHere = lastToldOn !== null && lastToldOn >= employedOn;
-    if (wasToldHere && asOf <= addYears(lastToldOn, 1)) return met(words(`Told; again by ${dueOn}.`, `Informado; de nuevo antes del ${dueOn}.`), extra);
+    if (wasToldHere && asOf <= addYears(lastToldOn, 1)) return met(words(`Told; again by ${dueOn}.`, `Informado; de nuevo a más tardar el ${dueOn}.`), extra);
     return unmet(words(`Due on ${dueOn}.`, `Debía hacerse el ${dueOn}.`), { ...extra, whatWouldChange: words('Tell the worker, and record the day.', 'Informe al trabajador y anote el día.') });
   },
 };
@@ -82,6 +82,6 @@ export const safetyMeetings: Rule<MeetingFacts> = {
     const inputs = { 'every, working days': everyWorkingDays, 'last held': lastHeldOn };
     if (lastHeldOn === null) return unmet(words('None held yet.', 'Aún no se ha hecho ninguna.'), { inputs, dueOn: asOf, whatWouldChange: words('Hold one.', 'Haga una.') });
     const dueOn = addWorkingDays(checkIsoDate('lastHeldOn', lastHeldOn), everyWorkingDays, (day) => holidays.includes(day));
-    return asOf <= dueOn ? met(words(`Next by ${dueOn}.`, `La próxima antes del ${dueOn}.`), { inputs, dueOn }) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse antes del ${dueOn}.`), { inputs, dueOn, whatWouldChange: words('Hold one.', 'Haga una.') });
+    return asOf <= dueOn ? met(words(`Next by ${dueOn}.`, `La próxima a más tardar el ${dueOn}.`), { inputs, dueOn }) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse a más tardar el ${dueOn}.`), { inputs, dueOn, whatWouldChange: words('Hold one.', 'Haga una.') });
   },
 };

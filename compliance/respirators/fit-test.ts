@@ -118,6 +118,10 @@ function fitFactor({ facePiece, isNegativePressure, hazardRatio }: Wearer, test:
   if (isNegativePressure && hazardRatio !== null && hazardRatio > QUALITATIVE_MAX_RATIO) {
     return { id, outcome: 'unmet', validUntil: null, reason: { en: 'Tested by taste or smell: good to 10 times the limit only. A counted test is needed.', es: 'Probado por sabor u olor: sirve solo hasta 10 veces el límite. Se necesita una prueba cuantitativa.' }, source };
   }
+  if (isNegativePressure && hazardRatio === null && facePiece === 'full-facepiece') {
+    // Table 1 asks 10 or 25: the wearer's facts do not say which.
+    return { id, outcome: 'undecided', validUntil: null, reason: { en: 'Tested by taste or smell: good where a factor of 10 is asked, not more. Which is asked?', es: 'Probado por sabor u olor: sirve donde se pide un factor de 10, no más. ¿Cuál se pide?' }, source };
+  }
   return { id, outcome: 'met', validUntil: null, reason: { en: 'Tested by taste or smell: enough here.', es: 'Probado por sabor u olor: basta aquí.' }, source };
 }
 

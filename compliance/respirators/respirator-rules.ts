@@ -86,8 +86,9 @@ export const medicalSurveillance: Rule<MedicalTriggerFacts> = {
     }
     const exam = silicaExamDue(person, asOf);
     const extra = { inputs: { 'assigned on': person.assignedOn, 'last exam': person.lastExamOn }, results, dueOn: exam.dueOn };
-    if (exam.isOverdue) return unmet(words(`The exam was due by ${exam.dueOn}.`, `El examen debía hacerse antes del ${exam.dueOn}.`), { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
-    return met(words(`Exam by ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`, `Examen antes del ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`), extra);
+    if (exam.isOverdue) return unmet(words(`The exam was due by ${exam.dueOn}.`, `El examen debía hacerse a más tardar el ${exam.dueOn}.`), { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
+    if (exam.kind === 'initial') return undecided(words(`No exam on file yet: offer one by ${exam.dueOn}.`, `Aún no hay examen: ofrézcalo a más tardar el ${exam.dueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
+    return met(words(`Exam by ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`, `Examen a más tardar el ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`), extra);
   },
 };
 

@@ -32,15 +32,17 @@ export const waterFlowRule: ShiftRule<SilicaTask> = {
   line: () => words('Water on full. No dust you can see.', 'Agua bien abierta. Sin polvo a la vista.'),
 };
 
-/** No dry sweeping, no compressed air ((f)). */
+const NO_BETTER_WAY = words('Only where no wet or vacuum way can work, or a hood takes the blown dust. The competent person writes down why.', 'Solo si no sirve ni mojar ni aspirar, o una campana atrapa lo soplado. La persona competente anota por qué.');
+
+/** No dry sweeping, no compressed air ((f)); both have an exception, which is for the competent person, not for the crew line. */
 export const housekeepingRule: ShiftRule<SilicaTask> = {
   id: 'silica-housekeeping',
   title: words('No dry sweeping, no blown air', 'Sin barrer en seco, sin soplar'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(f)(1), (f)(2)' }),
+  source: usFederal('1926.1153', 'read', { paragraph: '(f)(1), (f)(2)', note: 'Quoted in full on silica-safe.org. Holds where it could add to silica exposure.' }),
   duties: ['SIL-15'],
   topic: 'housekeeping',
   holds: false,
-  evaluate: (context) => (isSilicaWork(context) ? met(words('Dry sweeping and blown air put the dust back in the air.', 'Barrer en seco y soplar levanta el polvo otra vez.')) : elsewhere),
+  evaluate: (context) => (isSilicaWork(context) ? met(words('Dry sweeping and blown air put the dust back in the air.', 'Barrer en seco y soplar levanta el polvo otra vez.'), { whatWouldChange: NO_BETTER_WAY }) : elsewhere),
   line: () => words('HEPA vacuum or wet. No dry sweeping. No blown air.', 'Aspiradora HEPA o mojado. Sin barrer en seco. Sin soplar.'),
 };
 

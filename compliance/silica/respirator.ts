@@ -30,7 +30,7 @@ export function silicaRespirator(decision: SilicaDecision, place: Table1Place, t
     case 'housekeeping':
       return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: usFederal('1926.1153', 'read', { paragraph: '(f)' }) };
     case 'incidental':
-      return { outcome: 'none-required', apf: null, label: words('none, part of Table 1 work', 'ninguna, parte del trabajo de la Tabla 1'), source: usFederal('1926.1153', 'read', { paragraph: '(c)(1)' }) };
+      return { outcome: 'none-required', apf: null, label: words('none, part of Table 1 work', 'ninguna, parte del trabajo de la Tabla 1'), source: usFederal('1926.1153', 'partly', { paragraph: '(c)(1)', note: 'That emptying the collector belongs to the Table 1 work is a judgement; no text says so.' }) };
     case 'table-1':
       return table1Respirator(decision, place, table1Minutes, factors);
     case 'basis':
@@ -54,7 +54,7 @@ function table1Respirator({ option }: Extract<SilicaDecision, { kind: 'table-1' 
 
 function basisRespirator(decision: Extract<SilicaDecision, { kind: 'basis' }>['decision'], factors: RespiratorFactors | null): RespiratorAnswer {
   if (decision.kind === 'outside-scope') return { outcome: 'none-required', apf: null, label: words('none for silica', 'ninguna por sílice'), source: SCOPE };
-  if (decision.apf === null) return { outcome: 'none-required', apf: null, label: words('none: below the limit', 'ninguna: bajo el límite'), source: OUTSIDE_TABLE_1 };
+  if (decision.apf === null) return { outcome: 'none-required', apf: null, label: words('none: not above the limit', 'ninguna: no pasa el límite'), source: OUTSIDE_TABLE_1 };
   const name = apfName(decision.apf, factors);
   if (decision.kind === 'sampling-day') {
     return { outcome: 'required', apf: decision.apf, label: words(`${name.en}, as ${decision.basis.signedBy} wrote`, `${name.es}, como escribió ${decision.basis.signedBy}`), source: QUALIFIED };

@@ -81,8 +81,10 @@ function stateOf(demand: Table1Demand, facts: ControlFacts): ControlState {
     case 'shroud':
       return fromBoolean(tool.hasShroud);
     case 'dust-collection-commercial':
-    case 'dust-collection-makers-system':
       return collector === null ? 'unmet' : 'met';
+    case 'dust-collection-makers-system':
+      // Which collector the maker recommends stands in the manual: without manual and figure, any collector would pass.
+      return collector === null ? 'unmet' : tool.hasManualOnFile && tool.requiredAirflowM3PerH !== null ? 'met' : 'unknown';
     case 'airflow-makers-figure':
     case 'airflow-25-cfm-per-inch':
       return airflowState(facts);

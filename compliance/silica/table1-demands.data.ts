@@ -5,6 +5,7 @@ import { type Table1Demand } from './table1.data';
 /** Each demand of a Table 1 row as a crew reads it. Paraphrased from the rows; the row carries the source. */
 export const DEMAND_WORDS: Readonly<Record<Table1Demand, Words>> = {
   'makers-manual': words('Run it as the maker\'s manual says, to keep dust low.', 'Úsela como dice el manual, con poco polvo.'),
+  'run-to-keep-dust-low': words('Run it and keep it so that dust stays low.', 'Úsela y manténgala con poco polvo.'),
   'built-in-water-feed': words('Water feed built in, and on all the time.', 'Agua de la máquina, siempre abierta.'),
   'water-at-impact-point': words('Water on the point of impact, all the time.', 'Agua en la punta, todo el tiempo.'),
   'water-sprays': words('Water sprays on.', 'Rocío de agua abierto.'),
@@ -14,7 +15,7 @@ export const DEMAND_WORDS: Readonly<Record<Table1Demand, Words>> = {
   'water-or-suppressant-when-others-near': words('Wet the ground when others are near.', 'Moje el suelo si hay gente cerca.'),
   'water-on-bit': words('Water on the bit.', 'Agua en la broca.'),
   'low-flow-water-at-collector': words('A little water where the collector drops its dust.', 'Un poco de agua donde el colector suelta el polvo.'),
-  shroud: words('Shroud on, whole, down on the floor.', 'Cubierta puesta, entera, pegada al piso.'),
+  shroud: words('Factory-made shroud on, whole, tight to the floor.', 'Cubierta de fábrica puesta, entera, pegada al piso.'),
   'close-capture-hood': words('Hood or shroud close around the bit.', 'Campana o cubierta pegada a la broca.'),
   'dust-collection-commercial': words('Dust collector fitted to the tool.', 'Colector de polvo en la herramienta.'),
   'dust-collection-makers-system': words('The collector the maker names for this machine.', 'El colector que pide el fabricante.'),

@@ -11,15 +11,18 @@ import { type SilicaPerson, type SilicaTask } from './silica-context';
 import { NO_TABLE_1_TIME } from './minutes';
 import { FOUR_HOURS_MINUTES, table1Place } from './table1';
 import { DEMAND_WORDS } from './table1-demands.data';
-import { type Table1Demand } from './table1.data';
+import { TABLE_1, type Table1Demand, type Table1Respirator } from './table1.data';
 
 const cfm = (m3PerH: number): number => Math.round(cfmFromM3PerH(m3PerH));
 const AIRFLOW: readonly Table1Demand[] = ['airflow-makers-figure', 'airflow-25-cfm-per-inch'];
 
+/** No fact says that the maker names this very collector: the figure and the manual are what is on file. */
+const MAKERS_SYSTEM = words('A collector and the maker\'s figure for it are on file. The manual names the ones that fit.', 'Hay colector y la cifra del fabricante. El manual dice cuáles sirven.');
+
 const LEFT: Readonly<Record<LeftTable1['because'], Words>> = {
   machine: words('No row of Table 1 fits this machine.', 'Ninguna fila de la Tabla 1 sirve para esta máquina.'),
   method: words('Table 1 has no row for this tool with this dust control.', 'La Tabla 1 no tiene fila para esta herramienta con este control de polvo.'),
-  place: words('Table 1 does not allow this indoors or in closed places.', 'La Tabla 1 no lo permite adentro ni en lugares cerrados.'),
+  place: words('Table 1 does not cover this indoors or in closed places.', 'La Tabla 1 no cubre esto adentro ni en lugares cerrados.'),
   'not-compared': words('This row was not compared with the text of this place.', 'Esta fila no se comparó con el texto de este lugar.'),
   controls: words('One control of the row is missing, so Table 1 is lost.', 'Falta un control de la fila, así que se pierde la Tabla 1.'),
 };
@@ -30,6 +33,12 @@ const RESTORES: Readonly<Record<LeftTable1['because'], Words>> = {
   'not-compared': words('Someone reads the local text, or a signed basis.', 'Alguien lee el texto local, o una base firmada.'),
   controls: words('Fix it and check it, or re-assess.', 'Arréglelo y revíselo, o evalúe otra vez.'),
 };
+
+/** A row whose every option is outdoors only has no control that would let it in. */
+function whatRestores({ because, row }: LeftTable1): Words {
+  const isOutdoorsOnly = because === 'place' && TABLE_1.every((option) => option.row !== row || option.indoors === null);
+  return isOutdoorsOnly ? words('Do it outdoors, or a signed basis.', 'Hágalo afuera, o una base firmada.') : RESTORES[because];
+}
 
 /** Which row of Table 1 governs; a task that leaves Table 1 is held until it is back or a basis is signed ((c)(1), (d)). */
 export const table1RowRule: ShiftRule<SilicaTask> = {
@@ -47,7 +56,7 @@ export const table1RowRule: ShiftRule<SilicaTask> = {
         return met(silica.option.heading, { inputs, results: { row: silica.option.row } });
       case 'lost':
         if (silica.left.because === 'not-compared') return undecided(LEFT['not-compared'], WHO.localAuthority, { inputs, results: { row: silica.left.row }, whatWouldChange: RESTORES['not-compared'] });
-        return unmet(LEFT[silica.left.because], { inputs, results: { row: silica.left.row }, whatWouldChange: RESTORES[silica.left.because] });
+        return unmet(LEFT[silica.left.because], { inputs, results: { row: silica.left.row }, whatWouldChange: whatRestores(silica.left) });
       case 'not-chosen':
         return silica.missing === 'machine'
           ? undecided(words('No machine is chosen, so no row can be.', 'No hay máquina elegida, así que no hay fila.'), WHO.competentPerson, { inputs, whatWouldChange: words('Choose the machine.', 'Elija la máquina.') })
@@ -108,7 +117,7 @@ export const table1ControlRule: ShiftRule<ControlOfTask> = {
     const inputs = AIRFLOW.includes(check.demand) ? airflowInputs(facts) : otherInputs(facts);
     switch (check.state) {
       case 'met':
-        return met(words('The row asks it, and it is on file.', 'La fila lo pide y está anotado.'), { inputs });
+        return met(check.demand === 'dust-collection-makers-system' ? MAKERS_SYSTEM : words('The row asks it, and it is on file.', 'La fila lo pide y está anotado.'), { inputs });
       case 'unmet':
         return unmet(LEFT.controls, { inputs, whatWouldChange: RESTORES.controls });
       case 'unknown':
@@ -153,6 +162,12 @@ export const table1WholeRule: ShiftRule<SilicaTask> = {
       : words(`${traits.name.en} may not start: a control is not on file.`, `${traits.name.es}: no puede empezar, falta anotar un control.`),
 };
 
+/** Where both columns ask the same, no minutes turn the answer. */
+function whatMinutesChange(respirator: Table1Respirator | null, minutes: number): Words | null {
+  if (respirator === null || respirator.upTo4Hours === respirator.over4Hours) return null;
+  return minutes > FOUR_HOURS_MINUTES ? words('4 h or less in all.', '4 h o menos en total.') : words('More than 4 h in all.', 'Más de 4 h en total.');
+}
+
 /** The respirator column by the person's Table 1 sum over all jobs ((c)(1), (c)(3)). */
 export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
   id: 'silica-table-1-respirator',
@@ -170,7 +185,7 @@ export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
       {
         inputs: { 'Table 1 time, minutes': time.minutes, 'of it on other jobs, minutes': time.minutesElsewhere, 'of it logged past the plan, minutes': time.minutesLoggedBeyondPlan, setting: facts.setting, row: silica.option.row },
         results: { 'protection factor, at least': answer.apf },
-        whatWouldChange: time.minutes > FOUR_HOURS_MINUTES ? words('4 h or less in all.', '4 h o menos en total.') : words('More than 4 h in all.', 'Más de 4 h en total.'),
+        whatWouldChange: whatMinutesChange(silica.option[table1Place(facts.setting)], time.minutes),
       },
     );
   },

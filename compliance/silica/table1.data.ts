@@ -26,9 +26,10 @@ export type Table1Tool = (typeof table1Tools)[number];
 
 export type Table1Method = 'water' | 'vacuum' | 'cab' | 'water-and-vacuum';
 
-/** What a row demands, beyond the machine and the respirator. Each has words in `table1-conditions.data.ts`. */
+/** What a row demands, beyond the machine and the respirator. Each has words in `table1-demands.data.ts`. */
 export const table1Demands = [
   'makers-manual',
+  'run-to-keep-dust-low',
   'built-in-water-feed',
   'water-at-impact-point',
   'water-sprays',
@@ -104,7 +105,7 @@ const DRILLING_RIG: Words = { en: 'Vehicle-mounted drilling rig for rock and con
 const LARGE_MILL: Words = { en: 'Large drivable milling machine, half a lane or wider', es: 'Fresadora grande con asiento, medio carril o más' };
 const GRADING: Words = { en: 'Heavy equipment for grading and digging', es: 'Maquinaria pesada para nivelar y excavar' };
 
-const LARGE_MILL_NOTE = 'Controls read in a training text; "none" recalled.';
+const LARGE_MILL_NOTE = 'Controls read in a training text; "none", and that the maker\'s instructions are not named, recalled.';
 const GRADING_NOTE = 'Both options and "none" read in a fact sheet of the agency and a training text.';
 
 /** All 18 rows; where a row gives a choice of controls, one entry for each. */
@@ -187,19 +188,19 @@ export const TABLE_1: readonly Table1Option[] = [
   },
   {
     id: 'xiv', row: 'xiv', tool: 'small-drivable-mill', heading: { en: 'Small drivable milling machine, less than half a lane', es: 'Fresadora pequeña con asiento, menos de medio carril' }, method: 'water',
-    demands: [MANUAL, 'less-than-half-lane', 'water-sprays', 'water-with-surfactant'], outdoors: NONE, indoors: NONE, source: row('xiv', 'read', 'Controls and "none" read in a training text.'),
+    demands: ['run-to-keep-dust-low', 'less-than-half-lane', 'water-sprays', 'water-with-surfactant'], outdoors: NONE, indoors: NONE, source: row('xiv', 'read', 'Row read in a trade reproduction: kept and run so that dust stays low; the maker\'s instructions are not named.'),
   },
   {
     id: 'xv-a', row: 'xv', tool: 'large-drivable-mill', heading: LARGE_MILL, method: 'water-and-vacuum',
-    demands: [MANUAL, 'half-lane-or-wider', 'asphalt-only', 'drum-exhaust', 'water-sprays'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
+    demands: ['run-to-keep-dust-low', 'half-lane-or-wider', 'asphalt-only', 'drum-exhaust', 'water-sprays'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
   },
   {
     id: 'xv-b', row: 'xv', tool: 'large-drivable-mill', heading: LARGE_MILL, method: 'water-and-vacuum',
-    demands: [MANUAL, 'half-lane-or-wider', 'cut-at-most-4-inches', 'drum-exhaust', 'water-sprays'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
+    demands: ['run-to-keep-dust-low', 'half-lane-or-wider', 'cut-at-most-4-inches', 'drum-exhaust', 'water-sprays'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
   },
   {
     id: 'xv-c', row: 'xv', tool: 'large-drivable-mill', heading: LARGE_MILL, method: 'water',
-    demands: [MANUAL, 'half-lane-or-wider', 'cut-at-most-4-inches', 'water-sprays', 'water-with-surfactant'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
+    demands: ['run-to-keep-dust-low', 'half-lane-or-wider', 'cut-at-most-4-inches', 'water-sprays', 'water-with-surfactant'], outdoors: NONE, indoors: NONE, source: row('xv', 'partly', LARGE_MILL_NOTE),
   },
   {
     id: 'xvi', row: 'xvi', tool: 'crusher', heading: { en: 'Crushing machine', es: 'Trituradora' }, method: 'water',
