@@ -59,14 +59,16 @@ describe('1926.1153(c)(1) Table 1', () => {
   it('[SIL-02] does not call any collector the maker\'s: without the maker\'s figure on file it is open', () => {
     const grinding = taskFacts({ kind: 'floor-grinding', assignments: at, equipmentId: 'grinder', collectorId: 'collector', dustMethod: 'vacuum' });
     const line = (found: ReturnType<typeof shiftOf>) => found.all.find(({ id }) => id.endsWith('dust-collection-makers-system'));
-    expect(line(shiftOf(grinding))).toMatchObject({ outcome: 'met', reason: { en: expect.stringContaining('The manual names the ones that fit') as string } });
+    expect(line(shiftOf(grinding))?.outcome).toBe('met');
+    expect(line(shiftOf(grinding))?.reason.en).toContain('The manual names the ones that fit');
     const equipment = shiftFacts().equipment.map((each) => (each.id === 'grinder' ? { ...each, requiredAirflowM3PerH: null } : each));
     expect(line(shiftOf(grinding, { equipment }))).toMatchObject({ outcome: 'undecided' });
   });
 
   // Rows (vii), (x), (xi), (xii), read in reproductions: "commercially available shroud".
   it('[SIL-02] asks a factory-made shroud, not any shroud', () => {
-    expect(DEMAND_WORDS.shroud).toEqual({ en: expect.stringContaining('Factory-made') as string, es: expect.stringContaining('de fábrica') as string });
+    expect(DEMAND_WORDS.shroud.en).toContain('Factory-made');
+    expect(DEMAND_WORDS.shroud.es).toContain('de fábrica');
   });
 
   // Row (xiv), read in a trade reproduction: "Operate and maintain machine to minimize dust emissions", no manufacturer's instructions.
@@ -162,7 +164,10 @@ describe('1926.152(f)(3), same words in 8 CCR 1935(c), read', () => {
   it('[GATE-03] gives the distance: 50 feet', () => {
     const kit = shiftFacts().kits[0]!;
     const kits = [{ ...kit, parts: kit.parts.map((part) => (part.part === 'A' ? { ...part, sheet: { ...part.sheet!, hazardCodes: ['H225'] } } : part)) }];
-    expect(shiftOf(taskFacts({ kind: 'priming', assignments: at, kitId: 'quarrybond-40' }), { kits }).find('flammable-vapor-and-sparks')).toMatchObject({ outcome: 'met', text: { en: expect.stringContaining('50 feet') as string, es: expect.stringContaining('50 pies') as string } });
+    const finding = shiftOf(taskFacts({ kind: 'priming', assignments: at, kitId: 'quarrybond-40' }), { kits }).find('flammable-vapor-and-sparks');
+    expect(finding?.outcome).toBe('met');
+    expect(finding?.text.en).toContain('50 feet');
+    expect(finding?.text.es).toContain('50 pies');
   });
 });
 
