@@ -1,6 +1,6 @@
 import { describe, expect, it } from '@jest/globals';
 import { InputError } from '../input-error';
-import { dilutionAirflowCfm, dilutionVentilation } from './dilution';
+import { dilutionAirflowCfm, dilutionAirflowCfmFromPounds, dilutionVentilation } from './dilution';
 import { m3PerHFromCfm } from '../quantities/units';
 
 const chloroform = { specificGravity: 1.32, evaporationPintsPerMin: 1.5 / 60, molarMassGPerMol: 133.4, targetPpm: 350, mixingFactor: 5 };
@@ -16,6 +16,18 @@ describe('[AIR-04] dilution ventilation', () => {
     // Computed in the reference: 284.8 and 1,424.
     expect(idealCfm).toBeCloseTo(284.8, 1);
     expect(requiredCfm).toBeCloseTo(1424, 0);
+  });
+
+  // The vapor constant 387 goes with pounds (training company page, read), 403 with pints times specific gravity (university sheet, read).
+  // One US pint of water weighs 1.0432 lb (473.176473 mL × 0.99705 g/mL at 25 °C ÷ 453.59237 g).
+  it('takes pounds by 387 and pints by 403, and both give one airflow within half a percent (trap 21)', () => {
+    const { evaporationPintsPerMin, specificGravity, ...rest } = chloroform;
+    const pounds = dilutionAirflowCfmFromPounds({ ...rest, evaporationLbPerMin: ((evaporationPintsPerMin * 473.176473) * specificGravity * 0.99705) / 453.59237 });
+    const pints = dilutionAirflowCfm(chloroform);
+    expect(Math.abs(pounds.requiredCfm / pints.requiredCfm - 1)).toBeLessThan(0.005);
+    // Derived by hand: 387e6 × 1 lb/min ÷ (100 g/mol × 1,000 ppm) = 3,870 cfm, times 2.
+    expect(dilutionAirflowCfmFromPounds({ evaporationLbPerMin: 1, molarMassGPerMol: 100, targetPpm: 1000, mixingFactor: 2 })).toEqual({ idealCfm: 3870, requiredCfm: 7740 });
+    expect(dilutionAirflowCfm({ specificGravity: 1, evaporationPintsPerMin: 1, molarMassGPerMol: 100, targetPpm: 1000, mixingFactor: 2 })).toEqual({ idealCfm: 4030, requiredCfm: 8060 });
   });
 
   it('agrees in metric within 2 % (derived: the two constants differ by 1.4 %)', () => {

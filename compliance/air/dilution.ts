@@ -6,6 +6,8 @@ import { MOLAR_VOLUME_L } from './units';
 
 /** For evaporation in pints per minute; not to be mixed with 387, which goes with pounds. The range of K is recalled. */
 const CFM_CONSTANT_PINTS = 403e6;
+/** For evaporation in pounds per minute: cubic feet of vapor that a pound-mole gives, times a million. */
+const CFM_CONSTANT_POUNDS = 387e6;
 export const DILUTION_SOURCE = sourced('Industrial ventilation manual, dilution for health', 'read', { note: 'Formula read in a university sheet; the range of the mixing factor K (1 to 10) recalled.' });
 export const DILUTION_METRIC_SOURCE = sourced('Metric form of the dilution formula at 25 °C', 'derived', { note: 'Differs from the 403 form by 1.4 %.' });
 const UNSUITABLE_SOURCE = sourced('Industrial ventilation practice', 'from-memory', { note: 'Dilution is unsuitable for dust and for sensitizers such as isocyanates.' });
@@ -32,6 +34,16 @@ export function dilutionAirflowCfm(vapor: {
   checkNumber('targetPpm', vapor.targetPpm, { above: 0 });
   checkNumber('mixingFactor', vapor.mixingFactor, { min: 1, max: 10 });
   const idealCfm = (CFM_CONSTANT_PINTS * vapor.specificGravity * vapor.evaporationPintsPerMin) / (vapor.molarMassGPerMol * vapor.targetPpm);
+  return { idealCfm, requiredCfm: idealCfm * vapor.mixingFactor };
+}
+
+/** Q' = 387·10⁶ × W ÷ (MW × C) in cfm, W in pounds per minute; Q = K × Q'. Pounds hold the density already: no specific gravity. */
+export function dilutionAirflowCfmFromPounds(vapor: { readonly evaporationLbPerMin: number; readonly molarMassGPerMol: number; readonly targetPpm: number; readonly mixingFactor: number }): { readonly idealCfm: number; readonly requiredCfm: number } {
+  checkNumber('evaporationLbPerMin', vapor.evaporationLbPerMin, { min: 0 });
+  checkNumber('molarMassGPerMol', vapor.molarMassGPerMol, { above: 0 });
+  checkNumber('targetPpm', vapor.targetPpm, { above: 0 });
+  checkNumber('mixingFactor', vapor.mixingFactor, { min: 1, max: 10 });
+  const idealCfm = (CFM_CONSTANT_POUNDS * vapor.evaporationLbPerMin) / (vapor.molarMassGPerMol * vapor.targetPpm);
   return { idealCfm, requiredCfm: idealCfm * vapor.mixingFactor };
 }
 

@@ -9,7 +9,7 @@ const results = (...pairs: [on: string, value: number][]) => pairs.map(([sampled
 const next = (asOf: string, ...pairs: [string, number][]) => monitoringSchedule(results(...pairs), LIMITS, asOf);
 
 describe('[SIL-08] scheduled monitoring, 29 CFR 1926.1153(d)(2)(iii)', () => {
-  // B2, derived from (d)(2)(iii)(B) to (E); the figures stand on the boundaries (trap 13).
+  // B2, derived from (d)(2)(iii)(B) to (E); the figures stand on the boundaries.
   it.each<[string, [string, number][], string, string | null, boolean]>([
     ['24.9, initial', [['2026-06-01', 24.9]], 'may-stop', null, false],
     ['25.0, initial', [['2026-06-01', 25]], 'repeat', '2026-12-01', false],
@@ -21,7 +21,7 @@ describe('[SIL-08] scheduled monitoring, 29 CFR 1926.1153(d)(2)(iii)', () => {
     ['20 then 22, 7 days apart', [['2026-01-05', 40], ['2026-06-01', 20], ['2026-06-08', 22]], 'may-stop', null, false],
     ['a high result opens it again', [['2026-01-05', 20], ['2026-06-01', 30]], 'repeat', '2026-12-01', false],
     ['a further low one keeps it ended', [['2026-01-05', 40], ['2026-05-01', 20], ['2026-05-08', 22], ['2026-05-09', 21]], 'may-stop', null, false],
-  ])('%s', (_name, pairs, step, dueOn, needsCorrectiveAction) => {
+  ])('%s (trap 13)', (_name, pairs, step, dueOn, needsCorrectiveAction) => {
     expect(next('2026-06-10', ...pairs)).toMatchObject({ step, dueOn, needsCorrectiveAction });
   });
 

@@ -9,7 +9,7 @@ describe('[AIR-01] 8-hour average', () => {
   it.each([
     ['A1, 29 CFR 1910.1000(d)(1)(ii), verified: ppm', hours([2, 150], [2, 75], [4, 50]), 81.25],
     ['B3, derived: µg/m³ of silica', hours([2, 180], [4, 40], [2, 10]), 67.5],
-    ['B3, derived: 10 h at 45, divided by 8, not by hours worked', hours([10, 45]), 56.25],
+    ['B3, derived: 10 h at 45, divided by 8, not by hours worked (trap 22)', hours([10, 45]), 56.25],
     ['A3, OSHA construction silica FAQ, verified: 15 min at 800 µg/m³', hours([0.25, 800]), 25],
     ['no work', [], 0],
   ])('%s', (_name, periods, expected) => {

@@ -5,8 +5,8 @@ import { containerLabelFor } from './container-label';
 const parts = kitFacts().parts;
 const powder = parts.filter(({ part }) => part === 'C');
 
-// 29 CFR 1910.1200(f)(6)(ii), read; rule of conduct 14: part, state, identifier, signal word, general hazard words.
-describe('[HAZ-03] label on a container of mixed or decanted material', () => {
+// 29 CFR 1910.1200(f)(6)(ii), read.
+describe('[HAZ-03] label on a container of mixed or decanted material: part, state, identifier, signal word, general hazard words (conduct 14)', () => {
   it('names parts and state, with the statements of the sheets and their label elements', () => {
     const label = containerLabelFor(parts, 'wet');
     expect(label.identifier).toBe('Quarrybond 40 part A + Quarrybond 40 part B + Quarrybond 40 part C');

@@ -7,7 +7,6 @@ import { SUPPLEMENTARY_STATEMENTS } from './supplementary-statements.data';
 const known = (code: string) => ({ isKnown: true, code, parts: code.split('+') });
 
 describe('[HAZ-07] reading statement codes', () => {
-  // Trap 18 of the reference: parse H360FD, H350i, H302+H332, EUH066; an unknown code is asked, never dropped.
   it.each([
     ['H360FD', ['H360FD']],
     ['H360Fd', ['H360Fd']],
@@ -20,11 +19,11 @@ describe('[HAZ-07] reading statement codes', () => {
     ['H332 + H302', ['H302+H332']],
     ['H302 + H312 + H332', ['H302+H312+H332']],
     ['H315+H317', ['H315', 'H317']],
-  ])('%s → %j', (text, codes) => {
+  ])('%s → %j (trap 18)', (text, codes) => {
     expect(readHazardCode(text)).toEqual(codes.map(known));
   });
 
-  it.each(['H999', 'H360X', 'H360fD', 'R43', 'H3141', 'toxic'])('asks about %s with the text as found', (text) => {
+  it.each(['H999', 'H360X', 'H360fD', 'R43', 'H3141', 'toxic'])('asks about %s with the text as found (trap 18: never dropped)', (text) => {
     const { codes, unknown } = readHazardCodes([text]);
     expect(codes).toEqual([]);
     expect(unknown[0]!.text).toBe(text);

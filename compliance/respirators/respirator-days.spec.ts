@@ -6,8 +6,8 @@ import { countRespiratorDays, silicaExamDue, type RespiratorBasis } from './resp
 
 const run = (from: string, count: number, basis: RespiratorBasis = 'silica-table-1', step = 1) => Array.from({ length: count }, (_, i) => ({ on: addDays(from, i * step), basis }));
 
-// 29 CFR 1926.1153(h)(1)(i), parallel texts read; trap 14: days required by the silica standard, looked ahead.
-describe('[SIL-20] respirator days', () => {
+// 29 CFR 1926.1153(h)(1)(i), parallel texts read.
+describe('[SIL-20] respirator days: required by the silica standard, looked ahead (trap 14, conduct 12)', () => {
   it('trigger at 30, not at 29', () => {
     expect(countRespiratorDays(run('2026-06-01', 29), '2026-12-01')).toMatchObject({ inLast12Months: 29, isTriggered: false, reachedOn: null });
     expect(countRespiratorDays(run('2026-06-01', 30), '2026-12-01')).toMatchObject({ inLast12Months: 30, isTriggered: true, reachedOn: '2026-06-30' });

@@ -23,7 +23,7 @@ describe.each(RULE_CASES.map((each) => [`${ids(each.duties)} ${each.ruleId}`, ea
 const ITEMS: Readonly<Record<string, string>> = {
   'silica-plan-elements': 'tasks controls-per-task housekeeping access',
   'silica-plan-available': 'plan-on-site copy-of-plan copy-of-standard',
-  'silica-training-contents': 'health-hazards tasks protection standard competent-person medical language shown',
+  'silica-training-contents': 'health-hazards tasks protection standard competent-person medical language shown certified',
   'silica-clinician-packet': 'standard duties exposure respirator earlier-exams',
   'air-record-contents': 'date task methods results laboratory protection people',
   'objective-data-contents': 'material source protocol work other resembles until',

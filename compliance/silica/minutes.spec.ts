@@ -18,14 +18,13 @@ describe('[SIL-04] Table 1 minutes of a person ((c)(3); overlapping time counts 
   });
 
   it.each([
-    // Exactly four hours never passes (trap 3).
     [[span(0, 240)], null],
     [[span(0, 241)], 240],
     [[span(0, 120), span(300, 420)], null],
     [[span(0, 120), span(300, 421)], 420],
     [[span(0, 120), span(60, 200), span(300, 400)], 340],
     [[span(300, 400), span(0, 200)], 340],
-  ])('%j passes four hours at %s', (spans, minute) => {
+  ])('%j passes four hours at %s; exactly four hours never does (trap 3)', (spans, minute) => {
     expect(minuteOfPassing(spans)).toBe(minute);
   });
 
@@ -58,5 +57,42 @@ describe('[SIL-04] Table 1 minutes of a person ((c)(3); overlapping time counts 
 
   it.each([[span(Number.NaN, 1)], [span(0, 2881)], [span(0, 1441)], [span(-1441, 0)], [span(5, 4)]])('%j cannot be', (times) => {
     expect(isPossible(times)).toBe(false);
+  });
+});
+
+describe('[SIL-04] planned and logged time together, to the stricter side (trap 4; OSHA staff answers: nobody is asked for a stopwatch)', () => {
+  const day = (planned: [number, number], ...logged: [number, number][]) => {
+    const person = personFacts();
+    const at = ([startMinute, endMinute]: [number, number]) => ({ personId: person.id, startMinute, endMinute });
+    return table1Time(shiftFacts({ people: [person], tasks: [taskFacts({ kind: 'edge-grinding', assignments: [at(planned)], logged: logged.map(at) })] }), person);
+  };
+
+  it.each<[string, [number, number], [number, number][], number, number]>([
+    ['nothing logged: the plan', [420, 660], [], 240, 0],
+    ['a log that ends early takes nothing off', [420, 660], [[420, 600]], 240, 0],
+    ['a log that runs on adds its part', [420, 660], [[420, 661]], 241, 1],
+    ['a log outside the plan adds all of it', [420, 600], [[700, 760]], 240, 60],
+    ['two logs that overlap count once', [420, 420], [[420, 480], [450, 500]], 80, 80],
+    ['a begun minute counts whole', [420, 660], [[659.5, 660.2]], 241, 1],
+    ['a begun minute of the plan counts whole too', [420, 660.1], [], 241, 0],
+  ])('%s', (_name, planned, logged, minutes, beyond) => {
+    expect(day(planned, ...logged)).toMatchObject({ minutes, minutesLoggedBeyondPlan: beyond, passesAtMinute: minutes > 240 ? 660 : null });
+  });
+
+  it('nothing logged ever lowers the sum, and neither half alone is above it', () => {
+    const span = fc.tuple(fc.double({ min: 0, max: 1200, noNaN: true }), fc.double({ min: 0, max: 300, noNaN: true })).map(([start, length]): [number, number] => [start, start + length]);
+    fc.assert(
+      fc.property(span, fc.array(span, { maxLength: 4 }), (planned, logged) => {
+        const both = day(planned, ...logged).minutes;
+        expect(both).toBeGreaterThanOrEqual(day(planned).minutes);
+        expect(both).toBeGreaterThanOrEqual(day([0, 0], ...logged).minutes);
+      }),
+    );
+  });
+
+  it('leaves out what another person logged, and a log that cannot be', () => {
+    const person = personFacts();
+    const task = taskFacts({ kind: 'edge-grinding', assignments: [{ personId: 'dov', startMinute: 420, endMinute: 480 }], logged: [{ personId: 'marisol', startMinute: 480, endMinute: 700 }, { personId: 'dov', startMinute: 600, endMinute: 500 }] });
+    expect(table1Time(shiftFacts({ people: [person], tasks: [task] }), person)).toMatchObject({ minutes: 60, minutesLoggedBeyondPlan: 0 });
   });
 });

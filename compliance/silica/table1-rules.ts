@@ -184,7 +184,7 @@ export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
       words(`${person.name}: ${duration(time.minutes)} of Table 1 work today, all jobs.`, `${person.name}: ${duration(time.minutes)} de trabajo de la Tabla 1 hoy, en todas las obras.`),
       {
         inputs: { 'Table 1 time, minutes': time.minutes, 'of it on other jobs, minutes': time.minutesElsewhere, 'of it logged past the plan, minutes': time.minutesLoggedBeyondPlan, setting: facts.setting, row: silica.option.row },
-        results: { 'protection factor, at least': answer.apf },
+        results: { 'protection factor, at least': answer.apf, ...(answer.apf === null ? {} : { 'particle filter by law': 'N, R or P, 95 or more' }) },
         whatWouldChange: whatMinutesChange(silica.option[table1Place(facts.setting)], time.minutes),
       },
     );

@@ -34,8 +34,7 @@ describe('surface profiles', () => {
     expect(profileAnswer(3, ['grinding']).outcome).toBe('met');
   });
 
-  // Rule of conduct 4: a coarse grind with primer in place of CSP 5 is the supplier's written exception, never "meets CSP 5".
-  it('records a coarse grind for CSP 5 as the written exception it is', () => {
+  it('records a coarse grind for CSP 5 as the written exception it is, never "meets CSP 5" (conduct 4)', () => {
     const answer = profileAnswer(5, ['grinding'], exception);
     expect(answer.outcome).toBe('exception');
     expect(answer.reason.en).toContain('not 5');

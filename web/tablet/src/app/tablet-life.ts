@@ -3,6 +3,7 @@ import { Day } from './day/day';
 import { Outbox } from './outbox/outbox';
 import { Sender } from './outbox/sender';
 import { Storage } from './outbox/storage';
+import { KeptSheets } from './sheets/kept-sheets';
 
 const askAgainMs = 60_000;
 
@@ -12,6 +13,7 @@ export class TabletLife {
   private readonly outbox = inject(Outbox);
   private readonly sender = inject(Sender);
   private readonly day = inject(Day);
+  private readonly sheets = inject(KeptSheets);
   private readonly storage = inject(Storage);
   private readonly destroyRef = inject(DestroyRef);
 
@@ -36,7 +38,7 @@ export class TabletLife {
       clearInterval(timer);
     });
     // Storage that cannot be opened is said on the page (Storage.trouble); the office is asked all the same.
-    await Promise.all([this.outbox.load(), this.day.load()]).catch((error: unknown) => console.error(error));
+    await Promise.all([this.outbox.load(), this.day.load(), this.sheets.load()]).catch((error: unknown) => console.error(error));
     void this.storage.askToPersist();
     talk();
   }
@@ -44,5 +46,6 @@ export class TabletLife {
   private async talk(): Promise<void> {
     await this.sender.sendNow();
     await this.day.refresh();
+    await this.sheets.keepFor(this.day.day());
   }
 }

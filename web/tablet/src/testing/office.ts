@@ -20,6 +20,8 @@ export class Office {
   /** An envelope the answer does not name. */
   unanswered = '';
   day: TabletDay | null = null;
+  /** Sheet files by revision id. */
+  readonly files = new Map<string, string>();
   /** What a PIN check is answered with. */
   pinAnswer: Answer = { status: 204, body: null };
 
@@ -29,6 +31,8 @@ export class Office {
 
   private async fetch(path: string, request: { readonly body: string | null }): Promise<unknown> {
     this.requests += 1;
+    const file = this.files.get(/^\/api\/tablet\/sheets\/([^/]+)\/file$/.exec(path)?.[1] ?? '');
+    if (file !== undefined && this.status === 200) return { ok: true, status: 200, arrayBuffer: async () => new TextEncoder().encode(file).buffer };
     const answer = this.status === 200 ? this.answer(path, request.body) : { status: this.status, body: this.problem };
     if (this.loseAnswers) throw new TypeError('network changed');
     const text = JSON.stringify(answer.body);

@@ -64,7 +64,7 @@ describe('a task', () => {
     expect(scraping?.state).toBe('may-not-start');
   });
 
-  it('stops at a critical No and does not say the office knows before it does', () => {
+  it('stops at a critical No and does not say the office knows before it does (conduct 11)', () => {
     const stop = { kind: 'start-check', taskId: ids.mixing, answers: no('shroud') } as const;
     expect(mixing([posted(stop)])).toMatchObject({ state: 'stopped', stops: [{ text: 'Text of shroud', isHeard: false }] });
     expect(mixing([posted(stop, later)])).toMatchObject({ state: 'stopped', stops: [{ isHeard: true }] });

@@ -6,8 +6,9 @@ import { Frame } from '../frame/frame';
 import { injectJob } from '../jobs/found-job';
 import { NoJob } from '../jobs/no-job';
 import { Words } from '../words/words';
+import { KeptSheets } from './kept-sheets';
 
-/** One sheet, page by page, with signal. */
+/** One sheet, page by page: from the tablet where it is kept, else from the office. */
 @Component({
   selector: 'kb-sheet-page',
   imports: [Frame, NoJob, Empty, PageViewer],
@@ -49,6 +50,7 @@ export class SheetPage {
   readonly shiftId = input.required<string>();
   readonly revisionId = input.required<string>();
   private readonly api = inject(TabletApi);
+  private readonly kept = inject(KeptSheets);
   protected readonly words = inject(Words);
   protected readonly found = injectJob(this.shiftId);
   protected readonly file = signal<ArrayBuffer | null>(null);
@@ -71,7 +73,7 @@ export class SheetPage {
     this.trouble.set('');
     this.file.set(null);
     try {
-      this.file.set(await this.api.readSheetFile(this.revisionId()));
+      this.file.set((await this.kept.read(this.revisionId())) ?? (await this.api.readSheetFile(this.revisionId())));
     } catch (error) {
       if (!(error instanceof CallFailed)) throw error;
       const say = this.words.say().sheets;

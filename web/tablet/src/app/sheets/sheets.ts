@@ -7,8 +7,9 @@ import { Frame } from '../frame/frame';
 import { injectJob } from '../jobs/found-job';
 import { NoJob } from '../jobs/no-job';
 import { Words } from '../words/words';
+import { KeptSheets } from './kept-sheets';
 
-/** The safety data sheets of a job. They come from the office: without signal the page says where else they are. */
+/** The safety data sheets of a job. Those kept on the tablet open without signal; for the others the page says where else they are. */
 @Component({
   selector: 'kb-sheets',
   imports: [Frame, NoJob, Note, Empty, RouterLink],
@@ -17,7 +18,7 @@ import { Words } from '../words/words';
     @if (found(); as job) {
       @if (job.state === 'good') {
         <kb-frame [title]="say.sheets.heading" [kicker]="job.view.text.jobName" [back]="['/jobs', shiftId()]" [backLabel]="say.job.backToJob">
-          @if (isOffline()) {
+          @if (isOffline() && isMissing(job.view.job.sheets)) {
             <kb-note kind="caution" [announce]="true">{{ say.sheets.offline }}</kb-note>
           }
           @if (job.view.job.sheets.length === 0) {
@@ -26,10 +27,13 @@ import { Words } from '../words/words';
           <ul class="kb-plain">
             @for (sheet of job.view.job.sheets; track sheet.revisionId) {
               <li>
-                @if (isOffline()) {
+                @if (isOffline() && !kept().has(sheet.revisionId)) {
                   <span class="sheet">{{ sheet.productName }}</span>
                 } @else {
                   <a class="sheet" [routerLink]="[sheet.revisionId]">{{ sheet.productName }}</a>
+                }
+                @if (kept().has(sheet.revisionId)) {
+                  <span class="kb-quiet">{{ say.sheets.kept }}</span>
                 }
               </li>
             }
@@ -60,7 +64,12 @@ import { Words } from '../words/words';
 export class Sheets {
   readonly shiftId = input.required<string>();
   private readonly connection = inject(Connection);
+  protected readonly kept = inject(KeptSheets).kept;
   protected readonly words = inject(Words);
   protected readonly found = injectJob(this.shiftId);
   protected readonly isOffline = computed(() => this.connection.state() !== 'online' && this.connection.state() !== 'checking');
+
+  protected isMissing(sheets: readonly { readonly revisionId: string }[]): boolean {
+    return sheets.some(({ revisionId }) => !this.kept().has(revisionId));
+  }
 }

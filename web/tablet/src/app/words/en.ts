@@ -226,7 +226,8 @@ export const en = {
   },
   sheets: {
     heading: 'Safety data sheets',
-    offline: 'No signal, so the sheets cannot open here. Use the code on the wall with your own phone, then the lead’s phone, then the binder.',
+    kept: 'Kept on this tablet: opens with no signal.',
+    offline: 'No signal, and not every sheet is kept here. Use the code on the wall with your own phone, then the lead’s phone, then the binder.',
     none: 'No sheet belongs to this list.',
     loading: 'Getting the sheet. This can take a minute on a weak signal.',
     failed: 'The sheet could not be opened. Use the code on the wall, then the binder.',

@@ -231,7 +231,8 @@ export const es: Messages = {
   },
   sheets: {
     heading: 'Hojas de datos de seguridad',
-    offline: 'Sin señal, las hojas no se abren aquí. Use el código de la pared con su teléfono, luego el teléfono del líder, luego la carpeta.',
+    kept: 'Guardada en esta tableta: se abre sin señal.',
+    offline: 'Sin señal, y no todas las hojas están guardadas aquí. Use el código de la pared con su teléfono, luego el teléfono del líder, luego la carpeta.',
     none: 'Esta lista no tiene hojas.',
     loading: 'Trayendo la hoja. Con poca señal puede tardar un minuto.',
     failed: 'No se pudo abrir la hoja. Use el código de la pared, luego la carpeta.',
