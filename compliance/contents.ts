@@ -1,5 +1,5 @@
 import { InputError } from './input-error';
-import { addYears, checkIsoDate, type IsoDate } from './iso-date';
+import { addYears, checkDoneOn, type IsoDate } from './iso-date';
 import { type Words } from './outcome';
 import { met, undecided, unmet, WHO, type Rule, type Verdict } from './rule';
 import { type Source } from './source';
@@ -66,9 +66,8 @@ export function yearlyRule({ everyYears = 1, ...described }: Described & { reado
     ...described,
     evaluate({ lastDoneOn }, asOf) {
       if (lastDoneOn === null) return unmet(words('Not done yet.', 'Aún no se ha hecho.'), { inputs: { 'last done': null }, whatWouldChange: words('Do it and record the day.', 'Hágalo y anote el día.'), dueOn: asOf });
-      const dueOn = addYears(checkIsoDate('lastDoneOn', lastDoneOn), everyYears);
+      const dueOn = addYears(checkDoneOn('lastDoneOn', lastDoneOn, asOf), everyYears);
       const extra = { inputs: { 'last done': lastDoneOn }, dueOn };
-      if (lastDoneOn > asOf) throw new InputError('lastDoneOn', `is later than ${asOf}`);
       return asOf <= dueOn ? met(words(`Done; next by ${dueOn}.`, `Hecho; la próxima a más tardar el ${dueOn}.`), extra) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Do it and record the day.', 'Hágalo y anote el día.') });
     },
   };

@@ -21,6 +21,12 @@ export function checkIsoDate(field: string, text: string): IsoDate {
   return text;
 }
 
+/** Returns the day on which something was done; throws an InputError naming `field` when it lies after `asOf`: a plan is not a deed. */
+export function checkDoneOn(field: string, text: string, asOf: IsoDate): IsoDate {
+  if (checkIsoDate(field, text) > checkIsoDate('asOf', asOf)) throw new InputError(field, `is later than ${asOf}`);
+  return text;
+}
+
 function toDate(day: IsoDate, field = 'date'): Date {
   return new Date(`${checkIsoDate(field, day)}T00:00:00Z`);
 }

@@ -32,8 +32,9 @@ const row = (substanceId: string, jurisdictionId: string, ...[scope, kind, value
   source,
 });
 
-const SILICA_IN_FORCE = '2017-09-23';
-const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'Enforced in construction from 23 September 2017: OSHA memorandum of 25 June 2018.' });
+/** (k): obligations from 23 June 2017. Enforcement, not the rule, waited until 23 September. */
+const SILICA_IN_FORCE = '2017-06-23';
+const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'To be followed from 23 June 2017 (trade article; paragraph (k) recalled), enforced from 23 September 2017: OSHA memorandum of 25 June 2018.' });
 const NIOSH_MDI = sourced('NIOSH pocket guide and IDLH documentation, MDI', 'read');
 const OSHA_CHEMICAL_PAGE = (section: string): Source => usFederal(section, 'read', { note: 'As shown on the OSHA chemical page, which lists construction and general industry apart.' });
 const MDA = (paragraph: string): Source => usFederal('1926.60', 'partly', { paragraph, note: 'Figures read in the proposal of 12 May 1989; that the final text kept them is recalled.' });

@@ -82,8 +82,8 @@ describe('[AIR-02] limits', () => {
   });
 
   it('asks for the value in force on the day', () => {
-    expect(findLimit('rcs', 'us-federal', 'twa-8h', '2017-09-22')).toMatchObject({ isDecided: false });
-    expect(findLimit('rcs', 'us-federal', 'twa-8h', '2017-09-23')).toMatchObject({ isDecided: true });
+    expect(findLimit('rcs', 'us-federal', 'twa-8h', '2017-06-22')).toMatchObject({ isDecided: false });
+    expect(findLimit('rcs', 'us-federal', 'twa-8h', '2017-06-23')).toMatchObject({ isDecided: true });
   });
 
   it('converts explicitly: ppm, ppb, µg and mg, and refuses to convert particle counts (trap 23)', () => {

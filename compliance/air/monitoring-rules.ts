@@ -1,4 +1,4 @@
-import { type IsoDate } from '../iso-date';
+import { checkDoneOn, type IsoDate } from '../iso-date';
 import { met, undecided, unmet, WHO, type Rule } from '../rule';
 import { usFederal } from '../source';
 import { words } from '../words';
@@ -66,6 +66,7 @@ export const noticeOfAssessment: Rule<NoticeFacts> = {
   source: NOTICE_WORKING_DAYS.construction.source,
   duties: ['SIL-11'],
   evaluate({ assessmentCompletedOn, scope, holidays, toldOn, isAboveLimit, namesCorrectiveAction }, asOf) {
+    if (toldOn !== null) checkDoneOn('toldOn', toldOn, asOf);
     const { dueOn, earlierDueOn } = noticeDate(assessmentCompletedOn, scope, (day) => holidays.includes(day));
     const extra = { inputs: { 'assessment completed': assessmentCompletedOn, 'told on': toldOn, 'above the limit': isAboveLimit }, dueOn, results: { 'earlier reading': earlierDueOn } };
     if ((toldOn ?? asOf) > dueOn) return unmet(words(`Was due by ${dueOn}.`, `Debía informarse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Post it now, and keep the date.', 'Publíquelo ya y guarde la fecha.') });

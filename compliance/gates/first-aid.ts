@@ -10,7 +10,7 @@ const said = (text: string | null): boolean => text !== null && text.trim() !== 
 export const firstAidRule: ShiftRule<ShiftContext> = {
   id: 'first-aid-named',
   title: words('First aid, number and address', 'Primeros auxilios, número y dirección'),
-  source: usFederal('1926.50', 'from-memory', { paragraph: '(c), (e), (f); 1926.23, .35' }),
+  source: usFederal('1926.50', 'partly', { paragraph: '(c), (e), (f); 1926.23, .35', note: '1926.50 read, in the wording of (f) before 2019: without a clinic near, (c) asks a valid first-aid certificate; the other sections recalled.' }),
   duties: ['GATE-05'],
   topic: 'gate',
   holds: true,
@@ -28,7 +28,7 @@ export const firstAidRule: ShiftRule<ShiftContext> = {
   },
   line: ({ facts: { firstAid } }, { outcome }) =>
     outcome === 'met'
-      ? words(`First aid today: ${firstAid.firstAiderName}. Call ${firstAid.emergencyNumber}.`, `Primeros auxilios hoy: ${firstAid.firstAiderName}. Llame al ${firstAid.emergencyNumber}.`)
+      ? words(`First aid today, card valid: ${firstAid.firstAiderName}. Call ${firstAid.emergencyNumber}.`, `Primeros auxilios hoy, carnet vigente: ${firstAid.firstAiderName}. Llame al ${firstAid.emergencyNumber}.`)
       : words('First aid, number or address not named.', 'Faltan primeros auxilios, número o dirección.'),
 };
 
@@ -38,7 +38,7 @@ const BURNS_EYES = ['H314', 'H318'];
 export const eyewashRule: ShiftRule<TaskContext> = {
   id: 'eyewash-in-reach',
   title: words('Eyewash for what burns', 'Lavaojos para lo que quema'),
-  source: usFederal('1926.50', 'read', { paragraph: '(g)', note: 'Quotation read.' }),
+  source: usFederal('1926.50', 'read', { paragraph: '(g)', note: 'Read.' }),
   duties: ['GATE-05', 'PPE-02'],
   topic: 'gate',
   holds: true,

@@ -54,7 +54,7 @@ const US_FEDERAL: JurisdictionPack = {
   id: 'us-federal',
   version: '2026.12',
   name: words('US federal rules', 'Reglas federales de EE. UU.'),
-  silica: { limitMicrogramsPerM3: 50, actionLevelMicrogramsPerM3: 25, limitSource: usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)', inForceFrom: '2017-09-23' }), table1Rows: 'all', noticeScope: 'construction' },
+  silica: { limitMicrogramsPerM3: 50, actionLevelMicrogramsPerM3: 25, limitSource: usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)', inForceFrom: '2017-06-23' }), table1Rows: 'all', noticeScope: 'construction' },
   apfJurisdictionId: 'us-federal',
   coverage: [
     complete('silica-limits', usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)' })),

@@ -36,7 +36,9 @@ export function protectedLevel(twaDb: number, weighting: Weighting, nrrDb: numbe
 export function protectedLevelDual(twaDb: number, weighting: Weighting, plugNrrDb: number, muffNrrDb: number): ProtectedLevel {
   checkNumber('twaDb', twaDb, { min: 0, max: 160 });
   const higher = Math.max(rating('plugNrrDb', plugNrrDb), rating('muffNrrDb', muffNrrDb));
-  return { levelDba: twaDb - attenuation(higher, weighting) - DUAL_BONUS_DB, method: 'app-b-dual', source: DUAL_SOURCE };
+  // The five decibels come after the seven are off: a weak pair of 5 gives 3 by A-weighted sound, not 5.
+  const pair = Math.max(0, (weighting === 'A' ? higher - A_WEIGHTING_DB : higher) + DUAL_BONUS_DB);
+  return { levelDba: twaDb - pair, method: 'app-b-dual', source: DUAL_SOURCE };
 }
 
 /** Half of the attenuation, as OSHA's field practice counts it: TWA − (NRR − 7) × 0.5. */

@@ -1,5 +1,5 @@
 import { addWorkingDays } from '../air/notice-date';
-import { addYears, checkIsoDate, type IsoDate } from '../iso-date';
+import { addYears, checkDoneOn, type IsoDate } from '../iso-date';
 import { met, notApplicable, undecided, unmet, WHO, type Rule } from '../rule';
 import { sourced, usFederal } from '../source';
 import { words } from '../words';
@@ -24,10 +24,11 @@ export const mayDiscardRecord: Rule<RecordFacts> = {
 };
 
 export interface AccessFacts {
+  /** The day the employer received the request: the 15 days begin there. */
   readonly requestedOn: IsoDate;
   readonly givenOn: IsoDate | null;
   readonly holidays: readonly IsoDate[];
-  /** The person was told why it takes longer and the earliest date. */
+  /** Within the 15 working days the person was told why it takes longer and the earliest date. */
   readonly isDelayExplained: boolean;
 }
 
@@ -39,9 +40,9 @@ export const accessInTime: Rule<AccessFacts> = {
   evaluate({ requestedOn, givenOn, holidays, isDelayExplained }, asOf) {
     const { dueOn, earlierDueOn } = accessDueOn(requestedOn, (day) => holidays.includes(day));
     const extra = { inputs: { 'requested on': requestedOn, 'given on': givenOn }, dueOn, results: { 'earlier reading': earlierDueOn } };
-    if (givenOn !== null && checkIsoDate('givenOn', givenOn) <= dueOn) return met(words(`Given on ${givenOn}.`, `Entregado el ${givenOn}.`), extra);
+    if (givenOn !== null && checkDoneOn('givenOn', givenOn, asOf) <= dueOn) return met(words(`Given on ${givenOn}.`, `Entregado el ${givenOn}.`), extra);
     if ((givenOn ?? asOf) > dueOn && !isDelayExplained) return unmet(words(`Was due by ${dueOn}.`, `Debía entregarse a más tardar el ${dueOn}.`), { ...extra, whatWouldChange: words('Give it now, and say why it took longer.', 'Entréguelo ya y diga por qué tardó más.') });
-    if (givenOn !== null) return met(words('Given later; the reason and date were told.', 'Entregado después; se dijeron la razón y la fecha.'), extra);
+    if (givenOn !== null) return met(words('Given later; the reason and date were told in time.', 'Entregado después; la razón y la fecha se dijeron a tiempo.'), extra);
     return undecided(words(`Not given yet: by ${earlierDueOn} at the safest.`, `Aún sin entregar: lo más seguro, a más tardar el ${earlierDueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Hand over the export.', 'Entregue la exportación.') });
   },
 };
@@ -57,6 +58,7 @@ export const rightsNotice: Rule<RightsNoticeFacts> = {
   source: RIGHTS_NOTICE_SOURCE,
   duties: ['REC-05'],
   evaluate({ employedOn, lastToldOn }, asOf) {
+    if (lastToldOn !== null) checkDoneOn('lastToldOn', lastToldOn, asOf);
     const dueOn = rightsNoticeDueOn(employedOn, lastToldOn);
     const extra = { inputs: { 'employed on': employedOn, 'last told': lastToldOn }, dueOn };
     const wasToldHere = lastToldOn !== null && lastToldOn >= employedOn;
@@ -81,7 +83,7 @@ export const safetyMeetings: Rule<MeetingFacts> = {
     if (everyWorkingDays === null) return notApplicable(words('The law here sets no interval.', 'La ley de aquí no fija un intervalo.'));
     const inputs = { 'every, working days': everyWorkingDays, 'last held': lastHeldOn };
     if (lastHeldOn === null) return unmet(words('None held yet.', 'Aún no se ha hecho ninguna.'), { inputs, dueOn: asOf, whatWouldChange: words('Hold one.', 'Haga una.') });
-    const dueOn = addWorkingDays(checkIsoDate('lastHeldOn', lastHeldOn), everyWorkingDays, (day) => holidays.includes(day));
+    const dueOn = addWorkingDays(checkDoneOn('lastHeldOn', lastHeldOn, asOf), everyWorkingDays, (day) => holidays.includes(day));
     return asOf <= dueOn ? met(words(`Next by ${dueOn}.`, `La próxima a más tardar el ${dueOn}.`), { inputs, dueOn }) : unmet(words(`Was due by ${dueOn}.`, `Debía hacerse a más tardar el ${dueOn}.`), { inputs, dueOn, whatWouldChange: words('Hold one.', 'Haga una.') });
   },
 };

@@ -1,4 +1,4 @@
-import { addDays, addYears, checkIsoDate, type IsoDate } from '../iso-date';
+import { addDays, addYears, checkDoneOn, checkIsoDate, type IsoDate } from '../iso-date';
 import { usFederal } from '../source';
 
 export const MEDICAL_TRIGGER_SOURCE = usFederal('1926.1153', 'parallel-text', { paragraph: '(h)(1)(i)', note: 'OAR 437-002-1062 and WAC 296-840-145 read. Only respirators required by this standard count.' });
@@ -74,7 +74,7 @@ export interface ExamDue {
 export function silicaExamDue(person: { readonly assignedOn: IsoDate; readonly lastExamOn: IsoDate | null; readonly clinicianWantsBy: IsoDate | null }, asOf: IsoDate): ExamDue {
   checkIsoDate('assignedOn', person.assignedOn);
   checkIsoDate('asOf', asOf);
-  const lastExamOn = person.lastExamOn === null ? null : checkIsoDate('lastExamOn', person.lastExamOn);
+  const lastExamOn = person.lastExamOn === null ? null : checkDoneOn('lastExamOn', person.lastExamOn, asOf);
   const isStillGood = lastExamOn !== null && addYears(lastExamOn, EXAM_YEARS) >= person.assignedOn;
   const regular = isStillGood ? addYears(lastExamOn, EXAM_YEARS) : addDays(person.assignedOn, INITIAL_EXAM_DAYS);
   const sooner = person.clinicianWantsBy === null ? regular : checkIsoDate('clinicianWantsBy', person.clinicianWantsBy);

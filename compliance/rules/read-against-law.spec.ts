@@ -1,17 +1,22 @@
 import { describe, expect, it } from '@jest/globals';
 import { basisFacts, equipmentFacts, personFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
+import { LIMIT_ROWS } from '../air/limits.data';
 import { monitoringDue } from '../air/monitoring-rules';
 import { dilutionEnough } from '../air/air-rules';
 import { answerShift } from '../answer-shift';
 import { type FloorFacts, type ShiftFacts, type TaskFacts } from '../facts';
+import { protectedLevelDual } from '../noise/hearing-protection';
 import { hearingProtection } from '../noise/noise-rules';
 import { type Finding } from '../outcome';
 import { checkWearer, type Wearer } from '../respirators/fit-test';
 import { medicalSurveillance } from '../respirators/respirator-rules';
 import { addDays } from '../iso-date';
+import { type Rule } from '../rule';
+import { TABLE_1_CONDITIONS } from '../silica/table1-conditions.data';
 import { TABLE_1 } from '../silica/table1.data';
 import { DEMAND_WORDS } from '../silica/table1-demands.data';
 import { RULE_CASES } from './cases';
+import { findRule } from './registry';
 
 /** Faults found by reading rules line by line against the paragraph they cite. The text that was read stands beside each. */
 const DAY = '2026-12-01';
@@ -174,5 +179,49 @@ describe('1926.152(f)(3), same words in 8 CCR 1935(c), read', () => {
 describe('1926.57, read', () => {
   it('[AIR-04] fresh air is cited to the limits and the duration, not to local exhaust, (b)', () => {
     expect(dilutionEnough.source.paragraph).toBe('(a), (d)');
+  });
+});
+
+describe('what lies ahead is not done', () => {
+  // 1926.1153(h)(2) "has received a medical examination"; (d)(2)(vi) and 1910.1020(e), (g): told, given, held. Plain reading.
+  it.each(['silica-medical-surveillance', 'silica-notice-of-assessment', 'record-access-in-time', 'record-rights-notice', 'safety-meeting-cadence', 'silica-plan-review'])('%s refuses a date after today by name', (ruleId) => {
+    const doneOn = { lastExamOn: '2027-01-15', toldOn: '2027-01-15', givenOn: '2027-01-15', lastToldOn: '2027-01-15', lastHeldOn: '2027-01-15', lastDoneOn: '2027-01-15' };
+    const days = Array.from({ length: 30 }, (_, i) => ({ on: addDays('2026-06-01', i), basis: 'silica-table-1' as const }));
+    const facts = { days, assignedOn: '2026-12-01', clinicianWantsBy: null, assessmentCompletedOn: DAY, scope: 'construction', holidays: [], isAboveLimit: false, namesCorrectiveAction: null, requestedOn: DAY, isDelayExplained: false, employedOn: '2026-01-02', everyWorkingDays: 10, ...doneOn };
+    const rule = findRule(ruleId) as Rule<typeof facts>;
+    expect(() => rule.evaluate(facts, DAY)).toThrow(/^(lastExamOn|toldOn|givenOn|lastToldOn|lastHeldOn|lastDoneOn): is later than/);
+  });
+});
+
+describe('1926.1153(c)(2), read in WAC 296-840-110(2), same words', () => {
+  it('[SIL-05] holds all eight conditions: exhaust, water, and six for a cab or booth', () => {
+    expect(TABLE_1_CONDITIONS.map(({ source }) => source.paragraph)).toEqual(['(c)(2)(i)', '(c)(2)(ii)', ...['A', 'B', 'C', 'D', 'E', 'F'].map((letter) => `(c)(2)(iii)(${letter})`)]);
+    expect(TABLE_1_CONDITIONS[6]?.text.en).toBe('intake filter 95 % efficient from 0.3 to 10.0 µm, for example MERV-16');
+  });
+});
+
+describe('WAC 296-307-63215: the higher rating less 2 in all for A-weighted sound', () => {
+  it.each([[20, 18], [7, 5], [5, 3], [1, 0]])('[NOI-03] plug and muff of %d take off %d dB', (nrr, taken) => {
+    expect(95 - protectedLevelDual(95, 'A', nrr, nrr).levelDba).toBe(taken);
+  });
+});
+
+describe('1926.50(c), read: where no clinic is near, a person with a valid first-aid certificate', () => {
+  it('[GATE-05] asks the card, not only a name', () => {
+    expect(shiftOf(taskFacts({ kind: 'inspection', assignments: at })).find('first-aid-named')?.text.en).toBe('First aid today, card valid: Tomasz Reyes. Call 911.');
+  });
+});
+
+describe('marks that say more than was read', () => {
+  const maskSource = (task: TaskFacts, others: readonly TaskFacts[] = []) => answerShift(shiftFacts({ tasks: [task, ...others] }), '2026-12-03T12:00:00Z').tasks[0]!.respirator;
+
+  // (f) speaks of sweeping and blowing, (c)(1) of rows: neither says that emptying a collector or clean-up needs no mask.
+  it('[SIL-15] "no mask" for clean-up is marked as a judgement', () => {
+    expect(maskSource(taskFacts({ kind: 'clean-up', assignments: at }))).toMatchObject({ outcome: 'none-required', source: { verified: 'partly' } });
+  });
+
+  // (k): obligations from 23 June 2017; the memorandum of 25 June 2018 speaks of enforcement from 23 September.
+  it('the silica limit holds from the day of the rule, not of its enforcement', () => {
+    expect(LIMIT_ROWS.find(({ id }) => id.startsWith('limit/rcs/us-federal/construction/twa-8h'))?.source.inForceFrom).toBe('2017-06-23');
   });
 });

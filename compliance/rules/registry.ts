@@ -29,6 +29,7 @@ import { APF_ROWS } from '../respirators/apf.data';
 import { fitTestRecord, medicalSurveillance, respiratorByRatio, respiratorProgram, respiratorProgramEvaluation, voluntaryUse, wearerReady } from '../respirators/respirator-rules';
 import { type ListedRule } from '../rule';
 import { LISTED_SHIFT_RULES } from '../shift-rules';
+import { TABLE_1_CONDITIONS } from '../silica/table1-conditions.data';
 import { TABLE_1 } from '../silica/table1.data';
 import { type Source } from '../source';
 import { COATING_RANGES, METHOD_RANGES, PROFILE_CHIPS } from '../surface/profiles.data';
@@ -106,6 +107,7 @@ const under = (source: Source, rows: readonly { readonly id: string }[]): readon
 /** Every table of facts with the source of each row. */
 export const DATA_TABLES: readonly DataTable[] = [
   table('table-1', 'Silica Table 1', 'Tabla 1 de sílice', TABLE_1),
+  table('table-1-conditions', 'Conditions of Table 1 for every row', 'Condiciones de la Tabla 1 para cada fila', TABLE_1_CONDITIONS),
   table('protection', 'Protection by hazard and task', 'Protección por peligro y tarea', PROTECTION),
   table('live-lines', 'Lines at the start of a task', 'Líneas al empezar una tarea', LIVE_LINES),
   table('limits', 'Limits of substances', 'Límites de sustancias', LIMIT_ROWS),

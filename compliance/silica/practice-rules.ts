@@ -50,7 +50,7 @@ export const housekeepingRule: ShiftRule<SilicaTask> = {
 export const accessRule: ShiftRule<SilicaTask> = {
   id: 'silica-access',
   title: words('Others kept out of the dust', 'Otros lejos del polvo'),
-  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(1)(iv)', note: 'Read in WAC 296-840-140(4)(a).' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(1)(iv)', note: 'Read in WAC 296-840-140(4)(a): "when necessary". The agency reads that as where a mask is required or the limit is passed (81 FR 16803, quoted in its questions and answers); elsewhere it is good practice.' }),
   duties: ['GATE-07'],
   topic: 'access',
   holds: false,

@@ -28,7 +28,7 @@ export function silicaRespirator(decision: SilicaDecision, place: Table1Place, t
     case 'none':
       return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: SCOPE };
     case 'housekeeping':
-      return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: usFederal('1926.1153', 'read', { paragraph: '(f)' }) };
+      return { outcome: 'none-required', apf: null, label: words('none', 'ninguna'), source: usFederal('1926.1153', 'partly', { paragraph: '(f)', note: 'That wet or vacuumed clean-up needs no mask is a judgement; where dust is seen, assess it under (d).' }) };
     case 'incidental':
       return { outcome: 'none-required', apf: null, label: words('none, part of Table 1 work', 'ninguna, parte del trabajo de la Tabla 1'), source: usFederal('1926.1153', 'partly', { paragraph: '(c)(1)', note: 'That emptying the collector belongs to the Table 1 work is a judgement; no text says so.' }) };
     case 'table-1':

@@ -138,7 +138,7 @@ export const TABLE_1: readonly Table1Option[] = [
   {
     id: 'vii', row: 'vii', tool: 'drill', heading: { en: 'Handheld or stand-mounted drill', es: 'Taladro de mano o de soporte' }, method: 'vacuum',
     demands: [MANUAL, 'shroud', 'airflow-makers-figure', 'filter-99-percent', 'filter-cleaning', 'hepa-vacuum-for-holes'], outdoors: NONE, indoors: NONE,
-    source: row('vii', 'read', 'Row read in a reproduction and a training text.'),
+    source: row('vii', 'read', 'Row read whole in a tool maker\'s reproduction.'),
   },
   {
     id: 'viii', row: 'viii', tool: 'dowel-drilling-rig', heading: { en: 'Dowel drilling rig for concrete', es: 'Perforadora de pasadores para concreto' }, method: 'vacuum',
@@ -160,7 +160,7 @@ export const TABLE_1: readonly Table1Option[] = [
   {
     id: 'x-b', row: 'x', tool: 'chipping-tool', heading: CHIPPING, method: 'vacuum',
     demands: [MANUAL, 'shroud', 'airflow-makers-figure', 'filter-99-percent', 'filter-cleaning'], outdoors: TEN_OVER_4, indoors: ALWAYS_10,
-    source: row('x', 'partly', 'Controls read in a reproduction; respirator values recalled.'),
+    source: row('x', 'partly', 'Controls read in a tool maker\'s reproduction; respirator values recalled.'),
   },
   {
     id: 'xi', row: 'xi', tool: 'mortar-removal-grinder', heading: { en: 'Handheld grinder for mortar removal', es: 'Amoladora de mano para quitar mortero' }, method: 'vacuum',
