@@ -138,7 +138,11 @@ export interface PersonRespirator {
   readonly label: string;
   readonly clearedOn: string | null;
   readonly fitTestedOn: string | null;
+  /** By taste or smell, or counted with a fit factor; absent while nobody has said. */
+  readonly fitTestKind?: FitTestKind | null;
 }
+export const fitTestKinds = ['qualitative', 'quantitative'] as const;
+export type FitTestKind = (typeof fitTestKinds)[number];
 export const respiratorTypes = ['filtering-facepiece', 'half-mask', 'full-facepiece', 'papr-loose', 'papr-hood', 'papr-half-mask', 'papr-full-facepiece', 'supplied-air-hood'] as const;
 export type RespiratorType = (typeof respiratorTypes)[number];
 

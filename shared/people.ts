@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { respiratorTypes } from '#compliance/facts';
+import { fitTestKinds, respiratorTypes } from '#compliance/facts';
 import { Id, Language, Line, LocalDate, PageQuery, Role, SearchText, Version } from './common';
 import { NewPassword } from './session';
 
@@ -8,6 +8,8 @@ export const PersonRespirator = z.strictObject({
   label: Line(120),
   clearedOn: LocalDate.nullable(),
   fitTestedOn: LocalDate.nullable(),
+  /** Absent on people kept before it was asked. */
+  fitTestKind: z.enum(fitTestKinds).nullable().optional(),
 });
 
 const personFields = {

@@ -1,6 +1,7 @@
 import { type RespiratorAnswer } from '../answer';
 import { type PersonFacts, type PersonRespirator, type RespiratorType } from '../facts';
 import { addYears, isIsoDate, type IsoDate } from '../iso-date';
+import { QUALITATIVE_MAX_RATIO } from '../respirators/fit-test';
 import { met, notApplicable, undecided, unmet, WHO } from '../rule';
 import { isSilicaWork, type SilicaPerson } from '../silica/silica-context';
 import { type ShiftContext } from '../shift-context';
@@ -25,11 +26,17 @@ export function isFitted({ type, fitTestedOn }: PersonRespirator, day: IsoDate):
   return LOOSE.includes(type) || (fitTestedOn !== null && since(fitTestedOn, day) && isIsoDate(day) && addYears(fitTestedOn, 1) >= day);
 }
 
+/** A negative-pressure full facepiece tested by taste or smell serves to a factor of 10; `null` where nobody said how it was tested ((f)(6)). */
+function isTestEnough({ type, fitTestKind = null }: PersonRespirator, neededFactor: number): boolean | null {
+  if (type !== 'full-facepiece' || neededFactor <= QUALITATIVE_MAX_RATIO || fitTestKind === 'quantitative') return true;
+  return fitTestKind === 'qualitative' ? false : null;
+}
+
 /** A required mask is the person's own: strong enough, cleared by a clinician, fitted within a year ((d), (e), (f)). */
 export const maskReadyRule: ShiftRule<PersonInTask> = {
   id: 'mask-cleared-and-fitted',
   title: words('Cleared, fitted and their own', 'Con permiso, prueba y propia'),
-  source: usFederal('1910.134', 'read', { paragraph: '(d)(3)(i)(A), (e)(1), (f)(2)' }),
+  source: usFederal('1910.134', 'read', { paragraph: '(d)(3)(i)(A), (e)(1), (f)(2), (f)(6)' }),
   duties: ['RES-01', 'RES-05', 'RES-06'],
   topic: 'people',
   holds: true,
@@ -40,20 +47,25 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
     // A sheet's respirator has no factor: the person's own serves, whatever it is rated.
     const strong = person.respirators.filter((mask) => respirator.apf === null || (factorOf(mask) ?? 0) >= needed);
     const cleared = strong.filter(({ clearedOn }) => since(clearedOn, day));
-    const ready = cleared.find((mask) => isFitted(mask, day));
-    const best = ready ?? cleared[0] ?? strong[0] ?? person.respirators[0] ?? null;
+    const fitted = cleared.filter((mask) => isFitted(mask, day));
+    const ready = fitted.find((mask) => isTestEnough(mask, needed) === true);
+    const best = ready ?? fitted[0] ?? cleared[0] ?? strong[0] ?? person.respirators[0] ?? null;
     const inputs = {
       'protection factor, at least': respirator.apf,
       mask: best?.label ?? null,
       'cleared on': best?.clearedOn ?? null,
       'fit test on': best?.fitTestedOn ?? null,
+      'kind of fit test': best?.fitTestKind ?? null,
       date: facts.date,
     };
     const unrated = strong.length === 0 && person.respirators.some((mask) => factorOf(mask) === null);
     if (unrated) return undecided(words(`The factor of ${person.name}'s mask is not on file here.`, `No está anotado aquí el factor de la máscara de ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Look up its class and factor.', 'Busque su clase y factor.') });
     if (ready !== undefined) return met(words(`${person.name}: ${ready.label}, cleared and fitted.`, `${person.name}: ${ready.label}, con permiso y prueba.`), { inputs });
+    if (fitted.some((mask) => isTestEnough(mask, needed) === null)) return undecided(words(`${person.name}'s full mask: by smell, or counted? By smell it serves to a factor of 10.`, `Máscara completa de ${person.name}: ¿por olor o medida? Por olor sirve hasta un factor de 10.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Look at the fit test record.', 'Mire el registro de la prueba.') });
     const gap =
-      strong.length === 0
+      fitted.length > 0
+        ? words(`${person.name}'s full mask was tested by smell: good to a factor of 10 only.`, `La máscara completa de ${person.name} se probó por olor: solo hasta un factor de 10.`)
+        : strong.length === 0
         ? words(`${person.name} has no mask that is strong enough.`, `${person.name} no tiene máscara bastante fuerte.`)
         : cleared.length === 0
           ? words(`${person.name} is not cleared for this mask.`, `${person.name} no tiene permiso médico para esta máscara.`)

@@ -1,3 +1,4 @@
+import { type FitTestKind } from '../facts';
 import { checkNumber } from '../input-error';
 import { addYears, checkIsoDate, type IsoDate } from '../iso-date';
 import { type Words } from '../outcome';
@@ -31,7 +32,7 @@ export interface RespiratorModel {
 /** Dates and results only; medical findings have no place here. */
 export interface FitTest extends RespiratorModel {
   readonly testedOn: IsoDate;
-  readonly kind: 'qualitative' | 'quantitative';
+  readonly kind: FitTestKind;
   readonly isPassed: boolean;
   /** Of a quantitative test. */
   readonly fitFactor: number | null;

@@ -4,7 +4,7 @@ import { LIMIT_ROWS } from '../air/limits.data';
 import { monitoringDue } from '../air/monitoring-rules';
 import { dilutionEnough } from '../air/air-rules';
 import { answerShift } from '../answer-shift';
-import { type FloorFacts, type ShiftFacts, type TaskFacts } from '../facts';
+import { type FloorFacts, type PersonRespirator, type ShiftFacts, type TaskFacts } from '../facts';
 import { protectedLevelDual } from '../noise/hearing-protection';
 import { hearingProtection } from '../noise/noise-rules';
 import { type Finding } from '../outcome';
@@ -133,6 +133,25 @@ describe('1910.134(f)(6), read: a qualitative test only where a fit factor of 10
     expect(outcome({ hazardRatio: 10.1 })).toBe('unmet');
     expect(outcome({ facePiece: 'half-mask' })).toBe('met');
     expect(outcome({ isNegativePressure: false })).toBe('met');
+  });
+});
+
+describe('1910.134(f)(6) on the morning of the task', () => {
+  const full = { type: 'full-facepiece' as const, label: 'Harrow F1, M', clearedOn: '2026-03-01', fitTestedOn: '2026-03-02' };
+  const blasting = taskFacts({ kind: 'shot-blasting', assignments: at, equipmentId: 'blaster', collectorId: 'collector' });
+  // 600 µg/m³ is 12 times the limit: factor 25 or more. 400 is 8 times: factor 10.
+  const ask = (exposureMicrogramsPerM3: number, mask: PersonRespirator) => shiftOf(blasting, { people: [personFacts({ respirators: [mask] })], bases: [basisFacts({ exposureMicrogramsPerM3 })] }).find('mask-cleared-and-fitted');
+
+  it.each<[number, PersonRespirator, string]>([
+    [600, { ...full, fitTestKind: 'quantitative' }, 'met'],
+    [600, { ...full, fitTestKind: 'qualitative' }, 'unmet'],
+    [600, { ...full, fitTestKind: null }, 'undecided'],
+    [600, full, 'undecided'],
+    [400, { ...full, fitTestKind: 'qualitative' }, 'met'],
+    // (f)(8): a powered mask may be tested either way.
+    [600, { ...full, type: 'papr-full-facepiece', fitTestKind: 'qualitative' }, 'met'],
+  ])('[RES-06] %d µg/m³ with %j: %s', (exposure, mask, outcome) => {
+    expect(ask(exposure, mask)?.outcome).toBe(outcome);
   });
 });
 

@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { dustMethods, equipmentKinds, respiratorTypes, settings, taskKinds, type ShiftFacts } from '#compliance/facts';
+import { dustMethods, equipmentKinds, fitTestKinds, respiratorTypes, settings, taskKinds, type ShiftFacts } from '#compliance/facts';
 
 const orNull = <T>(value: fc.Arbitrary<T>): fc.Arbitrary<T | null> => fc.option(value, { nil: null });
 const text = fc.constantFrom('', ' ', 'bare concrete', 'Ines Halloran', 'Quarrybond 40', '<b>', '«ñ»');
@@ -31,7 +31,7 @@ const person = fc.record({
   isKeptFromIsocyanates: fc.boolean(),
   silicaTrainedOn: orNull(date),
   hazcomTrainedOn: orNull(date),
-  respirators: fc.array(fc.record({ type: fc.constantFrom(...respiratorTypes), label: text, clearedOn: orNull(date), fitTestedOn: orNull(date) }), { maxLength: 2 }),
+  respirators: fc.array(fc.record({ type: fc.constantFrom(...respiratorTypes), label: text, clearedOn: orNull(date), fitTestedOn: orNull(date), fitTestKind: orNull(fc.constantFrom(...fitTestKinds)) }), { maxLength: 2 }),
   elsewhere: fc.array(fc.record({ jobName: text, kind: fc.constantFrom(...taskKinds), startMinute: minute, endMinute: minute }), { maxLength: 2 }),
 });
 export const hazardCode = fc.constantFrom('H314', 'H315', 'H317', 'H318', 'H319', 'H225', 'H226', 'H334', 'H350i', 'H302+H332', 'EUH204', 'H372', 'H999', 'no code');

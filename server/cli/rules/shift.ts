@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { answerShift, generateChecklist, type ShiftFacts } from '#compliance';
-import { dustMethods, respiratorTypes, settings, taskKinds } from '#compliance/facts';
+import { dustMethods, fitTestKinds, respiratorTypes, settings, taskKinds } from '#compliance/facts';
 import { calculation, day, jurisdictionId, unsaid, type Calculation } from './calculation';
 import { equipment } from './floor';
 
@@ -38,7 +38,7 @@ const person = z.strictObject({
   isKeptFromIsocyanates: z.boolean().default(false),
   silicaTrainedOn: unsaid(day),
   hazcomTrainedOn: unsaid(day),
-  respirators: z.array(z.strictObject({ type: z.enum(respiratorTypes), label: text, clearedOn: unsaid(day), fitTestedOn: unsaid(day) })).default([]),
+  respirators: z.array(z.strictObject({ type: z.enum(respiratorTypes), label: text, clearedOn: unsaid(day), fitTestedOn: unsaid(day), fitTestKind: unsaid(z.enum(fitTestKinds)) })).default([]),
   elsewhere: z.array(z.strictObject({ jobName: text, kind: z.enum(taskKinds), startMinute: clock, endMinute: clock })).default([]),
 });
 const task = z.strictObject({

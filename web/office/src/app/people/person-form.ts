@@ -19,6 +19,12 @@ export const respiratorChoices: readonly Choice<RespiratorValue['type']>[] = [
   { value: 'supplied-air-hood', label: 'supplied air, hood' },
 ];
 
+export const fitTestChoices: readonly Choice<RespiratorValue['fitTestKind']>[] = [
+  { value: null, label: 'not known yet' },
+  { value: 'qualitative', label: 'taste or smell' },
+  { value: 'quantitative', label: 'counted, with a fit factor' },
+];
+
 export const emptyPerson: PersonEdit = {
   name: '',
   language: 'en',
@@ -30,14 +36,14 @@ export const emptyPerson: PersonEdit = {
   respirators: [],
   isActive: true,
 };
-export const emptyRespirator: RespiratorValue = { type: 'half-mask', label: '', clearedOn: null, fitTestedOn: null };
+export const emptyRespirator: RespiratorValue = { type: 'half-mask', label: '', clearedOn: null, fitTestedOn: null, fitTestKind: null };
 
 export function editOf({ name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators, isActive }: Person | PersonEdit): PersonEdit {
   return { name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators, isActive };
 }
 
-export const respiratorGroup = (builder: NonNullableFormBuilder, { type, label, clearedOn, fitTestedOn }: RespiratorValue) =>
-  builder.group({ type: builder.control(type), label: builder.control(label), clearedOn: builder.control(clearedOn), fitTestedOn: builder.control(fitTestedOn) });
+export const respiratorGroup = (builder: NonNullableFormBuilder, { type, label, clearedOn, fitTestedOn, fitTestKind = null }: RespiratorValue) =>
+  builder.group({ type: builder.control(type), label: builder.control(label), clearedOn: builder.control(clearedOn), fitTestedOn: builder.control(fitTestedOn), fitTestKind: builder.control(fitTestKind) });
 
 export function personForm(builder: NonNullableFormBuilder, person: PersonEdit) {
   return builder.group({

@@ -10,7 +10,7 @@ import { TextField } from '../../pieces/fields/text-field';
 import { FormSending } from '../../pieces/form-sending';
 import { FormTrouble } from '../../pieces/form-trouble';
 import { PeopleApi } from '../people-api';
-import { editOf, emptyPerson, emptyRespirator, languageChoices, personForm, respiratorChoices, respiratorGroup } from '../person-form';
+import { editOf, emptyPerson, emptyRespirator, fitTestChoices, languageChoices, personForm, respiratorChoices, respiratorGroup } from '../person-form';
 
 /** One person's facts: a new one when `person` is null. */
 @Component({
@@ -32,6 +32,7 @@ export class PersonEditor {
   protected readonly sending = new FormSending(this.form);
   protected readonly languageChoices = languageChoices;
   protected readonly respiratorChoices = respiratorChoices;
+  protected readonly fitTestChoices = fitTestChoices;
   private readonly version = signal(0);
   protected readonly theirs = computed(() => {
     const current = Person.safeParse(this.sending.problem()?.current);

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { type Person } from '#shared/people';
 import { dayOf } from '../../pieces/dates';
-import { respiratorChoices } from '../person-form';
+import { fitTestChoices, respiratorChoices } from '../person-form';
 
 /** What is on file about a person. */
 @Component({
@@ -40,9 +40,9 @@ export class PersonFacts {
 
   protected readonly dayOf = dayOf;
   protected readonly respirators = computed(() =>
-    this.person().respirators.map(({ type, label, clearedOn, fitTestedOn }) => {
+    this.person().respirators.map(({ type, label, clearedOn, fitTestedOn, fitTestKind }) => {
       const name = respiratorChoices.find(({ value }) => value === type)?.label ?? type;
-      return `${name}, ${label}: cleared ${clearedOn ? dayOf(clearedOn) : 'not on file'}, fit tested ${fitTestedOn ? dayOf(fitTestedOn) : 'not on file'}`;
+      return `${name}, ${label}: cleared ${clearedOn ? dayOf(clearedOn) : 'not on file'}, fit tested ${fitTestedOn ? dayOf(fitTestedOn) : 'not on file'}${fitTestedOn && fitTestKind ? ` (${fitTestChoices.find(({ value }) => value === fitTestKind)?.label ?? fitTestKind})` : ''}`;
     }),
   );
 }
