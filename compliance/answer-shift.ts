@@ -9,6 +9,7 @@ import { topics, type Finding } from './outcome';
 import { protectionFor } from './ppe/protection';
 import { protectionRule } from './ppe/protection-rule';
 import { respiratorOf, taskRespirator } from './ppe/task-respirator';
+import { consumablesOf } from './quantities/consumables';
 import { decideIncidental, decideSilica, type SilicaDecision } from './silica/decision';
 import { doubleBookings, NO_TABLE_1_TIME } from './silica/minutes';
 import { type SilicaTask } from './silica/silica-context';
@@ -37,6 +38,7 @@ export function answerShift(facts: ShiftFacts, asOf: string): ShiftAnswer {
     people: facts.people.map((person) => answerPerson(shift, person, tasks, day)),
     gates,
     kits: facts.kits.map((kit) => answerKit(shift, kit, day)),
+    consumables: consumablesOf(shift, place),
     notice: NOTICE,
   };
 }

@@ -19,6 +19,8 @@ export interface ShiftAnswer {
   /** Lines about the whole shift: floor, engines, host, first aid, floor profile. */
   readonly gates: readonly Finding[];
   readonly kits: readonly KitAnswer[];
+  /** What the work uses up: amounts by stated rates, or "not known" and who can say. */
+  readonly consumables: readonly Finding[];
   readonly notice: Words;
 }
 

@@ -31,6 +31,8 @@ export interface ShiftFacts {
   readonly kits: readonly KitFacts[];
   readonly equipment: readonly EquipmentFacts[];
   readonly bases: readonly ExposureBasis[];
+  /** What the shift uses up, by rates that a person stated; absent where nobody stated any. */
+  readonly consumableRates?: readonly ConsumableRate[];
 }
 
 export const settings = ['indoors', 'enclosed', 'outdoors'] as const;
@@ -164,6 +166,37 @@ export interface KitFacts {
   /** Kits on this job when the count is fixed by hand; null computes it from area and thickness. */
   readonly count: number | null;
   readonly parts: readonly PartFacts[];
+  /** The supplier's written word that a lesser preparation is enough for this product; absent or null without one. */
+  readonly surfaceException?: WrittenException | null;
+  /** When vapor cartridges are changed in work with this kit, and the data it rests on; absent or null where nobody wrote it. */
+  readonly cartridgeSchedule?: CartridgeSchedule | null;
+}
+
+/** For example a coarse grind with primer in place of a blasted profile: recorded as the exception it is. */
+export interface WrittenException {
+  readonly writtenBy: string;
+  readonly reference: string;
+  readonly text: string;
+}
+
+export interface CartridgeSchedule {
+  readonly change: string;
+  readonly basedOn: string;
+}
+
+export const consumableKinds = ['shot', 'diamonds', 'blades', 'collector-bags', 'hepa-filters', 'cartridges', 'tape'] as const;
+export type ConsumableKind = (typeof consumableKinds)[number];
+export const consumableUnits = ['pieces', 'kg', 'm'] as const;
+export const consumableBases = ['m2', 'hour', 'kit', 'person'] as const;
+
+/** A stated rate: so much of a thing for each m², machine hour, kit or person. */
+export interface ConsumableRate {
+  readonly item: ConsumableKind;
+  readonly amount: number;
+  readonly unit: (typeof consumableUnits)[number];
+  readonly per: (typeof consumableBases)[number];
+  /** Who says so, or which paper: the supplier's sheet, the maker's manual, a person's own count. */
+  readonly statedBy: string;
 }
 
 export interface PartFacts {

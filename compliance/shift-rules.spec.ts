@@ -1,7 +1,7 @@
 import { describe, expect, it } from '@jest/globals';
 import { basisFacts, equipmentFacts, kitFacts, personFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
 import { answerShift } from './answer-shift';
-import { type ShiftFacts, type TaskFacts } from './facts';
+import { type KitFacts, type ShiftFacts, type TaskFacts } from './facts';
 import { type Finding } from './outcome';
 
 const at = (personId: string) => [{ personId, startMinute: 420, endMinute: 540 }];
@@ -20,6 +20,7 @@ const spreading = taskFacts({ kind: 'spreading', assignments: at('dov'), kitId: 
 const inspection = taskFacts({ kind: 'inspection', assignments: at('dov') });
 const withWater = [...shiftFacts().equipment.filter(({ id }) => id !== 'grinder'), equipmentFacts({ hasWaterFeed: true })];
 const plainKit = kitFacts({ parts: kitFacts().parts.filter(({ part }) => part === 'A') });
+const vaporKit = (cartridgeSchedule: KitFacts['cartridgeSchedule'] = null): KitFacts => kitFacts({ cartridgeSchedule, parts: kitFacts().parts.map((part) => (part.sheet && part.part === 'B' ? { ...part, sheet: { ...part.sheet, precautionaryCodes: ['P284'] } } : part)) });
 const samplingDay = basisFacts({ kind: 'sampling-day', exposureMicrogramsPerM3: null, interimApf: 50, endsOn: '2026-12-03', signedOn: '2026-12-02' });
 
 type Row = readonly [ruleId: string, situation: string, facts: ShiftFacts, outcome: Finding['outcome'] | 'silent', words?: RegExp];
@@ -65,6 +66,15 @@ const ROWS: Record<string, readonly Row[]> = {
   '[ISO-01]': [
     ['sensitizer-symptoms', 'with a sensitizer on the sheets', only(spreading), 'met', /tight chest/],
     ['sensitizer-symptoms', 'without one', only(spreading, { kits: [plainKit] }), 'silent'],
+  ],
+  // 1910.134(d)(3)(iii)(B), read: supplied air, or a written change schedule based on data.
+  '[RES-03] [ISO-01]': [
+    ['cartridge-change-schedule', 'where the sheet asks a vapor mask and nobody wrote when cartridges change', only(spreading, { kits: [vaporKit()] }), 'undecided', /may not start/],
+    ['cartridge-change-schedule', 'with a schedule that rests on data', only(spreading, { kits: [vaporKit({ change: 'every four hours', basedOn: 'maker’s table for this vapor, 20 °C' })] }), 'met', /New cartridges: every four hours/],
+    ['cartridge-change-schedule', 'with a schedule that rests on nothing', only(spreading, { kits: [vaporKit({ change: 'when it smells', basedOn: ' ' })] }), 'unmet', /may not start/],
+    ['cartridge-change-schedule', 'with everyone on supplied air', only(spreading, { kits: [vaporKit()], people: [personFacts({ respirators: [{ type: 'supplied-air-hood', label: 'air line', clearedOn: '2026-01-05', fitTestedOn: null }] })] }), 'met', /Air line/],
+    ['cartridge-change-schedule', 'where no sheet asks a mask', only(spreading), 'silent'],
+    ['cartridge-change-schedule', 'where the asked mask is for a kit without vapor', only(spreading, { kits: [{ ...plainKit, parts: plainKit.parts.map((part) => ({ ...part, sheet: part.sheet && { ...part.sheet, precautionaryCodes: ['P284'] } })) }] }), 'silent'],
   ],
   // (c)(3): exactly four hours, and a minute more.
   '[SIL-03] [SIL-04]': [

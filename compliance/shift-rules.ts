@@ -8,7 +8,9 @@ import { possibleFactsRule } from './gates/possible';
 import { grindThenBlastRule, profileRule } from './gates/profile';
 import { competentPersonRule, hostHazardsRule, inspectionCoverRule, packRule } from './gates/site';
 import { protectionRule } from './ppe/protection-rule';
+import { consumableRule } from './quantities/consumables';
 import { KIT_RULES } from './quantities/kit-rules';
+import { cartridgeRule } from './respirators/cartridge-rule';
 import { type ListedRule } from './rule';
 import { basisRule, combinedExposureRule, overLimitRule, samplingDayRule } from './silica/basis-rule';
 import { accessRule, blastingRule, bucketDustRule, exhaustIndoorsRule, housekeepingRule, waterFlowRule } from './silica/practice-rules';
@@ -41,10 +43,11 @@ export const TASK_RULES: readonly ShiftRule<SilicaTask>[] = [
   housekeepingRule,
   symptomRule,
   vaporRule,
+  cartridgeRule,
 ];
 
 /** Rules about one person in one task. */
 export const PERSON_IN_TASK_RULES: readonly ShiftRule<PersonInTask>[] = [adultRule, silicaTrainingRule, hazardTrainingRule, keptFromIsocyanatesRule, maskReadyRule, table1RespiratorRule];
 
 /** Every rule that speaks on a shift, for lists of rules. */
-export const LISTED_SHIFT_RULES: readonly ListedRule[] = [...SHIFT_RULES, ...TASK_RULES, ...PERSON_IN_TASK_RULES, ...KIT_RULES, table1ControlRule, protectionRule, employerRule, doubleBookingRule];
+export const LISTED_SHIFT_RULES: readonly ListedRule[] = [...SHIFT_RULES, ...TASK_RULES, ...PERSON_IN_TASK_RULES, ...KIT_RULES, table1ControlRule, protectionRule, employerRule, doubleBookingRule, consumableRule];

@@ -114,6 +114,13 @@ describe('[GATE-06] [GATE-08] [SIL-19] host and competent person', () => {
   });
   it('asks who inspects while the competent person runs a machine', () => {
     expect(gate(ask(), 'inspection-cover')).toMatchObject({ outcome: 'undecided', isHolding: false });
+    // Marisol grinds edges while Dov grinds.
+    const people = [...shiftFacts().people, personFacts({ id: 'ines', name: 'Ines Halloran' })];
+    expect(gate(ask({ people, inspectionCoverId: 'ines' }), 'inspection-cover')).toMatchObject({ outcome: 'met', reason: { en: 'Ines Halloran inspects while Dov Lindqvist runs a machine.' } });
+    expect(gate(ask({ inspectionCoverId: 'marisol' }), 'inspection-cover')).toMatchObject({ outcome: 'undecided', reason: { en: 'Marisol Tena is at a machine or on another job while Dov Lindqvist runs one.' } });
+    // Per is on the other job from 8:05 to 11:30.
+    expect(gate(ask({ inspectionCoverId: 'per' }), 'inspection-cover')?.outcome).toBe('undecided');
+    for (const nobody of [null, 'dov', 'somebody else']) expect(gate(ask({ inspectionCoverId: nobody }), 'inspection-cover')).toMatchObject({ outcome: 'undecided' });
     expect(gate(ask({ tasks: shiftFacts().tasks.filter(({ kind }) => kind !== 'floor-grinding' && kind !== 'clean-up') }), 'inspection-cover')).toMatchObject({ outcome: 'met' });
   });
 });
@@ -134,6 +141,16 @@ describe('the floor profile (rule of conduct 4; ICRI 310.2R from memory: grindin
   });
   it.each([[3, 'met'], [4, 'undecided']] as const)('CSP %d by grinding: %s', (targetProfile, outcome) => {
     expect(gate(ask({ tasks: grindOnly, targetProfile }), 'floor-profile')?.outcome).toBe(outcome);
+  });
+  it('the supplier\'s written exception stands as what it is, never as CSP 5; every kit on the floor needs its own, whole (conduct 4)', () => {
+    const exception = { writtenBy: 'Northlode Resins', reference: 'letter of 3 November 2026', text: 'Coarse grind with metal diamonds and one coat of primer.' };
+    const withExceptions = (...each: (typeof exception | null)[]) => gate(ask({ tasks: grindOnly, targetProfile: 5, kits: each.map((surfaceException, index) => kitFacts({ id: `kit-${index}`, surfaceException })) }), 'floor-profile');
+    const found = withExceptions(exception);
+    expect(found).toMatchObject({ outcome: 'met', text: { en: 'Not CSP 5: the supplier allows it in writing.' } });
+    expect(found?.reason.en).toBe('The planned work gives CSP 3 at most, not 5. Allowed in writing by Northlode Resins (letter of 3 November 2026): Coarse grind with metal diamonds and one coat of primer.');
+    expect(withExceptions(exception, null)?.outcome).toBe('undecided');
+    expect(withExceptions()?.outcome).toBe('undecided');
+    for (const blank of [{ writtenBy: ' ' }, { reference: '' }, { text: '' }]) expect(withExceptions({ ...exception, ...blank })?.outcome).toBe('undecided');
   });
   it('grinding after blasting takes the profile off again', () => {
     expect(gate(ask(), 'grind-then-blast')?.outcome).toBe('met');

@@ -34,6 +34,7 @@ export function impossibleFields(facts: ShiftFacts): readonly string[] {
       ...ofAtLeast(`kits.${kit.id}.mixMinutesPerKit`, kit.mixMinutesPerKit, 0),
       ...ofAtLeast(`kits.${kit.id}.count`, kit.count, 0),
     ]),
+    ...repeated('consumableRates.item', (facts.consumableRates ?? []).map(({ item }) => item)),
   ];
   return [...new Set(fields)].sort();
 }

@@ -60,11 +60,11 @@ export const inspectionCoverRule: ShiftRule<ShiftContext> = {
     const inputs = { 'competent person': person?.name ?? null, 'tasks at a machine': machines.length, 'inspects meanwhile': cover?.name ?? null };
     if (person === undefined || machines.length === 0) return met(words('Free to inspect all shift.', 'Libre para revisar todo el turno.'), { inputs });
     if (cover !== undefined && cover.id !== person.id) {
-      const theirs = machineTasks(facts, cover.id).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === cover.id));
+      const theirs = [...machineTasks(facts, cover.id).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === cover.id)), ...cover.elsewhere];
       const ours = machines.flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === person.id));
       const isBusy = ours.some((span) => theirs.some((other) => span.startMinute < other.endMinute && other.startMinute < span.endMinute));
       if (!isBusy) return met(words(`${cover.name} inspects while ${person.name} runs a machine.`, `${cover.name} revisa mientras ${person.name} maneja una máquina.`), { inputs });
-      return undecided(words(`${cover.name} runs a machine at the same time as ${person.name}.`, `${cover.name} maneja una máquina al mismo tiempo que ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name someone who is free then.', 'Nombre a alguien que esté libre entonces.') });
+      return undecided(words(`${cover.name} is at a machine or on another job while ${person.name} runs one.`, `${cover.name} está en una máquina o en otra obra mientras ${person.name} maneja una.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name someone who is free then.', 'Nombre a alguien que esté libre entonces.') });
     }
     return undecided(words(`${person.name} runs a machine today.`, `${person.name} maneja una máquina hoy.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Name who inspects in that time.', 'Nombre quién revisa en ese tiempo.') });
   },

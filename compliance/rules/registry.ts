@@ -25,6 +25,7 @@ import { PROTECTION } from '../ppe/protection.data';
 import { machinePreUse, wasteHandling } from '../plans/site-papers';
 import { accessInTime, mayDiscardRecord, rightsNotice, safetyMeetings } from '../records/record-rules';
 import { RETENTION_ROWS } from '../records/retention.data';
+import { CONSUMABLES } from '../quantities/consumables.data';
 import { APF_ROWS } from '../respirators/apf.data';
 import { fitTestRecord, medicalSurveillance, respiratorByRatio, respiratorProgram, respiratorProgramEvaluation, voluntaryUse, wearerReady } from '../respirators/respirator-rules';
 import { type ListedRule } from '../rule';
@@ -121,6 +122,7 @@ export const DATA_TABLES: readonly DataTable[] = [
   table('mixing-effects', 'What mixing adds', 'Lo que añade la mezcla', MIXING_EFFECTS),
   table('sds-sections', 'Sections of a sheet', 'Secciones de la hoja', SDS_SECTIONS),
   table('sds-content', 'Least content of a sheet', 'Contenido mínimo de la hoja', SDS_CONTENT),
+  table('consumables', 'What work uses up', 'Lo que gasta el trabajo', CONSUMABLES),
   table('phase-in', 'Dates of the 2024 amendment', 'Fechas de la enmienda de 2024', PHASE_IN_ROWS),
   table('noise-d2', 'Noise, Table D-2', 'Ruido, Tabla D-2', under(TABLE_D2_SOURCE, TABLE_D2)),
   table('noise-g16a', 'Noise, Table G-16a', 'Ruido, Tabla G-16a', under(TABLE_G16A_SOURCE, TABLE_G16A)),

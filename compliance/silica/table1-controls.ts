@@ -1,10 +1,9 @@
+import { CFM_PER_INCH_OF_WHEEL } from '../air/airflow';
 import { type AirflowReading, type EquipmentFacts } from '../facts';
 import { inchesFromMm, m3PerHFromCfm } from '../quantities/units';
 import { type Table1Demand, type Table1Option } from './table1.data';
 import { type Table1Place } from './table1';
 
-/** Rows (xi) and (xii): cubic feet a minute for each inch of wheel diameter. Source: the rows. */
-export const CFM_PER_WHEEL_INCH = 25;
 /** Rows with a collector: filter efficiency at least. Source: the rows. */
 export const FILTER_EFFICIENCY_PERCENT = 99;
 /** HEPA: 29 CFR 1926.1153(b). */
@@ -31,7 +30,7 @@ export interface ControlCheck {
 /** Airflow that the collector must move for this tool, m³/h; null when the figure it hangs on is not on file. */
 export function requiredAirflow(option: Table1Option, tool: EquipmentFacts): number | null {
   if (option.demands.includes('airflow-25-cfm-per-inch')) {
-    return tool.wheelDiameterMm === null || !(tool.wheelDiameterMm > 0) ? null : m3PerHFromCfm(CFM_PER_WHEEL_INCH * inchesFromMm(tool.wheelDiameterMm));
+    return tool.wheelDiameterMm === null || !(tool.wheelDiameterMm > 0) ? null : m3PerHFromCfm(CFM_PER_INCH_OF_WHEEL * inchesFromMm(tool.wheelDiameterMm));
   }
   if (option.demands.includes('airflow-makers-figure')) return tool.requiredAirflowM3PerH !== null && tool.requiredAirflowM3PerH > 0 ? tool.requiredAirflowM3PerH : null;
   return null;

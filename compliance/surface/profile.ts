@@ -1,3 +1,4 @@
+import { type WrittenException } from '../facts';
 import { checkNumber, InputError } from '../input-error';
 import { type Words } from '../outcome';
 import { WHO } from '../rule';
@@ -16,13 +17,6 @@ function checkProfile(field: string, profile: number): number {
 export function methodsFor(targetProfile: number): readonly MethodRangeRow[] {
   checkProfile('targetProfile', targetProfile);
   return METHOD_RANGES.filter((row) => row.minProfile <= targetProfile && targetProfile <= row.maxProfile).sort((a, b) => a.maxProfile - b.maxProfile || a.minProfile - b.minProfile);
-}
-
-/** The supplier's written word that a lesser preparation is enough for the product. */
-export interface WrittenException {
-  readonly writtenBy: string;
-  readonly reference: string;
-  readonly text: string;
 }
 
 export type ProfileAnswer =
