@@ -4,6 +4,7 @@ export { generateChecklist } from './checklists/generate';
 export { CHECKLIST_TEXT_FORMAT, checklistText, parseChecklistText, renderChecklistText, type ChecklistText, type TextLine, type TextPerson, type TextTask } from './checklists/text';
 export { LISTED_SHIFT_RULES } from './shift-rules';
 export { NOTICE, signedSentence } from './notice';
+export { dayPlan, type DayPlan, type PlanLine, type PlanTask } from './plans/day-plan';
 export { coverageM2, kitsFor, mixingOf, statedCoverageFt2 } from './quantities/kits';
 export * from './quantities/units';
 export { TASKS, type TaskTraits } from './silica/tasks.data';

@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { type DayPlan } from '#compliance/plans/day-plan';
 import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, SearchText, Sha256 } from './common';
 import { RevisionSummary, revisionStates } from './sheets';
 
@@ -114,17 +115,19 @@ export type SearchAnswer = z.infer<typeof SearchAnswer>;
 /** The printed code of a job: opens its sheets and plan without an account. */
 export const SiteCode = z.object({ jobId: Id, isOn: z.boolean(), madeAt: Instant.nullable(), madeBy: z.string().nullable(), /** Shown once when made: the address behind the code. */ address: z.string().nullable() });
 export type SiteCode = z.infer<typeof SiteCode>;
+/** Nobody's name: whoever holds the paper reads this page. */
 export const SitePage = z.object({
   organisationName: z.string(),
   jobName: z.string(),
   siteName: z.string(),
   emergencyNumber: z.string().nullable(),
   address: z.string().nullable(),
-  firstAiderName: z.string().nullable(),
+  hasFirstAider: z.boolean(),
   hostHazards: z.string().nullable(),
-  competentPersonName: z.string().nullable(),
-  /** Newest published checklist of today, one text a language, as stored. */
-  checklist: z.object({ date: LocalDate, number: z.number().int(), texts: z.array(z.object({ language: z.enum(['en', 'es']), sha256: Sha256, text: z.string() })) }).nullable(),
+  /** The server's clock when it answered. */
+  asOf: Instant,
+  /** Of the newest published checklist of today, else of the next day that has one, else of the last; made and stored when that was published. */
+  plan: z.object({ date: LocalDate, isToday: z.boolean(), number: z.number().int(), publishedAt: Instant, /** Null in what was published before plans were made. */ day: z.custom<DayPlan>().nullable() }).nullable(),
   sheets: z.array(z.object({ revisionId: Id, productName: z.string(), supplier: z.string(), language: z.string(), revisedOn: LocalDate.nullable(), signalWord: z.string().nullable(), hazardCodes: z.array(z.string()), pictograms: z.array(z.string()) })),
   /** Kit parts that have no confirmed sheet: named, with whom to ask. */
   productsWithoutSheet: z.array(z.string()),

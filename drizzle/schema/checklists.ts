@@ -15,6 +15,8 @@ export const checklistVersions = pgTable(
     /** The facts the rules looked at and the checklist they made, as bytes: never re-serialised. */
     facts: bytea().notNull(),
     checklist: bytea().notNull(),
+    /** The day's plan without names, as the printed code shows it; null in versions published before it was made. */
+    plan: bytea(),
     factsSha256: text().notNull(),
     /** SHA-256 over the lines `sha256␠␠name` of facts, checklist and every text. */
     manifest: text().notNull(),

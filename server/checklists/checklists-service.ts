@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import { and, eq } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
-import { renderChecklistText } from '#compliance';
+import { dayPlan, renderChecklistText } from '#compliance';
 import { type ShiftFacts } from '#compliance/facts';
 import { languages, type Language } from '#compliance/outcome';
 import { checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
@@ -29,7 +29,7 @@ export function checklistsService({ database, clock }: Deps) {
         const publishedAt = clock.now();
         const shift = await readShift(tx, shiftId, publishedAt);
         if (row.version !== version) throw new ConflictError('Somebody changed this shift after you opened it. Look at it again, then publish.', shift);
-        const { facts, checklist, factsBytes, checklistBytes } = draftChecklist(shift, publishedAt);
+        const { facts, answer, checklist, factsBytes, checklistBytes } = draftChecklist(shift, publishedAt);
         refuseUnfinished(facts);
         const newest = await newestVersion(tx, shiftId);
         if (newest?.checklist.equals(checklistBytes)) throw new RefusedError(`Nothing that people sign has changed since version ${newest.number}. It stands as it is.`);
@@ -41,10 +41,11 @@ export function checklistsService({ database, clock }: Deps) {
         const manifest = [`${factsSha256}  facts.json`, `${sha256(checklistBytes)}  checklist.json`, ...texts.map((text) => `${text.sha256}  text.${text.language}.json`), ''].join('\n');
         const manifestSha256 = sha256(Buffer.from(manifest));
 
+        const plan = Buffer.from(JSON.stringify(dayPlan(facts, answer)));
         const id = newId();
         const number = (newest?.number ?? 0) + 1;
         const own = { organisationId: tx.organisationId, versionId: id };
-        await tx.insert(checklistVersions).values({ organisationId: tx.organisationId, id, shiftId, jobId: shift.jobId, date: shift.date, number, facts: factsBytes, checklist: checklistBytes, factsSha256, manifest, manifestSha256, publishedBy: actor.personId, publishedByName: actor.personName, publishedAt });
+        await tx.insert(checklistVersions).values({ organisationId: tx.organisationId, id, shiftId, jobId: shift.jobId, date: shift.date, number, facts: factsBytes, checklist: checklistBytes, plan, factsSha256, manifest, manifestSha256, publishedBy: actor.personId, publishedByName: actor.personName, publishedAt });
         await tx.insert(checklistTexts).values(texts.map((text) => ({ ...own, ...text })));
         await tx.insert(checklistPeople).values(checklist.people.map((person) => ({ ...own, personId: person.personId, name: person.name, language: person.language })));
         await registerUses(tx, shift, facts);

@@ -62,8 +62,9 @@ export async function readShift(tx: Tx, id: string, asOf: Date): Promise<Shift> 
 /** The checklist as it would be published now. What people sign has changed when these bytes have, whatever else in the facts did. */
 export function draftChecklist(shift: Parameters<typeof assembleFacts>[0], asOf: Date) {
   const facts = assembleFacts(shift);
-  const checklist = generateChecklist(facts, answerShift(facts, asOf.toISOString()));
-  return { facts, checklist, factsBytes: Buffer.from(JSON.stringify(facts)), checklistBytes: Buffer.from(JSON.stringify(checklist)) };
+  const answer = answerShift(facts, asOf.toISOString());
+  const checklist = generateChecklist(facts, answer);
+  return { facts, answer, checklist, factsBytes: Buffer.from(JSON.stringify(facts)), checklistBytes: Buffer.from(JSON.stringify(checklist)) };
 }
 
 export async function newestVersion(tx: Tx, shiftId: string): Promise<VersionRow | undefined> {

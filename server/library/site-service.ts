@@ -1,6 +1,7 @@
-import { and, asc, desc, eq } from 'drizzle-orm';
+import { and, desc, eq, inArray } from 'drizzle-orm';
 import { kitHazards } from '#compliance/hazcom/kit-hazards';
-import { checklistTexts } from '#drizzle/schema/checklists';
+import { type DayPlan } from '#compliance/plans/day-plan';
+import { checklistVersions } from '#drizzle/schema/checklists';
 import { shifts } from '#drizzle/schema/jobs';
 import { siteCodes } from '#drizzle/schema/library';
 import { organisations } from '#drizzle/schema/organisations';
@@ -13,13 +14,13 @@ import { type Deps } from '../deps';
 import { NotFoundError } from '../errors';
 import { demandRole, type PersonActor } from '../http/actor';
 import { localDate } from '../jobs/jobs-service';
-import { findJob, newestVersion } from '../jobs/shift-store';
+import { findJob } from '../jobs/shift-store';
 import { type Tx } from '../platform/database';
 import { dropLink, makeLink, openLink } from '../platform/links';
 import { readKitFacts } from '../products/products-service';
 import { type SheetsService } from '../sds/sheets-service';
 
-/** The printed code of a job: all its sheets and its checklist, read-only, without an account, until revoked. */
+/** The printed code of a job: all its sheets and its plan, read-only, without an account or anyone's name, until revoked. */
 export function siteService({ config, database, clock }: Deps, sheets: SheetsService) {
   const stored = async (tx: Tx, jobId: string): Promise<SiteCode> => {
     await findJob(tx, jobId);
@@ -42,7 +43,7 @@ export function siteService({ config, database, clock }: Deps, sheets: SheetsSer
         const values = { madeAt: clock.now(), madeBy: actor.personId, revokedAt: null };
         await tx.insert(siteCodes).values({ organisationId: tx.organisationId, jobId, ...values }).onConflictDoUpdate({ target: [siteCodes.organisationId, siteCodes.jobId], set: values });
         const token = await makeLink(tx, 'site', jobId, null);
-        return { ...(await stored(tx, jobId)), address: `${config.publicUrl}/site#${token}` };
+        return { ...(await stored(tx, jobId)), address: `${config.publicUrl}/site/job#${token}` };
       }),
 
     revoke: (actor: PersonActor, jobId: string): Promise<SiteCode> =>
@@ -76,11 +77,6 @@ export function siteService({ config, database, clock }: Deps, sheets: SheetsSer
     const plans = days.map((day) => day.plan as ShiftPlan);
     const kitIds = [...new Set(plans.flatMap((plan) => plan.kits.map((kit) => kit.kitId)))];
     const parts = kitIds.length === 0 ? [] : (await readKitFacts(tx, kitIds)).flatMap((kit) => kit.parts);
-    const shift = days.find((day) => day.date === today);
-    const version = shift && (await newestVersion(tx, shift.id));
-    const texts = version ? await tx.select().from(checklistTexts).where(and(eq(checklistTexts.organisationId, tx.organisationId), eq(checklistTexts.versionId, version.id))).orderBy(asc(checklistTexts.language)) : [];
-    const competentId = (shift?.plan as ShiftPlan | undefined)?.competentPersonId;
-    const [competent] = competentId ? await tx.select({ name: people.name }).from(people).where(and(eq(people.organisationId, tx.organisationId), eq(people.id, competentId))) : [];
     const [organisation] = await tx.select().from(organisations);
     const current = await tx.select().from(revisions).where(and(eq(revisions.organisationId, tx.organisationId), eq(revisions.isCurrent, true)));
     const inUse = [...new Map(parts.map((part) => [part.productId, part])).values()];
@@ -90,10 +86,10 @@ export function siteService({ config, database, clock }: Deps, sheets: SheetsSer
       siteName: job.siteName,
       emergencyNumber: site.firstAid.emergencyNumber,
       address: site.firstAid.address,
-      firstAiderName: site.firstAid.firstAiderName,
+      hasFirstAider: Boolean(site.firstAid.firstAiderName?.trim()),
       hostHazards: site.hostHazards,
-      competentPersonName: competent?.name ?? null,
-      checklist: version ? { date: version.date, number: version.number, texts: texts.map(({ language, sha256, bytes }) => ({ language: language as 'en' | 'es', sha256, text: bytes.toString('utf8') })) } : null,
+      asOf: clock.now().toISOString(),
+      plan: await planOf(tx, days, today),
       sheets: inUse.flatMap((part) =>
         current
           .filter((revision) => revision.productId === part.productId)
@@ -114,5 +110,21 @@ export function siteService({ config, database, clock }: Deps, sheets: SheetsSer
       productsWithoutSheet: inUse.filter((part) => part.sheet === null).map((part) => part.productName),
     };
   }
+}
+
+type Day = typeof shifts.$inferSelect;
+/** Today's, else the next day's, else the last one's: of those that are published. */
+async function planOf(tx: Tx, days: readonly Day[], today: string): Promise<SitePage['plan']> {
+  if (days.length === 0) return null;
+  const versions = await tx
+    .selectDistinctOn([checklistVersions.shiftId], { date: checklistVersions.date, number: checklistVersions.number, publishedAt: checklistVersions.publishedAt, plan: checklistVersions.plan })
+    .from(checklistVersions)
+    .where(and(eq(checklistVersions.organisationId, tx.organisationId), inArray(checklistVersions.shiftId, days.map((day) => day.id))))
+    .orderBy(checklistVersions.shiftId, desc(checklistVersions.number));
+  const byDate = [...versions].sort((a, b) => (a.date < b.date ? -1 : 1));
+  const chosen = byDate.find(({ date }) => date >= today) ?? byDate.at(-1);
+  if (!chosen) return null;
+  const { date, number, publishedAt, plan } = chosen;
+  return { date, isToday: date === today, number, publishedAt: publishedAt.toISOString(), day: plan && (JSON.parse(plan.toString('utf8')) as DayPlan) };
 }
 export type SiteService = ReturnType<typeof siteService>;

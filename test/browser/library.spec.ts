@@ -218,8 +218,8 @@ withChromium('Keeping the library', () => {
       expect(new URL(page.url()).hash).toBe('');
       await page.getByText('Emergency: 911.').waitFor();
       await expectAccessible(page, 'The page of the code');
-      await page.getByRole('button', { name: "Today's list" }).click();
-      await page.getByRole('region', { name: "Today's list" }).getByText('In the morning').waitFor();
+      await page.getByRole('button', { name: 'Plan of the day' }).click();
+      await page.getByRole('region', { name: /^Plan of / }).getByText('HEPA vacuum or wet.').first().waitFor();
       await page.getByRole('button', { name: `Open the sheet of ${productName}, English` }).click();
       await page.getByRole('img', { name: `${productName}, page 1` }).waitFor();
       await page.goBack();

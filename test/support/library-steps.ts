@@ -21,6 +21,22 @@ export async function confirmedSheet(seat: Seat, changes: Partial<SheetEdit>): P
   return answerOf<Revision>(callFrom(seat, 'confirmRevision', { params, version, body: { fields, product: { name: fields.productName, supplier: fields.supplier } } }));
 }
 
+/** A sheet as a PDF, read by the worker and confirmed, without its page. */
+export async function confirmedPdf(seat: Seat, file: { name: string; bytes: Uint8Array }, changes: Partial<SheetEdit>): Promise<Revision> {
+  const { page } = seat;
+  const { revision } = await answerOf<UploadedSheet>(page.request.post('/api/sheets', { headers: { Origin: new URL(page.url()).origin }, multipart: { file: { name: file.name, mimeType: 'application/pdf', buffer: Buffer.from(file.bytes) } } }));
+  const params = { revisionId: revision.id };
+  for (;;) {
+    const { state, version } = await answerOf<Revision>(callFrom(seat, 'readRevision', { params }));
+    if (state === 'waiting') {
+      await new Promise((resolve) => setTimeout(resolve, 200));
+      continue;
+    }
+    const fields = sheetEdit(changes);
+    return answerOf<Revision>(callFrom(seat, 'confirmRevision', { params, version, body: { fields, product: { name: fields.productName, supplier: fields.supplier } } }));
+  }
+}
+
 /** A kit of one powder, which is this product. */
 export const powderKit = (seat: Seat, productId: string): Promise<Kit> => answerOf<Kit>(callFrom(seat, 'addKit', { body: kitEdit(productId, { parts: [{ productId, part: 'C', form: 'powder' }] }) }));
 

@@ -22,7 +22,9 @@ const subjects: Routes = [
 
 export const routes: Routes = [
   { path: 'sign-in', title: 'Sign in', loadComponent: () => import('./session/sign-in').then((file) => file.SignIn) },
-  { path: 'site', title: 'Safety data sheets of this job', loadComponent: () => import('./public/site/site-page').then((file) => file.SitePage) },
+  { path: 'site', pathMatch: 'full', redirectTo: 'site/job' },
+  // A step below `/site`: the worker that keeps the page has the folder `/site/`, and its own address counts as no page.
+  { path: 'site/job', title: 'Safety data sheets and plan of this job', loadComponent: () => import('./public/site/site-page').then((file) => file.SitePage) },
   { path: 'send-sheet', title: 'Send a safety data sheet', loadComponent: () => import('./public/send-sheet/send-sheet').then((file) => file.SendSheet) },
   {
     path: '',

@@ -15,7 +15,7 @@ import { SiteCodeApi } from './site-code-api';
         <h2 id="site-code-heading">Site code</h2>
         <ul class="kb-rows" style="--kb-columns: minmax(12rem, 1fr) auto 8rem">
           <li>
-            <span>Printed on site, it opens all sheets and today's checklist without an account.</span>
+            <span>Printed on site, it opens all sheets and the plan of the day without an account.</span>
             @if (code.hasValue()) {
               @if (code.value().isOn) {
                 <kb-state kind="done">in use since {{ madeAt() }}</kb-state>

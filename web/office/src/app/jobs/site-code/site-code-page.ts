@@ -53,12 +53,12 @@ export class SiteCodePage {
   }
 
   protected async make(isOn: boolean): Promise<void> {
-    const isSure = !isOn || (await this.confirmation.ask({ heading: 'Replace the code', text: 'Every paper with the present code stops working at once. Print the new one and hang it in the same places.', action: 'Replace the code', isDanger: true }));
+    const isSure = !isOn || (await this.confirmation.ask({ heading: 'Replace the code', text: 'Every paper with the present code stops working at once; phones drop what they kept of it at their next contact. Print the new one and hang it in the same places.', action: 'Replace the code', isDanger: true }));
     if (isSure) await this.send(this.api.make(this.jobId()));
   }
 
   protected async revoke(): Promise<void> {
-    if (await this.confirmation.ask({ heading: 'Revoke the code', text: "Every paper with this code stops working at once. The crew then has the lead's tablet and the binder.", action: 'Revoke the code', isDanger: true })) await this.send(this.api.revoke(this.jobId()));
+    if (await this.confirmation.ask({ heading: 'Revoke the code', text: "Every paper with this code stops working at once; phones drop what they kept of it at their next contact. The crew then has the lead's tablet and the binder.", action: 'Revoke the code', isDanger: true })) await this.send(this.api.revoke(this.jobId()));
   }
 
   protected print(): void {

@@ -13,23 +13,23 @@ import { QrCode } from '../../pieces/qr-code';
     <div class="both">
       <section>
         <h3>Safety data sheets</h3>
-        <p>Scan to open every sheet of this job, today's checklist and the emergency numbers. No account. Nothing can be changed.</p>
+        <p>Scan to open every sheet of this job, the plan of the day and the emergency numbers. No account. Nothing can be changed.</p>
         <ol>
           <li>This code</li>
           <li>The lead's tablet</li>
           <li>The binder</li>
         </ol>
-        <p><b>No signal?</b> A first scan cannot open. Take the tablet, then the binder.</p>
+        <p><b>No signal?</b> A phone that opened it before opens it again. A first scan cannot: take the tablet, then the binder.</p>
       </section>
       <section lang="es">
         <h3>Hojas de datos de seguridad</h3>
-        <p>Escanee para abrir todas las hojas de esta obra, la lista de hoy y los números de emergencia. Sin cuenta. No se puede cambiar nada.</p>
+        <p>Escanee para abrir todas las hojas de esta obra, el plan del día y los números de emergencia. Sin cuenta. No se puede cambiar nada.</p>
         <ol>
           <li>Este código</li>
           <li>La tableta del encargado</li>
           <li>La carpeta</li>
         </ol>
-        <p><b>¿Sin señal?</b> El primer escaneo no abre. Use la tableta, después la carpeta.</p>
+        <p><b>¿Sin señal?</b> Un teléfono que ya lo abrió lo abre otra vez. El primer escaneo no: use la tableta, después la carpeta.</p>
       </section>
     </div>
     <p class="emergency"><b>Emergency / Emergencia: {{ job().site.firstAid.emergencyNumber ?? '911' }}</b></p>

@@ -1,14 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
-import { firstValueFrom } from 'rxjs';
 import { type SitePage } from '#shared/library';
 import { Empty } from '#ui/empty';
 import { PageViewer } from '#ui/page-viewer/page-viewer';
 import { ReaderLanguage } from '../reader-language';
-import { SiteApi } from './site-api';
+import { SiteVisit } from './site-visit';
 import { siteWords } from './site-words';
-
-/** Sheets already fetched with this page: they open again without signal. */
-const fetched = new Map<string, ArrayBuffer>();
 
 /** One sheet of the job, shown on the page itself: a phone's own viewer could not send the code's secret. */
 @Component({
@@ -44,11 +40,10 @@ const fetched = new Map<string, ArrayBuffer>();
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SiteSheet {
-  private readonly api = inject(SiteApi);
+  private readonly visit = inject(SiteVisit);
   protected readonly language = inject(ReaderLanguage).language;
 
   readonly sheet = input.required<SitePage['sheets'][number]>();
-  readonly token = input.required<string>();
   readonly closed = output<void>();
 
   protected readonly words = computed(() => siteWords[this.language()]);
@@ -65,11 +60,9 @@ export class SiteSheet {
   protected async load(): Promise<void> {
     const { revisionId } = this.sheet();
     this.hasFailed.set(false);
-    this.bytes.set(fetched.get(revisionId) ?? null);
-    if (fetched.has(revisionId)) return;
+    this.bytes.set(null);
     try {
-      const bytes = await firstValueFrom(this.api.sheet(this.token(), revisionId));
-      fetched.set(revisionId, bytes);
+      const bytes = await this.visit.sheet(revisionId);
       if (this.sheet().revisionId === revisionId) this.bytes.set(bytes);
     } catch {
       this.hasFailed.set(true);

@@ -1,0 +1,1 @@
+ALTER TABLE "checklist_versions" ADD COLUMN "plan" "bytea";
