@@ -2,6 +2,7 @@ import { checkNumber } from '../input-error';
 import { type Words } from '../outcome';
 import { WHO } from '../rule';
 import { usFederal } from '../source';
+import { withoutNoise } from './units';
 
 export const MIXTURE_SOURCE = usFederal('1910.1000', 'read', { paragraph: '(d)(2)(i)', note: 'Meant for contaminants that act together.' });
 
@@ -29,6 +30,6 @@ export function additiveMixture(members: readonly MixtureMember[]): MixtureIndex
     return { isDecided: false, withoutLimit, reason: { en: `No limit is on file for: ${names}.`, es: `No hay un límite registrado para: ${names}.` }, whoDecides: WHO.hygienist };
   }
   const shares = limited.map(({ name, concentration, limit }) => ({ name, share: concentration / limit }));
-  const index = shares.reduce((sum, { share }) => sum + share, 0);
+  const index = withoutNoise(shares.reduce((sum, { share }) => sum + share, 0));
   return { isDecided: true, index, isExceeded: index > 1, shares };
 }

@@ -2,6 +2,7 @@ import { checkMinutes, checkNumber, InputError, MINUTES_PER_DAY } from '../input
 import { type Words } from '../outcome';
 import { WHO } from '../rule';
 import { sourced, usFederal } from '../source';
+import { withoutNoise } from './units';
 
 export const TWA_SOURCE = usFederal('1910.1000', 'read', { paragraph: '(d)(1)(i)', note: 'Formula, definitions and example. The divisor is 8 hours whatever the length of the shift.' });
 export const LONG_SHIFT_SOURCE = sourced('OSHA memorandum, 10 Nov 1999, extended work shifts', 'partly', { note: 'As summarized: field practice takes the worst 8 hours; the limit itself is not lowered except for lead.' });
@@ -31,7 +32,7 @@ function checkShiftMinutes(periods: readonly { readonly minutes: number }[]): nu
 /** Whole shift ÷ 8: Σ concentration × hours ÷ 8, in the unit of the concentrations. The stricter reading for shifts over 8 hours. */
 export function twaEightHours(periods: readonly ExposurePeriod[]): number {
   checkPeriods(periods);
-  return periods.reduce((sum, { concentration, minutes }) => sum + concentration * minutes, 0) / TWA_MINUTES;
+  return withoutNoise(periods.reduce((sum, { concentration, minutes }) => sum + concentration * minutes, 0) / TWA_MINUTES);
 }
 
 /** The most exposed 480 minutes of the shift ÷ 8, in the unit of the concentrations; the same as `twaEightHours` up to 8 hours. */
@@ -44,7 +45,7 @@ export function twaWorstEightHours(periods: readonly ExposurePeriod[]): number {
     sum += concentration * taken;
     left -= taken;
   }
-  return sum / TWA_MINUTES;
+  return withoutNoise(sum / TWA_MINUTES);
 }
 
 export type ShiftTwa =

@@ -21,3 +21,8 @@ export function mgPerM3ToPpm(mgPerM3: number, molarMassGPerMol: number): number 
 export const ppbToPpm = (ppb: number): number => checkNumber('ppb', ppb, { min: 0 }) / 1_000;
 export const mgToMicrogramsPerM3 = (mgPerM3: number): number => checkNumber('mgPerM3', mgPerM3, { min: 0 }) * MICROGRAMS_PER_MG;
 export const microgramsToMgPerM3 = (microgramsPerM3: number): number => checkNumber('microgramsPerM3', microgramsPerM3, { min: 0 }) / MICROGRAMS_PER_MG;
+
+/** Takes off the noise of binary fractions, so that an average of exactly the limit is not "above" it. */
+export function withoutNoise(value: number): number {
+  return Number(value.toPrecision(12));
+}

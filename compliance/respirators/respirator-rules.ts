@@ -116,7 +116,7 @@ export const fitTestRecord = contentsRule({
 export const respiratorProgram = contentsRule({
   id: 'respirator-program',
   title: words('Written respirator program', 'Programa escrito de respiradores'),
-  source: usFederal('1910.134', 'from-memory', { paragraph: '(c)(1), (l)' }),
+  source: usFederal('1910.134', 'from-memory', { paragraph: '(c)(1)(i)-(ix), (c)(3)', note: 'The nine elements, and the administrator, (c)(3).' }),
   duties: ['RES-11', 'RES-08'],
   items: [
     item('administrator', 'a program administrator named', 'un administrador del programa'),
@@ -124,6 +124,7 @@ export const respiratorProgram = contentsRule({
     item('medical', 'medical evaluations', 'evaluaciones médicas'),
     item('fit', 'fit testing', 'pruebas de ajuste'),
     item('use', 'proper use, routine and emergency', 'uso correcto, habitual y de emergencia'),
+    item('air', 'breathing air checked, where air is supplied (or: none is)', 'aire respirable revisado, donde se da aire (o: no se da)'),
     item('care', 'cleaning, storing, inspecting, repairing', 'limpieza, guardado, revisión, reparación'),
     item('training', 'training', 'capacitación'),
     item('evaluation', 'evaluation of the program', 'evaluación del programa'),

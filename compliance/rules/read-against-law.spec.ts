@@ -2,7 +2,7 @@ import { describe, expect, it } from '@jest/globals';
 import { basisFacts, equipmentFacts, personFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
 import { LIMIT_ROWS } from '../air/limits.data';
 import { monitoringDue } from '../air/monitoring-rules';
-import { dilutionEnough } from '../air/air-rules';
+import { averageWithinLimit, dilutionEnough, mixtureWithinLimits } from '../air/air-rules';
 import { answerShift } from '../answer-shift';
 import { type FloorFacts, type PersonRespirator, type ShiftFacts, type TaskFacts } from '../facts';
 import { protectedLevelDual } from '../noise/hearing-protection';
@@ -242,5 +242,20 @@ describe('marks that say more than was read', () => {
   // (k): obligations from 23 June 2017; the memorandum of 25 June 2018 speaks of enforcement from 23 September.
   it('the silica limit holds from the day of the rule, not of its enforcement', () => {
     expect(LIMIT_ROWS.find(({ id }) => id.startsWith('limit/rcs/us-federal/construction/twa-8h'))?.source.inForceFrom).toBe('2017-06-23');
+  });
+});
+
+describe('exactly at the limit is not above it, whatever the binary fractions do', () => {
+  // OAR 437-002-1055, read, same words as 1926.1153(d)(1): "in excess of 50". 5 µg/m³ for 2 h and 65 for 6 h are 50 by hand.
+  it.each([[5, 120, 65, 360], [2, 300, 130, 180], [3, 420, 379, 60]])('[AIR-01] %d µg/m³ for %d min and %d for %d min', (a, aMinutes, b, bMinutes) => {
+    const facts = { substanceId: 'rcs', jurisdictionId: 'us-federal', shiftMinutes: 480, periods: [{ concentrationMgPerM3: a / 1000, minutes: aMinutes }, { concentrationMgPerM3: b / 1000, minutes: bMinutes }] };
+    expect(a * aMinutes + b * bMinutes).toBe(24_000);
+    expect(averageWithinLimit.evaluate(facts, DAY).outcome).toBe('met');
+  });
+
+  // 1910.1000(d)(2)(i), read: exceeded when the sum is above 1. 33, 56 and 11 hundredths are one.
+  it('[AIR-01] shares that make one', () => {
+    const members = [33, 56, 11].map((share, i) => ({ name: String(i), concentration: share / 100, limit: 1 }));
+    expect(mixtureWithinLimits.evaluate({ members }, DAY).outcome).toBe('met');
   });
 });

@@ -37,7 +37,7 @@ const ITEMS: Readonly<Record<string, string>> = {
   'fit-test-record': 'person type mask date result',
   'waste-handling': 'container acidity no-drain hardened taker',
   'machine-pre-use-check': 'guard cord ground-fault isolation manual',
-  'respirator-program': 'administrator selection medical fit use care training evaluation',
+  'respirator-program': 'administrator selection medical fit use air care training evaluation',
 };
 
 describe.each(CONTENTS_RULES.map((rule) => [`${ids(rule.duties)} ${rule.id}`, rule] as const))('%s', (_name, rule) => {
