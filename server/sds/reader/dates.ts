@@ -92,15 +92,23 @@ export function dateOrder(text: string, language: string): DateOrder {
   if (counts.dayFirst > 0 && counts.monthFirst === 0) return { isDayFirst: true, confidence: 0.92, because: 'Other dates on this sheet write the day first.' };
   if (counts.monthFirst > 0 && counts.dayFirst === 0) return { isDayFirst: false, confidence: 0.92, because: 'Other dates on this sheet write the month first.' };
   if (language !== 'en') return { isDayFirst: true, confidence: 0.85, because: 'Sheets in this language write the day first.' };
-  const first = text.slice(0, enoughLetters);
-  const american = count(first, /\b(29 ?c\.?f\.?r|osha|hcs|usa|u\.s\.a?|chemtrec|infotrac|tsca|sara 31\d|proposition 65|prop 65|\d{5}-\d{4}|united states)\b/gi);
-  const european = count(first, /\b(1907\/2006|1272\/2008|reach annex|2015\/830|2020\/878|453\/2010|united kingdom|ireland|coshh|eh40|australia|new zealand)\b/gi);
-  if (american > european) return { isDayFirst: false, confidence: 0.8, because: 'The sheet cites American rules, so the month is read first.' };
-  if (european > american) return { isDayFirst: true, confidence: 0.8, because: 'The sheet cites European rules, so the day is read first.' };
+  for (const length of [frontLetters, enoughLetters]) {
+    const law = lawOf(text.slice(0, length));
+    if (law > 0) return { isDayFirst: false, confidence: 0.8, because: 'The sheet cites American rules, so the month is read first.' };
+    if (law < 0) return { isDayFirst: true, confidence: 0.8, because: 'The sheet cites European rules, so the day is read first.' };
+  }
   return { isDayFirst: false, confidence: 0.5, because: 'Nothing on the sheet says whether day or month comes first.' };
 }
 
-/** The first pages name the law a sheet obeys. */
+/** Above zero for American law and addresses, below it for those of countries that write the day first. */
+function lawOf(first: string): number {
+  const american = count(first, /\b(29 ?c\.?f\.?r|osha|hcs|usa|u\.s\.a?|chemtrec|infotrac|tsca|sara 31\d|proposition 65|prop 65|\d{5}-\d{4}|united states)\b/gi);
+  const european = count(first, /\b(1907\/2006|1272\/2008|reach annex|2015\/830|2020\/878|453\/2010|united kingdom|uk reach|great britain|ireland|\+44|\+353|\+61|\+64|coshh|eh40|australia|new zealand)\b/gi);
+  return american - european;
+}
+
+/** The title and section 1 say whom a sheet is for; the first pages name the law it obeys. */
+const frontLetters = 2_500;
 const enoughLetters = 20_000;
 
 const count = (text: string, words: RegExp): number => text.match(words)?.length ?? 0;

@@ -54,6 +54,7 @@ export const titleStarts: Readonly<Record<SectionRole, readonly RegExp[]>> = {
     /^identifikation|^(identificazione|identificacao|identificatie)/,
   ],
   hazards: [
+    /^hazards?$/,
     /^hazards?s?(identification|information|identity|summary|classification|statements?)/,
     /^(identification|identity)of(the)?hazards?|^emergencyoverview|^healthhazards?(data|identification)?$/,
     /^(identificacion|identidad)(de|del|y)?(los?)?(peligro|riesgo)|^peligros|^(clasificacion|identificacion)\w{0,14}(peligro|riesgo)/,
@@ -87,7 +88,7 @@ export const titleStarts: Readonly<Record<SectionRole, readonly RegExp[]>> = {
   ],
   release: [
     /^(accidental|spill|environmentalrelease|release)\w{0,40}(release|measures|procedures|leak|response)/,
-    /^accidentalrelease|^spill(or|and)?leak/,
+    /^accidentalrelease|^spill(or|and)?leak|^spills?$/,
     /^medidas(que)?\w{0,36}(vertido|derrame|liberacion|fuga)|^(derrames?|vertido)accidental|^medidasencaso/,
     /^(mesures)?(a)?(prendre)?(encas)?(de)?(dispersion|rejet|deversement)accidentel|^mesures\w{0,16}(dispersion|deversement|rejet)/,
     /^massnahmenbei(unbeabsichtigter|versehentlich)/,

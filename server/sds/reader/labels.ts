@@ -17,7 +17,7 @@ export interface Labelled {
  * Common practice on sheets, no source.
  */
 const otherLabels =
-  /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses?( of|$|:)|uses advised|relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|distributors?( name| address| information|:|$)|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
+  /^((revision|issue|print|preparation|effective|expiry) date|date( of| prepared| printed|:|$)|version\b|hmis|nfpa|product (code|number|no|type|class|use|description|category)|item (no|number)|sku|emergency|tele?phone|phone|fax|tel\b|e-?mail|website|web site|internet|address|recommended use|intended use|uses?( of|$|:)|uses advised|relevant identified|restrictions|synonyms?|cas\b|ec[ -]n|formula|chemical (family|formula|name)|prepared by|other means|details of|supplier|manufacturer|company|distributors?( name| address| information|:|$)|makers?\b|hours of|page\b|codigo|telefono|uso |usos |fecha|sinonimos|direccion|fabricante|proveedor|code (du )?produit|utilisation|fournisseur|telephone|adresse|verwendung|notruf|hersteller|lieferant|firma|produktnummer|artikel|telefon|identificateur|identificador|registration|reach|ufi|un number|sds|msds|not applicable|none\b|n\/a)/;
 
 /** "Product code:" and the like name another thing than "Product". */
 const otherThing = /^ (code|number|no|nr|type|use|class|category|form|description|date|id|line|group|family|info|emergency|telephone|phone|for)\b/;
@@ -58,7 +58,10 @@ function tail(segment: Segment, rest: string): Segment {
 /** The label broken over two lines of a narrow column. */
 function wrappedMatch(lines: Line[], index: number, segment: Segment, folded: string, label: RegExp): RegExpExecArray | null {
   if (folded.length > 30 || folded.includes(':')) return null;
-  const below = lines[index + 1]?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 3);
+  const next = lines[index + 1];
+  // A value set at the middle of a label of two lines stands on a row of its own between them.
+  const isBetween = next !== undefined && next.segments.every(({ box }) => box.x > segment.box.x + segment.box.width * 0.9);
+  const below = (isBetween ? lines[index + 2] : next)?.segments.find((other) => Math.abs(other.box.x - segment.box.x) < 3);
   if (!below || below.page !== segment.page || below.box.y - segment.box.y > segment.box.height * 1.8) return null;
   const both = `${folded} ${fold(below.text)}`;
   const match = label.exec(both);
@@ -89,8 +92,21 @@ function valueOf(lines: Line[], index: number, at: number, printed: string, rest
     const x = beside.box.x + (beside.text.startsWith(':') ? beside.box.height * 0.8 : 0);
     return { values: [{ ...beside, text }, ...continued(lines, index, x)], isBelow: false };
   }
+  const middle = beside ? [] : atMiddle(lines, index, segment);
+  if (middle.length > 0) return { values: middle, isBelow: false };
   const values = below(lines, index, segment);
   return values.length > 0 ? { values, isBelow: true } : null;
+}
+
+/** A value beside the label whose lines stand less than a line higher or lower: cells set to the middle of their row. */
+function atMiddle(lines: Line[], index: number, label: Segment): Segment[] {
+  for (const at of [index - 1, index + 1]) {
+    const line = lines[at];
+    const [first] = line?.segments ?? [];
+    const isNear = line && first && line.page === label.page && Math.abs(first.box.y - label.box.y) < label.box.height * 0.9;
+    if (isNear && first.box.x > label.box.x + label.box.width && !isLabel(first.text)) return [first, ...continued(lines, at, first.box.x)];
+  }
+  return [];
 }
 
 /** The printed text from the label's end on; folding may have changed lengths a little. */
@@ -108,6 +124,8 @@ function continued(lines: Line[], index: number, x: number): Segment[] {
   let previous = lines[index];
   for (let next = index + 1; next < lines.length && values.length < 8; next++) {
     const line = lines[next];
+    // The rest of a label, on a row of its own between two lines of the value.
+    if (line && previous && line.page === previous.page && line.box.y - previous.box.y < previous.box.height * 0.9 && line.segments.every(({ box }) => box.x + box.width < x)) continue;
     const segment = line?.segments.find((other) => Math.abs(other.box.x - x) < 5);
     if (!line || !previous || !segment || line.page !== previous.page || line.box.y - previous.box.y > previous.box.height * 2.6) break;
     // A word in the label's column opens another value, unless it is small: then it ends the label above.

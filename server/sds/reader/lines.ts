@@ -19,6 +19,18 @@ export interface Line {
 /** Gaps in em: below `joinedEm` letters of one word, below `cellEm` words of one stretch, above that another cell. */
 const joinedEm = 0.16;
 const cellEm = 1.05;
+const narrowCellEm = 0.42;
+/** Fewer words than this say nothing about even gaps. */
+const leastStretched = 3;
+
+/** A line of justified text that ends in a forced break: its few words are drawn apart evenly, over more than a cell's gap. */
+function isStretched(row: readonly TextItem[]): boolean {
+  if (row.length < leastStretched) return false;
+  const gaps = row.slice(1).map((item, at) => item.x - ((row[at]?.x ?? 0) + (row[at]?.width ?? 0)));
+  const [least, most] = [Math.min(...gaps), Math.max(...gaps)];
+  const em = row[0]?.height ?? 0;
+  return least > cellEm * em * 0.9 && most - least < Math.max(1.2, most * 0.06) && row.every(({ text }) => /^\s*\S+\s*$/.test(text));
+}
 
 /** Fake bold draws the same words again a hair beside; text drawn twice is read once. */
 export function withoutOverprints(items: TextItem[]): TextItem[] {
@@ -70,13 +82,18 @@ function sharedHeight(a: { baseline: number; height: number }, b: { baseline: nu
   return Math.min(a.baseline, b.baseline) - Math.max(a.baseline - a.height * 0.8, b.baseline - b.height * 0.8);
 }
 
-export function toLine(row: TextItem[]): Line {
+/**
+ * The cells of a row. `startsCell` tells where a column of the neighbouring rows begins: there a smaller gap parts cells
+ * too, for a full cell nearly touches the next one.
+ */
+export function toLine(row: TextItem[], startsCell: (item: TextItem) => boolean = () => false): Line {
   const segments: Segment[] = [];
   let end = -Infinity;
+  const isOne = isStretched(row);
   for (const item of row) {
     const last = segments.at(-1);
     const gap = (item.x - end) / item.height;
-    if (last && gap < cellEm) {
+    if (last && (isOne || (gap < cellEm && !(gap > narrowCellEm && startsCell(item))))) {
       const needsSpace = gap > joinedEm && !last.text.endsWith(' ') && !item.text.startsWith(' ');
       last.text += (needsSpace ? ' ' : '') + item.text;
       last.box = around(last.box, boxOf(item));
@@ -104,9 +121,16 @@ export function around(a: Box, b: Box): Box {
 
 const isTidy = /^[!-~]+(?: [!-~]+)*$/;
 
+/** Dots that lead from a label to its value: "Trade name.......: X", "Trade name ........ X". */
+const leaders = /(?<=\p{L}\)?)\s?(?:\.{2,}\s?:|(?:\. ?){5,}(?=\s?\p{L}))\s?/u;
+
 /** Odd blanks and soft hyphens out, control characters out, ligature and width forms normalised by pdfjs already. */
 function tidy(text: string): string {
-  if (isTidy.test(text)) return text;
+  if (text.includes('..')) return spaced(text.replace(leaders, ': '));
+  return isTidy.test(text) ? text : spaced(text);
+}
+
+function spaced(text: string): string {
   return text
     .replace(/[\u00a0\u2000-\u200a\u202f\u205f\u3000\t\r\n]/g, ' ')
     .replace(/[\u00ad\u200b-\u200f\u202a-\u202e\u2060\u2066-\u2069\ufeff]/g, '')

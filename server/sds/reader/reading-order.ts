@@ -19,7 +19,24 @@ export function readingLines(page: TextPage): Line[] {
   });
 }
 
-const linesOf = (items: TextItem[]): Line[] => groupRows(items).map(toLine).filter((line) => line.segments.length > 0 && !isRule(line));
+function linesOf(items: TextItem[]): Line[] {
+  const rows = groupRows(items);
+  const coarse = rows.map((row) => toLine(row));
+  return rows.map((row, at) => toLine(row, columnStarts(coarse, at))).filter((line) => line.segments.length > 0 && !isRule(line));
+}
+
+/** How many rows up and down may name the columns of a row, and how far off a cell may start, points. */
+const neighbours = 8;
+const columnTolerance = 0.8;
+
+/** Whether a cell of a neighbouring row that is not its first starts where this piece does. */
+function columnStarts(rows: readonly Line[], at: number): (item: TextItem) => boolean {
+  let starts: number[] | null = null;
+  return (item) => {
+    starts ??= rows.slice(Math.max(0, at - neighbours), at + neighbours + 1).flatMap(({ segments }, index) => (index + Math.max(0, at - neighbours) === at ? [] : segments.slice(1).map(({ box }) => box.x)));
+    return starts.some((start) => Math.abs(start - item.x) < columnTolerance);
+  };
+}
 
 /** Rows of underscores, dots or dashes drawn as rules. */
 const isRule = (line: Line): boolean => /^[\s._\-–—=*•|]*$/.test(line.text);

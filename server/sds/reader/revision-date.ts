@@ -8,10 +8,10 @@ export type DateRole = 'revision' | 'issue' | 'print' | 'supersedes' | 'other';
 
 /** Words that say what a date is, the ones that decide against a revision first; folded. */
 const roleWords: readonly (readonly [DateRole, RegExp])[] = [
-  ['supersedes', /super[sc]ede|replaces|previous|prior (version|revision|date)|anterior|sustituye|reemplaza|remplace|annule|ersetzt|vorherige|letzte ausgabe|last issue|first (issue|compil|version|edition)|primera (emision|edicion)|premiere (edition|emission)|erstausgabe|original (issue|date)|sostituisce|vervangt/],
+  ['supersedes', /super[sc]ed|replace[sd]|previous|prior (version|revision|date)|anterior|sustituye|reemplaza|remplace|annule|ersetzt|vorherige|letzte ausgabe|last issue|first (issue|compil|version|edition)|primera (emision|edicion)|premiere (edition|emission)|erstausgabe|original (issue|date)|sostituisce|vervangt/],
   ['other', /expir|valid (until|to|thru)|effective until|vencim|caduc|gultig bis|next review|review due|proxima|download|transport|shipment|\bregulation|directive|\bcfr\b|\brule\b|hazard communication|standard|reglament|verordnung|amend(ed|ing) by|\bon or (after|before)\b/],
   ['print', /print|impres|imprim|druck|stampa|afdruk/],
-  ['revision', /revis|\brev\b|rev\.|overhaul|updat|actualiz|mise a jour|misa a jour|ueberarbeit|uberarbeit|bearbeitet|bearbeitungsdatum|version (date|vom|du|from)|date of (the )?version|fecha de version|aggiorna|herzien|last (changed?|modified|review)|date reviewed|reviewed (on|date)|geandert|stand:|\bstand\b/],
+  ['revision', /revis|\brev\b|rev\.|overhaul|updat|actualiz|mise a jour|misa a jour|ueberarbeit|uberarbeit|bearbeitet|bearbeitungsdatum|version (date|vom|du|from)|date of (the )?version|fecha de version|aggiorna|herzien|last (changed?|modified|review)|date reviewed|\breviewed\b|geandert|stand:|\bstand\b/],
   ['issue', /issue|issuing|issuance|prepar|emision|emitid|elabora|edicion|emission|edition|etabli|redaction|ausgabe|erstell|ausstell|creation|creacion|created|published|publica|\beffective|completed|compiled|approved|date written|\bemissione|datum vom/],
   ['issue', /\b(date|fecha|datum|data|dated)\s*[:.]?\s*$/],
 ];
@@ -85,7 +85,8 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
     for (const date of dates) {
       const own = segment.text.slice(from, date.start);
       const label = `${before} ${own}`;
-      const role = roleOf(label) ?? (own.trim().length > longestCellWords ? null : roleOfColumn(lines, index, segment)) ?? roleOfAbove(lines, index, segment);
+      // What stands right before the date counts before what stands farther off, and both before what follows it.
+      const role = (own.includes(':') ? roleOf(own) : null) ?? roleOf(label) ?? roleAfter(segment.text.slice(date.end)) ?? (own.trim().length > longestCellWords ? null : roleOfColumn(lines, index, segment)) ?? roleOfAbove(lines, index, segment);
       if (role) found.push({ date, ...role, line, box: boxOf(segment, date), label: lastLabel(role.words) });
       from = date.end;
       before = '';
@@ -95,6 +96,9 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
   });
   return found;
 }
+
+/** "19 May 2022 (date of revision)". */
+const roleAfter = (text: string): ReturnType<typeof roleOf> => roleOf(/^\s*\(([^()\d]{3,40})\)/.exec(text)?.[1] ?? '');
 
 const lastLabel = (words: string): string => words.replace(/[\s:.-]+$/, '').split(/:\s|\s{2,}/).at(-1)?.trim().slice(-40) ?? '';
 

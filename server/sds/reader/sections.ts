@@ -1,5 +1,5 @@
 import { numberWords, sectionRoles, sectionWords, titleStarts, type SectionRole } from './headings.data';
-import { type Line } from './lines';
+import { lineOf, type Line, type Segment } from './lines';
 import { type SectionHeading } from './reading';
 import { fold, joinSpacedLetters, lettersOf } from './words';
 
@@ -11,6 +11,8 @@ interface Candidate {
   heading: string;
   /** Title known for its section, as opposed to a number with a free title. */
   isSure: boolean;
+  /** How many cells of the row are the heading; the others stand in a column beside it and are text of the section. */
+  cells?: number;
 }
 
 export interface Sections {
@@ -35,6 +37,8 @@ export function findSections(all: Line[]): Sections {
       sections.bodies.set(candidate.role, body);
       if (!sections.headingLines.has(candidate.role)) sections.headingLines.set(candidate.role, line);
       lastHeading = line;
+      const beside = candidate.cells === undefined ? [] : line.segments.slice(candidate.cells);
+      if (beside.length > 0) body.push(lineOf(beside));
       return;
     }
     // The second line of a long heading is no part of the section's text.
@@ -106,14 +110,23 @@ const mayBeHeading = /^\P{L}{0,6}(\d|[ivx]{1,4}[\s.:)]|sec|sek|rub|abs|sez|se[c�
 function headingIn(line: Line, index: number, next?: Line): Candidate | null {
   if (!mayBeHeading.test(line.text)) return null;
   const [first, second] = line.segments;
-  const texts = new Set([line.text, first?.text ?? '', `${first?.text ?? ''} ${second?.text ?? ''}`]);
-  for (const text of texts) {
+  if (!first) return null;
+  // The first cell alone before the whole row: what stands beside a heading in a column is text of its section.
+  const texts: [text: string, cells: number][] = second ? [[first.text, 1], [`${first.text} ${wrappedBelow(first, next)}`, 1], [`${first.text} ${second.text}`, 2], [line.text, line.segments.length]] : [[line.text, 1]];
+  for (const [text, cells] of texts) {
     if (text.length > 170) continue;
     const joined = joinSpacedLetters(text).trim();
-    const found = numbered(fold(joined), joined, next);
-    if (found) return { ...found, index, line, heading: joined };
+    const found = numbered(fold(joined), joined, cells === line.segments.length ? next : undefined);
+    if (found) return { ...found, index, line, heading: joined, cells };
   }
   return null;
+}
+
+/** The next line of a heading set in a column of its own, beside the text. */
+function wrappedBelow(first: Segment, next?: Line): string {
+  const below = next?.segments[0];
+  const isNear = below && next.page === first.page && Math.abs(below.box.x - first.box.x) < 3 && below.box.y - first.box.y < first.box.height * 1.8;
+  return isNear && !/^\d/.test(below.text) ? below.text : '';
 }
 
 const numberForm = /^(?:no\.? ?|nr\.? ?|n° ?|# ?)?(\d{1,2}|[ivx]{1,4}|[a-z]{2,12})(?![a-z0-9])\s*([:.)\]|/-]*)\s*(.*)$/;
@@ -201,7 +214,7 @@ function fillGaps(lines: Line[], chosen: Candidate[]): Candidate[] {
     const role = sectionRoles[number - 1];
     if (from >= to || !role || filled.some((other) => other.role === role)) continue;
     const between = lines.slice(from + 1, to).map((line, offset) => ({ line, index: from + 1 + offset }));
-    const start = new RegExp(`^(\\p{L}{3,10} )?${number}\\s?[.:)–—-]?\\s{0,3}\\p{Lu}`, 'u');
+    const start = new RegExp(`^(\\p{L}{3,10} )?${number}\\s?[.:)|–—-]?\\s{0,3}\\p{Lu}`, 'u');
     const numberedLine = between.find(({ line }) => line.text.length < 70 && start.test(line.text) && !isSentence(fold(line.text)) && /\p{L}{4}/u.test(line.text) && !/\d/.test(line.text.slice(4)));
     const titled = between.map(({ line, index }) => titleAlone(line, index)).find((candidate) => candidate?.number === number);
     if (titled) filled.push(titled);

@@ -19,7 +19,7 @@ export function signalWord(parts: SheetParts): Field<SignalWord> | null {
     const value = first ? wordOf(first.text) : null;
     if (first && value) return field(value, first, value === 'none' ? 0.95 : 0.97);
   }
-  const alone = standingAlone(lines);
+  const alone = standingAlone(lines) ?? inSentence(lines);
   if (alone) return alone;
   const unclassified = lines.find((line) => /not classified|not hazardous|not a hazardous|non-?hazardous|no clasificad|nicht eingestuft|non classe|nicht gefahrlich|kennzeichnung nicht erforderlich|no es peligros/.test(fold(line.text)));
   // Statements without a word: the word may be drawn as a picture. Better no answer than a false "none".
@@ -44,6 +44,16 @@ function standingAlone(lines: Line[]): Field<SignalWord> | null {
       // A word that begins small is the end of a label ("Tactile warning of" / "danger").
       if (value && value !== 'none' && /^\P{L}*\p{Lu}/u.test(segment.text) && (bare.split(' ').length === 1 || isCry)) return { ...field(value, segment, isCry ? 0.65 : 0.85), because: 'No label "signal word" stands beside it.' };
     }
+  }
+  return null;
+}
+
+/** "…, Category 1. Signal word: Danger. May be corrosive to metals." */
+function inSentence(lines: Line[]): Field<SignalWord> | null {
+  for (const segment of lines.flatMap((line) => line.segments)) {
+    const word = /\b(?:signal ?words?|palabras? de advertencia|mentions? d'avertissement|signalwort)\s?[:-]\s?([a-z]+)/.exec(fold(segment.text))?.[1];
+    const value = word ? wordOf(word) : null;
+    if (value && value !== 'none') return field(value, segment, 0.9);
   }
   return null;
 }

@@ -30,7 +30,7 @@ export function matchStatements(text: string, language: string, kind: 'H' | 'P',
   for (const { code, pattern } of statementsOf(language, kind)) {
     for (const match of level.matchAll(pattern)) {
       const [start, end] = [match.index, match.index + match[0].length];
-      if (taken.some((other) => start < other.end && end > other.start) || !beginsSentence(level, start, isList)) continue;
+      if (taken.some((other) => start < other.end && end > other.start) || !beginsSentence(level, start, isList, text.charAt(origin[start] ?? 0))) continue;
       taken.push({ start, end });
       for (const single of code.split(',')) found.push({ code: single, start: origin[start] ?? 0, end: (origin[end - 1] ?? 0) + 1 });
     }
@@ -83,6 +83,11 @@ function levelled(text: string): { level: string; origin: number[] } {
   let depth = 0;
   for (let at = 0; at < text.length; at++) {
     const printed = text.charAt(at);
+    // A word parted at the end of its line: "ex-" / "posure".
+    if (printed === '-' && /^-\n\p{Ll}/u.test(text.slice(at, at + 3)) && /\p{Ll}/u.test(text.charAt(at - 1))) {
+      at++;
+      continue;
+    }
     if (printed === '(' || printed === '[' || printed === '<') depth++;
     if (depth > 0) {
       if (printed === ')' || printed === ']' || printed === '>') depth--;
@@ -114,10 +119,14 @@ function spelled(level: string, origin: number[]): { level: string; origin: numb
   return { level: text, origin: places };
 }
 
-function beginsSentence(level: string, start: number, isList: boolean): boolean {
+/** `letter` is the statement's first letter as printed. */
+function beginsSentence(level: string, start: number, isList: boolean, letter: string): boolean {
   const before = level.slice(0, start).trimEnd();
   if (before === '' || /[.;!•·|]$/.test(before)) return true;
+  // "Suspected that it" / "may damage fertility": a sentence that is not over goes on with a small letter.
+  const isSmall = /\p{Ll}/u.test(letter);
+  if (isSmall && /\b(may|can|not|that|if|is|are|of|and|or|with|by|to|in|the|its?|which|que|puede|se|de|del|la|el|o|y|e|con|si|qui|peut|est|ou|et|du|des|le|dass|kann|und|oder|mit|der|die|das|bei)$/.test(before)) return false;
   // The text before ends a line: then this is the first word of the next one.
   if (/\n\s*$/.test(level.slice(0, start))) return true;
-  return isList && !/\b(may|can|not|dust|dusts|vapors?|product|material|contact|and|or|very|puede|peut|kann|muy|tres|sehr)$/.test(before);
+  return isList && !isSmall && !/\b(may|can|not|dust|dusts|vapors?|product|material|contact|and|or|very|que|puede|peut|kann|muy|tres|sehr)$/.test(before);
 }
