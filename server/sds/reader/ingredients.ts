@@ -1,5 +1,6 @@
 import { casNumbersIn } from './cas';
 import { concentrationIn, wholeConcentration } from './concentration';
+import { proseIngredients } from './ingredient-prose';
 import { around, type Line, type Segment } from './lines';
 import { type Field, type Ingredient } from './reading';
 import { type SheetParts } from './sheet-parts';
@@ -42,15 +43,18 @@ export function ingredients(parts: SheetParts): Field<Ingredient>[] {
   const free = freeAmounts(cells, columns);
   const amounts = amountsOf(lines, free, anchors, columns);
   const amountRows = new Set(free.map(({ row }) => row));
+  const prose = proseIngredients(lines, anchors.map(({ row }) => row));
+  const told = prose?.length === anchors.length ? prose : null;
   const found = new Map<string, Field<Ingredient>>();
   for (const [index, anchor] of anchors.entries()) {
-    const concentration = amounts.get(anchor) ?? null;
+    const own = told?.[index];
+    const concentration = own ? (own.amount === null ? null : { ...anchor, text: own.amount }) : (amounts.get(anchor) ?? null);
     const known = found.get(anchor.cas);
     if (known) {
       if (known.value.concentration === null && concentration) known.value.concentration = concentration.text;
       continue;
     }
-    const name = nameOf(lines, anchor, anchors[index - 1], anchors[index + 1], columns, amountRows);
+    const name = own?.name ? { segment: anchor.segment, text: own.name } : nameOf(lines, anchor, anchors[index - 1], anchors[index + 1], columns, amountRows);
     const pieces = [anchor.segment, ...(concentration && concentration.segment.page === anchor.segment.page ? [concentration.segment] : []), ...(name && name.segment.page === anchor.segment.page ? [name.segment] : [])];
     const ordered = [...new Set([name?.segment, anchor.segment, concentration?.segment].filter((piece) => piece !== undefined))];
     found.set(anchor.cas, {
@@ -255,7 +259,7 @@ function nameCell(line: Line, anchor: Anchor, columns: Columns): Segment | null 
 
 const withoutCas = (text: string): string => text.replace(/\(?\s*(\(?cas\)?)?\s*(-?\s*(no|nr|n°|number|#|rn))?\.?\s*:?\s*\d{2,7}-\d{2}-\d\s*\)?/gi, ' ').trim();
 
-const isNameText = (text: string): boolean => hasLetters(text) && wholeConcentration(text) === null && !/^(cas|ec|einecs|index|rrn|reach|reg)\b[\s:.#-]*(no|nr|number|n°)?[\s:.]*(\d|$)|^(ghs\d|h\d{3}|not |acute|skin irrit|eye|flam|stot|classification|type\b|see |\[\d\]|xn|xi\b|trade secret$|other (components|ingredients)|-$)|\bH[2-4]\d\d\b/i.test(text.trim());
+const isNameText = (text: string): boolean => hasLetters(text) && wholeConcentration(text) === null && !/^(cas|ec|einecs|index|rrn|reach|reg)\b[\s:.#-]*(registration )?(no|nr|number|n°)?[\s:.]*(\d|$)|^(classification$|ghs\d|h\d{3}|not |acute|skin irrit|eye|flam|stot|classification|type\b|see |\[\d\]|xn|xi\b|trade secret$|other (components|ingredients)|-$)|\bH[2-4]\d\d\b/i.test(text.trim());
 
 function cleanName(text: string, cas: string): string {
   const name = withoutCas(text).replaceAll(cas, ' ').replace(/\s*\b(\d+([.,]\d+)?\s?(-|–)\s?)?\d+([.,]\d+)?\s?%.*$/, '').replace(/\s+/g, ' ').replace(/^[\s:;,-]+|[\s:;,(-]+$/g, '').trim();

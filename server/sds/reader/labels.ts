@@ -32,7 +32,9 @@ export function findLabelled(lines: Line[], label: RegExp, isLoose = false): Lab
     line.segments.forEach((segment, at) => {
       const printed = withoutNumber(segment.text);
       const folded = fold(printed);
-      const match = label.exec(folded) ?? wrappedMatch(lines, index, segment, folded, label);
+      const own = label.exec(folded);
+      // "Details of the supplier" / "of the safety data sheet": what the first line leaves open the second may end.
+      const match = own && /^\s*$|[^a-z ]/.test(folded.slice(own[0].length)) ? own : (wrappedMatch(lines, index, segment, folded, label) ?? own);
       if (!match) return;
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.

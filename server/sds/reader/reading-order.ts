@@ -1,17 +1,23 @@
-import { groupRows, toLine, withoutOverprints, type Line, type Segment } from './lines';
+import { groupRows, lineOf, toLine, withoutOverprints, type Line, type Segment } from './lines';
+import { withLabelsOnTop } from './middle-cells';
 import { type TextItem, type TextPage } from './pdf-text';
+import { isSectionHeading } from './sections';
 
 /**
  * The lines of a page in the order a person reads them. Rows are read across, as tables and label-value lists want;
  * only where a band of the page is set in two columns of running prose is the left column read before the right.
  */
 export function readingLines(page: TextPage): Line[] {
+  return withLabelsOnTop(inOrder(page));
+}
+
+function inOrder(page: TextPage): Line[] {
   const items = withoutOverprints(page.items);
   const lines = linesOf(items);
-  const gutter = proseGutter(lines, page.width);
+  const gutter = proseGutter(lines, page.width) ?? headingGutter(lines, page.width);
   if (gutter === null) return lines;
   return bandsAcross(lines, gutter).flatMap((band) => {
-    if (!isProse(band, gutter)) return band;
+    if (!isProse(band, gutter) && !hasHeadings(band, gutter)) return band;
     const top = Math.min(...band.map((line) => line.box.y));
     const bottom = Math.max(...band.map((line) => line.box.y + line.box.height));
     const inBand = items.filter((item) => item.y >= top - 0.1 && item.y + item.height <= bottom + 0.1);
@@ -26,7 +32,7 @@ function linesOf(items: TextItem[]): Line[] {
 }
 
 /** How many rows up and down may name the columns of a row, and how far off a cell may start, points. */
-const neighbours = 8;
+const neighbours = 14;
 const columnTolerance = 0.8;
 
 /** Whether a cell of a neighbouring row that is not its first starts where this piece does. */
@@ -62,6 +68,23 @@ function proseGutter(lines: Line[], width: number): number | null {
   return candidates.find((gutter) => bandsAcross(lines, gutter).some((band) => isProse(band, gutter))) ?? null;
 }
 
+/** Where a second column starts whose section headings stand beside text of another section. */
+function headingGutter(lines: Line[], width: number): number | null {
+  const starts = lines.flatMap((line) => line.segments.filter((segment) => segment.box.x > width * 0.35 && segment.box.x < width * 0.65 && isHeading(segment)).map(({ box }) => box.x));
+  const candidates = [...new Set(starts.map((start) => Math.round(start) - 3))].sort((a, b) => a - b);
+  return candidates.find((gutter) => bandsAcross(lines, gutter).some((band) => hasHeadings(band, gutter))) ?? null;
+}
+
+const isHeading = (segment: Segment): boolean => isSectionHeading(lineOf([segment]));
+
+/** Whether both sides of a band hold headings, and at least two begin the right column: a heading is never a cell. */
+function hasHeadings(band: Line[], gutter: number): boolean {
+  if (band.length < leastProseRows) return false;
+  const segments = band.flatMap((line) => line.segments);
+  const right = segments.filter((segment) => Math.abs(segment.box.x - gutter - 3) < 2 && isHeading(segment));
+  return right.length >= 2 && segments.some((segment) => segment.box.x < gutter && isHeading(segment));
+}
+
 /** A cheap look first: both halves of the page hold some long pieces. Most pages do not. */
 function mayHoldColumns(lines: Line[], width: number): boolean {
   let left = 0;
@@ -95,6 +118,8 @@ function isProse(band: Line[], gutter: number): boolean {
   const segments = band.flatMap((line) => line.segments);
   const left = segments.filter((segment) => segment.box.x < gutter);
   const right = segments.filter((segment) => segment.box.x >= gutter);
+  // Labels and their values stand side by side, however full the values are.
+  if (left.filter(({ text }) => /[:?]$/.test(text)).length > left.length * 0.3) return false;
   // One full column of prose is enough when the other, perhaps at its end, has some full lines too.
   return Math.max(fullness(left), fullness(right)) >= 0.5 && Math.min(fullness(left), fullness(right)) >= 0.3;
 }

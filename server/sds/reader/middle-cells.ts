@@ -1,0 +1,96 @@
+import { around, lineOf, type Line, type Segment } from './lines';
+
+/** Longest label and longest cell that are looked at, lines. */
+const mostLabelLines = 4;
+const mostCellLines = 14;
+/** Letters of a label; more are a text of their own. */
+const mostLabelLetters = 120;
+
+interface Placed {
+  segment: Segment;
+  line: Line;
+}
+
+/**
+ * In tables whose cells are set to the middle, a label stands beside the middle of its text, not beside its first line.
+ * Such labels are moved up to the first line of their cell (a label of several lines becomes one), so that reading from
+ * the top meets the label before its text. Tables set to the top are left as they are.
+ */
+export function withLabelsOnTop(lines: Line[]): Line[] {
+  let current = lines;
+  for (const x of valueColumns(lines)) current = raised(current, x);
+  return current;
+}
+
+/** Where at least two cells that are not the first of their row start. */
+function valueColumns(lines: Line[]): number[] {
+  const counts = new Map<number, number>();
+  for (const line of lines) {
+    for (const { box } of line.segments.slice(1)) counts.set(Math.round(box.x), (counts.get(Math.round(box.x)) ?? 0) + 1);
+  }
+  return [...counts].filter(([, count]) => count >= 2).map(([x]) => x);
+}
+
+function raised(lines: Line[], x: number): Line[] {
+  const values = lines.flatMap((line) => line.segments.filter((segment) => Math.abs(segment.box.x - x) < 1.5).slice(0, 1).map((segment): Placed => ({ segment, line })));
+  const labels = lines.flatMap((line) => {
+    const [segment] = line.segments;
+    return segment && segment.box.x + segment.box.width < x - 2 ? [{ segment, line }] : [];
+  });
+  if (values.length < 2 || labels.length === 0) return lines;
+  const moved = new Map<Segment, Segment>();
+  const gone = new Set<Segment>();
+  for (const cell of cellsOf(values)) {
+    const label = labelAtMiddle(cell, labels, values);
+    const [first] = cell;
+    if (!label || !first) continue;
+    for (const { segment } of label) gone.add(segment);
+    const box = label.map(({ segment }) => segment.box).reduce(around);
+    moved.set(first.segment, { page: first.segment.page, text: label.map(({ segment }) => segment.text).join(' '), box: { ...box, y: first.segment.box.y, height: first.segment.box.height } });
+  }
+  if (moved.size === 0) return lines;
+  return lines.flatMap((line) => {
+    if (!line.segments.some((segment) => gone.has(segment) || moved.has(segment))) return [line];
+    const segments = line.segments.filter((segment) => !gone.has(segment)).flatMap((segment) => [...(moved.has(segment) ? [moved.get(segment) as Segment] : []), segment]);
+    return segments.length > 0 ? [lineOf(segments)] : [];
+  });
+}
+
+/** Runs of lines in the column at even spacing; the wider gap between two rows of a table parts them. */
+function cellsOf(values: readonly Placed[]): Placed[][] {
+  const cells: Placed[][] = [];
+  const gaps = values.map(({ segment }, at) => segment.box.y - (values[at - 1]?.segment.box.y ?? -Infinity));
+  values.forEach((value, at) => {
+    const gap = gaps[at] ?? Infinity;
+    const beside = Math.min(at > 1 ? (gaps[at - 1] ?? Infinity) : Infinity, gaps[at + 1] ?? Infinity);
+    const cell = cells.at(-1);
+    if (cell && gap < value.segment.box.height * 1.5 && gap <= beside * 1.12) cell.push(value);
+    else cells.push([value]);
+  });
+  return cells;
+}
+
+/** The lines of the label beside the middle of a cell; null when it stands at the top or is no single label. */
+function labelAtMiddle(cell: readonly Placed[], labels: readonly Placed[], values: readonly Placed[]): readonly Placed[] | null {
+  const [first] = cell;
+  const last = cell.at(-1);
+  if (!first || !last || cell.length > mostCellLines) return null;
+  const height = first.segment.box.height;
+  const [top, bottom] = [first.segment.box.y, last.segment.box.y];
+  const reach = Math.max(0, mostLabelLines - cell.length) * height * 0.6 + height * 0.3;
+  const beside = labels.filter(({ segment }) => segment.page === first.segment.page && segment.box.y > top - reach && segment.box.y < bottom + reach);
+  const [upper] = beside;
+  const lower = beside.at(-1);
+  if (!upper || !lower || beside.length > mostLabelLines || beside.length === cell.length) return null;
+  const isOneLabel = beside.every(({ segment }, at) => {
+    const before = beside[at - 1]?.segment;
+    return !before || (segment.box.y - before.box.y < height * 1.45 && Math.abs(segment.box.x - before.box.x) < 2 && !before.text.endsWith(':'));
+  });
+  // A row with a value of its own, outside of this cell, is another entry.
+  const others = new Set(values.filter((value) => !cell.includes(value)).map(({ line }) => line));
+  if (beside.some(({ line }) => others.has(line))) return null;
+  const isCentered = Math.abs((upper.segment.box.y + lower.segment.box.y) / 2 - (top + bottom) / 2) < height * 0.35;
+  const isLower = Math.abs(upper.segment.box.y - top) > height * 0.35;
+  const letters = beside.reduce((sum, { segment }) => sum + segment.text.length, 0);
+  return isOneLabel && isCentered && isLower && letters <= mostLabelLetters ? beside : null;
+}
