@@ -36,6 +36,8 @@ export interface RetentionRow {
 }
 
 const ACCESS = (paragraph: string, note?: string): Source => usFederal('1910.1020', 'read', { paragraph, note: note ?? 'Construction through 1926.33.' });
+/** No construction rule sets a shorter period, so the access rule's own holds; where the text was not seen, the longer period is the safe one. */
+const NOISE_IN_CONSTRUCTION = (paragraph: string): Source => usFederal('1910.1020', 'from-memory', { paragraph, note: 'Through 1926.33. That noise is a "harmful physical agent" is recalled; the letters of 11 May 1983 and 17 August 2000 on 2 years speak of 1910.95.' });
 const row = (jurisdictionId: string, record: RecordKind, keeping: Keeping, en: string, es: string, source: Source, note: Words | null = null): RetentionRow => ({
   id: `retention/${jurisdictionId}/${record}`,
   jurisdictionId,
@@ -60,8 +62,14 @@ export const RETENTION_ROWS: readonly RetentionRow[] = [
   row('us-federal', 'register-of-use', years(30), 'register of use: identity, where and when', 'registro de uso: identidad, dónde y cuándo', ACCESS('(d)(1)(ii)(B)')),
   row('us-federal', 'medical', { kind: 'employment-plus', years: 30 }, 'medical record, clearance', 'registro médico, autorización', ACCESS('(d)(1)(i)', 'Open textbook restating the paragraph.')),
   row('us-federal', 'fit-test', { kind: 'until-replaced' }, 'fit test', 'prueba de ajuste', usFederal('1910.134', 'read', { paragraph: '(m)(2)(ii)' })),
-  row('us-federal', 'noise-measurement', years(2), 'noise measurement', 'medición de ruido', usFederal('1910.95', 'read', { paragraph: '(m)(3)', note: 'General industry. OSHA letter of 11 May 1983 and a university manual.' })),
-  row('us-federal', 'audiogram', { kind: 'employment-plus', years: 0 }, 'audiogram', 'audiograma', usFederal('1910.95', 'read', { paragraph: '(m)(3)', note: 'General industry. OSHA letter of 11 May 1983 and a university manual.' })),
+  row('us-federal', 'noise-measurement', years(30), 'noise measurement', 'medición de ruido', NOISE_IN_CONSTRUCTION('(c)(5), (c)(13), (d)(1)(ii)'), {
+    en: 'The 2 years of 1910.95(m)(3) are general industry: that rule does not reach construction.',
+    es: 'Los 2 años de 1910.95(m)(3) son de la industria general: esa norma no alcanza a la construcción.',
+  }),
+  row('us-federal', 'audiogram', { kind: 'employment-plus', years: 30 }, 'audiogram', 'audiograma', NOISE_IN_CONSTRUCTION('(c)(6), (d)(1)(i)'), {
+    en: 'General industry keeps it for the time of employment, 1910.95(m)(3); in construction it is a medical record.',
+    es: 'La industria general lo guarda durante el empleo, 1910.95(m)(3); en construcción es un registro médico.',
+  }),
   row('us-federal', 'training', { kind: 'no-period' }, 'hazard communication training, toolbox talk', 'capacitación en comunicación de peligros, charla', usFederal('1910.1200', 'from-memory', { note: 'No federal period.' })),
   row('us-federal', 'silica-plan', { kind: 'until-replaced' }, 'written exposure control plan', 'plan escrito de control de exposición', usFederal('1926.1153', 'read', { paragraph: '(g)(2)', note: 'Keeping old versions as evidence is practice.' })),
 

@@ -259,3 +259,11 @@ describe('exactly at the limit is not above it, whatever the binary fractions do
     expect(mixtureWithinLimits.evaluate({ members }, DAY).outcome).toBe('met');
   });
 });
+
+describe('1926.57(f)(5)(ii), read in WAC 296-818-20010: the hood where nothing stands between operator and blast', () => {
+  it('[SIL-13] says under "why" what takes the closed machine\'s exemption away', () => {
+    const finding = shiftOf(taskFacts({ kind: 'shot-blasting', assignments: at, equipmentId: 'blaster', collectorId: 'collector' })).find('shot-blasting-safeguards');
+    expect(finding?.whatWouldChange?.en).toMatch(/open nozzle.*blasting hood with supplied air/);
+    expect(shiftOf(taskFacts({ kind: 'shot-pick-up', assignments: at })).find('shot-blasting-safeguards')?.whatWouldChange).toBeNull();
+  });
+});

@@ -58,17 +58,19 @@ export const accessRule: ShiftRule<SilicaTask> = {
   line: () => words('Door closed, sign up, neighbors told.', 'Puerta cerrada, aviso puesto, vecinos avisados.'),
 };
 
+const OPEN_NOZZLE = words('An open nozzle, or a blaster that leaks: then the operator wears a blasting hood with supplied air.', 'Una boquilla abierta o una máquina que fuga: entonces el operador usa capucha de granallado con aire.');
+
 /** Blasting of concrete: beside (d) the abrasive-blasting rule holds, and its shot lies on the floor ((d)(3)(ii), 1926.57(f)). */
 export const blastingRule: ShiftRule<SilicaTask> = {
   id: 'shot-blasting-safeguards',
   title: words('Shot blasting safeguards', 'Cuidados al granallar'),
-  source: usFederal('1926.57', 'parallel-text', { paragraph: '(f)', note: 'Read in WAC 296-818-20010 and -30010; 1926.1153(d)(3)(ii), which points here, recalled.' }),
+  source: usFederal('1926.57', 'parallel-text', { paragraph: '(f)', note: 'Read in WAC 296-818-20010 and -30010: a closed machine with exhaust stands between nozzle and operator, so the blasting hood of (f)(5)(ii) is not asked. 1926.1153(d)(3)(ii), which points here, recalled.' }),
   duties: ['SIL-13'],
   topic: 'control',
   holds: false,
   evaluate: ({ task }) =>
     task.kind === 'shot-blasting' || task.kind === 'shot-pick-up'
-      ? met(words('A wheel blaster is abrasive blasting too. Shot underfoot is a fall.', 'Una granalladora también es chorro abrasivo. Pisar granalla es caerse.'))
+      ? met(words('A wheel blaster is abrasive blasting too. Shot underfoot is a fall.', 'Una granalladora también es chorro abrasivo. Pisar granalla es caerse.'), { whatWouldChange: task.kind === 'shot-blasting' ? OPEN_NOZZLE : null })
       : elsewhere,
   line: ({ task }) =>
     task.kind === 'shot-blasting'
