@@ -49,7 +49,7 @@ const machineTasks = ({ tasks }: ShiftFacts, personId: string | undefined): read
 export const inspectionCoverRule: ShiftRule<ShiftContext> = {
   id: 'inspection-cover',
   title: words('Who inspects meanwhile', 'Quién revisa mientras tanto'),
-  source: usFederal('1926.20', 'from-memory', { paragraph: '(b)(2)', note: 'Frequent and regular inspections; the question of cover is a judgement.' }),
+  source: usFederal('1926.20', 'partly', { paragraph: '(b)(2)', note: 'Frequent and regular inspections by competent persons the employer names: read. The question of cover is a judgement.' }),
   duties: ['GATE-08'],
   topic: 'people',
   holds: false,

@@ -27,7 +27,7 @@ export const noiseInShift: Rule<NoiseFacts> = {
       const reason = shift.isAboveTable
         ? words('Some of it is above 115 dBA, for which the table gives no time.', 'Una parte pasa de 115 dBA, para lo que la tabla no da tiempo.')
         : words(`The fraction is ${round(shift.construction.fraction)}: above 1.`, `La fracción es ${round(shift.construction.fraction)}: más de 1.`);
-      return unmet(reason, { inputs, results, whatWouldChange: words('Quieter machines or less time first, then hearing protection.', 'Primero máquinas más silenciosas o menos tiempo, luego protección auditiva.') });
+      return unmet(reason, { inputs, results, whatWouldChange: words('Quieter machines or less time first, then hearing protection. Above the table a hearing conservation program is due too.', 'Primero máquinas más silenciosas o menos tiempo, luego protección auditiva. Sobre la tabla se debe también un programa de conservación auditiva.') });
     }
     if (known.length < periods.length) return undecided(words('A machine’s noise level is not known.', 'No se conoce el nivel de ruido de una máquina.'), WHO.maker, { inputs, results, whatWouldChange: words('Measure it, or take the maker’s figure.', 'Mídalo o use la cifra del fabricante.') });
     return met(words(`The fraction is ${round(shift.construction.fraction)}: not above 1.`, `La fracción es ${round(shift.construction.fraction)}: no más de 1.`), { inputs, results });

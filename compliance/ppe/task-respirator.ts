@@ -4,7 +4,7 @@ import { apfName, silicaRespirator, UNDECIDED_RESPIRATOR } from '../silica/respi
 import { type SilicaTask } from '../silica/silica-context';
 import { table1Place } from '../silica/table1';
 import { type TaskContext } from '../shift-context';
-import { commonPractice, sourced, usFederal } from '../source';
+import { commonPractice, sourced } from '../source';
 import { words } from '../words';
 import { saysNotNeeded } from './protection';
 
@@ -31,7 +31,7 @@ export function sheetRespiratorDemand({ traits, kit }: TaskContext): SheetDemand
 
 const POLICY: Readonly<Partial<Record<TaskKind, RespiratorAnswer['source']>>> = {
   'powder-mixing': commonPractice('The respirator is on before powder is dumped.'),
-  'collector-emptying': usFederal('1926.57', 'parallel-text', { paragraph: '(f)(5)(iii)', note: 'Dust-filter masks for short dusty work such as dumping collectors: read in WAC 296-818-20010 note 2. Worn by policy.' }),
+  'collector-emptying': commonPractice('Worn by policy. 1926.57(f)(5)(iii) has dust-filter masks for short dusty work such as dumping collectors, but speaks of abrasive blasting (WAC 296-818-20010 note 2, read).'),
 };
 
 /** "None" in Table 1 is none under Table 1: the site, its owner or another law may still ask a mask. */

@@ -6,7 +6,7 @@ import { averageWithinLimit, dilutionEnough, mixtureWithinLimits } from '../air/
 import { answerShift } from '../answer-shift';
 import { type FloorFacts, type PersonRespirator, type ShiftFacts, type TaskFacts } from '../facts';
 import { protectedLevelDual } from '../noise/hearing-protection';
-import { hearingProtection } from '../noise/noise-rules';
+import { hearingProtection, noiseInShift } from '../noise/noise-rules';
 import { type Finding } from '../outcome';
 import { checkWearer, type Wearer } from '../respirators/fit-test';
 import { medicalSurveillance } from '../respirators/respirator-rules';
@@ -239,6 +239,12 @@ describe('marks that say more than was read', () => {
     expect(maskSource(taskFacts({ kind: 'clean-up', assignments: at }))).toMatchObject({ outcome: 'none-required', source: { verified: 'partly' } });
   });
 
+  // 1926.57(f) is the abrasive-blasting paragraph: a grinder's collector is not under it.
+  it('a mask by policy at the grinder\'s collector leans on no law', () => {
+    const grinding = taskFacts({ kind: 'floor-grinding', assignments: at, equipmentId: 'grinder', collectorId: 'collector', dustMethod: 'vacuum' });
+    expect(maskSource(taskFacts({ kind: 'collector-emptying', assignments: at, collectorId: 'collector' }), [grinding])).toMatchObject({ outcome: 'by-policy', source: { verified: 'common-practice' } });
+  });
+
   // (k): obligations from 23 June 2017; the memorandum of 25 June 2018 speaks of enforcement from 23 September.
   it('the silica limit holds from the day of the rule, not of its enforcement', () => {
     expect(LIMIT_ROWS.find(({ id }) => id.startsWith('limit/rcs/us-federal/construction/twa-8h'))?.source.inForceFrom).toBe('2017-06-23');
@@ -265,5 +271,12 @@ describe('1926.57(f)(5)(ii), read in WAC 296-818-20010: the hood where nothing s
     const finding = shiftOf(taskFacts({ kind: 'shot-blasting', assignments: at, equipmentId: 'blaster', collectorId: 'collector' })).find('shot-blasting-safeguards');
     expect(finding?.whatWouldChange?.en).toMatch(/open nozzle.*blasting hood with supplied air/);
     expect(shiftOf(taskFacts({ kind: 'shot-pick-up', assignments: at })).find('shot-blasting-safeguards')?.whatWouldChange).toBeNull();
+  });
+});
+
+describe('1926.52(d)(1), read in the Cornell LII copy: above the table a hearing conservation program is due', () => {
+  it('[NOI-01] names it', () => {
+    expect(noiseInShift.evaluate({ periods: [{ levelDba: 97, minutes: 240 }] }, DAY)).toMatchObject({ outcome: 'unmet' });
+    expect(noiseInShift.evaluate({ periods: [{ levelDba: 97, minutes: 240 }] }, DAY).whatWouldChange?.en).toContain('hearing conservation program');
   });
 });
