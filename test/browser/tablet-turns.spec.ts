@@ -60,6 +60,18 @@ withChromium('The tablet, when things go another way', () => {
       complaints.noLongerExpect(/4\d\d .*\/api\/tablet\//);
     });
 
+    step('for a day without a tablet the office prints the list: the published text, to tick and sign by hand', async () => {
+      const { page } = office;
+      await page.goto(day.path);
+      await page.getByRole('link', { name: 'List on paper' }).click();
+      await page.getByRole('columnheader', { name: 'Signature' }).waitFor();
+      for (const name of [dov, abe]) await page.getByRole('cell', { name, exact: true }).waitFor();
+      await page.getByText('no one may punish me for it').waitFor();
+      await expectAccessible(page, 'List on paper');
+      await page.getByRole('link', { name: 'Español' }).click();
+      await page.getByRole('columnheader', { name: 'Firma' }).waitFor();
+    });
+
     step('the whole list and the safety data sheets can be read, in both languages', async () => {
       const { page } = tablet;
       await page.getByRole('link', { name: 'Back to today' }).last().click();

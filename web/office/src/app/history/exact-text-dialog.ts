@@ -1,11 +1,10 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogContent, MatDialogRef, MatDialogTitle } from '@angular/material/dialog';
-import { firstValueFrom } from 'rxjs';
-import { parseChecklistText, type ChecklistText } from '#compliance';
 import { Note } from '#ui/note';
 import { ContractClient } from '../contract/contract-client';
 import { Unready } from '../pieces/unready';
+import { readExactText, type ExactText } from './exact-text';
 import { SignedText } from './signed-text';
 
 export interface ExactTextQuestion {
@@ -14,15 +13,6 @@ export interface ExactTextQuestion {
   /** What the record says the bytes hash to. */
   readonly sha256: string;
   readonly heading: string;
-}
-
-interface ReadText {
-  readonly text: string;
-  /** Null where the bytes are not a text this page can set; they are then shown as they are. */
-  readonly checklist: ChecklistText | null;
-  readonly byteLength: number;
-  /** Null where this page may not compute it (plain http). */
-  readonly sha256: string | null;
 }
 
 /** The very bytes that were signed: read as text, hashed in this browser, compared with the record. */
@@ -80,7 +70,7 @@ export class ExactTextDialog {
   protected readonly question = inject<ExactTextQuestion>(MAT_DIALOG_DATA);
   protected readonly dialog = inject<MatDialogRef<ExactTextDialog>>(MatDialogRef);
 
-  protected readonly read = signal<ReadText | null>(null);
+  protected readonly read = signal<ExactText | null>(null);
   protected readonly error = signal<unknown>(null);
   protected readonly isRaw = signal(false);
   private readonly params = { versionId: this.question.versionId, language: this.question.language };
@@ -93,26 +83,9 @@ export class ExactTextDialog {
   protected async load(): Promise<void> {
     this.error.set(null);
     try {
-      const bytes = await firstValueFrom(this.client.bytes('readText', this.params));
-      const text = new TextDecoder().decode(bytes);
-      this.read.set({ text, checklist: checklistIn(text), byteLength: bytes.byteLength, sha256: await sha256Of(bytes) });
+      this.read.set(await readExactText(this.client, this.question.versionId, this.question.language));
     } catch (error) {
       this.error.set(error);
     }
   }
-}
-
-function checklistIn(text: string): ChecklistText | null {
-  try {
-    return parseChecklistText(text);
-  } catch {
-    return null;
-  }
-}
-
-async function sha256Of(bytes: ArrayBuffer): Promise<string | null> {
-  // Absent on plain http, whatever the typings say.
-  const subtle = (globalThis.crypto as Crypto | undefined)?.subtle as SubtleCrypto | undefined;
-  if (!subtle) return null;
-  return [...new Uint8Array(await subtle.digest('SHA-256', bytes))].map((byte) => byte.toString(16).padStart(2, '0')).join('');
 }

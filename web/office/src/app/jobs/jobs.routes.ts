@@ -12,4 +12,5 @@ export const routes: Routes = [
     canDeactivate: [keepUnsavedPlan],
     loadComponent: () => import('./shift/shift-page').then((file) => file.ShiftPage),
   },
+  { path: ':jobId/shifts/:shiftId/paper/:versionId', title: 'List on paper', loadComponent: () => import('./paper/paper-page').then((file) => file.PaperPage) },
 ];

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
+import { RouterLink } from '@angular/router';
 import { type PublishedVersion } from '#shared/jobs';
 import { State, type StateKind } from '#ui/state';
 import { ExactTextDialog, type ExactTextQuestion } from '../../history/exact-text-dialog';
@@ -16,7 +17,7 @@ const words: Readonly<Record<SigningState, { readonly kind: StateKind; readonly 
 /** Every published version of the shift, newest first, with who has signed and the exact texts. */
 @Component({
   selector: 'kb-shift-versions',
-  imports: [State],
+  imports: [RouterLink, State],
   template: `
     @for (version of ordered(); track version.id; let first = $first) {
       <section class="version" [attr.aria-label]="'Version ' + version.number">
@@ -25,6 +26,7 @@ const words: Readonly<Record<SigningState, { readonly kind: StateKind; readonly 
           <span class="kb-quiet kb-grow">published {{ momentShort(version.publishedAt) }} by {{ version.publishedBy }}</span>
           @for (text of version.texts; track text.language) {
             <button type="button" class="kb-link" [attr.aria-label]="languages[text.language] + ' text of version ' + version.number" (click)="read(version, text)">{{ languages[text.language] }} text</button>
+            <a [routerLink]="['paper', version.id]" [queryParams]="{ language: text.language }" [attr.aria-label]="languages[text.language] + ' list of version ' + version.number + ' on paper'">on paper</a>
           }
         </div>
         @if (first) {

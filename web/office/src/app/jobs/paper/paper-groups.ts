@@ -1,0 +1,36 @@
+import { type ChecklistText, type Mark } from '#compliance';
+
+/** A line of the paper list; what several tasks share is asked once. */
+export interface PaperRow {
+  readonly id: string;
+  readonly text: string;
+  readonly mark: Mark | null;
+  readonly taskNames: readonly string[];
+  readonly source: string;
+}
+
+export interface PaperGroups {
+  readonly morning: readonly PaperRow[];
+  /** At each start: controls, access, housekeeping. */
+  readonly controls: readonly PaperRow[];
+  /** After them: what is worn. */
+  readonly protection: readonly PaperRow[];
+}
+
+/** The lines of a published text in the order of the day, controls before protection (rule of conduct 1). */
+export function paperGroups({ morning, tasks }: ChecklistText): PaperGroups {
+  const rows = new Map<string, { id: string; text: string; mark: Mark | null; taskNames: string[]; source: string }>();
+  for (const { name, live } of tasks) {
+    for (const { id, text, mark, source } of live) {
+      const key = JSON.stringify([text, mark, source]);
+      const known = rows.get(key);
+      if (!known) rows.set(key, { id, text, mark, taskNames: [name], source });
+      else if (!known.taskNames.includes(name)) known.taskNames.push(name);
+    }
+  }
+  return {
+    morning: morning.map(({ id, text, mark, source }) => ({ id, text, mark, taskNames: [], source })),
+    controls: [...rows.values()].filter(({ mark }) => mark === null),
+    protection: [...rows.values()].filter(({ mark }) => mark !== null),
+  };
+}
