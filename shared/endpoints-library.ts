@@ -1,6 +1,6 @@
 import { pageOf, type Role } from './common';
 import { type Endpoint } from './endpoints';
-import { AppliedRevision, AskSupplier, ContainerLabel, ImportPreview, ImportProducts, ImportedProducts, LabelQuery, LibraryPolicy, LibraryTask, OpenRequest, ProductUse, ProductUsesQuery, Reach, RequestsQuery, SearchAnswer, SearchQuery, SheetRequest, SiteCode, SitePage, UseLink, ZipOutcome } from './library';
+import { AppliedRevision, AskSupplier, ContainerLabel, ImportPreview, ImportProducts, ImportedProducts, LabelQuery, LibraryPolicy, LibraryTask, OpenRequest, ProductUse, ProductUsesQuery, Reach, RequestsQuery, ReturnSheet, SearchAnswer, SearchQuery, SheetRequest, SheetReturnDraft, SiteCode, SitePage, UseLink, ZipOutcome } from './library';
 import { PageQuery } from './common';
 
 const everyone: readonly Role[] = ['owner', 'safety-officer', 'crew-lead', 'auditor'];
@@ -18,6 +18,8 @@ export const libraryKeepingEndpoints = {
   setLibraryPolicy: { method: 'PUT', path: '/api/library-policy', access: officer, body: LibraryPolicy, answer: LibraryPolicy },
   listRequests: { method: 'GET', path: '/api/sheet-requests', access: office, query: RequestsQuery, answer: pageOf(SheetRequest) },
   askSupplier: { method: 'POST', path: '/api/sheet-requests', access: officer, body: AskSupplier, answer: SheetRequest },
+  draftReturn: { method: 'GET', path: '/api/sheets/:revisionId/return', access: officer, answer: SheetReturnDraft },
+  returnSheet: { method: 'POST', path: '/api/sheets/:revisionId/return', access: officer, needsVersion: true, body: ReturnSheet, answer: SheetRequest },
   withdrawRequest: { method: 'DELETE', path: '/api/sheet-requests/:requestId', access: officer, answer: SheetRequest },
   openRequest: { method: 'POST', path: '/api/open-requests', access: 'public', body: UseLink, answer: OpenRequest },
   /** The link's token travels in the header `X-Kneeboard-Link`. */

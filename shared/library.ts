@@ -64,9 +64,12 @@ export type LibraryPolicy = z.infer<typeof LibraryPolicy>;
 export const requestStates = ['open', 'answered', 'withdrawn', 'expired'] as const;
 export const SheetRequest = z.object({
   id: Id,
-  productId: Id,
+  /** Null while the sheet that was sent back belongs to no product yet. */
+  productId: Id.nullable(),
   productName: z.string(),
   supplier: z.string(),
+  /** The sheet that was sent back with the findings of its audit; null where one was merely asked for. */
+  aboutRevisionId: Id.nullable(),
   email: z.string(),
   message: z.string(),
   language: z.enum(['en', 'es']),
@@ -76,12 +79,26 @@ export const SheetRequest = z.object({
   mailedAt: Instant.nullable(),
   expiresAt: Instant,
   answeredAt: Instant.nullable(),
+  /** The sheet that came as the answer; the same as `aboutRevisionId` when the supplier sent the very same file again. */
   revisionId: Id.nullable(),
 });
 export type SheetRequest = z.infer<typeof SheetRequest>;
-export const AskSupplier = z.strictObject({ productId: Id, email: z.email('Write an e-mail address.').max(200), message: Paragraph(2000), language: z.enum(['en', 'es']) });
+export const AskSupplier = z.strictObject({ productId: Id, email: z.email('Write an e-mail address.').max(200), message: Paragraph(4000), language: z.enum(['en', 'es']) });
 export type AskSupplier = z.infer<typeof AskSupplier>;
-export const RequestsQuery = PageQuery.extend({ state: z.enum(requestStates).optional(), productId: Id.optional() });
+/** What sending a sheet back would say: from its values and the findings of its audit, to be changed before it goes. */
+export const SheetReturnDraft = z.object({ productName: z.string(), supplier: z.string(), /** Where this supplier was last asked. */ email: z.string(), messages: z.object({ en: z.string(), es: z.string() }) });
+export type SheetReturnDraft = z.infer<typeof SheetReturnDraft>;
+export const ReturnSheet = z.strictObject({
+  productName: Line(200),
+  supplier: Line(200),
+  email: z.email('Write an e-mail address.').max(200),
+  message: Paragraph(4000),
+  language: z.enum(['en', 'es']),
+  /** Sets the sheet aside until the answer is there; not for a confirmed one. */
+  isSetAside: z.boolean(),
+});
+export type ReturnSheet = z.infer<typeof ReturnSheet>;
+export const RequestsQuery = PageQuery.extend({ state: z.enum(requestStates).optional(), productId: Id.optional(), /** Sent back, or come as the answer. */ revisionId: Id.optional() });
 /** All that a link shows: who asks for which product. Nothing else of the organisation. */
 export const OpenRequest = z.object({ organisationName: z.string(), productName: z.string(), supplier: z.string(), message: z.string(), expiresAt: Instant });
 export type OpenRequest = z.infer<typeof OpenRequest>;

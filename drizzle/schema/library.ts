@@ -1,4 +1,5 @@
-import { date, foreignKey, index, pgTable, primaryKey, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import { sql } from 'drizzle-orm';
+import { check, date, foreignKey, index, pgTable, primaryKey, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { bytea, people } from './people';
 import { jobs, shifts } from './jobs';
 import { products, revisions } from './sheets';
@@ -9,7 +10,12 @@ export const sheetRequests = pgTable(
   {
     organisationId: uuid().notNull(),
     id: uuid().notNull(),
-    productId: uuid().notNull(),
+    /** Null while the sheet that is sent back belongs to no product yet: then the two names below say what it is. */
+    productId: uuid(),
+    productName: text(),
+    supplier: text(),
+    /** The sheet that was sent back; null where one is merely asked for. */
+    aboutRevisionId: uuid(),
     email: text().notNull(),
     message: text().notNull(),
     language: text().notNull(),
@@ -27,6 +33,8 @@ export const sheetRequests = pgTable(
     foreignKey({ columns: [t.organisationId, t.productId], foreignColumns: [products.organisationId, products.id] }),
     foreignKey({ columns: [t.organisationId, t.askedBy], foreignColumns: [people.organisationId, people.id] }),
     foreignKey({ columns: [t.organisationId, t.revisionId], foreignColumns: [revisions.organisationId, revisions.id] }),
+    foreignKey({ columns: [t.organisationId, t.aboutRevisionId], foreignColumns: [revisions.organisationId, revisions.id] }),
+    check('sheet_requests_name_a_product', sql`${t.productId} IS NOT NULL OR (${t.productName} IS NOT NULL AND ${t.supplier} IS NOT NULL AND ${t.aboutRevisionId} IS NOT NULL)`),
   ],
 );
 

@@ -98,8 +98,8 @@ export function keepingService({ database, clock }: Deps) {
     }
     for (const request of requests) {
       const days = Math.floor((now.getTime() - request.askedAt.getTime()) / dayMs);
-      const name = all.find((product) => product.id === request.productId)?.name ?? 'a product';
-      if (days >= requestPatienceDays) add('request-open', 'plain', request.productId, null, `${name}: asked ${days} days ago, no answer`, `${request.email}. Ask again or telephone.`);
+      const name = all.find((product) => product.id === request.productId)?.name ?? request.productName ?? 'a product';
+      if (days >= requestPatienceDays) add('request-open', 'plain', request.productId, request.productId === null ? request.aboutRevisionId : null, `${name}: asked ${days} days ago, no answer`, `${request.email}. Ask again or telephone.`);
     }
     return found;
   }

@@ -34,6 +34,8 @@ export function libraryRoutes({ reach, keeping, requests, bulk, site }: Services
 
   mount(router, 'listRequests', ({ actor, query }) => requests.list(actor, query));
   mount(router, 'askSupplier', ({ actor, body }) => requests.ask(actor, body));
+  mount(router, 'draftReturn', ({ actor, params }) => requests.draftReturn(actor, params.revisionId));
+  mount(router, 'returnSheet', ({ actor, params, version, body }) => requests.returnSheet(actor, params.revisionId, version, body));
   mount(router, 'withdrawRequest', ({ actor, params }) => requests.withdraw(actor, params.requestId));
   mount(router, 'openRequest', ({ body, request }) => requests.open(body.token, addressOf(request)));
   mount(

@@ -6,24 +6,33 @@ import { organisations } from '#drizzle/schema/organisations';
 import { people } from '#drizzle/schema/people';
 import { products } from '#drizzle/schema/sheets';
 import { type Page } from '#shared/common';
-import { type AskSupplier, type OpenRequest, type RequestsQuery, type SheetRequest } from '#shared/library';
+import { type AskSupplier, type OpenRequest, type RequestsQuery, type ReturnSheet, type SheetRequest, type SheetReturnDraft } from '#shared/library';
 import { type Deps } from '../deps';
-import { NotFoundError, RefusedError } from '../errors';
+import { ConflictError, NotFoundError, RefusedError } from '../errors';
 import { demandRole, type PersonActor } from '../http/actor';
 import { type UploadedFile } from '../http/mount';
 import { readCursor, toPage } from '../paging';
 import { type Tx } from '../platform/database';
 import { dropLink, makeLink, openLink } from '../platform/links';
 import { type Work } from '../platform/queue';
+import { findingsOn } from '../sds/sheet-fields';
 import { type SheetsService } from '../sds/sheets-service';
+import { fieldsOf, findRevision, hasValues, toRevision, toSummary } from '../sds/sheets-store';
+import { returnMessage } from './return-words';
 
 const goodForDays = 30;
 
 const select = (tx: Tx) =>
   tx
-    .select({ request: sheetRequests, productName: products.name, supplier: products.supplier, askedByName: people.name, organisationName: organisations.name })
+    .select({
+      request: sheetRequests,
+      productName: sql<string>`coalesce(${products.name}, ${sheetRequests.productName}, '')`,
+      supplier: sql<string>`coalesce(${products.supplier}, ${sheetRequests.supplier}, '')`,
+      askedByName: people.name,
+      organisationName: organisations.name,
+    })
     .from(sheetRequests)
-    .innerJoin(products, and(eq(products.organisationId, sheetRequests.organisationId), eq(products.id, sheetRequests.productId)))
+    .leftJoin(products, and(eq(products.organisationId, sheetRequests.organisationId), eq(products.id, sheetRequests.productId)))
     .innerJoin(people, and(eq(people.organisationId, sheetRequests.organisationId), eq(people.id, sheetRequests.askedBy)))
     .innerJoin(organisations, eq(organisations.organisationId, sheetRequests.organisationId));
 type Row = Awaited<ReturnType<typeof select>>[number];
@@ -37,6 +46,7 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
       productId: request.productId,
       productName: row.productName,
       supplier: row.supplier,
+      aboutRevisionId: request.aboutRevisionId,
       email: request.email,
       message: request.message,
       language: request.language as SheetRequest['language'],
@@ -55,8 +65,20 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
     return row;
   };
 
+  async function open(tx: Tx, actor: PersonActor, values: Pick<typeof sheetRequests.$inferInsert, 'productId' | 'productName' | 'supplier' | 'aboutRevisionId' | 'email' | 'message' | 'language'>): Promise<SheetRequest> {
+    const [now, id] = [clock.now(), newId()];
+    await tx.insert(sheetRequests).values({ ...values, organisationId: tx.organisationId, id, askedAt: now, askedBy: actor.personId, expiresAt: new Date(now.getTime() + goodForDays * 24 * 3600 * 1000) });
+    await queue.add(tx, 'mail-request', { organisationId: tx.organisationId, requestId: id });
+    return toRequest(await find(tx, id));
+  }
+  /** The address this supplier was last asked at, whatever the product. */
+  async function lastAskedAt(tx: Tx, supplier: string): Promise<string | undefined> {
+    const [row] = await select(tx).where(and(eq(sheetRequests.organisationId, tx.organisationId), sql`lower(coalesce(${products.supplier}, ${sheetRequests.supplier})) = lower(${supplier})`)).orderBy(desc(sheetRequests.askedAt)).limit(1);
+    return row?.request.email;
+  }
+
   return {
-    list: (actor: PersonActor, { after, limit, state, productId }: z.output<typeof RequestsQuery>): Promise<Page<SheetRequest>> =>
+    list: (actor: PersonActor, { after, limit, state, productId, revisionId }: z.output<typeof RequestsQuery>): Promise<Page<SheetRequest>> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         const cursor = readCursor(after, 'instant', 'id');
         const now = sql`${clock.now().toISOString()}::timestamptz`;
@@ -68,6 +90,7 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
               eq(sheetRequests.organisationId, tx.organisationId),
               state ? states[state] : undefined,
               productId ? eq(sheetRequests.productId, productId) : undefined,
+              revisionId ? or(eq(sheetRequests.aboutRevisionId, revisionId), eq(sheetRequests.revisionId, revisionId)) : undefined,
               cursor ? or(lt(sheetRequests.askedAt, new Date(String(cursor[0]))), and(eq(sheetRequests.askedAt, new Date(String(cursor[0]))), lt(sheetRequests.id, String(cursor[1])))) : undefined,
             ),
           )
@@ -82,11 +105,30 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
         demandRole(actor, 'safety-officer');
         const [product] = await tx.select({ id: products.id }).from(products).where(and(eq(products.organisationId, tx.organisationId), eq(products.id, productId)));
         if (!product) throw new NotFoundError('product');
-        const now = clock.now();
-        const id = newId();
-        await tx.insert(sheetRequests).values({ organisationId: tx.organisationId, id, productId, email, message, language, askedAt: now, askedBy: actor.personId, expiresAt: new Date(now.getTime() + goodForDays * 24 * 3600 * 1000) });
-        await queue.add(tx, 'mail-request', { organisationId: tx.organisationId, requestId: id });
-        return toRequest(await find(tx, id));
+        return open(tx, actor, { productId, email, message, language });
+      }),
+
+    /** A first wording of the mail that sends this sheet back, from its audit; and where its supplier was last asked. */
+    draftReturn: (actor: PersonActor, revisionId: string): Promise<SheetReturnDraft> =>
+      database.inOrganisation(actor.organisationId, async (tx) => {
+        demandRole(actor, 'safety-officer');
+        const row = await findRevision(tx, revisionId);
+        const fields = fieldsOf(row);
+        const { productName, supplier, revisedOn, readerState, fileName } = toSummary(row);
+        const isRead = hasValues(readerState) || row.revision.state === 'confirmed';
+        const about = { productName: productName ?? fileName, fileName, revisedOn, readerState, findings: isRead ? findingsOn(fields, clock.now().toISOString().slice(0, 10)) : [] };
+        return { productName: productName ?? '', supplier: supplier ?? '', email: (supplier && (await lastAskedAt(tx, supplier))) ?? '', messages: { en: returnMessage(about, 'en'), es: returnMessage(about, 'es') } };
+      }),
+
+    /** Sends a sheet back: a request like any other that knows which sheet it is about. The sheet itself is never changed. */
+    returnSheet: (actor: PersonActor, revisionId: string, version: number, { productName, supplier, email, message, language, isSetAside }: ReturnSheet): Promise<SheetRequest> =>
+      database.inOrganisation(actor.organisationId, async (tx) => {
+        demandRole(actor, 'safety-officer');
+        const row = await findRevision(tx, revisionId);
+        if (row.revision.version !== version) throw new ConflictError('Somebody changed this sheet after you opened it. Compare, then do it again.', toRevision(row, clock.now().toISOString().slice(0, 10)));
+        if (isSetAside && row.revision.state === 'confirmed') throw new RefusedError('A confirmed sheet stays in use until a newer one is confirmed. Send it back without setting it aside.');
+        if (isSetAside && row.revision.state !== 'set-aside') await sheets.setAsideIn(tx, revisionId, version);
+        return open(tx, actor, { productId: row.revision.productId, productName, supplier, aboutRevisionId: revisionId, email, message, language });
       }),
 
     withdraw: (actor: PersonActor, id: string): Promise<SheetRequest> =>
@@ -110,11 +152,12 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
       const { row, token } = made;
       const address = `${config.publicUrl}/send-sheet#${token}`;
       const until = row.request.expiresAt.toISOString().slice(0, 10);
+      const isReturn = row.request.aboutRevisionId !== null;
       const text =
         row.request.language === 'es'
-          ? [`${row.organisationName} le pide la hoja de datos de seguridad vigente de:`, row.productName, '', row.request.message, '', 'Puede enviarla aquí, sin cuenta, una sola vez:', address, `El enlace vale hasta el ${until}.`]
-          : [`${row.organisationName} asks you for the current safety data sheet of:`, row.productName, '', row.request.message, '', 'You can send it here, without an account, once:', address, `The link is good until ${until}.`];
-      const subject = row.request.language === 'es' ? `Hoja de datos de seguridad: ${row.productName}` : `Safety data sheet: ${row.productName}`;
+          ? [`${row.organisationName} le ${isReturn ? 'devuelve su hoja y pide' : 'pide'} la hoja de datos de seguridad vigente de:`, row.productName, '', row.request.message, '', 'Puede enviarla aquí, sin cuenta, una sola vez:', address, `El enlace vale hasta el ${until}.`]
+          : [`${row.organisationName} ${isReturn ? 'sends your sheet back and asks' : 'asks'} you for the current safety data sheet of:`, row.productName, '', row.request.message, '', 'You can send it here, without an account, once:', address, `The link is good until ${until}.`];
+      const subject = row.request.language === 'es' ? `Hoja de datos de seguridad${isReturn ? ' devuelta' : ''}: ${row.productName}` : `Safety data sheet${isReturn ? ' sent back' : ''}: ${row.productName}`;
       await mail.send({ to: [row.request.email], subject, text: `${text.join('\n')}\n` });
       await database.inOrganisation(organisationId, (tx) => tx.update(sheetRequests).set({ mailedAt: clock.now() }).where(and(eq(sheetRequests.organisationId, organisationId), eq(sheetRequests.id, requestId))));
     },

@@ -63,7 +63,10 @@ export function applyEdit(before: SheetFields, edit: SheetEdit): SheetFields {
 }
 
 /** What the audit of form, statements and CAS digits has to say, worst first; lines that are met are left out. */
-export function remarksOn(fields: SheetFields, today: string): z.infer<typeof SheetRemark>[] {
+export const remarksOn = (fields: SheetFields, today: string): z.infer<typeof SheetRemark>[] =>
+  findingsOn(fields, today).map(({ outcome, text, source }) => ({ outcome, text: text.en, source: [source.citation, source.paragraph].filter(Boolean).join(' ') }));
+
+export function findingsOn(fields: SheetFields, today: string): AuditLine[] {
   const codes = fields.hazardCodes.map((field) => ({ code: field.value, category: null }));
   const lines = auditSds(
     {
@@ -81,5 +84,5 @@ export function remarksOn(fields: SheetFields, today: string): z.infer<typeof Sh
   );
   // The text of each section is not kept, so its content is not judged here; pictograms are not read, so nothing is asked of them.
   const shown = (line: AuditLine) => line.outcome !== 'met' && line.outcome !== 'not-applicable' && !line.id.startsWith('content-') && !/pictogram/.test(line.id);
-  return lines.filter(shown).map(({ outcome, text, source }) => ({ outcome, text: text.en, source: [source.citation, source.paragraph].filter(Boolean).join(' ') }));
+  return lines.filter(shown);
 }

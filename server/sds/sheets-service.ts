@@ -1,9 +1,10 @@
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
 import { open } from 'node:fs/promises';
-import { and, eq, ne, sql } from 'drizzle-orm';
+import { and, eq, isNull, ne, or, sql } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
 import type * as z from 'zod';
+import { sheetRequests } from '#drizzle/schema/library';
 import { products, revisions } from '#drizzle/schema/sheets';
 import { type Page } from '#shared/common';
 import { neededMessage, neededToConfirm, type ConfirmSheet, type Revision, type RevisionSummary, type SheetEdit, type SheetFields, type SheetsQuery, type UploadedSheet } from '#shared/sheets';
@@ -37,6 +38,11 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
   const demandState = (row: RevisionRow, allowed: readonly string[], why: string) => {
     if (!allowed.includes(row.revision.state)) throw new RefusedError(why);
   };
+
+  async function setAsideIn(tx: Tx, id: string, version: number): Promise<Revision> {
+    demandState(await findRevision(tx, id), ['read', 'needs-entry', 'waiting'], 'Only a sheet that is not confirmed can be set aside.');
+    return change(tx, id, version, { state: 'set-aside' });
+  }
 
   return {
     list: (actor: PersonActor, query: z.output<typeof SheetsQuery>): Promise<Page<RevisionSummary>> =>
@@ -119,6 +125,8 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
           const fields: SheetFields = applyEdit(fieldsOf(row), edit);
           const confirmedAt = clock.now();
           const revision = await change(tx, id, version, { fields, productId, language, revisedOn: edit.revisedOn, isCurrent, state: 'confirmed', confirmedBy: actor.personId, confirmedAt });
+          // A request about a sheet that had no product, or that brought this one, knows its product from now on.
+          await tx.update(sheetRequests).set({ productId }).where(and(eq(sheetRequests.organisationId, tx.organisationId), isNull(sheetRequests.productId), or(eq(sheetRequests.aboutRevisionId, id), eq(sheetRequests.revisionId, id))));
           await appendEntry(tx, clock, { kind: 'sheet-confirmed', subjectId: id, record: { revisionId: id, sha256: row.revision.sha256, productId, isCurrent, values: edit, confirmedBy: { id: actor.personId, name: actor.personName }, confirmedAt: confirmedAt.toISOString() } });
           return revision;
         });
@@ -131,9 +139,10 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
     setAside: (actor: PersonActor, id: string, version: number): Promise<Revision> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer');
-        demandState(await findRevision(tx, id), ['read', 'needs-entry', 'waiting'], 'Only a sheet that is not confirmed can be set aside.');
-        return change(tx, id, version, { state: 'set-aside' });
+        return setAsideIn(tx, id, version);
       }),
+    /** In the transaction of who sends the sheet back. */
+    setAsideIn,
     takeBack: (actor: PersonActor, id: string, version: number): Promise<Revision> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer');

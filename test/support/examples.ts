@@ -71,8 +71,13 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   listLibraryTasks: () => ({ query: { limit: 1 } }),
   readLibraryPolicy: () => ({}),
   setLibraryPolicy: () => ({ body: { reviewAfterYears: 3 } }),
-  listRequests: ({ ids }) => ({ query: { limit: 1, state: 'open', productId: ids['productId'] ?? '' } }),
+  listRequests: ({ ids }) => ({ query: { limit: 1, state: 'open', productId: ids['productId'] ?? '', revisionId: ids['revisionId'] ?? '' } }),
   askSupplier: ({ ids }) => ({ body: { productId: ids['productId'], email: 'sheets@northlode.example', message: 'Please send the current sheet.', language: 'es' } }),
+  draftReturn: ({ ids }) => ({ params: pick(ids, 'revisionId') }),
+  returnSheet: async ({ organisation }) => {
+    const { id, version } = await organisation.sheetToEnter();
+    return { params: { revisionId: id }, version, body: { productName: 'Quarrybond 40 Part C', supplier: 'Northlode Resins, Inc.', email: 'sheets@northlode.example', message: 'Section 14 is missing.', language: 'en', isSetAside: true } };
+  },
   withdrawRequest: async (world) => ({ params: { requestId: (await openRequest(world)).id } }),
   openRequest: async (world) => ({ body: { token: (await openRequest(world)).token } }),
   answerRequest: async (world) => ({ headers: { 'X-Kneeboard-Link': (await openRequest(world)).token }, file: { bytes: Buffer.from(`%PDF-1.4 answer ${newId()}`), fileName: 'sheet.pdf' } }),

@@ -2,7 +2,7 @@ import { httpResource } from '@angular/common/http';
 import { inject, Injectable, type Signal } from '@angular/core';
 import { type Observable } from 'rxjs';
 import { type Page } from '#shared/common';
-import { type AppliedRevision, type AskSupplier, type LibraryPolicy, type LibraryTask, type ProductUse, type Reach, type SheetRequest } from '#shared/library';
+import { type AppliedRevision, type AskSupplier, type LibraryPolicy, type LibraryTask, type ProductUse, type Reach, type ReturnSheet, type SheetRequest, type SheetReturnDraft } from '#shared/library';
 import type * as z from 'zod';
 import { ContractClient } from '../contract/contract-client';
 import { answerOf, requestOf } from '../contract/contract-request';
@@ -39,12 +39,20 @@ export class LibraryApi {
     return this.client.call('setLibraryPolicy', { body: policy });
   }
 
-  requests(filter: { readonly productId?: string | undefined; readonly state?: SheetRequest['state'] | undefined }, after?: string): Observable<Page<SheetRequest>> {
+  requests(filter: { readonly productId?: string | undefined; readonly revisionId?: string | undefined; readonly state?: SheetRequest['state'] | undefined }, after?: string): Observable<Page<SheetRequest>> {
     return this.client.call('listRequests', { query: { ...filter, after } });
   }
 
   ask(request: z.input<typeof AskSupplier>): Observable<SheetRequest> {
     return this.client.call('askSupplier', { body: request });
+  }
+
+  draftReturn(revisionId: string): Observable<SheetReturnDraft> {
+    return this.client.call('draftReturn', { params: { revisionId } });
+  }
+
+  returnSheet(revisionId: string, version: number, sheet: ReturnSheet): Observable<SheetRequest> {
+    return this.client.call('returnSheet', { params: { revisionId }, version, body: sheet });
   }
 
   withdraw(requestId: string): Observable<SheetRequest> {

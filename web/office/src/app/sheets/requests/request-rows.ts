@@ -21,7 +21,16 @@ import { LibraryApi } from '../library-api';
     <ul class="kb-rows" style="--kb-columns: minmax(11rem, 1.3fr) minmax(10rem, 1.2fr) minmax(9rem, 1fr) 6rem" aria-label="Requests to suppliers">
       @for (row of rows(); track row.request.id) {
         <li>
-          <a [routerLink]="['/products', row.request.productId]"><b>{{ row.request.productName }}</b></a>
+          <span>
+            @if (row.request.productId; as productId) {
+              <a [routerLink]="['/products', productId]"><b>{{ row.request.productName }}</b></a>
+            } @else {
+              <b>{{ row.request.productName }}</b>
+            }
+            @if (row.request.aboutRevisionId; as aboutId) {
+              <span class="kb-quiet block"><a [routerLink]="['/sheets', aboutId]">sent back<span class="kb-visually-hidden">: {{ row.request.productName }}</span></a></span>
+            }
+          </span>
           <span>{{ row.request.email }}<span class="kb-quiet block">{{ row.asked }}</span></span>
           <span><kb-state [kind]="row.kind">{{ row.words }}</kb-state><span class="kb-quiet block">{{ row.detail }}</span></span>
           <span>
@@ -67,11 +76,12 @@ export class RequestRows {
   }
 }
 
-function standing({ state, mailedAt, expiresAt, answeredAt }: SheetRequest): { readonly kind: StateKind; readonly words: string; readonly detail: string } {
+function standing({ state, mailedAt, expiresAt, answeredAt, revisionId, aboutRevisionId }: SheetRequest): { readonly kind: StateKind; readonly words: string; readonly detail: string } {
   switch (state) {
     case 'open':
       return mailedAt === null ? { kind: 'plain', words: 'being sent', detail: '' } : { kind: 'caution', words: 'waiting', detail: `link good until ${dayOf(localDateOf(expiresAt))}` };
     case 'answered':
+      if (revisionId !== null && revisionId === aboutRevisionId) return { kind: 'caution', words: 'same file again', detail: answeredAt ? momentShort(answeredAt) : '' };
       return { kind: 'done', words: 'answered', detail: answeredAt ? momentShort(answeredAt) : '' };
     case 'withdrawn':
       return { kind: 'plain', words: 'withdrawn', detail: 'the link is dead' };

@@ -77,6 +77,7 @@ describe('checking what was read', () => {
       // The page counts as busy until it knows what the sheet reaches.
       TestBed.tick();
       server.match(({ url }) => url.endsWith('/reach')).forEach((asked) => asked.flush(reach));
+      server.match(({ url }) => url === '/api/sheet-requests').forEach((asked) => asked.flush({ items: [], next: null }));
       await fixture.whenStable();
     };
     await settle();

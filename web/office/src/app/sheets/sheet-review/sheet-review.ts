@@ -16,6 +16,7 @@ import { FormTrouble } from '../../pieces/form-trouble';
 import { Unready } from '../../pieces/unready';
 import { NavigationCounts } from '../../shell/navigation-counts';
 import { ReachPanel } from '../reach/reach-panel';
+import { SheetReturns } from '../requests/sheet-returns';
 import { pageUnderWay, picturesWords, readerTrouble } from '../sheet-words';
 import { SheetsApi } from '../sheets-api';
 import { ConfirmDialog, type ConfirmOutcome, type ConfirmQuestion } from './confirm-dialog';
@@ -29,7 +30,7 @@ const pollMilliseconds = 1500;
 /** One sheet: the page on one side, what was read from it on the other; a person confirms it value by value. */
 @Component({
   selector: 'kb-sheet-review',
-  imports: [FormTrouble, MatButton, Note, PageHeader, PageViewer, ReachPanel, ReviewList, RouterLink, Unready],
+  imports: [FormTrouble, MatButton, Note, PageHeader, PageViewer, ReachPanel, ReviewList, RouterLink, SheetReturns, Unready],
   templateUrl: './sheet-review.html',
   styleUrl: './sheet-review.scss',
   host: { '(document:keydown)': 'key($event)' },
@@ -43,6 +44,7 @@ export class SheetReview {
   private readonly counts = inject(NavigationCounts);
   private readonly injector = inject(Injector);
   private readonly list = viewChild(ReviewList);
+  private readonly returns = viewChild(SheetReturns);
 
   readonly revisionId = input.required<string>();
 
@@ -73,6 +75,7 @@ export class SheetReview {
   protected readonly isByHand = computed(() => this.revision()?.state === 'needs-entry');
   protected readonly mayConfirm = computed(() => this.isOpen() && this.access.may('confirmRevision'));
   protected readonly mayReadAgain = computed(() => this.access.may('readRevisionAgain'));
+  protected readonly mayReturn = computed(() => this.revision()?.state !== 'waiting' && this.access.may('returnSheet'));
   protected readonly mayTakeBack = computed(() => this.revision()?.state === 'set-aside' && this.access.may('takeRevisionBack'));
   protected readonly name = computed(() => this.revision()?.productName ?? this.revision()?.fileName ?? 'sheet');
   protected readonly fileHref = computed(() => this.api.fileHref(this.revisionId()));
@@ -176,6 +179,17 @@ export class SheetReview {
 
   protected setAside(): Promise<void> {
     return this.send(async (revision) => this.take(await firstValueFrom(this.api.setAside(revision.id, revision.version))));
+  }
+
+  /** With what was typed here saved first: the mail is written from what is stored. */
+  protected async sendBack(): Promise<void> {
+    if (this.mayConfirm() && this.form()?.dirty) await this.save();
+    if (!this.form()?.dirty || !this.mayConfirm()) await this.returns()?.sendBack();
+  }
+
+  protected reread(): void {
+    void this.load(this.revisionId());
+    this.refreshCounts();
   }
 
   protected takeBack(): Promise<void> {
