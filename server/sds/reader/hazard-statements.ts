@@ -2,6 +2,7 @@ import { hazardParts, type PartText } from './hazard-block';
 import { type Line, type Segment } from './lines';
 import { type Box, type Field } from './reading';
 import { type SheetParts } from './sheet-parts';
+import { signalWord } from './signal-word';
 import { matchStatements } from './statement-matcher';
 import { fold } from './words';
 
@@ -75,8 +76,15 @@ function withoutPartsOfCombinations(codes: Field<string>[]): Field<string>[] {
 
 /** Whether the sheet speaks the global system's language, so that its sentences are statements and not free prose. */
 function isGlobalSystem(parts: SheetParts, lines: Line[]): boolean {
+  if (isOfNewForm(parts, lines)) return true;
   const own = fold(lines.map((line) => line.text).join('\n'));
   return /signal ?word|hazard statement|hazard phrase|\bghs\b|\bsga\b|precautionary|palabra de advertencia|indicacion(es)? de peligro|consejos? de prudencia|mentions? (de danger|d'avertissement)|conseils? de prudence|gefahrenhinweis|signalwort|sicherheitshinweis|1272\/2008|\b(category|categoria|categorie|kategorie) \d/.test(own);
+}
+
+/** A sheet after the global system that labels nothing in section 2: its law is cited, its title is new, and a signal word stands there. */
+function isOfNewForm(parts: SheetParts, lines: Line[]): boolean {
+  const front = fold([...parts.sections.preamble, ...parts.running, ...(parts.sections.bodies.get('identification') ?? []), ...lines].map((line) => line.text).join('\n'));
+  return /1910\.1200|\bghs\b|1272\/2008|hcs ?2012|hazcom|whmis 2015/.test(front) && !/material safety data/.test(front) && ['danger', 'warning'].includes(signalWord(parts)?.value ?? '');
 }
 
 /** Sentences of the labelled statement block; without such a label, whole sentences anywhere but among precautions. */

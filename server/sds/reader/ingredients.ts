@@ -120,15 +120,16 @@ function amountsOf(lines: Line[], free: Amount[], anchors: Anchor[], columns: Co
     const inside = concentrationIn(`${anchor.segment.text.slice(0, anchor.start)} ; ${anchor.segment.text.slice(anchor.end)}`) ?? trailing(anchor);
     if (chosen) paired.set(anchor, chosen);
     else if (sameRow.length === 0 && inside) paired.set(anchor, { ...anchor, text: inside });
-    else if (sameRow.length === 0) {
-      const beside = besideIn(lines[anchor.row], anchor);
-      if (beside) paired.set(anchor, { ...anchor, ...beside });
-    }
   }
   const open = [...new Map(anchors.map((anchor) => [anchor.cas, anchor])).values()].filter((anchor) => !paired.has(anchor));
   const used = new Set([...paired.values()].map(({ segment }) => segment));
   const firstOf = new Set(anchors.filter((anchor, index) => anchors.findIndex(({ cas }) => cas === anchor.cas) === index));
   pairApart(lines, columns, open.filter((anchor) => firstOf.has(anchor)), anchors, free.filter(({ segment }) => !used.has(segment)), paired);
+  for (const anchor of open) {
+    const beside = paired.has(anchor) ? null : besideIn(lines[anchor.row], anchor);
+    // Where the amounts have a column, a percentage elsewhere is part of a name or a limit.
+    if (beside && (columns.amount === null || overlaps(beside.segment, columns.amount))) paired.set(anchor, { ...anchor, ...beside });
+  }
   return paired;
 }
 

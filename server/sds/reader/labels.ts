@@ -38,7 +38,7 @@ export function findLabelled(lines: Line[], label: RegExp, isLoose = false): Lab
       if (!match) return;
       const rest = folded.slice(match[0].length);
       // "Product name for shipping" is not "Product name"; "Product name: X", "Product name - X" is.
-      const mark = /^\s*(\([^)]{0,60}\))?\s*([:\-–*]|$)/.exec(rest) ?? (otherThing.test(rest) ? null : /^ [a-z '/&()]{2,34}:/.exec(rest));
+      const mark = /^\s*(\([^)]{0,60}\))?\s*([:\-–*]|$)/.exec(rest) ?? (otherThing.test(rest) ? null : /^ ?[a-z '/&()]{2,34}:|^ ?(and|&|\/|,) ?(full )?(address|tele?phone|phone|contact)[a-z ,&/]{0,30}$/.exec(rest));
       if (!mark && match[0].length < folded.length) {
         if (isLoose && /^ \S/.test(rest)) found.push({ line, index, values: [tail(segment, rest)], isBelow: false });
         return;

@@ -1,5 +1,5 @@
 import { boxAround, findLabelled, isLabel, type Labelled } from './labels';
-import { type Line, type Segment } from './lines';
+import { lineOf, type Line, type Segment } from './lines';
 import { type Field } from './reading';
 import { type SheetParts } from './sheet-parts';
 import { fold, hasLetters, joinSpacedLetters } from './words';
@@ -101,13 +101,17 @@ function withSupport(field: Field<string>, parts: SheetParts): Field<string> {
 function titleName(parts: SheetParts): Field<string> | null {
   const preamble = parts.sections.preamble;
   const title = preamble.findIndex((line) => isTitle(line));
-  const candidates = [...(title >= 0 ? preamble.slice(title + 1, title + 6) : []), ...parts.running].filter(isNameLike);
+  // A running line may hold the title and the name side by side.
+  const cells = parts.running.filter((line) => line.segments.length > 1).flatMap((line) => line.segments.map((segment) => lineOf([segment])));
+  const candidates = [...(title >= 0 ? preamble.slice(title + 1, title + 6) : []), ...parts.running, ...(parts.running.some(hasTitleCell) ? cells : [])].filter(isNameLike);
   const body = median(parts.lines.map((line) => line.box.height));
   const chosen = candidates.find((line) => line.box.height > body * 1.15 || parts.running.some((other) => other.segments.some((segment) => fold(segment.text) === fold(line.text))));
   const value = chosen ? cleanName(chosen.text) : null;
   if (!chosen || !value) return null;
   return { value, page: chosen.page, box: chosen.box, quote: chosen.text, confidence: 0.5, because: 'No label names the product; this stands under the title of the sheet.' };
 }
+
+const hasTitleCell = (line: Line): boolean => line.segments.some((segment) => isTitle(lineOf([segment])));
 
 const isTitle = (line: Line): boolean => /^(material )?safety data sheet|^(ficha|hoja) de (datos|seguridad)|^fiche de donnees|^sicherheitsdatenblatt/.test(fold(joinSpacedLetters(line.text)));
 

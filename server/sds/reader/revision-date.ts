@@ -86,7 +86,7 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
       const own = segment.text.slice(from, date.start);
       const label = `${before} ${own}`;
       // What stands right before the date counts before what stands farther off, and both before what follows it.
-      const role = (own.includes(':') ? roleOf(own) : null) ?? roleOf(label) ?? roleAfter(segment.text.slice(date.end)) ?? (own.trim().length > longestCellWords ? null : roleOfColumn(lines, index, segment)) ?? roleOfAbove(lines, index, segment);
+      const role = notBare(roleOf(own)) ?? roleOf(label) ?? roleAfter(segment.text.slice(date.end)) ?? (own.trim().length > longestCellWords ? null : roleOfColumn(lines, index, segment)) ?? roleOfAbove(lines, index, segment);
       if (role) found.push({ date, ...role, line, box: boxOf(segment, date), label: lastLabel(role.words) });
       from = date.end;
       before = '';
@@ -96,6 +96,8 @@ function datesOfLine(lines: Line[], index: number, order: DateOrder): Dated[] {
   });
   return found;
 }
+
+const notBare = (role: ReturnType<typeof roleOf>): ReturnType<typeof roleOf> => (role?.isBare ? null : role);
 
 /** "19 May 2022 (date of revision)". */
 const roleAfter = (text: string): ReturnType<typeof roleOf> => roleOf(/^\s*\(([^()\d]{3,40})\)/.exec(text)?.[1] ?? '');

@@ -147,12 +147,13 @@ function numbered(folded: string, printed: string, next?: Line): Pick<Candidate,
   if (mark.startsWith('.') && /^\d/.test(title) && !word) return null;
   if (/^\d/.test(title) && mark === '') return null;
   const isSpelled = !/^\d+$/.test(figure);
-  if (!word && isSpelled && mark === '') return null;
+  const own = sectionRoles[number - 1];
+  // "IV   FIRE-FIGHTING MEASURES": a Roman number without a mark, before the title that belongs to it.
+  if (!word && isSpelled && mark === '' && !(/^[ivx]+$/.test(figure) && own && roleOfTitle(title, number) === own)) return null;
   const ownTitle = title === '' && word && next ? fold(joinSpacedLetters(next.text)) : title;
   const role = roleOfTitle(ownTitle, number);
   if (role && !isSentence(title)) return { number, role, isSure: true };
   const isFreeTitle = word && mark !== '' && title !== '' && lettersOf(title).length <= 60 && !isSentence(title) && startsLikeTitle(printed);
-  const own = sectionRoles[number - 1];
   return isFreeTitle && own ? { number, role: own, isSure: false } : null;
 }
 

@@ -122,7 +122,7 @@ function spelled(level: string, origin: number[]): { level: string; origin: numb
 /** `letter` is the statement's first letter as printed. */
 function beginsSentence(level: string, start: number, isList: boolean, letter: string): boolean {
   const before = level.slice(0, start).trimEnd();
-  if (before === '' || /[.;!•·|]$/.test(before)) return true;
+  if (before === '' || /[.;!•·|]$|(^|\n|[.;] )(danger|warning|peligro|atencion|gefahr|achtung|attention)$/.test(before)) return true;
   // "Suspected that it" / "may damage fertility": a sentence that is not over goes on with a small letter.
   const isSmall = /\p{Ll}/u.test(letter);
   if (isSmall && /\b(may|can|not|that|if|is|are|of|and|or|with|by|to|in|the|its?|which|que|puede|se|de|del|la|el|o|y|e|con|si|qui|peut|est|ou|et|du|des|le|dass|kann|und|oder|mit|der|die|das|bei)$/.test(before)) return false;

@@ -65,10 +65,19 @@ export function companyName(text: string): string | null {
   const address = /[,;]?\s+(?=\d{2,6}[a-z]?[\s,-]+\p{L}|p\.?\s?o\.?\s*box\b|(tele?)?phone\b|tel\b|fax\b|www\.|https?:|\S+@|\(\d{3}\)|\+\d|\d{3}[-.]\d{3})/iu.exec(name);
   if (address && address.index > 2 && !legalForm.test(name.slice(address.index).split(/\s+/).slice(0, 3).join(' '))) name = name.slice(0, address.index);
   const afterForm = /^(.*?\b(?:inc|llc|l\.l\.c|ltd|limited|gmbh|corp|corporation|company|co|plc|s\.?l|s\.?a|b\.?v)\.?)[,\s]+\d/i.exec(name) ?? /^([^,]{3,60}),\s*\d{1,6}[a-z]?\s+\p{L}/iu.exec(name);
-  name = (afterForm?.[1] ?? name).replace(/[\s,;:-]+$/, '').trim();
+  name = withoutAddress(afterForm?.[1] ?? name).replace(/[\s,;:-]+$/, '').trim();
   const folded = fold(name);
   if (name.length < 2 || name.length > 80 || !hasLetters(name) || isLabel(name)) return null;
   if (/^\d(?![a-z]{1,3}\b)|@|www\.|https?:|^(same|see|not|no|none|n\/?a|identification|section|address|for |and |of |the supplier|safety|data|information|undertaking|p\.?o|tel|phone|siehe|wie |igual|idem)\b|\d{3}[- .]\d{3,4}/.test(folded)) return null;
+  return name;
+}
+
+/** "Slate Paints Ltd., Dock Road, Hull": what follows the legal form is an address, unless it is a form again ("Company, Inc."). */
+function withoutAddress(name: string): string {
+  for (const comma of name.matchAll(/,\s*/g)) {
+    const [before, after] = [name.slice(0, comma.index), name.slice(comma.index + comma[0].length)];
+    if (new RegExp(`${legalForm.source}$`, 'i').test(before) && legalForm.exec(after)?.index !== 0) return before;
+  }
   return name;
 }
 
