@@ -25,7 +25,7 @@ function masked(task: TaskFacts, facts: ShiftFacts, needsMask: (personId: string
 
 function maskLine(answer: TaskAnswer, names: readonly string[], stopsNoVapor: boolean): ChecklistLine {
   const who = listed(names);
-  const why = stopsNoVapor ? words('It stops dust, not resin vapor.', 'Para el polvo, no el vapor de resina.') : words('A loose mask stops nothing.', 'Una máscara floja no para nada.');
+  const why = stopsNoVapor ? words('It stops dust, not resin vapor.', 'Detiene el polvo, no el vapor de resina.') : words('A loose mask stops nothing.', 'Una máscara floja no detiene nada.');
   return {
     id: `${answer.taskId}/mask-on`,
     ruleId: 'mask-cleared-and-fitted',

@@ -24,5 +24,5 @@ export const manualRule: ShiftRule<TaskContext> = {
       : unmet(words(`No manual on file: ${names.en}.`, `Sin manual: ${names.es}.`), { inputs, whatWouldChange: words('Put the manual on file.', 'Guarde el manual.') });
   },
   line: ({ traits }, { outcome }) =>
-    outcome === 'met' ? words('Guard, cord and ground-fault plug checked. Unplug before touching the tool.', 'Guarda, cable y protección revisados. Desconecte antes de tocar.') : words(`${traits.name.en} may not start: no manual on file.`, `${traits.name.es}: no puede empezar, falta el manual.`),
+    outcome === 'met' ? words('Check guard, cord and ground-fault plug. Unplug before touching the tool.', 'Revise guarda, cable y enchufe GFCI. Desconecte antes de tocar.') : words(`${traits.name.en} may not start: no manual on file.`, `${traits.name.es}: no puede empezar, falta el manual.`),
 };

@@ -86,7 +86,7 @@ export const vaporRule: ShiftRule<TaskContext> = {
       { inputs, whatWouldChange: words('An air reading, or what the sheet says of masks.', 'Una medición del aire, o lo que diga la hoja.') },
     );
   },
-  line: () => words('P100 and N95 stop dust, not vapor. Doors open, fan to outside, before the lid comes off.', 'P100 y N95 paran polvo, no vapor. Puertas abiertas y aire para afuera antes de abrir.'),
+  line: () => words('P100 and N95 stop dust, not vapor. Doors open, fan to outside, before the lid comes off.', 'P100 y N95 detienen polvo, no vapor. Puertas abiertas y aire para afuera antes de abrir.'),
 };
 
 /** Sheets of resin and sensitizers: skin kept clean, breath trouble said at once. */

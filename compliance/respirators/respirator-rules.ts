@@ -75,7 +75,7 @@ export interface MedicalTriggerFacts {
 
 export const medicalSurveillance: Rule<MedicalTriggerFacts> = {
   id: 'silica-medical-surveillance',
-  title: words('Silica exam offered at 30 respirator days', 'Examen por sílice a los 30 días de respirador'),
+  title: words('Silica exam offered at 30 respirator days', 'Examen por sílice ofrecido a los 30 días de respirador'),
   source: MEDICAL_TRIGGER_SOURCE,
   duties: ['SIL-20', 'SIL-21'],
   evaluate({ days, ...person }, asOf) {
@@ -86,7 +86,7 @@ export const medicalSurveillance: Rule<MedicalTriggerFacts> = {
     }
     const exam = silicaExamDue(person, asOf);
     const extra = { inputs: { 'assigned on': person.assignedOn, 'last exam': person.lastExamOn }, results, dueOn: exam.dueOn };
-    if (exam.isOverdue) return unmet(words(`The exam was due by ${exam.dueOn}.`, `El examen debía hacerse a más tardar el ${exam.dueOn}.`), { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
+    if (exam.isOverdue) return unmet(words(`The exam was to be offered by ${exam.dueOn}.`, `El examen debía ofrecerse a más tardar el ${exam.dueOn}.`), { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
     if (exam.kind === 'initial') return undecided(words(`No exam on file yet: offer one by ${exam.dueOn}.`, `Aún no hay examen: ofrézcalo a más tardar el ${exam.dueOn}.`), WHO.safetyOfficer, { ...extra, whatWouldChange: words('Offer the exam, free and in working time.', 'Ofrezca el examen, gratis y en horas de trabajo.') });
     return met(words(`Exam by ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`, `Examen a más tardar el ${exam.dueOn} (${EXAM_SOURCE.paragraph}).`), extra);
   },

@@ -37,6 +37,24 @@ describe('dates', () => {
   });
 });
 
+describe('Spanish says what English says', () => {
+  // "para" is both "stops" and "for": "el filtro para el 99 por ciento" reads as a filter for 99 percent.
+  it('stops are "detiene"', () => {
+    expect(DEMAND_WORDS['filter-99-percent'].es).toBe('El filtro detiene el 99 por ciento o más.');
+  });
+
+  // 1926.1153(h)(1)(i), parallel texts: surveillance is made available, nobody is made to take it.
+  it('[SIL-20] the exam is offered', () => {
+    expect([medicalSurveillance.title.en, medicalSurveillance.title.es]).toEqual([expect.stringContaining('offered'), expect.stringContaining('ofrecido')]);
+  });
+
+  // The fact on file is the manual; guard and plug are for the crew to check (1926.404(b)(1) names the ground fault).
+  it('[GATE-04] a manual on file does not say that guard and plug were checked', () => {
+    const grinding = taskFacts({ kind: 'floor-grinding', assignments: at, equipmentId: 'grinder', collectorId: 'collector', dustMethod: 'vacuum' });
+    expect(shiftOf(grinding).find('machine-manual-on-file')?.text).toEqual({ en: 'Check guard, cord and ground-fault plug. Unplug before touching the tool.', es: 'Revise guarda, cable y enchufe GFCI. Desconecte antes de tocar.' });
+  });
+});
+
 describe('1926.1153(c)(1) Table 1', () => {
   const saw = equipmentFacts({ id: 'saw', name: 'Saw 1', kind: 'walk-behind-saw', isRideOn: true, hasWaterFeed: true });
   const sawing = taskFacts({ kind: 'joint-sawing', assignments: at, equipmentId: 'saw', dustMethod: 'water' });

@@ -15,7 +15,7 @@ const FAULTS: Readonly<Record<BasisFault, Words>> = {
   'no-action-level': words('This place has no action level.', 'Este lugar no tiene nivel de acción.'),
   'no-interim-respirator': words('The sampling day names no mask. Its signer must write one.', 'El día de muestreo no dice qué máscara. Quien firma debe escribirla.'),
   'no-factors': words('It is over the limit, and no mask factors of this place are on file.', 'Pasa el límite, y no hay factores de máscara de este lugar.'),
-  'beyond-every-respirator': words('The figure is past what any mask can stop.', 'La cifra pasa lo que para cualquier máscara.'),
+  'beyond-every-respirator': words('The figure is past what any mask can stop.', 'La cifra pasa lo que detiene cualquier máscara.'),
 };
 
 const KINDS: Readonly<Record<ExposureBasis['kind'], Words>> = {

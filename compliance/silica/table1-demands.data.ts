@@ -21,7 +21,7 @@ export const DEMAND_WORDS: Readonly<Record<Table1Demand, Words>> = {
   'dust-collection-makers-system': words('The collector the maker names for this machine.', 'El colector que pide el fabricante.'),
   'airflow-makers-figure': words('Collector moves the air the maker asks.', 'El colector mueve el aire que pide el fabricante.'),
   'airflow-25-cfm-per-inch': words('Collector moves 25 cfm for each inch of wheel.', 'El colector mueve 25 cfm por pulgada de disco.'),
-  'filter-99-percent': words('Filter stops 99 percent or more.', 'El filtro para el 99 por ciento o más.'),
+  'filter-99-percent': words('Filter stops 99 percent or more.', 'El filtro detiene el 99 por ciento o más.'),
   'filter-cleaning': words('The filter can be cleaned by the machine.', 'La máquina limpia su filtro.'),
   'cyclone-or-filter-cleaning': words('A cyclone, or a filter the machine cleans.', 'Un ciclón, o un filtro que la máquina limpia.'),
   'hepa-vacuum-for-holes': words('HEPA vacuum to clean the holes.', 'Aspiradora HEPA para los hoyos.'),
