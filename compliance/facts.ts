@@ -128,7 +128,10 @@ export interface PersonFacts {
   /** Whether a clinician's limit keeps this person from isocyanates: the limit, never the finding. */
   readonly isKeptFromIsocyanates: boolean;
   readonly silicaTrainedOn: string | null;
+  /** Trainer or employer who certifies it; absent or null where nobody is named. */
+  readonly silicaTrainedBy?: string | null;
   readonly hazcomTrainedOn: string | null;
+  readonly hazcomTrainedBy?: string | null;
   readonly respirators: readonly PersonRespirator[];
   /** Work on other jobs of the same day: the person, not the job, carries the minutes. */
   readonly elsewhere: readonly ElsewhereFacts[];

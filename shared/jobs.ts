@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { dustMethods, settings, taskKinds, type ShiftFacts, type EquipmentFacts, type KitFacts, type PersonFacts, type ExposureBasis } from '#compliance/facts';
+import { consumableBases, consumableKinds, consumableUnits, dustMethods, settings, taskKinds, type ShiftFacts, type EquipmentFacts, type KitFacts, type PersonFacts, type ExposureBasis } from '#compliance/facts';
 import { Id, Instant, Line, LocalDate, PageQuery, Paragraph, SearchText, Version } from './common';
 
 const survey = z.enum(['absent', 'present', 'unknown', 'not-needed']);
@@ -22,6 +22,8 @@ export const SiteFacts = z.strictObject({
   engines: z.strictObject({ areUsedInside: known, isExhaustLedOutside: known, hasCarbonMonoxideAlarm: known }),
   firstAid: z.strictObject({ firstAiderName: Line(120).nullable(), hasEyewash: known, emergencyNumber: Line(60).nullable(), address: Line(200).nullable() }),
   hostHazards: Paragraph(2000).nullable(),
+  /** Mask that the site or its owner asks in dusty work beside the law. Optional: jobs kept before it was asked lack it. */
+  siteMaskRule: Line(160).nullable().optional(),
 });
 export type SiteFacts = z.infer<typeof SiteFacts>;
 
@@ -70,16 +72,27 @@ export type Job = z.infer<typeof Job>;
 export const JobsQuery = PageQuery.extend({ q: SearchText.optional(), isOpen: z.enum(['true', 'false']).optional() });
 
 const minuteOfDay = z.number().int().min(0).max(2880);
+const assignments = z
+  .array(
+    z
+      .strictObject({ personId: Id, startMinute: minuteOfDay, endMinute: minuteOfDay })
+      .refine((a) => a.endMinute > a.startMinute, 'The end must come after the start.'),
+  )
+  .max(60);
+/** A rate that somebody stated; the program knows none of its own. */
+export const ConsumableRate = z.strictObject({
+  item: z.enum(consumableKinds),
+  amount: z.number().positive('Must be above 0.').max(100_000),
+  unit: z.enum(consumableUnits),
+  per: z.enum(consumableBases),
+  statedBy: Line(160).min(1, 'Say who states it, or which paper.'),
+});
 export const Task = z.strictObject({
   id: Id,
   kind: z.enum(taskKinds),
-  assignments: z
-    .array(
-      z
-        .strictObject({ personId: Id, startMinute: minuteOfDay, endMinute: minuteOfDay })
-        .refine((a) => a.endMinute > a.startMinute, 'The end must come after the start.'),
-    )
-    .max(60),
+  assignments,
+  /** Time worked so far, as somebody logged it; counts beside the plan. */
+  logged: assignments.optional(),
   equipmentId: Id.nullable(),
   collectorId: Id.nullable(),
   dustMethod: z.enum(dustMethods).nullable(),
@@ -88,9 +101,12 @@ export const Task = z.strictObject({
 /** What a person plans for one day; stored as sent, edited under If-Match. */
 export const ShiftPlan = z.strictObject({
   competentPersonId: Id.nullable(),
+  /** Who inspects while the competent person runs a machine. */
+  inspectionCoverId: Id.nullable().optional(),
   personIds: z.array(Id).max(60),
   tasks: z.array(Task).max(60),
   kits: z.array(z.strictObject({ kitId: Id, count: z.number().int().min(0).max(10_000).nullable() })).max(20),
+  consumableRates: z.array(ConsumableRate).max(consumableKinds.length).optional(),
 });
 export type ShiftPlan = z.infer<typeof ShiftPlan>;
 export const AddShift = z.strictObject({ date: LocalDate, /** Copies people, tasks and kits of this shift. */ copyFromShiftId: Id.nullable() });
@@ -161,6 +177,8 @@ export function assembleFacts(shift: Pick<Shift, 'date' | 'plan' | 'job' | 'cont
     siteName: job.siteName,
     ...job.site,
     competentPersonId: plan.competentPersonId,
+    inspectionCoverId: plan.inspectionCoverId ?? null,
+    consumableRates: plan.consumableRates ?? [],
     people: context.people.filter((p) => wanted.has(p.id)).map((p) => ({ ...p, isLead: p.id === plan.competentPersonId })),
     tasks: plan.tasks.map((t) => ({ ...t, failedControl: context.failedControls[t.id] ?? null })),
     kits: plan.kits.flatMap(({ kitId, count }) => context.kits.filter((k) => k.id === kitId).map((k) => ({ ...k, count }))),

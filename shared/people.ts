@@ -20,7 +20,10 @@ const personFields = {
   /** The limit a clinician wrote, never the finding. */
   isKeptFromIsocyanates: z.boolean(),
   silicaTrainedOn: LocalDate.nullable(),
+  /** Who certifies the training: trainer or employer. Absent on requests made before it was asked. */
+  silicaTrainedBy: Line(120).nullable().optional(),
   hazcomTrainedOn: LocalDate.nullable(),
+  hazcomTrainedBy: Line(120).nullable().optional(),
   respirators: z.array(PersonRespirator).max(10),
   isActive: z.boolean(),
 };

@@ -1,6 +1,7 @@
 import { type RespiratorAnswer } from '../answer';
 import { type PersonFacts, type PersonRespirator, type RespiratorType } from '../facts';
 import { addYears, isIsoDate, type IsoDate } from '../iso-date';
+import { type Words } from '../outcome';
 import { QUALITATIVE_MAX_RATIO } from '../respirators/fit-test';
 import { met, notApplicable, undecided, unmet, WHO } from '../rule';
 import { isSilicaWork, type SilicaPerson } from '../silica/silica-context';
@@ -75,6 +76,12 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: mask ready.`, `${person.name}: máscara lista.`) : words(`${person.name} may not do this task: mask not ready.`, `${person.name} no puede hacer esta tarea: falta su máscara.`)),
 };
 
+/** The date is the duty; who certified it stands beside it, or its absence is said. */
+function trainedWords(name: string, on: string | null, by: string | null | undefined): Words {
+  const certified = by === null || by === undefined || by.trim() === '' ? words('Nobody is named who certifies it.', 'No dice quién lo certifica.') : words(`${by} certifies it.`, `Lo certifica ${by}.`);
+  return sentences(words(`${name} was trained on ${on}.`, `${name} tomó el curso el ${on}.`), certified);
+}
+
 /** Silica training before silica work; no yearly repeat ((i)). */
 export const silicaTrainingRule: ShiftRule<PersonInTask> = {
   id: 'silica-training-on-record',
@@ -88,9 +95,9 @@ export const silicaTrainingRule: ShiftRule<PersonInTask> = {
     // A signed basis below the action level takes the work out of the whole rule, its training too ((a)).
     if (silica.kind === 'basis' && silica.decision.kind === 'outside-scope') return notApplicable(words('The silica rule does not apply to this work.', 'La regla de sílice no aplica a este trabajo.'));
     if (!isSilicaWork(context)) return notApplicable(words('No silica work.', 'Sin trabajo con sílice.'));
-    const inputs = { 'silica training on': person.silicaTrainedOn };
+    const inputs = { 'silica training on': person.silicaTrainedOn, 'certified by': person.silicaTrainedBy ?? null };
     return since(person.silicaTrainedOn, day)
-      ? met(words(`${person.name} was trained on ${person.silicaTrainedOn}.`, `${person.name} tomó el curso el ${person.silicaTrainedOn}.`), { inputs })
+      ? met(trainedWords(person.name, person.silicaTrainedOn, person.silicaTrainedBy), { inputs })
       : unmet(words(`No silica training of ${person.name} is on record.`, `No está anotado el curso de sílice de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
   },
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: silica training done.`, `${person.name}: curso de sílice hecho.`) : words(`${person.name} may not do this task: no silica training.`, `${person.name} no puede hacer esta tarea: falta el curso de sílice.`)),
@@ -106,9 +113,9 @@ export const hazardTrainingRule: ShiftRule<PersonInTask> = {
   holds: true,
   evaluate({ traits, person }, day) {
     if (!traits.touchesKit) return notApplicable(words('No kit in this task.', 'Sin kit en esta tarea.'));
-    const inputs = { 'hazard training on': person.hazcomTrainedOn };
+    const inputs = { 'hazard training on': person.hazcomTrainedOn, 'certified by': person.hazcomTrainedBy ?? null };
     return since(person.hazcomTrainedOn, day)
-      ? met(words(`${person.name} was trained on ${person.hazcomTrainedOn}.`, `${person.name} tomó el curso el ${person.hazcomTrainedOn}.`), { inputs })
+      ? met(trainedWords(person.name, person.hazcomTrainedOn, person.hazcomTrainedBy), { inputs })
       : unmet(words(`No chemical training of ${person.name} is on record.`, `No está anotado el curso de químicos de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
   },
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: chemical training done.`, `${person.name}: curso de químicos hecho.`) : words(`${person.name} may not do this task: no chemical training.`, `${person.name} no puede hacer esta tarea: falta el curso de químicos.`)),

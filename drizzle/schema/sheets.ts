@@ -61,6 +61,9 @@ export const kits = pgTable(
     volumeL: doublePrecision().notNull(),
     mixMinutesPerKit: doublePrecision().notNull(),
     bucketMinutes: doublePrecision(),
+    /** shared/products.ts, SurfaceException and CartridgeSchedule; null where nothing was said. */
+    surfaceException: jsonb(),
+    cartridgeSchedule: jsonb(),
     version: integer().notNull().default(1),
   },
   (t) => [primaryKey({ columns: [t.organisationId, t.id] })],

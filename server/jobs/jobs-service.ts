@@ -52,7 +52,7 @@ export function jobsService({ database, clock }: Deps) {
 
   /** Rows for whom and what the plan names: the foreign keys refuse another organisation's. */
   async function writeReferences(tx: Tx, shiftId: string, plan: ShiftPlan): Promise<void> {
-    const personIds = [...new Set([...plan.personIds, ...(plan.competentPersonId ? [plan.competentPersonId] : []), ...plan.tasks.flatMap((task) => task.assignments.map((each) => each.personId))])];
+    const personIds = [...new Set([...plan.personIds, ...(plan.competentPersonId ? [plan.competentPersonId] : []), ...[plan.inspectionCoverId].flatMap((id) => id ?? []), ...plan.tasks.flatMap((task) => [...task.assignments, ...(task.logged ?? [])].map((each) => each.personId))])];
     const kitIds = [...new Set([...plan.kits.map((kit) => kit.kitId), ...plan.tasks.flatMap((task) => (task.kitId ? [task.kitId] : []))])];
     const equipmentIds = [...new Set(plan.tasks.flatMap((task) => [task.equipmentId, task.collectorId].filter((id) => id !== null)))];
     const missing = async (table: typeof people | typeof kits | typeof equipment, ids: readonly string[]): Promise<string | undefined> => {
@@ -129,8 +129,8 @@ export function jobsService({ database, clock }: Deps) {
           demandRole(actor, 'safety-officer', 'crew-lead');
           await findJob(tx, jobId);
           const copied = copyFromShiftId ? ((await findShift(tx, copyFromShiftId)).plan as ShiftPlan) : emptyPlan;
-          // Tasks get ids of their own: a stop on yesterday's grinding is not a stop on today's.
-          const plan = { ...copied, tasks: copied.tasks.map((task) => ({ ...task, id: newId() })) };
+          // Tasks get ids of their own and no logged time: a stop on yesterday's grinding is not a stop on today's, nor are its hours.
+          const plan = { ...copied, tasks: copied.tasks.map((task) => ({ ...task, id: newId(), logged: [] })) };
           const id = newId();
           await tx.insert(shifts).values({ organisationId: tx.organisationId, id, jobId, date, plan });
           await writeReferences(tx, id, plan);

@@ -84,7 +84,7 @@ async function readPersonFacts(tx: Tx, shift: ShiftRow): Promise<PersonFacts[]> 
   const elsewhere = new Map<string, ElsewhereFacts[]>();
   for (const { plan, jobName } of others)
     for (const task of (plan as ShiftPlan).tasks)
-      for (const { personId, startMinute, endMinute } of task.assignments) elsewhere.set(personId, [...(elsewhere.get(personId) ?? []), { jobName, kind: task.kind, startMinute, endMinute }]);
+      for (const { personId, startMinute, endMinute } of [...task.assignments, ...(task.logged ?? [])]) elsewhere.set(personId, [...(elsewhere.get(personId) ?? []), { jobName, kind: task.kind, startMinute, endMinute }]);
   return rows.map((row) => ({
     id: row.id,
     name: row.name,
@@ -94,7 +94,9 @@ async function readPersonFacts(tx: Tx, shift: ShiftRow): Promise<PersonFacts[]> 
     isAdultConfirmed: row.isAdultConfirmed,
     isKeptFromIsocyanates: row.isKeptFromIsocyanates,
     silicaTrainedOn: row.silicaTrainedOn,
+    silicaTrainedBy: row.silicaTrainedBy,
     hazcomTrainedOn: row.hazcomTrainedOn,
+    hazcomTrainedBy: row.hazcomTrainedBy,
     respirators: row.respirators as PersonFacts['respirators'],
     elsewhere: elsewhere.get(row.id) ?? [],
   }));

@@ -69,10 +69,23 @@ async function toKitFacts(tx: Tx, rows: readonly KitRow[]): Promise<KitFacts[]> 
     mixMinutesPerKit: row.mixMinutesPerKit,
     bucketMinutes: row.bucketMinutes,
     count: null,
+    surfaceException: exceptionOf(row),
+    cartridgeSchedule: scheduleOf(row),
     parts: parts
       .filter(({ part }) => part.kitId === row.id)
       .map(({ part, productName }) => ({ productId: part.productId, productName, part: part.part, form: part.form as KitFacts['parts'][number]['form'], sheet: sheets.get(part.productId) ?? null })),
   }));
+}
+
+/** What was said of it in part stands as said: the rules see that it is not whole. */
+function exceptionOf({ surfaceException }: KitRow): KitFacts['surfaceException'] {
+  const said = surfaceException as Kit['surfaceException'] | null;
+  if (said === null || [said.writtenBy, said.reference, said.text].every((each) => each === null)) return null;
+  return { writtenBy: said.writtenBy ?? '', reference: said.reference ?? '', text: said.text ?? '' };
+}
+function scheduleOf({ cartridgeSchedule }: KitRow): KitFacts['cartridgeSchedule'] {
+  const said = cartridgeSchedule as Kit['cartridgeSchedule'] | null;
+  return said === null || (said.change === null && said.basedOn === null) ? null : { change: said.change ?? '', basedOn: said.basedOn ?? '' };
 }
 
 function toKit(row: KitRow, facts: KitFacts): Kit {
@@ -83,6 +96,8 @@ function toKit(row: KitRow, facts: KitFacts): Kit {
     volumeL: row.volumeL,
     mixMinutesPerKit: row.mixMinutesPerKit,
     bucketMinutes: row.bucketMinutes,
+    surfaceException: (row.surfaceException as Kit['surfaceException'] | null) ?? { writtenBy: null, reference: null, text: null },
+    cartridgeSchedule: (row.cartridgeSchedule as Kit['cartridgeSchedule'] | null) ?? { change: null, basedOn: null },
     version: row.version,
     parts: facts.parts.map(({ sheet, ...part }) => ({ ...part, hasSheet: sheet !== null, hazardCodes: [...(sheet?.hazardCodes ?? [])] })),
     hazardCodes: [...codes],

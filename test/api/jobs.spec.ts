@@ -27,6 +27,16 @@ describe('a kit', () => {
     expect(await ok(lead.agent, 'readKit', { params: { kitId: kit.id } })).toEqual(kit);
   });
 
+  it('[RES-03] keeps the cartridge schedule and the supplier’s exception as they were written', async () => {
+    const organisation = await makeOrganisation(service);
+    const kit = await organisation.kit();
+    const said = { surfaceException: { writtenBy: 'Northlode Resins, Inc.', reference: 'letter of 3 November 2026', text: 'Coarse grind and one coat of primer.' }, cartridgeSchedule: { change: 'every two hours', basedOn: 'maker’s table' } };
+    const saved = await ok(organisation.officer.agent, 'editKit', { params: { kitId: kit.id }, version: kit.version, body: { ...kitEdit(kit.parts[0]?.productId ?? ''), ...said } });
+    expect(saved).toMatchObject(said);
+    const { shift } = await organisation.plannedDay();
+    expect(shift.context.kits.find(({ id }) => id === kit.id)).toMatchObject(said);
+  });
+
   it('edited by two people: the second sees what the first saved, and nothing is lost (F15)', async () => {
     const organisation = await makeOrganisation(service);
     const kit = await organisation.kit();
@@ -63,6 +73,33 @@ describe('a job and its shifts', () => {
     const copy = await ok(agent, 'addShift', { params: { jobId: job.id }, body: { date: '2027-02-28', copyFromShiftId: shift.id } });
     expect(copy.plan.tasks.map(({ kind, assignments }) => ({ kind, assignments }))).toEqual(shift.plan.tasks.map(({ kind, assignments }) => ({ kind, assignments })));
     expect(copy.plan.tasks.map(({ id }) => id).filter((id) => shift.plan.tasks.some((task) => task.id === id))).toEqual([]);
+  });
+
+  it('[SIL-04] keeps the time worked beside the plan, counts it on the other job of the day, and copies none of it (trap 4)', async () => {
+    const organisation = await makeOrganisation(service);
+    const { job, shift, grindingTaskId } = await organisation.plannedDay();
+    const { agent, personId } = organisation.lead;
+    const logged = [{ personId, startMinute: 550, endMinute: 790 }];
+    const plan = { ...shift.plan, inspectionCoverId: organisation.officer.personId, consumableRates: [{ item: 'diamonds' as const, amount: 0.5, unit: 'pieces' as const, per: 'hour' as const, statedBy: 'the maker’s manual' }], tasks: shift.plan.tasks.map((task) => (task.id === grindingTaskId ? { ...task, logged } : task)) };
+    const saved = await ok(agent, 'editShiftPlan', { params: { shiftId: shift.id }, version: shift.version, body: plan });
+    expect(saved.plan).toEqual(plan);
+    const answer = answerShift(assembleFacts(saved), service.clock.now().toISOString());
+    expect(answer.people.find((person) => person.personId === personId)?.table1Minutes).toBe(370);
+    expect(answer.consumables.find(({ id }) => id.endsWith('/diamonds'))).toMatchObject({ outcome: 'met', reason: { en: expect.stringContaining('the maker’s manual') } });
+    const other = await organisation.plannedDay();
+    expect(other.shift.context.people.find(({ id }) => id === personId)?.elsewhere).toContainEqual({ jobName: job.name, kind: 'floor-grinding', startMinute: 550, endMinute: 790 });
+    const copy = await ok(agent, 'addShift', { params: { jobId: job.id }, body: { date: '2027-02-28', copyFromShiftId: shift.id } });
+    expect(copy.plan.tasks.flatMap((task) => task.logged ?? [])).toEqual([]);
+    expect(copy.plan.inspectionCoverId).toBe(organisation.officer.personId);
+  });
+
+  it('refuses a stand-in or a log that names another organisation’s person', async () => {
+    const organisation = await makeOrganisation(service);
+    const stranger = (await makeOrganisation(service)).lead.personId;
+    const { shift } = await organisation.plannedDay();
+    const [first, ...rest] = shift.plan.tasks;
+    for (const wrong of [{ inspectionCoverId: stranger }, { tasks: [{ ...first!, logged: [{ personId: stranger, startMinute: 400, endMinute: 500 }] }, ...rest] }])
+      expectProblem(await call(organisation.lead.agent, 'editShiftPlan', { params: { shiftId: shift.id }, version: shift.version, body: { ...shift.plan, ...wrong } }), 400);
   });
 
   it('answers on the server what the page computes from the same shift', async () => {

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { answerShift, generateChecklist, type ShiftFacts } from '#compliance';
-import { dustMethods, fitTestKinds, respiratorTypes, settings, taskKinds } from '#compliance/facts';
+import { consumableBases, consumableKinds, consumableUnits, dustMethods, fitTestKinds, respiratorTypes, settings, taskKinds } from '#compliance/facts';
 import { calculation, day, jurisdictionId, unsaid, type Calculation } from './calculation';
 import { equipment } from './floor';
 
@@ -26,6 +26,8 @@ const kit = z.strictObject({
   mixMinutesPerKit: z.number().min(0).describe('minutes'),
   bucketMinutes: unsaid(z.number().min(0).describe('minutes')),
   count: unsaid(z.number().int().min(0)),
+  surfaceException: unsaid(z.strictObject({ writtenBy: text, reference: text, text })).describe('the supplier’s written exception for surface preparation'),
+  cartridgeSchedule: unsaid(z.strictObject({ change: text, basedOn: text })).describe('when vapor cartridges are changed, and on what data'),
   parts: z.array(z.strictObject({ productId: text, productName: text, part: text, form: z.enum(['liquid', 'powder', 'paste']), sheet: unsaid(sheet) })),
 });
 const person = z.strictObject({
@@ -37,14 +39,18 @@ const person = z.strictObject({
   isAdultConfirmed: z.boolean().default(false),
   isKeptFromIsocyanates: z.boolean().default(false),
   silicaTrainedOn: unsaid(day),
+  silicaTrainedBy: unsaid(text),
   hazcomTrainedOn: unsaid(day),
+  hazcomTrainedBy: unsaid(text),
   respirators: z.array(z.strictObject({ type: z.enum(respiratorTypes), label: text, clearedOn: unsaid(day), fitTestedOn: unsaid(day), fitTestKind: unsaid(z.enum(fitTestKinds)) })).default([]),
   elsewhere: z.array(z.strictObject({ jobName: text, kind: z.enum(taskKinds), startMinute: clock, endMinute: clock })).default([]),
 });
+const span = z.strictObject({ personId: text, startMinute: clock, endMinute: clock });
 const task = z.strictObject({
   id: text,
   kind: z.enum(taskKinds),
-  assignments: z.array(z.strictObject({ personId: text, startMinute: clock, endMinute: clock })),
+  assignments: z.array(span),
+  logged: z.array(span).default([]).describe('time worked so far; counts beside the plan'),
   equipmentId: unsaid(text),
   collectorId: unsaid(text),
   dustMethod: unsaid(z.enum(dustMethods)),
@@ -80,12 +86,15 @@ export const shiftFactsSchema = z.strictObject({
   engines: z.strictObject({ areUsedInside: known, isExhaustLedOutside: known, hasCarbonMonoxideAlarm: known }).default({ areUsedInside: null, isExhaustLedOutside: null, hasCarbonMonoxideAlarm: null }),
   firstAid: z.strictObject({ firstAiderName: unsaid(text), hasEyewash: known, emergencyNumber: unsaid(text), address: unsaid(text) }).default(nobody),
   hostHazards: unsaid(text),
+  siteMaskRule: unsaid(text).describe('mask that the site or its owner asks beside the law'),
   competentPersonId: unsaid(text),
+  inspectionCoverId: unsaid(text).describe('who inspects while the competent person runs a machine'),
   people: z.array(person).default([]),
   tasks: z.array(task).default([]),
   kits: z.array(kit).default([]),
   equipment: z.array(equipment).default([]),
   bases: z.array(basis).default([]),
+  consumableRates: z.array(z.strictObject({ item: z.enum(consumableKinds), amount: z.number().positive(), unit: z.enum(consumableUnits), per: z.enum(consumableBases), statedBy: text })).default([]).describe('rates that somebody stated'),
 });
 
 const example: z.input<typeof shiftFactsSchema> = {
@@ -131,4 +140,12 @@ const checklist = calculation({
   run: (facts) => generateChecklist(facts, answerShift(facts, facts.date)),
 });
 
-export const SHIFT_CALCULATIONS: readonly Calculation[] = [ppe, checklist];
+const consumables = calculation({
+  name: 'consumables',
+  summary: 'what a shift uses up, by rates that somebody stated; without a rate "not known" and who can say',
+  schema: shiftFactsSchema,
+  example: { ...example, consumableRates: [{ item: 'diamonds', amount: 0.5, unit: 'pieces', per: 'hour', statedBy: 'Ines Halloran, counted on the last job' }] },
+  run: (facts) => answerShift(facts, facts.date).consumables.map(({ id, outcome, text: said, reason, whoDecides, inputs }) => ({ item: id.slice(id.indexOf('/') + 1), outcome, text: said, reason, whoDecides, inputs })),
+});
+
+export const SHIFT_CALCULATIONS: readonly Calculation[] = [ppe, checklist, consumables];

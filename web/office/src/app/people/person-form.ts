@@ -32,14 +32,16 @@ export const emptyPerson: PersonEdit = {
   isAdultConfirmed: false,
   isKeptFromIsocyanates: false,
   silicaTrainedOn: null,
+  silicaTrainedBy: null,
   hazcomTrainedOn: null,
+  hazcomTrainedBy: null,
   respirators: [],
   isActive: true,
 };
 export const emptyRespirator: RespiratorValue = { type: 'half-mask', label: '', clearedOn: null, fitTestedOn: null, fitTestKind: null };
 
-export function editOf({ name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators, isActive }: Person | PersonEdit): PersonEdit {
-  return { name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators, isActive };
+export function editOf({ name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, silicaTrainedBy = null, hazcomTrainedOn, hazcomTrainedBy = null, respirators, isActive }: Person | PersonEdit): PersonEdit {
+  return { name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, silicaTrainedBy, hazcomTrainedOn, hazcomTrainedBy, respirators, isActive };
 }
 
 export const respiratorGroup = (builder: NonNullableFormBuilder, { type, label, clearedOn, fitTestedOn, fitTestKind = null }: RespiratorValue) =>
@@ -53,7 +55,9 @@ export function personForm(builder: NonNullableFormBuilder, person: PersonEdit) 
     isAdultConfirmed: builder.control(person.isAdultConfirmed),
     isKeptFromIsocyanates: builder.control(person.isKeptFromIsocyanates),
     silicaTrainedOn: builder.control(person.silicaTrainedOn),
+    silicaTrainedBy: builder.control(person.silicaTrainedBy ?? null),
     hazcomTrainedOn: builder.control(person.hazcomTrainedOn),
+    hazcomTrainedBy: builder.control(person.hazcomTrainedBy ?? null),
     respirators: builder.array(person.respirators.map((respirator) => respiratorGroup(builder, respirator))),
     isActive: builder.control(person.isActive),
   });

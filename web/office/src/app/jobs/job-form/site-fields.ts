@@ -18,6 +18,7 @@ export const unknownSite: SiteFacts = {
   engines: { areUsedInside: null, isExhaustLedOutside: null, hasCarbonMonoxideAlarm: null },
   firstAid: { firstAiderName: null, hasEyewash: null, emergencyNumber: null, address: null },
   hostHazards: null,
+  siteMaskRule: null,
 };
 
 export function siteForm(builder: NonNullableFormBuilder, site: SiteFacts) {
@@ -47,6 +48,7 @@ export function siteForm(builder: NonNullableFormBuilder, site: SiteFacts) {
       address: builder.control(firstAid.address),
     }),
     hostHazards: builder.control(site.hostHazards),
+    siteMaskRule: builder.control(site.siteMaskRule ?? null),
   });
 }
 

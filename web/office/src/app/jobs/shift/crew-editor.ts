@@ -28,6 +28,15 @@ import { type ShiftThings } from './shift-names';
         }
       </select>
     </div>
+    <div class="line">
+      <label for="inspection-cover">Inspects meanwhile</label>
+      <select class="kb-field" id="inspection-cover" (change)="cover.emit($any($event.target).value || null)">
+        <option value="" [selected]="(plan().inspectionCoverId ?? null) === null">nobody named yet</option>
+        @for (person of mayCover(); track person.id) {
+          <option [value]="person.id" [selected]="person.id === plan().inspectionCoverId">{{ person.name }}</option>
+        }
+      </select>
+    </div>
     <fieldset>
       <legend>Kits of this shift</legend>
       <ul class="kb-plain list">
@@ -56,6 +65,7 @@ export class CrewEditor {
   readonly answer = input.required<ShiftAnswer>();
   readonly put = output<{ readonly personId: string; readonly isOn: boolean }>();
   readonly lead = output<string | null>();
+  readonly cover = output<string | null>();
   readonly putKit = output<{ readonly kitId: string; readonly isOn: boolean }>();
   readonly count = output<{ readonly kitId: string; readonly count: number | null }>();
 
@@ -66,6 +76,7 @@ export class CrewEditor {
       .map((person) => ({ id: person.id, name: person.name, isOn: on.has(person.id) }));
   });
   protected readonly onShift = computed(() => this.people().filter(({ isOn }) => isOn));
+  protected readonly mayCover = computed(() => this.onShift().filter(({ id }) => id !== this.plan().competentPersonId));
   protected readonly kits = computed(() =>
     this.things().kits.map((kit) => {
       const planned = this.plan().kits.find(({ kitId }) => kitId === kit.id);

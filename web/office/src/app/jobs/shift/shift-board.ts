@@ -10,7 +10,7 @@ import { ShiftStrip } from '#ui/shift-strip/shift-strip';
 import { dayName, timeOf } from '../../pieces/dates';
 import { CrewEditor } from './crew-editor';
 import { ShiftEditor } from './shift-editor';
-import { addKit, addPerson, moveAssignment, newTask, putTask, removeKit, removePerson, removeTask, setKitCount, setLead, type PlannedTask } from './shift-plan';
+import { addKit, addPerson, moveAssignment, newTask, putTask, removeKit, removePerson, removeTask, setCover, setKitCount, setLead, type PlannedTask } from './shift-plan';
 import { ShiftSurroundings } from './shift-surroundings';
 import { TaskEditor } from './task-editor';
 import { TaskKindSelect } from './task-kind-select';
@@ -89,6 +89,10 @@ export class ShiftBoard {
 
   protected setLead(personId: string | null): void {
     this.editor.change((plan) => setLead(plan, personId));
+  }
+
+  protected setCover(personId: string | null): void {
+    this.editor.change((plan) => setCover(plan, personId));
   }
 
   protected putKit({ kitId, isOn }: { readonly kitId: string; readonly isOn: boolean }): void {

@@ -147,6 +147,6 @@ export class ShiftEditor {
 }
 
 /** A person as the rules see one; work elsewhere is only known to the server and comes with its answer. */
-function factsOf({ id, name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators }: Person): PersonFacts {
-  return { id, name, language, isLead: false, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, hazcomTrainedOn, respirators, elsewhere: [] };
+function factsOf({ id, name, language, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, silicaTrainedBy, hazcomTrainedOn, hazcomTrainedBy, respirators }: Person): PersonFacts {
+  return { id, name, language, isLead: false, employer, isAdultConfirmed, isKeptFromIsocyanates, silicaTrainedOn, silicaTrainedBy: silicaTrainedBy ?? null, hazcomTrainedOn, hazcomTrainedBy: hazcomTrainedBy ?? null, respirators, elsewhere: [] };
 }

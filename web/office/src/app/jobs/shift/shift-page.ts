@@ -18,6 +18,7 @@ import { FactsDialog } from '../job-form/facts-dialog';
 import { floorWords, settingWords } from '../job-form/site-words';
 import { JobsApi } from '../jobs-api';
 import { heldTasks, metLines, openLines, publishLabel } from './answer-rows';
+import { Consumables } from './consumables';
 import { LineRows } from './line-rows';
 import { planDifferences } from './plan-differences';
 import { PublishDialog, type PublishQuestion } from './publish-dialog';
@@ -25,6 +26,7 @@ import { ShiftBoard } from './shift-board';
 import { ShiftEditor } from './shift-editor';
 import { ShiftFoot } from './shift-foot';
 import { namesFor } from './shift-names';
+import { setRate, type StatedRate } from './shift-plan';
 import { ShiftSurroundings } from './shift-surroundings';
 import { ShiftVersions } from './shift-versions';
 import { SignBasisDialog, type BasisQuestion } from './sign-basis-dialog';
@@ -33,7 +35,7 @@ import { TaskRows } from './task-rows';
 /** One day's work: the strip, what the rules answer to it, and its checklist. */
 @Component({
   selector: 'kb-shift-page',
-  imports: [ActionList, Conflict, LineRows, MatButton, Note, PageHeader, RouterLink, ShiftBoard, ShiftFoot, ShiftVersions, TaskRows, Unready],
+  imports: [ActionList, Conflict, Consumables, LineRows, MatButton, Note, PageHeader, RouterLink, ShiftBoard, ShiftFoot, ShiftVersions, TaskRows, Unready],
   providers: [ShiftEditor, ShiftSurroundings],
   templateUrl: './shift-page.html',
   styleUrl: './shift-page.scss',
@@ -135,6 +137,10 @@ export class ShiftPage {
   protected reload(): void {
     void this.editor.load(this.shiftId());
     void this.around.load(this.shiftId());
+  }
+
+  protected setRate(item: StatedRate['item'], rate: StatedRate | null): void {
+    this.editor.change((plan) => setRate(plan, item, rate));
   }
 
   protected async changeFacts(): Promise<void> {

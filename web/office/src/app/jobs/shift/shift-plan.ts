@@ -6,6 +6,8 @@ import { type ShiftPlan } from '#shared/jobs';
 export type PlannedTask = ShiftPlan['tasks'][number];
 export type Assignment = PlannedTask['assignments'][number];
 
+export type StatedRate = NonNullable<ShiftPlan['consumableRates']>[number];
+
 export const dayStartMinute = 6 * 60 + 30;
 const shortestMinutes = 5;
 
@@ -20,12 +22,24 @@ export function removePerson(plan: ShiftPlan, personId: string): ShiftPlan {
     ...plan,
     personIds: plan.personIds.filter((id) => id !== personId),
     competentPersonId: plan.competentPersonId === personId ? null : plan.competentPersonId,
-    tasks: plan.tasks.map((task) => ({ ...task, assignments: task.assignments.filter((assignment) => assignment.personId !== personId) })),
+    ...(plan.inspectionCoverId === personId ? { inspectionCoverId: null } : {}),
+    tasks: plan.tasks.map((task) => ({ ...task, assignments: task.assignments.filter((assignment) => assignment.personId !== personId), ...(task.logged ? { logged: task.logged.filter((span) => span.personId !== personId) } : {}) })),
   };
 }
 
 export function setLead(plan: ShiftPlan, competentPersonId: string | null): ShiftPlan {
   return { ...plan, competentPersonId };
+}
+
+/** Who inspects while the competent person runs a machine. */
+export function setCover(plan: ShiftPlan, inspectionCoverId: string | null): ShiftPlan {
+  return { ...plan, inspectionCoverId };
+}
+
+/** A stated rate in place of the one for its item, or at the end; null takes the item's rate away. */
+export function setRate(plan: ShiftPlan, item: StatedRate['item'], rate: StatedRate | null): ShiftPlan {
+  const others = (plan.consumableRates ?? []).filter((each) => each.item !== item);
+  return { ...plan, consumableRates: rate === null ? others : [...others, rate] };
 }
 
 /** The latest minute anything of the plan ends, or the usual start of a day. */

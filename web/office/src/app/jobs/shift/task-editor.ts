@@ -45,10 +45,13 @@ export class TaskEditor {
     return isLoud || isIgnition || touchesKit || this.task().equipmentId !== null;
   });
   protected readonly usesKit = computed(() => TASKS[this.task().kind].touchesKit || this.task().kitId !== null);
+  protected readonly logged = computed(() => this.task().logged ?? []);
+  protected readonly hasLog = computed(() => this.logged().length > 0);
   protected readonly rows = computed(() =>
     this.plan().personIds.map((personId) => {
       const stretches = this.task().assignments.flatMap((assignment, index) => (assignment.personId === personId ? [{ index, start: timeText(assignment.startMinute), end: timeText(assignment.endMinute) }] : []));
-      return { personId, name: this.nameOf(personId), stretches };
+      const logged = this.logged().flatMap((span, index) => (span.personId === personId ? [{ index, start: timeText(span.startMinute), end: timeText(span.endMinute) }] : []));
+      return { personId, name: this.nameOf(personId), stretches, logged };
     }),
   );
 
@@ -104,6 +107,28 @@ export class TaskEditor {
     if (endMinute === null) return;
     const day = Math.floor(start / 1440) * 1440;
     this.set({ assignments: this.task().assignments.map((assignment, at) => (at === index ? { ...assignment, endMinute: Math.min(2880, endMinute + day) } : assignment)) });
+  }
+
+  /** Starts from what was planned: what was really worked is typed over it. */
+  protected log(personId: string): void {
+    const planned = this.task().assignments.find((assignment) => assignment.personId === personId);
+    if (planned) this.set({ logged: [...this.logged(), { ...planned }] });
+  }
+
+  protected unlog(index: number): void {
+    this.set({ logged: this.logged().filter((_, at) => at !== index) });
+  }
+
+  protected setLogged(index: number, { start, end }: { readonly start?: string; readonly end?: string }): void {
+    const span = this.logged()[index];
+    if (!span) return;
+    const startMinute = start === undefined ? span.startMinute : minuteFrom(start);
+    if (startMinute === null) return;
+    // A time at or before the start is the next day's.
+    const endMinute = minuteFrom(end ?? timeText(span.endMinute), startMinute % 1440);
+    if (endMinute === null) return;
+    const day = Math.floor(startMinute / 1440) * 1440;
+    this.set({ logged: this.logged().map((each, at) => (at === index ? { ...each, startMinute, endMinute: Math.min(2880, endMinute + day) } : each)) });
   }
 
   private nameOf(personId: string): string {

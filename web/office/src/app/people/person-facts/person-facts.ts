@@ -14,9 +14,9 @@ import { fitTestChoices, respiratorChoices } from '../person-form';
       <dt>Employer</dt>
       <dd>{{ facts.employer ?? 'ours' }}</dd>
       <dt>Silica training</dt>
-      <dd>{{ facts.silicaTrainedOn ? dayOf(facts.silicaTrainedOn) : 'not on file' }}</dd>
+      <dd>{{ facts.silicaTrainedOn ? dayOf(facts.silicaTrainedOn) : 'not on file' }}{{ facts.silicaTrainedBy ? ', certified by ' + facts.silicaTrainedBy : '' }}</dd>
       <dt>Hazard training</dt>
-      <dd>{{ facts.hazcomTrainedOn ? dayOf(facts.hazcomTrainedOn) : 'not on file' }}</dd>
+      <dd>{{ facts.hazcomTrainedOn ? dayOf(facts.hazcomTrainedOn) : 'not on file' }}{{ facts.hazcomTrainedBy ? ', certified by ' + facts.hazcomTrainedBy : '' }}</dd>
       <dt>Over 18</dt>
       <dd>{{ facts.isAdultConfirmed ? 'confirmed' : 'not confirmed' }}</dd>
       @if (facts.isKeptFromIsocyanates) {

@@ -56,6 +56,8 @@ export class KitPage {
     volumeL: this.builder.control<number | null>(null),
     mixMinutesPerKit: this.builder.control<number | null>(2),
     bucketMinutes: this.builder.control<number | null>(5),
+    surfaceException: this.builder.group({ writtenBy: this.builder.control<string | null>(null), reference: this.builder.control<string | null>(null), text: this.builder.control<string | null>(null) }),
+    cartridgeSchedule: this.builder.group({ change: this.builder.control<string | null>(null), basedOn: this.builder.control<string | null>(null) }),
     parts: this.builder.array<ReturnType<KitPage['partGroup']>>([]),
   });
   protected readonly sending = new FormSending(this.form);
@@ -128,6 +130,6 @@ export class KitPage {
   }
 }
 
-function editOf({ name, volumeL, mixMinutesPerKit, bucketMinutes, parts }: Kit): KitEdit {
-  return { name, volumeL, mixMinutesPerKit, bucketMinutes, parts: parts.map(({ productId, part, form }) => ({ productId, part, form })) };
+function editOf({ name, volumeL, mixMinutesPerKit, bucketMinutes, surfaceException, cartridgeSchedule, parts }: Kit) {
+  return { name, volumeL, mixMinutesPerKit, bucketMinutes, surfaceException, cartridgeSchedule, parts: parts.map(({ productId, part, form }) => ({ productId, part, form })) };
 }
