@@ -6,7 +6,7 @@ import { inchesFromMm, m3PerHFromCfm } from '../quantities/units';
 
 /** Table 1 rows (xi) and (xii): cubic feet a minute for each inch of wheel diameter. The one place of this figure. */
 export const CFM_PER_INCH_OF_WHEEL = 25;
-export const HANDHELD_SOURCE = usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1 rows (xi), (xii)', note: '25 cfm per inch of wheel diameter, at the shroud in real use; the latter is a reading of OSHA guidance, recalled.' });
+export const HANDHELD_SOURCE = usFederal('1926.1153', 'partly', { paragraph: '(c)(1) Table 1 rows (xi), (xii)', note: '25 cfm per inch of wheel diameter, at the shroud in real use; the latter is a reading of OSHA guidance, recalled.' });
 export const WALK_BEHIND_SOURCE = usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1 row (xiii)', note: 'The rule gives no figure; the maker of the machine recommends the airflow.' });
 
 export type AirflowDemand =

@@ -8,7 +8,7 @@ import { MOLAR_VOLUME_L } from './units';
 const CFM_CONSTANT_PINTS = 403e6;
 /** For evaporation in pounds per minute: cubic feet of vapor that a pound-mole gives, times a million. */
 const CFM_CONSTANT_POUNDS = 387e6;
-export const DILUTION_SOURCE = sourced('Industrial ventilation manual, dilution for health', 'read', { note: 'Formula read in a university sheet; the range of the mixing factor K (1 to 10) recalled.' });
+export const DILUTION_SOURCE = sourced('Industrial ventilation manual, dilution for health', 'partly', { note: 'Formula read in a university sheet; the range of the mixing factor K (1 to 10) recalled.' });
 export const DILUTION_METRIC_SOURCE = sourced('Metric form of the dilution formula at 25 °C', 'derived', { note: 'Differs from the 403 form by 1.4 %.' });
 const UNSUITABLE_SOURCE = sourced('Industrial ventilation practice', 'from-memory', { note: 'Dilution is unsuitable for dust and for sensitizers such as isocyanates.' });
 

@@ -34,9 +34,9 @@ const row = (substanceId: string, jurisdictionId: string, ...[scope, kind, value
 
 /** (k): obligations from 23 June 2017. Enforcement, not the rule, waited until 23 September. */
 const SILICA_IN_FORCE = '2017-06-23';
-const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'To be followed from 23 June 2017 (trade article; paragraph (k) recalled), enforced from 23 September 2017: OSHA memorandum of 25 June 2018.' });
+const silica = (paragraph: string): Source => usFederal('1926.1153', 'read', { paragraph, inForceFrom: SILICA_IN_FORCE, note: 'To be followed from 23 June 2017 by (k), which was not seen itself; enforced from 23 September 2017: OSHA memorandum of 25 June 2018.' });
 const NIOSH_MDI = sourced('NIOSH pocket guide and IDLH documentation, MDI', 'read');
-const OSHA_CHEMICAL_PAGE = (section: string): Source => usFederal(section, 'read', { note: 'As shown on the OSHA chemical page, which lists construction and general industry apart.' });
+const OSHA_CHEMICAL_PAGE = (section: string): Source => usFederal(section, 'partly', { note: 'As shown on the OSHA chemical page, which lists construction and general industry apart.' });
 const MDA = (paragraph: string): Source => usFederal('1926.60', 'partly', { paragraph, note: 'Figures read in the proposal of 12 May 1989; that the final text kept them is recalled.' });
 
 /** Limits and ceilings for what floor work sets free, in force or advised. Places other than those with a pack are for orientation. */
@@ -49,12 +49,12 @@ export const LIMIT_ROWS: readonly LimitRow[] = [
   row('rcs', 'us-oregon', 'construction', 'action-level-8h', 25, 'ug/m3', 'respirable', sourced('OAR 437-002-1053 to -1065', 'read')),
   row('rcs', 'us-washington', 'construction', 'twa-8h', 50, 'ug/m3', 'respirable', sourced('WAC 296-840', 'read')),
   row('rcs', 'us-washington', 'construction', 'action-level-8h', 25, 'ug/m3', 'respirable', sourced('WAC 296-840', 'read')),
-  row('rcs', 'great-britain', 'any-work', 'twa-8h', 0.1, 'mg/m3', 'respirable', sourced('EH40 workplace exposure limit', 'read', { note: 'Several UK texts; there is no action level.' })),
+  row('rcs', 'great-britain', 'any-work', 'twa-8h', 0.1, 'mg/m3', 'respirable', sourced('EH40 workplace exposure limit', 'partly', { note: 'Several UK texts; there is no action level.' })),
   row('rcs', 'european-union', 'any-work', 'twa-8h', 0.1, 'mg/m3', 'respirable', sourced('Directive 2004/37/EC Annex III (Directive 2017/2398)', 'read', { note: 'Binding minimum; member states may be lower.' })),
   row('rcs', 'canada-ontario', 'any-work', 'twa-8h', 0.1, 'mg/m3', 'respirable', sourced('O. Reg. 490/09 Table 1', 'read', { note: 'Quartz; cristobalite 0.05. Section 14 excepts construction: check the current text.' })),
   row('rcs', 'canada-british-columbia', 'any-work', 'twa-8h', 0.025, 'mg/m3', 'respirable', sourced('British Columbia OHS Regulation, industry table of 2011', 'read')),
   row('rcs', 'canada-alberta', 'any-work', 'twa-8h', 0.025, 'mg/m3', 'respirable', sourced('Alberta OHS Code Part 4, industry table of 2011', 'read')),
-  row('rcs', 'australia', 'any-work', 'twa-8h', 0.05, 'mg/m3', 'respirable', sourced('Australian workplace exposure limits', 'read', { inForceFrom: '2026-12-01', note: 'Union, consultancy and calendar texts; not the gazette. The figure was the same before.' })),
+  row('rcs', 'australia', 'any-work', 'twa-8h', 0.05, 'mg/m3', 'respirable', sourced('Australian workplace exposure limits', 'partly', { inForceFrom: '2026-12-01', note: 'Union, consultancy and calendar texts; not the gazette. The figure was the same before.' })),
   row('rcs', 'new-zealand', 'any-work', 'twa-8h', 0.025, 'mg/m3', 'respirable', sourced('New Zealand workplace exposure standards', 'read', { inForceFrom: '2023-01-01', note: 'Since 2023 (day not known); advisory unless prescribed.' })),
   row('rcs', 'acgih', 'advice', 'twa-8h', 0.025, 'mg/m3', 'respirable', sourced('ACGIH TLV', 'read')),
   row('rcs', 'niosh', 'advice', 'twa-10h', 0.05, 'mg/m3', 'respirable', sourced('NIOSH REL', 'read', { note: 'Up to a 10-hour average.' })),

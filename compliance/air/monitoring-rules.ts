@@ -14,7 +14,7 @@ export interface MonitoringFacts {
 export const monitoringDue: Rule<MonitoringFacts> = {
   id: 'silica-monitoring-due',
   title: words('Next air sample', 'Próxima muestra de aire'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(d)(2)(iii)' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(d)(2)(iii)', note: 'Read in OAR 437-002-1056(3).' }),
   duties: ['SIL-08'],
   evaluate({ results, limits }, asOf) {
     const schedule = monitoringSchedule(results, limits, asOf);

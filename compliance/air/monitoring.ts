@@ -4,14 +4,15 @@ import { type Words } from '../outcome';
 import { WHO } from '../rule';
 import { usFederal, type Source } from '../source';
 
-const paragraph = (text: string, note?: string): Source => usFederal('1926.1153', 'read', { paragraph: text, ...(note === undefined ? {} : { note }) });
+/** Oregon's rule has the federal words. */
+const oregon = (text: string, parallel: string): Source => usFederal('1926.1153', 'parallel-text', { paragraph: text, note: `Read in OAR 437-002-1056(3)(${parallel}).` });
 export const MONITORING_SOURCES = {
-  initial: paragraph('(d)(2)(iii)(A)'),
-  initialBelow: paragraph('(d)(2)(iii)(B)'),
-  atOrAboveActionLevel: paragraph('(d)(2)(iii)(C)'),
-  aboveLimit: paragraph('(d)(2)(iii)(D)'),
-  below: paragraph('(d)(2)(iii)(E)', 'Two consecutive results below the action level, taken seven or more days apart.'),
-  reassess: paragraph('(d)(2)(iv)'),
+  initial: oregon('(d)(2)(iii)(A)', 'a'),
+  initialBelow: oregon('(d)(2)(iii)(B)', 'b'),
+  atOrAboveActionLevel: oregon('(d)(2)(iii)(C)', 'c'),
+  aboveLimit: oregon('(d)(2)(iii)(D)', 'd'),
+  below: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(iii)(E)', note: 'Six months read in OAR 437-002-1056(3)(e); two results below the action level, seven or more days apart, in a trade article.' }),
+  reassess: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(iv)', note: 'A training text that restates both limbs.' }),
 } as const satisfies Record<string, Source>;
 
 const REPEAT_MONTHS = { atOrAboveActionLevel: 6, aboveLimit: 3, below: 6 } as const;

@@ -6,8 +6,8 @@ export type NoticeScope = 'construction' | 'general-industry';
 
 /** Working days within which employees must be told of an exposure assessment. */
 export const NOTICE_WORKING_DAYS: Readonly<Record<NoticeScope, { readonly days: number; readonly source: Source }>> = {
-  construction: { days: 5, source: usFederal('1926.1153', 'read', { paragraph: '(d)(2)(vi)(A)' }) },
-  'general-industry': { days: 15, source: usFederal('1910.1053', 'read', { paragraph: '(d)(6)' }) },
+  construction: { days: 5, source: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(vi)(A)', note: 'A trade article and a training text that restate it.' }) },
+  'general-industry': { days: 15, source: usFederal('1910.1053', 'partly', { paragraph: '(d)(6)', note: 'A trade article.' }) },
 };
 export const WORKING_DAY_SOURCE = usFederal('1903.22', 'from-memory', { paragraph: '(c)', note: 'The silica rule does not define working days; by analogy federal holidays are left out.' });
 

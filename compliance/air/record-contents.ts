@@ -56,7 +56,7 @@ export const laboratoryContents = contentsRule({
 export const observationOffered = contentsRule({
   id: 'monitoring-observation',
   title: words('Observation of sampling offered', 'Se ofreció observar el muestreo'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(d)(2)(vii)', note: 'Training text.' }),
+  source: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(vii)', note: 'Training text.' }),
   duties: ['SIL-24'],
   items: [
     item('offered', 'affected people or their representatives were offered to watch', 'se ofreció observar a los afectados o sus representantes'),

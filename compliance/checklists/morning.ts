@@ -38,7 +38,7 @@ function machineLines(facts: ShiftFacts, open: readonly TaskAnswer[]): readonly 
   return [
     ...(collectors.length === 0
       ? []
-      : [line({ id: 'collectors', ruleId: 'silica-table-1-control', text: words(`Filter in, hose whole, gauge mark set: ${names(collectors).en}.`, `Filtro puesto, manguera entera, marca lista: ${names(collectors).es}.`), why: words('A weak collector ends Table 1.', 'Un colector débil acaba con la Tabla 1.'), source: usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1' }) })]),
+      : [line({ id: 'collectors', ruleId: 'silica-table-1-control', text: words(`Filter in, hose whole, gauge mark set: ${names(collectors).en}.`, `Filtro puesto, manguera entera, marca lista: ${names(collectors).es}.`), why: words('A weak collector ends Table 1.', 'Un colector débil acaba con la Tabla 1.'), source: usFederal('1926.1153', 'partly', { paragraph: '(c)(1) Table 1', note: 'Each row carries its own mark.' }) })]),
     ...(tools.length === 0
       ? []
       : [line({ id: 'machines', ruleId: 'machine-manual-on-file', text: words(`Guard, cord and ground-fault plug are good: ${names(tools).en}.`, `Guarda, cable y enchufe GFCI en buen estado: ${names(tools).es}.`), why: words('A bad cord or no guard can kill.', 'Un mal cable o sin guarda puede matar.'), source: usFederal('1926.300', 'from-memory', { paragraph: 'and 1926.302, .303, .404' }) })]),

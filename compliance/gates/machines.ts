@@ -9,7 +9,7 @@ import { listed, words } from '../words';
 export const manualRule: ShiftRule<TaskContext> = {
   id: 'machine-manual-on-file',
   title: words('The maker\'s manual on file', 'El manual del fabricante a la mano'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1; 1926.300, .302, .303', note: 'Table 1 rows ask use by the maker\'s manual; the tool sections recalled.' }),
+  source: usFederal('1926.1153', 'partly', { paragraph: '(c)(1) Table 1; 1926.300, .302, .303', note: 'Table 1 rows ask use by the maker\'s manual; the tool sections recalled.' }),
   duties: ['GATE-04'],
   topic: 'gate',
   holds: true,

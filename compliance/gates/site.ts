@@ -9,7 +9,7 @@ import { sentences, words } from '../words';
 export const hostHazardsRule: ShiftRule<ShiftContext> = {
   id: 'host-hazards-asked',
   title: words('The host\'s hazards', 'Los peligros del lugar'),
-  source: usFederal('1910.1200', 'read', { paragraph: '(e)(2); 1926.16', note: 'Reference-service texts of (e)(2) and WAC 296-901-14010(2); 1926.16 recalled.' }),
+  source: usFederal('1910.1200', 'partly', { paragraph: '(e)(2); 1926.16', note: 'Reference-service texts of (e)(2) and WAC 296-901-14010(2); 1926.16 recalled.' }),
   duties: ['GATE-06'],
   topic: 'gate',
   holds: true,

@@ -8,7 +8,7 @@ import { labelElements } from './label-elements';
 import { type MaterialState } from './mixing-effects.data';
 import { readHazardCodes, statementText } from './statements';
 
-export const CONTAINER_LABEL_SOURCE = usFederal('1910.1200', 'read', { paragraph: '(f)(6)(ii)', note: 'Product identifier with words and pictures of the hazards; a label once the container leaves the hands of who filled it, (f)(8), from a university program.' });
+export const CONTAINER_LABEL_SOURCE = usFederal('1910.1200', 'partly', { paragraph: '(f)(6)(ii)', note: 'Product identifier with words and pictures of the hazards; a label once the container leaves the hands of who filled it, (f)(8), from a university program.' });
 
 const STATE_WORDS: Readonly<Record<MaterialState, Words>> = {
   dry: words('dry powder', 'polvo seco'),

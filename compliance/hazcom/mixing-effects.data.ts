@@ -42,7 +42,7 @@ export const MIXING_EFFECTS: readonly MixingEffect[] = [
     needsPowder: true,
     text: { en: 'Silica dust can rise while this powder is tipped and mixed.', es: 'Puede salir polvo de sílice al verter y mezclar este polvo.' },
     actsAs: ['H350', 'H372'],
-    source: usFederal('1926.1153', 'read', { paragraph: '(a)', note: 'Tipping dry silica filler in quantity is not on the list of tasks that likely stay below the action level (OSHA letter 25 Jul 2019); statements of quartz recalled.' }),
+    source: usFederal('1926.1153', 'partly', { paragraph: '(a)', note: 'Tipping dry silica filler in quantity is not on the list of tasks that likely stay below the action level (OSHA letter 25 Jul 2019); statements of quartz recalled.' }),
   },
   {
     id: 'alkaline-when-wet',

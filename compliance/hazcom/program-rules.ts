@@ -35,7 +35,7 @@ export const multiEmployer = contentsRule({
 export const containerLabel = contentsRule({
   id: 'workplace-container-label',
   title: words('Label on mixed and decanted material', 'Etiqueta en material mezclado o trasvasado'),
-  source: usFederal('1910.1200', 'read', { paragraph: '(f)(6), (f)(8)', note: 'Product identifier with words or pictures for the hazards, and the specific information at hand; the exception for who fills it and uses it at once in a university program.' }),
+  source: usFederal('1910.1200', 'partly', { paragraph: '(f)(6), (f)(8)', note: 'Product identifier with words or pictures for the hazards, and the specific information at hand; the exception for who fills it and uses it at once in a university program.' }),
   duties: ['HAZ-03'],
   items: [
     item('identifier', 'product identifier, part and state', 'identificador del producto, parte y estado'),

@@ -38,8 +38,8 @@ export interface AuditLine {
 
 const APP_D = usFederal('1910.1200', 'read', { paragraph: '(g)(2), App. D', note: 'Order and headings are mandatory; sections 12 to 15 must appear.' });
 const APP_C = usFederal('1910.1200', 'partly', { paragraph: 'App. C' });
-const NO_EXPIRY = usFederal('1910.1200', 'read', { paragraph: '(g)(5)', note: 'No fixed expiry of a sheet; where nothing new is known the original stands (trade publisher summary).' });
-const ENGLISH = usFederal('1910.1200', 'read', { paragraph: '(g)(2)', note: 'Trade publisher’s answer: in English; copies in other languages may be kept beside it.' });
+const NO_EXPIRY = usFederal('1910.1200', 'partly', { paragraph: '(g)(5)', note: 'No fixed expiry of a sheet; where nothing new is known the original stands (trade publisher summary).' });
+const ENGLISH = usFederal('1910.1200', 'partly', { paragraph: '(g)(2)', note: 'Trade publisher’s answer: in English; copies in other languages may be kept beside it.' });
 const POLICY = sourced('organisation policy, not law', 'common-practice');
 const WORD: Readonly<Record<SignalWord, string>> = { danger: 'Danger', warning: 'Warning', none: '–' };
 

@@ -59,14 +59,14 @@ const US_FEDERAL: JurisdictionPack = {
   coverage: [
     complete('silica-limits', usFederal('1926.1153', 'read', { paragraph: '(b), (d)(1)' })),
     complete('silica-table-1', usFederal('1926.1153', 'partly', { paragraph: '(c)', note: 'Some respirator values recalled; each row carries its own mark.' })),
-    complete('silica-assessment', usFederal('1926.1153', 'read', { paragraph: '(d)' })),
+    complete('silica-assessment', usFederal('1926.1153', 'parallel-text', { paragraph: '(d)', note: 'Read in OAR 437-002-1056; each paragraph carries its own mark.' })),
     complete('respirator-factors', usFederal('1910.134', 'read', { paragraph: '(d)(3)(i)(A)' })),
     complete('respirator-program', usFederal('1910.134', 'read')),
     complete('hazard-communication', usFederal('1910.1200', 'partly')),
     complete('limits-of-substances', usFederal('1926.55', 'partly')),
     complete('noise', usFederal('1926.52', 'read')),
     complete('protection', usFederal('1926.95', 'partly')),
-    complete('records', usFederal('1910.1020', 'read')),
+    complete('records', usFederal('1910.1020', 'partly', { note: 'Each row carries its own mark.' })),
     complete('medical', usFederal('1926.1153', 'parallel-text', { paragraph: '(h)' })),
     complete('meetings', usFederal('1926.21', 'from-memory', { note: 'No federal interval of safety meetings.' })),
   ],
@@ -102,7 +102,7 @@ const US_CALIFORNIA: JurisdictionPack = {
   meetingEveryWorkingDays: 10,
 };
 
-const GB_LIMIT = sourced('EH40 workplace exposure limit', 'read', { note: 'Several UK texts; there is no action level.' });
+const GB_LIMIT = sourced('EH40 workplace exposure limit', 'partly', { note: 'Several UK texts; there is no action level.' });
 const GREAT_BRITAIN: JurisdictionPack = {
   id: 'great-britain',
   version: '2026.12',
@@ -124,7 +124,7 @@ const GREAT_BRITAIN: JurisdictionPack = {
     missing('meetings', 'Not read.', 'No se leyó.'),
   ],
   localDuties: [
-    { id: 'great-britain/extraction-examination', text: words('Local extraction is examined thoroughly at least every 14 months.', 'La extracción localizada se examina a fondo al menos cada 14 meses.'), source: sourced('COSHH reg. 9', 'read', { note: 'Two supplier texts.' }) },
+    { id: 'great-britain/extraction-examination', text: words('Local extraction is examined thoroughly at least every 14 months.', 'La extracción localizada se examina a fondo al menos cada 14 meses.'), source: sourced('COSHH reg. 9', 'partly', { note: 'Two supplier texts.' }) },
     { id: 'great-britain/extraction-class', text: words('Extraction of class M or H on tools.', 'Extracción de clase M o H en las herramientas.'), source: sourced('Trade text on construction dust', 'partly', { note: '"M class minimum".' }) },
   ],
   meetingEveryWorkingDays: null,

@@ -1,7 +1,7 @@
 import { checkNumber } from '../input-error';
 import { sourced, usFederal, type Source } from '../source';
 
-export const NRR_SOURCE: Source = usFederal('1910.95', 'read', { paragraph: 'App. B', note: 'Appendix summaries and California Appendix E.' });
+export const NRR_SOURCE: Source = usFederal('1910.95', 'partly', { paragraph: 'App. B', note: 'Appendix summaries and California Appendix E.' });
 export const DUAL_SOURCE: Source = sourced('WAC 296-307-63215', 'read', { note: 'Only the higher rating counts, and 5 dB more.' });
 export const DERATING_SOURCE: Source = sourced('OSHA Technical Manual, noise', 'partly', { note: 'Third-party quotation; judges the priority of engineering controls, is not Appendix B.' });
 

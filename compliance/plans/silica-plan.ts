@@ -22,14 +22,14 @@ export const silicaPlanElements = contentsRule({
 export const silicaPlanReview = yearlyRule({
   id: 'silica-plan-review',
   title: words('Silica plan reviewed every year', 'Plan de sílice revisado cada año'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(g)(2)' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(2)', note: 'WAC 296-840-140(2).' }),
   duties: ['SIL-17'],
 });
 
 export const silicaPlanAvailable = contentsRule({
   id: 'silica-plan-available',
   title: words('Silica plan and standard at hand', 'Plan y norma de sílice a la mano'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(g)(3), (i)(2)(ii)', note: 'The free copy of the standard in WAC 296-840-150.' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(3), (i)(2)(ii)', note: 'The free copy of the standard in WAC 296-840-150.' }),
   duties: ['SIL-18', 'SIL-26'],
   items: [
     item('plan-on-site', 'plan readable by each employee and representative, also offline', 'plan que cada empleado y representante puede leer, también sin red'),

@@ -2,7 +2,7 @@ import { addWorkingDays } from '../air/notice-date';
 import { addYears, checkIsoDate, type IsoDate } from '../iso-date';
 import { usFederal } from '../source';
 
-export const ACCESS_SOURCE = usFederal('1910.1020', 'read', { paragraph: '(e)(1)', note: 'Abstract of OSHA 3110; the delay rule, and that the days begin when the request is received, in the OSHA letter of 27 March 2002.' });
+export const ACCESS_SOURCE = usFederal('1910.1020', 'partly', { paragraph: '(e)(1)', note: 'Abstract of OSHA 3110; the delay rule, and that the days begin when the request is received, in the OSHA letter of 27 March 2002.' });
 export const RIGHTS_NOTICE_SOURCE = usFederal('1910.1020', 'read', { paragraph: '(g)(1)-(2)' });
 
 const ACCESS_WORKING_DAYS = 15;

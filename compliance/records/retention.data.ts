@@ -76,5 +76,5 @@ export const RETENTION_ROWS: readonly RetentionRow[] = [
   row('great-britain', 'monitoring-of-persons', years(40), 'exposure monitoring of identifiable persons', 'mediciones de exposición de personas identificables', sourced('COSHH reg. 10(5)', 'parallel-text', { note: 'Read in the Northern Ireland regulations of 2003; the GB clause recalled.' })),
   row('great-britain', 'monitoring-other', years(5), 'other exposure monitoring', 'otras mediciones de exposición', sourced('COSHH reg. 10(5)', 'parallel-text', { note: 'Read in the Northern Ireland regulations of 2003; the GB clause recalled.' })),
   row('great-britain', 'health-record', years(40), 'health record', 'registro de salud', sourced('COSHH reg. 11', 'from-memory')),
-  row('great-britain', 'extraction-test', years(5), 'examination of local extraction', 'examen de la extracción localizada', sourced('COSHH reg. 9', 'read', { note: 'Two supplier texts.' })),
+  row('great-britain', 'extraction-test', years(5), 'examination of local extraction', 'examen de la extracción localizada', sourced('COSHH reg. 9', 'partly', { note: 'Two supplier texts.' })),
 ];

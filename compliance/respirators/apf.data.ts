@@ -40,8 +40,8 @@ const us = (device: RespiratorDevice, facePiece: FacePiece, apf: number, apfWith
   source: US_TABLE,
 });
 
-const GB_FILTERING = sourced('HSG53 class factors', 'read', { note: 'University page and catalogue.' });
-const GB_MASK = sourced('HSG53 class factors', 'read', { note: 'Supplier table by EN standard; half masks in a second table.' });
+const GB_FILTERING = sourced('HSG53 class factors', 'partly', { note: 'University page and catalogue.' });
+const GB_MASK = sourced('HSG53 class factors', 'partly', { note: 'Supplier table by EN standard; half masks in a second table.' });
 const GB_RECALLED = sourced('HSG53 class factors', 'from-memory');
 const gb = (device: RespiratorDevice, facePiece: FacePiece, filterClass: string | null, apf: number, source: Source): ApfRow => ({
   id: `apf/great-britain/${device}/${facePiece}${filterClass === null ? '' : `/${filterClass}`}`,

@@ -5,7 +5,7 @@ import { usFederal, type Source } from '../source';
 import { APF_COMPARISON, apfOf, apfRowsOf, type ApfRow } from './apf.data';
 
 export const MUC_SOURCE = usFederal('1910.134', 'read', { paragraph: '(b), (d)(3)(i)(B)' });
-export const UNKNOWN_EXPOSURE_SOURCE = usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii)', note: 'OSHA training slide and WAC 296-842-13005.' });
+export const UNKNOWN_EXPOSURE_SOURCE = usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii)', note: 'Quoted word for word in a public list of safety codes; WAC 296-842-13005.' });
 export const GAS_SOURCE = usFederal('1910.134', 'read', { paragraph: '(d)(3)(iii)' });
 const IDLH_SOURCE = usFederal('1910.134', 'read', { paragraph: '(d)(3)(i)(B)(2)-(3)' });
 

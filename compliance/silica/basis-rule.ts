@@ -55,7 +55,7 @@ function hangsOnBasis(silica: SilicaDecision): silica is Extract<SilicaDecision,
 export const basisRule: ShiftRule<SilicaTask> = {
   id: 'silica-signed-basis',
   title: words('Work outside Table 1 needs a signed basis', 'El trabajo fuera de la Tabla 1 necesita una base firmada'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(a), (d)(2)(ii)' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(a), (d)(2)(ii)', note: '(a) read in a reproduction; (d)(2)(ii) in OAR 437-002-1056(2).' }),
   duties: ['SIL-01', 'SIL-07', 'RES-04'],
   topic: 'gate',
   holds: true,
@@ -97,7 +97,7 @@ export const basisRule: ShiftRule<SilicaTask> = {
 export const samplingDayRule: ShiftRule<SilicaTask> = {
   id: 'silica-sampling-day',
   title: words('A sampling day takes samples', 'En un día de muestreo se toman muestras'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(d)(2)' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(d)(2)', note: 'Read in OAR 437-002-1056.' }),
   duties: ['SIL-08'],
   topic: 'control',
   holds: false,

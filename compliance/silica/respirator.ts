@@ -16,7 +16,7 @@ export function apfName(apf: number, factors: RespiratorFactors | null): Words {
   return words('supplied air, full face', 'aire con línea, cara completa');
 }
 
-const QUALIFIED = usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii)', note: 'Read in a training slide of the agency and in WAC 296-842-13005: what cannot be reasonably estimated counts as immediately dangerous.' });
+const QUALIFIED = usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii)', note: 'Quoted word for word in a public list of safety codes, and WAC 296-842-13005: what cannot be reasonably estimated counts as immediately dangerous.' });
 const SCOPE = usFederal('1926.1153', 'read', { paragraph: '(a)' });
 const OUTSIDE_TABLE_1 = usFederal('1926.1153', 'parallel-text', { paragraph: '(e)(1)', note: 'Read in WAC 296-840-125.' });
 

@@ -108,7 +108,7 @@ function otherInputs({ collector, tool }: ControlOfTask): Readonly<Record<string
 export const table1ControlRule: ShiftRule<ControlOfTask> = {
   id: 'silica-table-1-control',
   title: words('The controls of the Table 1 row', 'Los controles de la fila de la Tabla 1'),
-  source: usFederal('1926.1153', 'read', { paragraph: '(c)(1) Table 1' }),
+  source: usFederal('1926.1153', 'partly', { paragraph: '(c)(1) Table 1', note: 'Each row carries its own mark.' }),
   duties: ['SIL-02', 'SIL-06', 'AIR-03'],
   topic: 'control',
   holds: false,

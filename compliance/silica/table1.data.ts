@@ -133,7 +133,7 @@ export const TABLE_1: readonly Table1Option[] = [
   },
   {
     id: 'vi', row: 'vi', tool: 'rig-mounted-core-saw', heading: { en: 'Rig-mounted core saw or drill', es: 'Sacanúcleos o taladro sobre soporte' }, method: 'water',
-    demands: [MANUAL, 'built-in-water-feed'], outdoors: NONE, indoors: NONE, source: row('vi', 'read', 'Water feed and no respirator read in the agency\'s fact sheet on the row.'),
+    demands: [MANUAL, 'built-in-water-feed'], outdoors: NONE, indoors: NONE, source: row('vi', 'partly', 'Water feed and no respirator read in the agency\'s fact sheet on the row.'),
   },
   {
     id: 'vii', row: 'vii', tool: 'drill', heading: { en: 'Handheld or stand-mounted drill', es: 'Taladro de mano o de soporte' }, method: 'vacuum',
@@ -143,29 +143,29 @@ export const TABLE_1: readonly Table1Option[] = [
   {
     id: 'viii', row: 'viii', tool: 'dowel-drilling-rig', heading: { en: 'Dowel drilling rig for concrete', es: 'Perforadora de pasadores para concreto' }, method: 'vacuum',
     demands: [MANUAL, 'shroud', 'filter-99-percent', 'filter-cleaning', 'hepa-vacuum-for-holes'], outdoors: ALWAYS_10, indoors: null,
-    source: row('viii', 'partly', 'Outdoors only, controls and "always a respirator" read in a training text; the value 10 recalled.'),
+    source: row('viii', 'partly', 'Outdoors only, controls and "always a respirator" read in a training text; the value 10 recalled; an independent public listing has the same.'),
   },
   {
     id: 'ix-a', row: 'ix', tool: 'vehicle-mounted-drilling-rig', heading: DRILLING_RIG, method: 'water-and-vacuum',
-    demands: [MANUAL, 'close-capture-hood', 'low-flow-water-at-collector'], outdoors: NONE, indoors: NONE, source: row('ix', 'read', 'Both options read in a training text.'),
+    demands: [MANUAL, 'close-capture-hood', 'low-flow-water-at-collector'], outdoors: NONE, indoors: NONE, source: row('ix', 'partly', 'Both options read in a training text.'),
   },
   {
     id: 'ix-b', row: 'ix', tool: 'vehicle-mounted-drilling-rig', heading: DRILLING_RIG, method: 'cab',
-    demands: [MANUAL, 'enclosed-cab', 'water-on-bit'], outdoors: NONE, indoors: NONE, source: row('ix', 'read', 'Both options read in a training text.'),
+    demands: [MANUAL, 'enclosed-cab', 'water-on-bit'], outdoors: NONE, indoors: NONE, source: row('ix', 'partly', 'Both options read in a training text.'),
   },
   {
     id: 'x-a', row: 'x', tool: 'chipping-tool', heading: CHIPPING, method: 'water',
-    demands: [MANUAL, 'water-at-impact-point'], outdoors: TEN_OVER_4, indoors: ALWAYS_10, source: row('x', 'partly', 'Controls read in a reproduction; respirator values recalled.'),
+    demands: [MANUAL, 'water-at-impact-point'], outdoors: TEN_OVER_4, indoors: ALWAYS_10, source: row('x', 'partly', 'Controls read in a reproduction; respirator values recalled; an independent public listing has the same.'),
   },
   {
     id: 'x-b', row: 'x', tool: 'chipping-tool', heading: CHIPPING, method: 'vacuum',
     demands: [MANUAL, 'shroud', 'airflow-makers-figure', 'filter-99-percent', 'filter-cleaning'], outdoors: TEN_OVER_4, indoors: ALWAYS_10,
-    source: row('x', 'partly', 'Controls read in a tool maker\'s reproduction; respirator values recalled.'),
+    source: row('x', 'partly', 'Controls read in a tool maker\'s reproduction; respirator values recalled; an independent public listing has the same.'),
   },
   {
     id: 'xi', row: 'xi', tool: 'mortar-removal-grinder', heading: { en: 'Handheld grinder for mortar removal', es: 'Amoladora de mano para quitar mortero' }, method: 'vacuum',
     demands: GRINDER_COLLECTOR, outdoors: { upTo4Hours: 10, over4Hours: 25 }, indoors: { upTo4Hours: 10, over4Hours: 25 },
-    source: row('xi', 'read', 'Row read in a reproduction whose row numbers are shifted by one.'),
+    source: row('xi', 'partly', 'Controls read in a reproduction whose row numbers are shifted by one; 10 and 25 stand there under the wrong heading, an independent public listing has them here.'),
   },
   {
     // Outdoors only, although some trade tip sheets read as if it held indoors too.
@@ -175,7 +175,7 @@ export const TABLE_1: readonly Table1Option[] = [
   },
   {
     id: 'xii-b', row: 'xii', tool: 'handheld-grinder', heading: HANDHELD_GRINDER, method: 'vacuum',
-    demands: GRINDER_COLLECTOR, outdoors: NONE, indoors: TEN_OVER_4, source: row('xii', 'read', 'Heading and "indoors over 4 h: 10" read in a sheet quoting the row; 25 cfm per inch in the agency\'s video.'),
+    demands: GRINDER_COLLECTOR, outdoors: NONE, indoors: TEN_OVER_4, source: row('xii', 'partly', 'Controls read whole in a trade reproduction; heading and "indoors over 4 h: 10" read in a sheet quoting the row; 25 cfm per inch in the agency\'s video.'),
   },
   {
     id: 'xiii-a', row: 'xiii', tool: 'walk-behind-grinder-or-mill', heading: FLOOR_GRINDER, method: 'water',
@@ -210,14 +210,14 @@ export const TABLE_1: readonly Table1Option[] = [
   {
     id: 'xvii', row: 'xvii', tool: 'demolition-vehicle', heading: { en: 'Heavy equipment that abrades, breaks or demolishes', es: 'Maquinaria pesada que raspa, rompe o demuele' }, method: 'cab',
     demands: ['enclosed-cab', 'water-or-suppressant-when-others-near'], outdoors: NONE, indoors: NONE,
-    source: row('xvii', 'partly', 'Controls read in the agency\'s fact sheet; "none" recalled.'),
+    source: row('xvii', 'partly', 'Controls read in the agency\'s fact sheet; "none" recalled; an independent public listing has the same.'),
   },
   {
     id: 'xviii-a', row: 'xviii', tool: 'grading-vehicle', heading: GRADING, method: 'water',
-    demands: ['no-abrading-or-demolition', 'water-or-suppressant-as-needed'], outdoors: NONE, indoors: NONE, source: row('xviii', 'read', GRADING_NOTE),
+    demands: ['no-abrading-or-demolition', 'water-or-suppressant-as-needed'], outdoors: NONE, indoors: NONE, source: row('xviii', 'partly', GRADING_NOTE),
   },
   {
     id: 'xviii-b', row: 'xviii', tool: 'grading-vehicle', heading: GRADING, method: 'cab',
-    demands: ['no-abrading-or-demolition', 'operator-alone', 'enclosed-cab'], outdoors: NONE, indoors: NONE, source: row('xviii', 'read', GRADING_NOTE),
+    demands: ['no-abrading-or-demolition', 'operator-alone', 'enclosed-cab'], outdoors: NONE, indoors: NONE, source: row('xviii', 'partly', GRADING_NOTE),
   },
 ];

@@ -2,8 +2,8 @@ import { checkNumber } from '../input-error';
 import { type Words } from '../outcome';
 import { sourced, type Source } from '../source';
 
-export const MVER_SOURCE: Source = sourced('ASTM F1869', 'read', { note: 'Scope text of F1869-11 and a vendor page for conditions and time; the factor 52.91 = 24 × 1,000 ÷ 453.59 derived.' });
-export const RH_SOURCE: Source = sourced('ASTM F2170', 'read', { note: 'Instrument manual quoting the 2009 edition; 24 hours since the 2018 revision in a meter maker’s article.' });
+export const MVER_SOURCE: Source = sourced('ASTM F1869', 'partly', { note: 'Scope text of F1869-11 and a vendor page for conditions and time; the factor 52.91 = 24 × 1,000 ÷ 453.59 derived.' });
+export const RH_SOURCE: Source = sourced('ASTM F2170', 'partly', { note: 'Instrument manual quoting the 2009 edition; 24 hours since the 2018 revision in a meter maker’s article.' });
 
 const GRAMS_PER_LB = 453.59237;
 /** The dish must stand on bare concrete this long. */
