@@ -10,6 +10,8 @@ import { tabletDayService } from './acknowledgements/tablet-day-service';
 import { actionsRoutes } from './actions/actions-routes';
 import { actionsService } from './actions/actions-service';
 import { checklistsService } from './checklists/checklists-service';
+import { correctionsRoutes } from './corrections/corrections-routes';
+import { correctionsService } from './corrections/corrections-service';
 import { type Deps } from './deps';
 import { equipmentRoutes } from './equipment/equipment-routes';
 import { equipmentService } from './equipment/equipment-service';
@@ -81,6 +83,7 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
   const uploads = createUploads(uploadFolder);
   api.use(sheetsRoutes(sheets, uploads));
   const library = { reach: reachService(deps, checklists), keeping: keepingService(deps), requests: requestsService(deps, sheets), bulk: bulkService(deps, sheets), site: siteService(deps, sheets) };
+  api.use(correctionsRoutes(correctionsService(deps)));
   api.use(searchRoutes(searchService(deps)));
   api.use(libraryRoutes(library, uploads, createUploads(uploadFolder, maxZipBytes)));
   api.use(productsRoutes(productsService(deps)));

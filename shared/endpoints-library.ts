@@ -1,4 +1,5 @@
 import { pageOf, type Role } from './common';
+import { SheetCorrection, SheetSuggestions } from './corrections';
 import { type Endpoint } from './endpoints';
 import { AppliedRevision, AskSupplier, ContainerLabel, ImportPreview, ImportProducts, ImportedProducts, LabelQuery, LibraryPolicy, LibraryTask, OpenRequest, ProductUse, ProductUsesQuery, Reach, RequestsQuery, ReturnSheet, SearchAnswer, SearchQuery, SheetRequest, SheetReturnDraft, SiteCode, SitePage, UseLink, ZipOutcome } from './library';
 import { PageQuery } from './common';
@@ -24,6 +25,9 @@ export const libraryKeepingEndpoints = {
   openRequest: { method: 'POST', path: '/api/open-requests', access: 'public', body: UseLink, answer: OpenRequest },
   /** The link's token travels in the header `X-Kneeboard-Link`. */
   answerRequest: { method: 'POST', path: '/api/open-requests/sheet', access: 'public', body: 'file', answer: 'nothing' },
+  listSuggestions: { method: 'GET', path: '/api/sheets/:revisionId/suggestions', access: everyone, answer: SheetSuggestions },
+  listCorrections: { method: 'GET', path: '/api/sheet-corrections', access: everyone, query: PageQuery, answer: pageOf(SheetCorrection) },
+  removeCorrection: { method: 'DELETE', path: '/api/sheet-corrections/:correctionId', access: officer, answer: 'nothing' },
   uploadZip: { method: 'POST', path: '/api/sheet-zips', access: office, body: 'file', answer: ZipOutcome },
   exportSheetsZip: { method: 'GET', path: '/api/sheets.zip', access: everyone, answer: 'bytes' },
   exportProductsCsv: { method: 'GET', path: '/api/products.csv', access: everyone, answer: 'bytes' },

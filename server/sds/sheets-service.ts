@@ -15,6 +15,7 @@ import { type UploadedFile } from '../http/mount';
 import { toPage } from '../paging';
 import { databaseErrorCode, type Tx } from '../platform/database';
 import { DamagedObjectError } from '../platform/storage';
+import { rememberCorrections } from '../corrections/corrections-service';
 import { appendEntry } from '../recordlog/recordlog-store';
 import { applyEdit } from './sheet-fields';
 import { fieldsOf, findByHash, findRevision, hasValues, listRevisions, toRevision, toSummary, type RevisionRow } from './sheets-store';
@@ -104,6 +105,7 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
         demandRole(actor, 'safety-officer');
         const row = await findRevision(tx, id);
         demandState(row, ['read', 'needs-entry'], row.revision.state === 'waiting' ? 'This sheet is still being read. Wait until it is done.' : 'A confirmed sheet does not change. Add the corrected sheet as a new revision.');
+        await rememberCorrections(tx, clock, actor, row, edit);
         return change(tx, id, version, { fields: applyEdit(fieldsOf(row), edit) });
       }),
 
@@ -122,6 +124,7 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
           const [current] = await tx.select({ revisedOn: revisions.revisedOn }).from(revisions).where(and(own, ne(revisions.id, id)));
           const isCurrent = !current?.revisedOn || (edit.revisedOn as string) >= current.revisedOn;
           if (isCurrent) await tx.update(revisions).set({ isCurrent: false }).where(own);
+          await rememberCorrections(tx, clock, actor, row, edit);
           const fields: SheetFields = applyEdit(fieldsOf(row), edit);
           const confirmedAt = clock.now();
           const revision = await change(tx, id, version, { fields, productId, language, revisedOn: edit.revisedOn, isCurrent, state: 'confirmed', confirmedBy: actor.personId, confirmedAt });

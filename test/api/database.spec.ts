@@ -82,8 +82,8 @@ it('the service may change or remove rows of no other table than these', async (
   );
   const having = (right: 'update' | 'delete' | 'truncate' | 'references' | 'trigger') => rows.filter((row) => row[right]).map((row) => row.name);
   expect(having('update').filter((name) => signedTables.includes(name))).toEqual([]);
-  // Deleted and written again with a plan or a kit, a PIN that is reset, a session that ends: none of it signed.
-  expect(having('delete')).toEqual(['kit_parts', 'pins', 'sessions', 'shift_equipment', 'shift_kits', 'shift_people']);
+  // Deleted and written again with a plan or a kit, a PIN that is reset, a session that ends, a remembered correction taken back: none of it signed.
+  expect(having('delete')).toEqual(['kit_parts', 'pins', 'sessions', 'sheet_corrections', 'shift_equipment', 'shift_kits', 'shift_people']);
   expect([having('truncate'), having('references'), having('trigger')]).toEqual([[], [], []]);
 });
 

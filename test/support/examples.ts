@@ -1,5 +1,7 @@
 import { v7 as newId } from 'uuid';
 import { makeLink } from '#server/platform/links';
+import { emptyReading } from '#server/sds/reader/reading';
+import { readSheetWork } from '#server/sds/sheets-work';
 import { type EndpointName } from '#shared/endpoints';
 import { type CallInput, type Agent, ok } from './call';
 import { equipmentEdit, jobEdit, kitEdit, personEdit, sheetEdit } from './edits';
@@ -81,6 +83,9 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   withdrawRequest: async (world) => ({ params: { requestId: (await openRequest(world)).id } }),
   openRequest: async (world) => ({ body: { token: (await openRequest(world)).token } }),
   answerRequest: async (world) => ({ headers: { 'X-Kneeboard-Link': (await openRequest(world)).token }, file: { bytes: Buffer.from(`%PDF-1.4 answer ${newId()}`), fileName: 'sheet.pdf' } }),
+  listSuggestions: ({ ids }) => ({ params: pick(ids, 'revisionId') }),
+  listCorrections: () => ({ query: { limit: 1 } }),
+  removeCorrection: async (world) => ({ params: { correctionId: await rememberedCorrection(world) } }),
   uploadZip: async (world) => ({ file: { bytes: await ok(officerOf(world), 'exportSheetsZip'), fileName: 'sheets.zip' } }),
   exportSheetsZip: () => ({}),
   exportProductsCsv: () => ({}),
@@ -164,6 +169,18 @@ async function openRequest(world: World): Promise<{ id: string; token: string }>
 async function siteToken(world: World): Promise<string> {
   const { address } = await ok(officerOf(world), 'makeSiteCode', { params: { jobId: world.ids['jobId'] ?? '' } });
   return address?.split('#')[1] ?? '';
+}
+
+/** Learned from a sheet whose supplier the reader took otherwise. */
+async function rememberedCorrection({ organisation }: World): Promise<string> {
+  const { service, id: organisationId, officer } = organisation;
+  const { revision } = await ok(officer.agent, 'uploadSheet', { file: { bytes: Buffer.from(`%PDF-1.4 corrected ${newId()}`), fileName: 'sheet.pdf' } });
+  const supplier = { value: 'Northlode Resins Inc Tel', page: 1, box: { x: 0, y: 0, width: 1, height: 1 }, quote: 'Northlode Resins Inc Tel', confidence: 0.6 };
+  await readSheetWork(service.deps, { read: () => Promise.resolve({ ...emptyReading('read', 1), supplier, text: 'Northlode Resins Inc Tel' }), close: () => Promise.resolve() })({ organisationId, revisionId: revision.id });
+  const params = { revisionId: revision.id };
+  const { version } = await ok(officer.agent, 'readRevision', { params });
+  await ok(officer.agent, 'saveRevision', { params, version, body: sheetEdit({ supplier: `Northlode Resins ${newId()}` }) });
+  return (await ok(officer.agent, 'listCorrections', { query: { limit: 1 } })).items[0]?.id ?? '';
 }
 
 async function openAction(world: World) {

@@ -3,6 +3,7 @@ import { type SheetReview } from './sheet-review/sheet-review';
 
 export const routes: Routes = [
   { path: '', title: 'SDS library', loadComponent: () => import('./sheet-library/sheet-library').then((file) => file.SheetLibrary) },
+  { path: 'corrections', title: 'Remembered corrections', loadComponent: () => import('./corrections/corrections-page').then((file) => file.CorrectionsPage) },
   { path: 'keeping', title: 'Keeping current', loadComponent: () => import('./keeping/keeping-page').then((file) => file.KeepingPage) },
   {
     path: ':revisionId',

@@ -1,15 +1,18 @@
 import { ChangeDetectionStrategy, Component, ElementRef, inject, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
+import { Note } from '#ui/note';
 import { State } from '#ui/state';
+import { ruleWords, sourceWords } from '../corrections/correction-words';
 import { type ReviewProgress } from './review-progress';
-import { type ReviewKey, type ReviewRow } from './review-rows';
+import { type ReviewKey, type ReviewRow, type Suggestion } from './review-rows';
 import { type SheetForm } from './sheet-form';
 import { ValueEditor } from './value-editor';
 
 /** What was read, line by line. The active line is open; one that wants a look asks "matches or change". */
 @Component({
   selector: 'kb-review-list',
-  imports: [MatButton, State, ValueEditor],
+  imports: [MatButton, Note, RouterLink, State, ValueEditor],
   templateUrl: './review-list.html',
   styleUrl: './review-list.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -26,6 +29,10 @@ export class ReviewList {
   readonly opened = output<ReviewKey>();
   readonly matched = output<ReviewKey>();
   readonly changeAsked = output<ReviewKey>();
+  readonly taken = output<Suggestion>();
+
+  protected readonly ruleWords = ruleWords;
+  protected readonly sourceWords = sourceWords;
 
   focusActive(): void {
     this.element.querySelector<HTMLElement>('[data-active]')?.focus();

@@ -22,6 +22,11 @@ export class ReviewProgress {
     this.activeKey.set(this.pending()[0]?.key ?? 'productName');
   }
 
+  /** When more is known of the lines, and nobody has begun yet. */
+  beginUnlessUnderWay(): void {
+    if (this.lookedAt().size === 0 && this.editingKey() === null) this.begin();
+  }
+
   move(by: 1 | -1): void {
     const rows = this.rows();
     const at = rows.findIndex(({ key }) => key === this.activeKey());

@@ -1,3 +1,4 @@
+import { type SheetSuggestions } from '#shared/corrections';
 import { neededToConfirm, type Place, type SheetFields, type SheetEdit } from '#shared/sheets';
 import type * as z from 'zod';
 import { splitCodes, type SheetForm } from './sheet-form';
@@ -13,7 +14,10 @@ export interface ReviewRow {
   /** Read with doubt, or not found though every sheet says it. */
   readonly wantsLook: boolean;
   readonly because: string;
+  /** What an earlier correction says instead; null where none does, or where it was taken over. */
+  readonly suggestion: Suggestion | null;
 }
+export type Suggestion = SheetSuggestions['items'][number];
 
 /** Below this the reader itself is unsure (the same figure counts "to look at" on the server). */
 const lookBelow = 0.8;
@@ -73,19 +77,21 @@ function wordsOf(value: ReturnType<SheetForm['getRawValue']>, fields: SheetField
 }
 
 /** Every line of the review in the order of the sheet. */
-export function reviewRows(fields: SheetFields, value: ReturnType<SheetForm['getRawValue']>): readonly ReviewRow[] {
+export function reviewRows(fields: SheetFields, value: ReturnType<SheetForm['getRawValue']>, suggestions: readonly Suggestion[] = []): readonly ReviewRow[] {
   return (Object.keys(labels) as ReviewKey[]).map((key) => {
     const read = readOf(fields, key);
     const doubtful = read.filter(({ confidence }) => confidence < lookBelow);
     const isMissing = wanted.has(key) && (key === 'sections' ? false : value[key as keyof typeof value] === null);
     const first = doubtful[0] ?? read[0];
+    const suggestion = suggestions.find((each) => each.field === key && each.value !== value[each.field]) ?? null;
     return {
       key,
       label: labels[key],
       words: wordsOf(value, fields, key),
       place: first?.place ?? null,
-      wantsLook: doubtful.length > 0 || isMissing,
+      wantsLook: doubtful.length > 0 || isMissing || suggestion !== null,
       because: isMissing ? 'Every sheet says this, but it was not found. Read it on the page and fill it in.' : (doubtful[0]?.because ?? (doubtful.length > 0 ? 'The reader is not sure of this one.' : '')),
+      suggestion,
     };
   });
 }

@@ -5,6 +5,7 @@ import { provideRouter } from '@angular/router';
 import { afterEach, describe, expect, it } from '@jest/globals';
 import { type Role } from '#shared/common';
 import { type Reach } from '#shared/library';
+import { type SheetSuggestions } from '#shared/corrections';
 import { type Revision } from '#shared/sheets';
 import { SessionApi } from '../../session/session-api';
 import { SheetReview } from './sheet-review';
@@ -61,7 +62,7 @@ const reach: Reach = {
 describe('checking what was read', () => {
   afterEach(() => document.body.replaceChildren());
 
-  async function open(role: Role = 'safety-officer', stored: Revision = revision) {
+  async function open(role: Role = 'safety-officer', stored: Revision = revision, suggestions: SheetSuggestions['items'] = []) {
     TestBed.configureTestingModule({ deferBlockBehavior: DeferBlockBehavior.Manual, providers: [provideHttpClient(), provideHttpClientTesting(), provideRouter([])] });
     const server = TestBed.inject(HttpTestingController);
     const session = TestBed.inject(SessionApi).load();
@@ -77,9 +78,11 @@ describe('checking what was read', () => {
       // The page counts as busy until it knows what the sheet reaches.
       TestBed.tick();
       server.match(({ url }) => url.endsWith('/reach')).forEach((asked) => asked.flush(reach));
+      server.match(({ url }) => url.endsWith('/suggestions')).forEach((asked) => asked.flush({ items: suggestions }));
       server.match(({ url }) => url === '/api/sheet-requests').forEach((asked) => asked.flush({ items: [], next: null }));
       await fixture.whenStable();
     };
+    await settle();
     await settle();
     const element = fixture.nativeElement as HTMLElement;
     const active = () => element.querySelector('[data-active] > span')?.textContent?.trim();
@@ -160,6 +163,36 @@ describe('checking what was read', () => {
   ] as const)('offers to apply the confirmed sheet: %s %s', async (role, isOffered) => {
     const { button } = await open(role, { ...revision, state: 'confirmed', isCurrent: true, productId: revisionId });
     expect(button('Apply to open jobs') !== undefined).toBe(isOffered);
+  });
+
+  describe('with a correction remembered', () => {
+    const suggestion: SheetSuggestions['items'][number] = {
+      field: 'productName',
+      value: 'Quarrybond 40 Part C, grey',
+      from: { id: revisionId, revisionId, fileName: 'part-a.pdf', field: 'productName', rule: { kind: 'label', label: 'Handelsname', where: 'same-line', isDayFirst: null }, readValue: 'Sheet', value: 'Quarrybond 40 Part A', supplier: 'Northlode Resins', correctedAt: '2026-12-03T12:00:00Z', correctedBy: 'Ines Halloran', isYours: true },
+    };
+
+    it('offers it with its reason beside what was read, and leaves the reading', async () => {
+      const { active, text, button } = await open(undefined, undefined, [suggestion]);
+      expect(active()).toBe('Product');
+      expect(text()).toContain('3 of 11 want a look.');
+      expect(text()).toContain('From your correction of 3 Dec 2026 on part-a.pdf: Quarrybond 40 Part C, grey');
+      expect(text()).toContain('The product’s name stands after “Handelsname”.');
+      expect(button('Quarrybond 40 Part C')).toBeDefined();
+    });
+
+    it('is taken over by a key or a button, or left by saying that the reading matches', async () => {
+      const taken = await open(undefined, undefined, [suggestion]);
+      await taken.press('u');
+      expect(taken.button('Quarrybond 40 Part C, grey')).toBeDefined();
+      expect(taken.active()).toBe('Revised');
+      TestBed.resetTestingModule();
+      document.body.replaceChildren();
+      const left = await open(undefined, undefined, [suggestion]);
+      await left.press('Enter');
+      expect(left.button('Quarrybond 40 Part C')).toBeDefined();
+      expect(left.active()).toBe('Revised');
+    });
   });
 
   it('opens every value as a field when the sheet could not be read', async () => {

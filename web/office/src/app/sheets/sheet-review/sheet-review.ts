@@ -16,13 +16,14 @@ import { FormTrouble } from '../../pieces/form-trouble';
 import { Unready } from '../../pieces/unready';
 import { NavigationCounts } from '../../shell/navigation-counts';
 import { ReachPanel } from '../reach/reach-panel';
+import { CorrectionsApi } from '../corrections/corrections-api';
 import { SheetReturns } from '../requests/sheet-returns';
 import { pageUnderWay, picturesWords, readerTrouble } from '../sheet-words';
 import { SheetsApi } from '../sheets-api';
 import { ConfirmDialog, type ConfirmOutcome, type ConfirmQuestion } from './confirm-dialog';
 import { ReviewList } from './review-list';
 import { ReviewProgress } from './review-progress';
-import { reviewRows, type ReviewKey } from './review-rows';
+import { reviewRows, type ReviewKey, type Suggestion } from './review-rows';
 import { checkedEdit, hasAllNeeded, placeMessage, sheetForm, type SheetForm } from './sheet-form';
 
 const pollMilliseconds = 1500;
@@ -38,6 +39,7 @@ const pollMilliseconds = 1500;
 })
 export class SheetReview {
   private readonly api = inject(SheetsApi);
+  private readonly corrections = inject(CorrectionsApi);
   private readonly access = inject(Access);
   private readonly builder = inject(NonNullableFormBuilder);
   private readonly dialogs = inject(MatDialog);
@@ -53,11 +55,13 @@ export class SheetReview {
   protected readonly refusal = signal('');
   protected readonly isSending = signal(false);
   protected readonly form = signal<SheetForm | null>(null);
+  /** What earlier corrections say of this sheet: beside the reading, never in its place. */
+  private readonly suggestions = signal<readonly Suggestion[]>([]);
   private readonly value = signal<ReturnType<SheetForm['getRawValue']> | null>(null);
 
   protected readonly rows = computed(() => {
     const [revision, value] = [this.revision(), this.value()];
-    return revision && value ? reviewRows(revision.fields, value) : [];
+    return revision && value ? reviewRows(revision.fields, value, this.suggestions()) : [];
   });
   protected readonly progress = new ReviewProgress(this.rows);
   protected readonly place = computed(() => this.rows().find(({ key }) => key === this.progress.activeKey())?.place ?? null);
@@ -114,12 +118,24 @@ export class SheetReview {
     this.problem.set(null);
     try {
       this.take(await firstValueFrom(this.api.read(id)));
+      await this.loadSuggestions(id);
     } catch (error) {
       if (this.revision() === null) this.problem.set(problemOf(error));
     }
   }
 
-  /** Enter matches, E changes, arrows move; not while somebody types or presses a button. */
+  /** Without them the sheet is checked as before. */
+  private async loadSuggestions(id: string): Promise<void> {
+    if (!this.mayConfirm() || this.isByHand()) return;
+    try {
+      this.suggestions.set((await firstValueFrom(this.corrections.suggestions(id))).items);
+      this.progress.beginUnlessUnderWay();
+    } catch {
+      this.suggestions.set([]);
+    }
+  }
+
+  /** Enter matches, E changes, U uses what an earlier correction says, arrows move; not while somebody types or presses a button. */
   protected key(event: KeyboardEvent): void {
     if (!this.mayConfirm() || this.isByHand() || event.ctrlKey || event.metaKey || event.altKey || this.dialogs.openDialogs.length > 0) return;
     const target = event.target instanceof Element ? event.target : null;
@@ -127,6 +143,7 @@ export class SheetReview {
     const active = this.progress.activeKey();
     if (event.key === 'Enter') this.matches(active);
     else if (event.key === 'e' || event.key === 'E') this.change(active);
+    else if (event.key === 'u' || event.key === 'U') this.useSuggestion(active);
     else if (event.key === 'ArrowDown') this.move(1);
     else if (event.key === 'ArrowUp') this.move(-1);
     else return;
@@ -136,6 +153,18 @@ export class SheetReview {
   protected matches(key: ReviewKey): void {
     this.progress.matches(key);
     this.focusLine();
+  }
+
+  protected takeOver({ field, value }: Suggestion): void {
+    const control = this.form()?.controls[field];
+    control?.setValue(value);
+    control?.markAsDirty();
+    this.matches(field);
+  }
+
+  private useSuggestion(key: ReviewKey): void {
+    const suggestion = this.rows().find((row) => row.key === key)?.suggestion;
+    if (suggestion) this.takeOver(suggestion);
   }
 
   protected change(key: ReviewKey): void {
