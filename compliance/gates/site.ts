@@ -39,7 +39,7 @@ export const competentPersonRule: ShiftRule<ShiftContext> = {
   },
   line({ facts, peopleById }, { outcome }) {
     const name = outcome === 'met' ? peopleById.get(facts.competentPersonId ?? '')?.name : undefined;
-    return name === undefined ? words('No competent person is named.', 'Falta nombrar a la persona competente.') : words(`The competent person today is ${name}.`, `La persona competente hoy es ${name}.`);
+    return name === undefined ? words('Who is the competent person today?', '¿Quién es hoy la persona competente?') : words(`The competent person today is ${name}.`, `La persona competente hoy es ${name}.`);
   },
 };
 

@@ -13,7 +13,8 @@ export interface PagePlace {
 const ZOOMS = [0.5, 0.75, 1, 1.5, 2, 3] as const;
 
 /**
- * One page of a PDF at a time, with a place on it marked. Use inside `@defer`; the PDF library itself is fetched on first use.
+ * One page of a PDF at a time, with a place on it marked. Use inside `@defer (on immediate)`: a busy machine has no idle moment
+ * to wait for. The PDF library itself is fetched on first use.
  * The content stands beside the error as the way out, for example a link to the file.
  */
 @Component({

@@ -18,7 +18,7 @@ import { KeptSheets } from './kept-sheets';
       @if (job.state === 'good') {
         <kb-frame [title]="name()" [kicker]="say.sheets.heading" [back]="['/jobs', shiftId(), 'sheets']" [backLabel]="say.sheets.back">
           @if (file(); as bytes) {
-            @defer {
+            @defer (on immediate) {
               <kb-page-viewer [source]="bytes" [name]="name()" [language]="words.language()" />
             } @loading {
               <kb-empty state="loading" [heading]="say.sheets.loading" />

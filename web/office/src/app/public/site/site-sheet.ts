@@ -14,7 +14,7 @@ import { siteWords } from './site-words';
     <div class="kb-actions kb-no-print"><button type="button" class="kb-button outlined" (click)="closed.emit()">← {{ words().back }}</button></div>
     <h1 class="name">{{ sheet().productName }}</h1>
     @if (bytes(); as bytes) {
-      @defer {
+      @defer (on immediate) {
         <kb-page-viewer [source]="bytes" [name]="sheet().productName" [language]="language()"><button type="button" class="kb-button text" (click)="save(bytes)">{{ words().save }}</button></kb-page-viewer>
       } @placeholder {
         <kb-empty state="loading" [heading]="words().openingSheet" />
