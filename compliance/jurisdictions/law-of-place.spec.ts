@@ -8,6 +8,7 @@ import { generateChecklist } from '../checklists/generate';
 import { checklistText } from '../checklists/text';
 import { type ShiftFacts } from '../facts';
 import { type Finding } from '../outcome';
+import { dayPlan } from '../plans/day-plan';
 import { listPlaces } from './pack';
 import { PLACES_WITHOUT_PACK } from './places.data';
 
@@ -39,6 +40,10 @@ describe.each(ABROAD)('[LOC-02] abroad without a pack: %j (conduct 9)', (jurisdi
     const checklist = generateChecklist(settled(jurisdictionId), answer);
     for (const language of ['en', 'es'] as const) expect(JSON.stringify(checklistText(checklist, language)).replaceAll('O. Reg. 490/09 Table 1', '')).not.toMatch(/29 CFR|OSHA|Table 1|Tabla 1/);
     expect(checklist.notice.en).toMatch(/^No pack for this place/);
+    const plan = dayPlan(settled(jurisdictionId), answer);
+    expect(JSON.stringify(plan).replaceAll('O. Reg. 490/09 Table 1', '')).not.toMatch(/29 CFR|OSHA|Table 1|Tabla 1/);
+    expect(plan.notice).toEqual(checklist.notice);
+    expect(plan.tasks.filter(({ state }) => state === 'ready').map(({ name }) => name.en)).toEqual(['Inspection']);
   });
 
   it('shows its own silica figure where one is known, with its source, and says that it decides nothing', () => {

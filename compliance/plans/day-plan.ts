@@ -60,7 +60,7 @@ export function dayPlan(facts: ShiftFacts, answer: ShiftAnswer): DayPlan {
     isCompetentPersonNamed: facts.people.some(({ id }) => id === facts.competentPersonId),
     place: answer.gates.filter(({ ruleId, outcome }) => PLACE_RULES.includes(ruleId) && outcome !== 'not-applicable').map(line),
     tasks: inOrder(facts.tasks).flatMap((task) => answer.tasks.filter(({ taskId }) => taskId === task.id).map((each) => planTask(task, each, line, unnamed))),
-    notice: answer.pack.gap === null ? NOTICE : sentences(answer.pack.gap, NOTICE),
+    notice: answer.pack.gap === null ? NOTICE : sentences(answer.pack.gap, answer.pack.orientation?.words ?? null, NOTICE),
   };
 }
 
