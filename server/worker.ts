@@ -4,7 +4,7 @@ import { requestsService } from './library/requests-service';
 import { recordlogService } from './recordlog/recordlog-service';
 import { createGuardedReader } from './sds/reader/guarded-reader';
 import { sheetsService } from './sds/sheets-service';
-import { ocrSheetWork, readSheetWork } from './sds/sheets-work';
+import { ocrSheetWork, readSheetWork, unreadSheetWork } from './sds/sheets-work';
 
 const maxReaderRssBytes = 1_500 * 1024 * 1024;
 const sweepSeconds = 15;
@@ -19,6 +19,7 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   const deliveries = deliveriesService(deps);
   await queue.serve('read-sheet', readSheetWork(deps, reader));
   await queue.serve('ocr-sheet', ocrSheetWork(deps, pictureReader));
+  await queue.serve('sheet-unread', unreadSheetWork(deps));
   await queue.serve('mail-checkpoint', (data) => recordlog.mailCheckpoint(data));
   const requests = requestsService(deps, sheetsService(deps));
   await queue.serve('mail-request', (data) => requests.mailRequest(data));

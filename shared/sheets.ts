@@ -24,6 +24,11 @@ export const ExposureLimit = z.object({ substance: z.string(), kind: z.string(),
 export const protectionTopics = ['eyes', 'hands', 'skin', 'respiratory', 'hearing'] as const;
 export const ProtectionWords = z.object({ topic: z.enum(protectionTopics), text: z.string() });
 
+/** What a person must know about the whole file; only the first sheet of several is read. */
+export const noticeKinds = ['several-sheets', 'language-not-read', 'date-without-day'] as const;
+export const SheetNotice = z.object({ kind: z.enum(noticeKinds), page: z.number().int().min(1), quote: z.string() });
+export type SheetNotice = z.infer<typeof SheetNotice>;
+
 /** What a revision says, each value with where it was read and how sure the reader is. */
 export const SheetFields = z.object({
   productName: field(z.string()).nullable(),
@@ -37,6 +42,8 @@ export const SheetFields = z.object({
   limits: z.array(field(ExposureLimit)),
   protectionWords: z.array(field(ProtectionWords)),
   sections: z.array(z.object({ number: z.number().int().min(1).max(16), heading: z.string(), page: z.number().int() })),
+  /** Absent on sheets read before there were any. */
+  notices: z.array(SheetNotice).optional(),
 });
 export type SheetFields = z.infer<typeof SheetFields>;
 

@@ -6,10 +6,15 @@ export interface Work {
   'read-sheet': { organisationId: string; revisionId: string };
   /** A sheet without text, read from pictures of its pages: minutes, so it holds up no other. */
   'ocr-sheet': { organisationId: string; revisionId: string };
+  /** A sheet whose reading failed at every try: for a person. */
+  'sheet-unread': { organisationId: string; revisionId: string };
   'mail-checkpoint': { organisationId: string; size: number };
   'mail-request': { organisationId: string; requestId: string };
 }
-export const queueNames = ['read-sheet', 'ocr-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
+export const queueNames = ['sheet-unread', 'read-sheet', 'ocr-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
+
+/** Where work goes when its last try failed or its worker was gone for the last time. */
+const afterLastTry: Partial<Record<keyof Work, keyof Work>> = { 'read-sheet': 'sheet-unread', 'ocr-sheet': 'sheet-unread' };
 
 export interface Queue {
   /** Queued in the caller's transaction: with its rows or not at all. */
@@ -32,7 +37,9 @@ export async function createQueue(url: string, options: { isServing: boolean; ex
   await boss.start();
   return {
     async add(tx, name, data) {
+      const next = afterLastTry[name];
       const id = await boss.send(name, data, {
+        ...(next ? { deadLetter: next } : {}),
         retryLimit: 5,
         retryDelay: 2,
         retryBackoff: true,

@@ -1,8 +1,8 @@
 import { auditSds, type AuditLine } from '#compliance/hazcom/sds-audit';
 import { type SheetEdit, type SheetField, type SheetFields } from '#shared/sheets';
 import type * as z from 'zod';
-import { type SheetRemark } from '#shared/sheets';
-import { type Field, type SheetReading } from './reader/reading';
+import { type SheetNotice, type SheetRemark } from '#shared/sheets';
+import { type Field, type NoticeKind, type SheetReading } from './reader/reading';
 
 /** Below this a person is asked to look. */
 export const lookBelow = 0.8;
@@ -31,6 +31,7 @@ export function fieldsFromReading(reading: SheetReading): SheetFields {
     limits: many(reading.limits, ({ substance, kind, value, unit, text }) => ({ substance: (substance ?? '').slice(0, 300), kind: kind ?? '', value: value === null ? text.slice(0, 60) : String(value), unit: unit ?? '' })).slice(0, 200),
     protectionWords: many(reading.ppeWords, ({ topic, text }) => ({ topic, text: text.slice(0, 1000) })).slice(0, 40),
     sections: reading.sections,
+    notices: reading.notices.map(({ quote, ...notice }) => ({ ...notice, quote: quote.slice(0, 200) })),
   };
 }
 
@@ -38,7 +39,7 @@ export function fieldsFromReading(reading: SheetReading): SheetFields {
 export function countToLookAt(fields: SheetFields): number {
   const singles = [fields.productName, fields.supplier, fields.revisedOn, fields.signalWord];
   const all = [...singles, ...fields.hazardCodes, ...fields.ingredients];
-  return all.filter((field) => field === null || field.confidence < lookBelow).length;
+  return all.filter((field) => field === null || field.confidence < lookBelow).length + (fields.notices ?? []).length;
 }
 
 const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
@@ -59,11 +60,23 @@ export function applyEdit(before: SheetFields, edit: SheetEdit): SheetFields {
     limits: edit.limits.map((each) => keep(each, before.limits)),
     protectionWords: edit.protectionWords.map((each) => keep(each, before.protectionWords)),
     sections: before.sections,
+    ...(before.notices ? { notices: before.notices } : {}),
   };
 }
 
-/** What the audit of form, statements and CAS digits has to say, worst first; lines that are met are left out. */
-export const remarksOn = (fields: SheetFields, today: string): z.infer<typeof SheetRemark>[] =>
+type Remark = z.infer<typeof SheetRemark>;
+
+/** What the reader noticed about the whole file, then what the audit of form, statements and CAS digits has to say, worst first; lines that are met are left out. */
+export const remarksOn = (fields: SheetFields, today: string): Remark[] => [...(fields.notices ?? []).map(remarkOnNotice), ...auditRemarks(fields, today)];
+
+const noticeTexts: Readonly<Record<NoticeKind, (page: number, quote: string) => Omit<Remark, 'source'>>> = {
+  'several-sheets': (page) => ({ outcome: 'unmet', text: `This file holds more than one safety data sheet: the next begins on page ${page}. Only the first one was read. Add the others as files of their own.` }),
+  'language-not-read': (page, quote) => ({ outcome: 'undecided', text: `The reader does not know the language of this sheet (${quote}): it took codes, numbers and dates only. Compare every value with the page.` }),
+  'date-without-day': (page, quote) => ({ outcome: 'undecided', text: `The sheet names the month of its revision, but no day (“${quote}”, page ${page}). No day was made up: ask the supplier for it.` }),
+};
+const remarkOnNotice = ({ kind, page, quote }: SheetNotice): Remark => ({ ...noticeTexts[kind](page, quote), source: 'Noticed while reading the file' });
+
+const auditRemarks = (fields: SheetFields, today: string): Remark[] =>
   findingsOn(fields, today).map(({ outcome, text, source }) => ({ outcome, text: text.en, source: [source.citation, source.paragraph].filter(Boolean).join(' ') }));
 
 export function findingsOn(fields: SheetFields, today: string): AuditLine[] {

@@ -28,6 +28,19 @@ export const readSheetWork = (deps: Deps, reader: SheetReader) => (work: ReadWor
 /** Reads one waiting sheet from pictures of its pages and keeps count of them. Safe to run again, like the other. */
 export const ocrSheetWork = (deps: Deps, reader: SheetReader) => (work: ReadWork) => readWaiting(deps, work, reader, null);
 
+/** Reading failed at every try: the sheet waits no longer and is filled in by hand, or read again when a person asks. */
+export const unreadSheetWork =
+  ({ database, log }: Deps) =>
+  async ({ organisationId, revisionId }: ReadWork): Promise<void> => {
+    await database.inOrganisation(organisationId, (tx) =>
+      tx
+        .update(revisions)
+        .set({ state: 'needs-entry', readerState: 'unavailable', pagesRead: null, version: sql`${revisions.version} + 1` })
+        .where(and(eq(revisions.organisationId, organisationId), eq(revisions.id, revisionId), eq(revisions.state, 'waiting'))),
+    );
+    log.error({ revision: revisionId }, 'sheet not read at any try');
+  };
+
 async function readWaiting({ database, storage, log }: Deps, work: ReadWork, reader: SheetReader, onward: Onward): Promise<void> {
   const { organisationId, revisionId } = work;
   const own = and(eq(revisions.organisationId, organisationId), eq(revisions.id, revisionId), eq(revisions.state, 'waiting'));

@@ -4,7 +4,7 @@ import { readdirSync } from 'node:fs';
 import { GetObjectCommand, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
 import { v7 as newId } from 'uuid';
 import { emptyReading, type SheetReading } from '#server/sds/reader/reading';
-import { ocrSheetWork, readSheetWork } from '#server/sds/sheets-work';
+import { ocrSheetWork, readSheetWork, unreadSheetWork } from '#server/sds/sheets-work';
 import { type Revision, type SheetEdit } from '#shared/sheets';
 import { call, expectProblem, ok } from '#test/support/call';
 import { buildDemoSheet, quarrybondPartB, type DemoSheetSpec } from '#test/support/demo-sheets';
@@ -199,6 +199,32 @@ describe('reading and confirming', () => {
     const params = { revisionId: revision.id };
     const aside = await ok(organisation.officer.agent, 'setRevisionAside', { params, version: found.version });
     expect(await ok(organisation.officer.agent, 'takeRevisionBack', { params, version: aside.version })).toMatchObject({ state: 'read' });
+  });
+
+  it('a sheet whose reading fails at every try is left to a person, once, and can be read again', async () => {
+    const organisation = await makeOrganisation(service);
+    const { revision } = await upload(organisation, Buffer.from(`%PDF-1.4 ${newId()}`));
+    const work = { organisationId: organisation.id, revisionId: revision.id };
+    const next = await service.deps.database.inOrganisation(organisation.id, (tx) => tx.client.query<{ dead_letter: string | null }>(`SELECT dead_letter FROM pgboss.job WHERE name = 'read-sheet' AND data->>'revisionId' = $1`, [revision.id]));
+    expect(next.rows).toEqual([{ dead_letter: 'sheet-unread' }]);
+    await unreadSheetWork(service.deps)(work);
+    const found = await read(organisation, revision.id);
+    expect(found).toMatchObject({ state: 'needs-entry', readerState: 'unavailable', pagesRead: null, version: revision.version + 1 });
+    await unreadSheetWork(service.deps)(work);
+    expect((await read(organisation, revision.id)).version).toBe(found.version);
+    expect(await ok(organisation.officer.agent, 'readRevisionAgain', { params: { revisionId: revision.id } })).toMatchObject({ state: 'waiting', readerState: null });
+    expect(service.faults.splice(0).join('')).toContain('sheet not read at any try');
+  });
+
+  it('what the reader noticed about the whole file stands first among the remarks and counts as something to look at', async () => {
+    const organisation = await makeOrganisation(service);
+    const { revision } = await upload(organisation, Buffer.from(`%PDF-1.4 ${newId()}`));
+    const reading: SheetReading = { ...emptyReading('read', 12), hasTextLayer: true, text: 'two sheets', notices: [{ kind: 'several-sheets', page: 7, quote: 'SECTION 1: Identification' }] };
+    await readSheetWork(service.deps, { read: async () => reading, close: async () => undefined })({ organisationId: organisation.id, revisionId: revision.id });
+    const found = await read(organisation, revision.id);
+    expect(found.remarks[0]).toMatchObject({ outcome: 'unmet', text: expect.stringMatching(/more than one safety data sheet: the next begins on page 7/) });
+    // Four single values are missing, and the notice.
+    expect(found.toLookAt).toBe(5);
   });
 
   it('keeps text of a PDF as text: script, NUL and halves of characters do not stop it (F20)', async () => {

@@ -67,6 +67,24 @@ export function datesIn(text: string, order: Pick<DateOrder, 'isDayFirst'>): Wri
   return found.sort((a, b) => a.start - b.start);
 }
 
+const monthYear = new RegExp(`(?<![a-z\\d])(?:(${monthWord})\\.?[\\s,/-]{1,3}(?:de |of )?|(\\d{1,2})[/.-])((?:19|20)\\d{2})(?![\\d/.-]*\\d)`, 'g');
+
+export interface WrittenMonth {
+  start: number;
+  end: number;
+  text: string;
+}
+
+/** Every month and year without a day ("March 2024", "03/2024"), outside the full dates of the line. */
+export function monthsIn(text: string, order: Pick<DateOrder, 'isDayFirst'>): WrittenMonth[] {
+  const folded = foldKeepingLength(text);
+  const days = datesIn(text, order);
+  return [...folded.matchAll(monthYear)]
+    .map((match) => ({ start: match.index, end: match.index + match[0].length, text: text.slice(match.index, match.index + match[0].length), month: match[2] ? Number(match[2]) : 1 }))
+    .filter(({ start, end, month }) => month >= 1 && month <= 12 && !/\d[\s./-]*$/.test(text.slice(0, start)) && !days.some((date) => start < date.end && end > date.start))
+    .map(({ start, end, text: printed }) => ({ start, end, text: printed }));
+}
+
 /** One letter for one letter, so that places in the folded text are places in the printed one. */
 const foldKeepingLength = (text: string): string => text.replace(/[^ -~]/g, (letter) => fold(letter).charAt(0) || ' ').toLowerCase();
 

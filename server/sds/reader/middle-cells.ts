@@ -40,8 +40,10 @@ function raised(lines: Line[], x: number): Line[] {
   if (values.length < 2 || labels.length === 0) return lines;
   const moved = new Map<Segment, Segment>();
   const gone = new Set<Segment>();
+  const groups = cellsOf(labels);
   for (const cell of cellsOf(values)) {
-    const label = labelAtMiddle(cell, labels, values);
+    const beside = groups.filter((group) => group.some((label) => isBeside(label, cell)));
+    const label = beside.length === 1 && beside[0] && isLabelAtMiddle(beside[0], cell, values) ? beside[0] : undefined;
     const [first] = cell;
     if (!label || !first) continue;
     for (const { segment } of label) gone.add(segment);
@@ -56,7 +58,7 @@ function raised(lines: Line[], x: number): Line[] {
   });
 }
 
-/** Runs of lines in the column at even spacing; the wider gap between two rows of a table parts them. */
+/** Runs of lines of one column at even spacing; the wider gap between two rows of a table parts them. */
 function cellsOf(values: readonly Placed[]): Placed[][] {
   const cells: Placed[][] = [];
   const gaps = values.map(({ segment }, at) => segment.box.y - (values[at - 1]?.segment.box.y ?? -Infinity));
@@ -70,27 +72,29 @@ function cellsOf(values: readonly Placed[]): Placed[][] {
   return cells;
 }
 
-/** The lines of the label beside the middle of a cell; null when it stands at the top or is no single label. */
-function labelAtMiddle(cell: readonly Placed[], labels: readonly Placed[], values: readonly Placed[]): readonly Placed[] | null {
-  const [first] = cell;
-  const last = cell.at(-1);
-  if (!first || !last || cell.length > mostCellLines) return null;
+function isBeside({ segment }: Placed, cell: readonly Placed[]): boolean {
+  const [top = 0, bottom = 0] = [cell[0]?.segment.box.y, cell.at(-1)?.segment.box.y];
+  return segment.box.y > top - segment.box.height * 0.9 && segment.box.y < bottom + segment.box.height * 0.9;
+}
+
+/** Whether lines that stand together are the label beside the middle of a cell, and not one at its top. */
+function isLabelAtMiddle(label: readonly Placed[], cell: readonly Placed[], values: readonly Placed[]): boolean {
+  const [first, last, upper, lower] = [cell[0], cell.at(-1), label[0], label.at(-1)];
+  if (!first || !last || !upper || !lower) return false;
+  if (cell.length > mostCellLines || label.length > mostLabelLines || label.length === cell.length) return false;
   const height = first.segment.box.height;
-  const [top, bottom] = [first.segment.box.y, last.segment.box.y];
-  const reach = Math.max(0, mostLabelLines - cell.length) * height * 0.6 + height * 0.3;
-  const beside = labels.filter(({ segment }) => segment.page === first.segment.page && segment.box.y > top - reach && segment.box.y < bottom + reach);
-  const [upper] = beside;
-  const lower = beside.at(-1);
-  if (!upper || !lower || beside.length > mostLabelLines || beside.length === cell.length) return null;
-  const isOneLabel = beside.every(({ segment }, at) => {
-    const before = beside[at - 1]?.segment;
-    return !before || (segment.box.y - before.box.y < height * 1.45 && Math.abs(segment.box.x - before.box.x) < 2 && !before.text.endsWith(':'));
+  const top = first.segment.box.y;
+  const isCentered = Math.abs((upper.segment.box.y + lower.segment.box.y) / 2 - (top + last.segment.box.y) / 2) < height * 0.35;
+  if (!isCentered || Math.abs(upper.segment.box.y - top) < height * 0.35) return false;
+  const isOneLabel = label.every(({ segment }, at) => {
+    const before = label[at - 1]?.segment;
+    return !before || (Math.abs(segment.box.x - before.box.x) < 2 && !before.text.endsWith(':'));
   });
   // A row with a value of its own, outside of this cell, is another entry.
   const others = new Set(values.filter((value) => !cell.includes(value)).map(({ line }) => line));
-  if (beside.some(({ line }) => others.has(line))) return null;
-  const isCentered = Math.abs((upper.segment.box.y + lower.segment.box.y) / 2 - (top + bottom) / 2) < height * 0.35;
-  const isLower = Math.abs(upper.segment.box.y - top) > height * 0.35;
-  const letters = beside.reduce((sum, { segment }) => sum + segment.text.length, 0);
-  return isOneLabel && isCentered && isLower && letters <= mostLabelLetters ? beside : null;
+  // What stands higher or lower than the cell stands alone on its row; a row of several cells is an entry too.
+  const own = new Set(cell.map(({ line }) => line));
+  if (label.some(({ line }) => !own.has(line) && line.segments.length > 1)) return false;
+  const letters = label.reduce((sum, { segment }) => sum + segment.text.length, 0);
+  return isOneLabel && letters <= mostLabelLetters && !label.some(({ line }) => others.has(line));
 }

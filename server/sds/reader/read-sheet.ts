@@ -2,6 +2,7 @@ import { exposureLimits } from './limits';
 import { hazardStatements } from './hazard-statements';
 import { ingredients } from './ingredients';
 import { languageOf } from './language';
+import { notices } from './notices';
 import { type Line } from './lines';
 import { pdfText, type PdfTextLimits } from './pdf-text';
 import { ppeWords } from './ppe-words';
@@ -37,7 +38,10 @@ export function readLines(pages: Line[][]): SheetReading {
   const lines = kept.flat();
   const sections = findSections(lines);
   const language = languageField(text, lines);
-  const parts: SheetParts = { sections, lines, running, pages: pages.length, language: language?.value ?? 'en' };
+  const { nextSheet } = sections;
+  const own = nextSheet ? lines.slice(0, lines.indexOf(nextSheet)) : lines;
+  const ownRunning = nextSheet ? running.filter((line) => line.page < nextSheet.page) : running;
+  const parts: SheetParts = { sections, lines: own, running: ownRunning, pages: pages.length, language: language?.value ?? 'en' };
   const composition = ingredients(parts);
   return {
     state: 'read',
@@ -53,6 +57,7 @@ export function readLines(pages: Line[][]): SheetReading {
     limits: exposureLimits(parts, composition.flatMap(({ value }) => (value.name ? [value.name] : []))),
     ppeWords: ppeWords(parts),
     sections: sections.headings,
+    notices: notices(parts, language),
     text,
   };
 }

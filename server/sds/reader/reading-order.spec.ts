@@ -41,6 +41,30 @@ describe('reading order', () => {
     expect(texts(rows)[0]).toMatch(/^Label 0 {2}value/);
   });
 
+  it('reads a label from its dots', () => {
+    expect(texts([item('Trade name.......: Quarrybond 40', 50, 80)])).toEqual(['Trade name: Quarrybond 40']);
+    expect(texts([item('Address ........ 400 Pier Ave', 50, 80)])).toEqual(['Address ........ 400 Pier Ave']);
+    expect(texts([item('Address ........ Pier Ave 400', 50, 80)])).toEqual(['Address: Pier Ave 400']);
+    expect(texts([item('1. Identification ........ 2', 50, 80)])).toEqual(['1. Identification ........ 2']);
+  });
+
+  it('joins the words of a justified line that ends too early, but not the cells of a row', () => {
+    const spread = (words: string[], gap: number): TextItem[] => words.reduce<TextItem[]>((items, word) => [...items, item(word, (items.at(-1)?.x ?? 40 - gap) + (items.at(-1)?.width ?? 0) + gap, 80)], []);
+    expect(texts(spread(['Supplied', 'by:', 'Slate', 'Hollow', 'Co.'], 60))).toEqual(['Supplied by: Slate Hollow Co.']);
+    expect(texts([item('Xylene', 50, 80), item('1330-20-7', 150, 80), item('10-30', 250, 80)])).toEqual(['Xylene  1330-20-7  10-30']);
+  });
+
+  it('parts a cell that nearly touches the next where a column of the rows around it starts', () => {
+    const row = (y: number, amount: string): TextItem[] => [item('Quartz', 50, y), item(amount, 220, y), item('STOT RE 1, H372', 261, y)];
+    const lines = readingLines(page([...row(80, '< 1'), ...row(95, '30 - 5')])).map(({ segments }) => segments.map(({ text }) => text));
+    expect(lines).toEqual([['Quartz', '< 1', 'STOT RE 1, H372'], ['Quartz', '30 - 5', 'STOT RE 1, H372']]);
+  });
+
+  it('reads two columns with headings of their own one after the other', () => {
+    const column = (first: number, x: number, shift: number): TextItem[] => ['Identification', 'Hazards identification', 'Composition', 'First aid measures'].flatMap((title, at) => [item(`Section ${first + at} - ${first === 1 ? title : ['Accidental release measures', 'Handling and storage', 'Exposure controls', 'Physical and chemical properties'][at]}`, x, 100 + shift + at * 40), item('short text', x, 115 + shift + at * 40)]);
+    expect(texts([...column(1, 50, 0), ...column(6, 320, 5)]).filter((line) => line.startsWith('Section')).map((line) => Number(/\d+/.exec(line)?.[0]))).toEqual([1, 2, 3, 4, 6, 7, 8, 9]);
+  });
+
   it('drops rules drawn with underscores', () => {
     expect(texts([item('______________', 50, 80), item('Text', 50, 100)])).toEqual(['Text']);
   });

@@ -68,6 +68,19 @@ export interface SectionHeading {
 /** Whether a reading carries values. */
 export const carriesValues = (state: ReadingState): boolean => state === 'read' || state === 'read-by-ocr';
 
+/**
+ * What a person must know about the whole file: more than one sheet in it (only the first was read), a language whose
+ * words the reader does not know, a date of revision that names no day.
+ */
+export type NoticeKind = 'several-sheets' | 'language-not-read' | 'date-without-day';
+
+export interface Notice {
+  kind: NoticeKind;
+  page: number;
+  /** What shows it, as printed: the title of the next sheet, the language, the date. */
+  quote: string;
+}
+
 export type SignalWord = 'danger' | 'warning' | 'none';
 
 export interface SheetReading {
@@ -90,6 +103,7 @@ export interface SheetReading {
   ppeWords: Field<PpeWords>[];
   /** One entry per section found, in order of number. */
   sections: SectionHeading[];
+  notices: Notice[];
   /** The whole text in reading order, pages separated by form feeds. */
   text: string;
 }
@@ -111,6 +125,7 @@ export function emptyReading(state: ReadingState, pages = 0): SheetReading {
     limits: [],
     ppeWords: [],
     sections: [],
+    notices: [],
     text: '',
   };
 }

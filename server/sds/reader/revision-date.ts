@@ -1,4 +1,4 @@
-import { type DateOrder, dateOrder, datesIn, type WrittenDate } from './dates';
+import { type DateOrder, dateOrder, datesIn, monthsIn, type WrittenDate } from './dates';
 import { around, type Line, type Segment } from './lines';
 import { type Box, type Field } from './reading';
 import { type SheetParts } from './sheet-parts';
@@ -37,6 +37,8 @@ export function revisionDate(parts: SheetParts): Field<string> | null {
   const dated = lookedAt(parts).flatMap(({ lines, index }) => datesOfLine(lines, index, order));
   const revisions = dated.filter(({ role }) => role === 'revision');
   const issues = dated.filter(({ role }) => role === 'issue');
+  // "Revised March 2024" beside an older full date: the day is not on the sheet, and the older date is not the revision's.
+  if (revisions.length === 0 && undatedRevision(parts)) return null;
   const choice = revisions.length > 0 ? revisions : issues;
   const latest = choice.reduce<Dated | null>((best, next) => (best === null || next.date.iso > best.date.iso ? next : best), null);
   if (!latest) return null;
@@ -59,6 +61,27 @@ export function revisionDate(parts: SheetParts): Field<string> | null {
   const field: Field<string> = { value, page: latest.line.page, box: latest.box, quote: latest.date.text, confidence };
   return reasons.length > 0 ? { ...field, because: reasons.join(' ') } : field;
 }
+
+/** The month of this revision where the sheet names no day for it. */
+export function undatedRevision(parts: SheetParts): { page: number; text: string } | null {
+  const order = { isDayFirst: true };
+  for (const { lines, index } of lookedAt(parts)) {
+    const line = lines[index];
+    if (!line || !mayHoldYear.test(line.text)) continue;
+    let before = '';
+    for (const segment of line.segments) {
+      for (const month of monthsIn(segment.text, order)) {
+        const own = segment.text.slice(0, month.start);
+        const role = notBare(roleOf(own)) ?? roleOf(`${before} ${own}`) ?? (own.trim() === '' ? roleOfColumn(lines, index, segment) : null);
+        if (role?.role === 'revision' || (role?.role === 'issue' && !role.isBare)) return { page: line.page, text: segment.text.slice(0, month.end).slice(-60) };
+      }
+      before += ` ${segment.text}`;
+    }
+  }
+  return null;
+}
+
+const mayHoldYear = /(?:19|20)\d\d/;
 
 /** Another date of the sheet, written without doubt, that agrees with one reading of this one. */
 function resolvedBy(date: WrittenDate, all: Dated[]): Pick<DateOrder, 'confidence' | 'because'> | null {

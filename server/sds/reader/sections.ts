@@ -21,12 +21,14 @@ export interface Sections {
   preamble: Line[];
   bodies: Map<SectionRole, Line[]>;
   headingLines: Map<SectionRole, Line>;
+  /** The first heading of a second sheet in the same file; its text is not dealt out. */
+  nextSheet: Line | null;
 }
 
 /** Finds the numbered sections of a sheet in lines in reading order and deals the lines out to them. */
 export function findSections(all: Line[]): Sections {
-  const { lines, chosen } = chooseHeadings(all);
-  const sections: Sections = { headings: [], preamble: [], bodies: new Map(), headingLines: new Map() };
+  const { lines, chosen, nextSheet } = chooseHeadings(all);
+  const sections: Sections = { headings: [], preamble: [], bodies: new Map(), headingLines: new Map(), nextSheet };
   const byIndex = new Map(chosen.map((candidate) => [candidate.index, candidate]));
   let body = sections.preamble;
   let lastHeading: Line | null = null;
@@ -71,23 +73,23 @@ function isWrappedHeading(heading: Line, line: Line): boolean {
   );
 }
 
-function chooseHeadings(all: Line[]): { lines: Line[]; chosen: Candidate[] } {
+function chooseHeadings(all: Line[]): { lines: Line[]; chosen: Candidate[]; nextSheet: Line | null } {
   const found = all.map((line, index) => headingIn(line, index, all[index + 1])).filter((candidate) => candidate !== null);
-  const { candidates, end } = firstSheet(found, all.length);
+  const { candidates, end } = firstSheet(found, all);
   const lines = all.slice(0, end);
   let chosen = inOrder(candidates);
   if (new Set(chosen.map(({ number }) => number)).size < 8) {
     const titled = lines.map((line, index) => titleAlone(line, index)).filter((candidate) => candidate !== null);
     chosen = inOrder([...candidates, ...titled.filter((title) => !candidates.some((other) => other.index === title.index))].sort((a, b) => a.index - b.index));
   }
-  return { lines, chosen: fillGaps(lines, chosen) };
+  return { lines, chosen: fillGaps(lines, chosen), nextSheet: all[end] ?? null };
 }
 
 /**
  * A file may hold two sheets (the parts of a kit) or begin with a table of contents: section 1 comes again after most
  * of the others. Contents are headings on neighbouring lines; they are passed over. A second sheet is left unread.
  */
-function firstSheet(found: Candidate[], length: number): { candidates: Candidate[]; end: number } {
+function firstSheet(found: Candidate[], all: Line[]): { candidates: Candidate[]; end: number } {
   let candidates = found;
   for (let round = 0; round < 3; round++) {
     const restart = candidates.findIndex((candidate, at) => candidate.number === 1 && candidate.isSure && new Set(candidates.slice(0, at).filter(({ isSure }) => isSure).map(({ number }) => number)).size >= 10);
@@ -97,10 +99,17 @@ function firstSheet(found: Candidate[], length: number): { candidates: Candidate
     const second = candidates[restart];
     if (restart < 0 || !first || !last || !second) break;
     const isContents = last.index - first.index < before.length * 3;
-    if (!isContents) return { candidates: before, end: second.index };
+    if (!isContents) return { candidates: before, end: startOfSheet(all, last.index, second.index) };
     candidates = candidates.slice(restart);
   }
-  return { candidates, end: length };
+  return { candidates, end: all.length };
+}
+
+/** A sheet begins with its page, where title, name and dates stand above its first heading. */
+function startOfSheet(all: Line[], after: number, heading: number): number {
+  const page = all[heading]?.page;
+  const top = all.findIndex((line) => line.page === page);
+  return top > after ? top : heading;
 }
 
 /** A quick look before the slow one: a figure, a Roman number, a word for "section", or letters set apart. */
