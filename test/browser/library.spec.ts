@@ -166,7 +166,7 @@ withChromium('Keeping the library', () => {
       await seats.outside.page.getByText('This link does not open any more.').waitFor();
     });
 
-    step('files in the queue are not lost by a reload: it goes on by itself', async () => {
+    step('files in the queue are not lost by leaving and loading again: it goes on by itself on whatever page', async () => {
       const { page } = seats.officer;
       await openSubject(page, 'SDS library', 'SDS library');
       // What the first sheet left in the list outlived every page since.
@@ -177,8 +177,17 @@ withChromium('Keeping the library', () => {
       await dropFiles(page, files);
       await page.getByText('0 of 24 stored.').waitFor();
       await page.unrouteAll({ behavior: 'ignoreErrors' });
+      // Stopped on purpose, it does not start by itself; then it is told to, from a page that knows nothing of sheets.
+      await page.getByRole('region', { name: 'Sheets on their way' }).getByRole('button', { name: 'Pause' }).click();
+      await page.goto('/jobs');
+      const status = page.getByRole('region', { name: 'Sheets on their way' });
+      await status.getByText('Paused: 0 of 24 stored').waitFor();
+      await expectAccessible(page, 'The frame with sheets on their way');
+      await status.getByRole('button', { name: 'Go on' }).click();
       await page.reload();
-      await page.getByText('24 of 24 stored.').waitFor({ timeout: 60_000 });
+      await status.waitFor({ state: 'detached', timeout: 60_000 });
+      await openSubject(page, 'SDS library', 'SDS library');
+      await page.getByText('24 of 24 stored.').waitFor();
       await page.getByRole('button', { name: 'Clear what is stored' }).click();
       await page.getByRole('list', { name: 'Uploads' }).waitFor({ state: 'detached' });
       const { items } = await answerOf<{ items: { fileName: string }[] }>(page.request.get('/api/sheets?state=needs-entry&limit=100'));
@@ -192,10 +201,10 @@ withChromium('Keeping the library', () => {
         await route.continue();
       });
       await dropFiles(page, Array.from({ length: 8 }, (_, at) => ({ name: `later-${at + 1}.txt`, type: 'text/plain', bytes: Buffer.from(`Later sheet ${at + 1}`) })));
-      await page.getByRole('button', { name: 'Pause' }).click();
+      await page.getByRole('main').getByRole('button', { name: 'Pause' }).click();
       await page.getByText('Paused: what is on its way ends').waitFor();
       await page.getByRole('list', { name: 'Uploads' }).getByText('waiting', { exact: true }).first().waitFor();
-      await page.getByRole('button', { name: 'Go on' }).click();
+      await page.getByRole('main').getByRole('button', { name: 'Go on' }).click();
       await page.getByText('8 of 8 stored.').waitFor();
       await page.unrouteAll({ behavior: 'ignoreErrors' });
     });

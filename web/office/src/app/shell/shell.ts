@@ -5,14 +5,16 @@ import { filter } from 'rxjs';
 import { roleNames } from '#shared/common';
 import { BrandMark } from '#ui/brand-mark';
 import { Note } from '#ui/note';
+import { Access } from '../contract/access';
 import { SessionApi } from '../session/session-api';
+import { UploadStatus } from '../sheets/uploads/upload-status';
 import { navigationFor } from './navigation';
 import { NavigationCounts } from './navigation-counts';
 
 /** The frame of every office page: skip link, navigation, who is signed in. On narrow screens the rail is a bar with a menu. */
 @Component({
   selector: 'kb-shell',
-  imports: [BrandMark, Note, RouterLink, RouterLinkActive, RouterOutlet],
+  imports: [BrandMark, Note, RouterLink, RouterLinkActive, RouterOutlet, UploadStatus],
   templateUrl: './shell.html',
   styleUrl: './shell.scss',
   host: { '(keydown.escape)': 'closeMenu()' },
@@ -21,6 +23,7 @@ import { NavigationCounts } from './navigation-counts';
 export class Shell {
   private readonly document = inject(DOCUMENT);
   private readonly api = inject(SessionApi);
+  private readonly access = inject(Access);
   private readonly router = inject(Router);
   private readonly navigationCounts = inject(NavigationCounts);
   private readonly page = viewChild.required<ElementRef<HTMLElement>>('page');
@@ -38,6 +41,8 @@ export class Shell {
     const session = this.session();
     return session ? navigationFor(session.role, this.router.config) : [];
   });
+
+  protected readonly mayUpload = computed(() => this.access.may('uploadSheet'));
 
   private path = '';
 

@@ -6,7 +6,7 @@ import { type RevisionSummary } from '#shared/sheets';
 import { SessionApi } from '../../session/session-api';
 import { SheetUploads } from './sheet-uploads';
 import { UploadStore, type StoredUpload } from './upload-store';
-import { uploadSummary, zipWords } from './upload-words';
+import { shortSummary, uploadSummary, zipWords } from './upload-words';
 
 const ines = '0190a0a0-0000-7000-8000-000000000001';
 const dov = '0190a0a0-0000-7000-8000-000000000002';
@@ -17,6 +17,13 @@ const pdf = (name: string) => new File(['%PDF'], name, { type: 'application/pdf'
 class Kept {
   readonly rows = new Map<string, StoredUpload>();
   isRefusing = false;
+  paused: string | null = null;
+  isPaused(personId: string): boolean {
+    return this.paused === personId;
+  }
+  setPaused(personId: string | null, isPaused: boolean): void {
+    this.paused = isPaused ? personId : null;
+  }
   of(personId: string): Promise<readonly StoredUpload[]> {
     return Promise.resolve([...this.rows.values()].filter((row) => row.personId === personId).sort((a, b) => a.at - b.at));
   }
@@ -110,6 +117,28 @@ describe('files on their way to the library', () => {
     uploads.resume();
     await settle();
     expect(inFlight().length).toBe(1);
+  });
+
+  it('stays paused after a reload, until the person who paused says otherwise', async () => {
+    const before = await open();
+    before.uploads.add([pdf('a')]);
+    before.uploads.pause();
+    await before.settle();
+    const after = await open();
+    expect([after.states(), after.uploads.isPaused(), after.inFlight().length]).toEqual([['a waiting'], true, 0]);
+    after.uploads.resume();
+    await after.settle();
+    expect(after.inFlight().length).toBe(1);
+    expect((await open()).uploads.isPaused()).toBe(false);
+  });
+
+  it.each([
+    [{ all: 3, done: 1, failed: 0, open: 2 }, false, false, 'Adding sheets: 1 of 3 stored'],
+    [{ all: 3, done: 1, failed: 1, open: 1 }, true, false, 'Paused: 1 of 3 stored, 1 sheet not added'],
+    [{ all: 3, done: 1, failed: 0, open: 2 }, false, true, 'Waiting for the server: 1 of 3 stored'],
+    [{ all: 3, done: 1, failed: 2, open: 0 }, false, false, '2 sheets not added'],
+  ] as const)('says in the frame of every page how they stand: %j', (count, isPaused, isWaiting, words) => {
+    expect(shortSummary(count, isPaused, isWaiting)).toBe(words);
   });
 
   it('names why a file was refused, goes on with the others, and sends it again when asked', async () => {

@@ -77,10 +77,12 @@ export class SheetUploads {
 
   pause(): void {
     this.isPaused.set(true);
+    this.store.setPaused(this.owner, true);
   }
 
   resume(): void {
     this.isPaused.set(false);
+    this.store.setPaused(this.owner, false);
     this.goOn();
   }
 
@@ -110,6 +112,7 @@ export class SheetUploads {
       this.restored = null;
     }
     this.owner = personId;
+    this.isPaused.set(this.store.isPaused(personId));
     if (mayRestore && this.restored !== personId) {
       this.restored = personId;
       const left = await this.store.of(personId).catch(() => []);

@@ -4,7 +4,7 @@ import { RouterLink } from '@angular/router';
 import { Note } from '#ui/note';
 import { State } from '#ui/state';
 import { type SheetUpload, SheetUploads } from './sheet-uploads';
-import { uploadSummary, zipWords } from './upload-words';
+import { countUploads, uploadSummary, zipWords } from './upload-words';
 
 const shownAtFirst = 12;
 const order: Readonly<Record<SheetUpload['state'], number>> = { failed: 0, sending: 1, waiting: 2, done: 3 };
@@ -24,11 +24,7 @@ export class UploadList {
   private readonly sorted = computed(() => [...this.uploads.uploads()].sort((a, b) => order[a.state] - order[b.state] || a.at - b.at));
   protected readonly shown = computed(() => (this.isWhole() ? this.sorted() : this.sorted().slice(0, shownAtFirst)));
   protected readonly hidden = computed(() => this.sorted().length - this.shown().length);
-  protected readonly count = computed(() => {
-    const all = this.uploads.uploads();
-    const of = (state: SheetUpload['state']) => all.filter((upload) => upload.state === state).length;
-    return { all: all.length, done: of('done'), failed: of('failed'), open: of('waiting') + of('sending') };
-  });
+  protected readonly count = computed(() => countUploads(this.uploads.uploads()));
   protected readonly summary = computed(() => uploadSummary(this.count(), this.uploads.isPaused(), this.uploads.waitsFor()));
   protected readonly zipWords = zipWords;
 

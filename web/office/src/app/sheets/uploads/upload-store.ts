@@ -19,6 +19,8 @@ interface Schema extends DBSchema {
   uploads: { key: string; value: StoredUpload; indexes: { person: string } };
 }
 
+const pausedKey = 'kneeboard-uploads-paused';
+
 /** Files on their way, in this browser's own database, so that a reload or a closed lid loses none. Rejects where the browser refuses. */
 @Injectable({ providedIn: 'root' })
 export class UploadStore {
@@ -27,6 +29,24 @@ export class UploadStore {
       upgrade: (database) => void database.createObjectStore('uploads', { keyPath: 'id' }).createIndex('person', 'personId'),
     }),
   );
+
+  /** Whether this person paused: a queue that was stopped on purpose does not start by itself after a reload. */
+  isPaused(personId: string): boolean {
+    try {
+      return localStorage.getItem(pausedKey) === personId;
+    } catch {
+      return false;
+    }
+  }
+
+  setPaused(personId: string | null, isPaused: boolean): void {
+    try {
+      if (isPaused && personId !== null) localStorage.setItem(pausedKey, personId);
+      else localStorage.removeItem(pausedKey);
+    } catch {
+      // Then it holds for this page only.
+    }
+  }
 
   async of(personId: string): Promise<readonly StoredUpload[]> {
     const rows = await (await this.database()).getAllFromIndex('uploads', 'person', personId);

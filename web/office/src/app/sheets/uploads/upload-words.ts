@@ -8,6 +8,19 @@ export interface UploadCount {
   readonly open: number;
 }
 
+export function countUploads(uploads: readonly { readonly state: 'waiting' | 'sending' | 'done' | 'failed' }[]): UploadCount {
+  const of = (state: (typeof uploads)[number]['state']) => uploads.filter((upload) => upload.state === state).length;
+  return { all: uploads.length, done: of('done'), failed: of('failed'), open: of('waiting') + of('sending') };
+}
+
+/** The same in few words, for the frame of every page. */
+export function shortSummary({ all, done, failed, open }: UploadCount, isPaused: boolean, isWaiting: boolean): string {
+  const not = failed === 0 ? '' : `${failed} ${failed === 1 ? 'sheet' : 'sheets'} not added`;
+  if (open === 0) return not;
+  const how = isPaused ? 'Paused' : isWaiting ? 'Waiting for the server' : 'Adding sheets';
+  return [`${how}: ${done} of ${all} stored`, not].filter(Boolean).join(', ');
+}
+
 /** How the whole list stands, in one or two sentences. */
 export function uploadSummary({ all, done, failed, open }: UploadCount, isPaused: boolean, waitsFor: string): string {
   const not = failed === 0 ? '' : `, ${failed} not`;
