@@ -99,6 +99,22 @@ withChromium('The tablet, when things go another way', () => {
       await expectAccessible(page, 'A sheet on the tablet');
     });
 
+    step('[HAZ-05] the sheet opens from the tablet with no signal, also after a restart (trap 17, conduct 11)', async () => {
+      const { page, context, complaints } = tablet;
+      await page.getByRole('link', { name: 'All sheets' }).click();
+      await page.getByText('Kept on this tablet: opens with no signal.').waitFor();
+      complaints.expect(lost);
+      await context.setOffline(true);
+      await page.reload();
+      await page.getByRole('link', { name: quarrybondPartA.productName }).click();
+      await page.locator('kb-page-viewer .paper').waitFor();
+      await page.getByRole('button', { name: /text/i }).click();
+      await page.getByText('SAFETY DATA SHEET').first().waitFor();
+      await expectAccessible(page, 'A sheet without signal');
+      await context.setOffline(false);
+      complaints.noLongerExpect(lost);
+    });
+
     step('signing wants the own line, ink, and a PIN that is not too plain and the same twice', async () => {
       const { page } = tablet;
       await page.goto(`/tablet/jobs/${day.shift.id}/sign`);
