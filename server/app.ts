@@ -30,6 +30,7 @@ import { jobsRoutes } from './jobs/jobs-routes';
 import { jobsService } from './jobs/jobs-service';
 import { peopleRoutes } from './people/people-routes';
 import { peopleService } from './people/people-service';
+import { pinsService } from './people/pins-service';
 import { productsRoutes } from './products/products-routes';
 import { productsService } from './products/products-service';
 import { recordlogService } from './recordlog/recordlog-service';
@@ -37,6 +38,7 @@ import { sheetsRoutes } from './sds/sheets-routes';
 import { sheetsService } from './sds/sheets-service';
 import { searchRoutes } from './search/search-routes';
 import { searchService } from './search/search-service';
+import { knownMachines } from './session/known-machines';
 import { passportFor, sessionRoutes } from './session/session-routes';
 import { sessionService } from './session/session-service';
 import { recogniseTablet, tabletsRoutes } from './tablets/tablets-routes';
@@ -57,7 +59,8 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
 
   const kept = sessions(deps.database, config.keys.sessionSecret, isSecure);
   const session = sessionService(deps);
-  const door = passportFor(session);
+  const machines = knownMachines(config.keys.sessionSecret);
+  const door = passportFor(session, machines);
   const tablets = tabletsService(deps);
   const recordlog = recordlogService(deps);
   const api = Router();
@@ -73,8 +76,8 @@ export function createApp(deps: Deps): { app: Express; close: () => void } {
     next();
   });
   api.use((request, response, next) => (request.path.startsWith('/api/tablet/') ? next() : people(request, response, next)));
-  api.use(sessionRoutes(session, door));
-  api.use(peopleRoutes(peopleService(deps)));
+  api.use(sessionRoutes(session, door, machines, isSecure));
+  api.use(peopleRoutes(peopleService(deps), pinsService(deps)));
   api.use(tabletsRoutes(tablets, isSecure));
   api.use(equipmentRoutes(equipmentService(deps)));
   const sheets = sheetsService(deps);

@@ -25,6 +25,8 @@ const Environment = z.object({
   /** The same for a sheet read from pictures of its pages. */
   SHEET_OCR_SECONDS: z.coerce.number().int().min(1).max(3600).default(600),
   UPLOAD_FOLDER: z.string().optional(),
+  /** How long a mail waits before it is tried again while the mail server is away. */
+  MAIL_RETRY_SECONDS: z.coerce.number().int().min(1).max(3600).default(30),
   CHECKPOINT_SECONDS: z.coerce.number().positive().default(60),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
 });

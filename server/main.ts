@@ -21,7 +21,7 @@ try {
   process.exit(1);
 }
 const isWorker = config.KNEEBOARD_ROLE !== 'web';
-const queue = await createQueue(config.DATABASE_URL, { isServing: isWorker, expireSeconds: patienceFor(config), onError: (error) => log.warn({ err: error }, 'queue') });
+const queue = await createQueue(config.DATABASE_URL, { isServing: isWorker, expireSeconds: patienceFor(config), mailRetrySeconds: config.MAIL_RETRY_SECONDS, onError: (error) => log.warn({ err: error }, 'queue') });
 const deps: Deps = {
   config,
   database,

@@ -5,6 +5,7 @@ import { recordlogService } from './recordlog/recordlog-service';
 import { createGuardedReader } from './sds/reader/guarded-reader';
 import { sheetsService } from './sds/sheets-service';
 import { ocrSheetWork, readSheetWork, unreadSheetWork } from './sds/sheets-work';
+import { guessAlarmsService } from './session/guess-alarms';
 
 const maxReaderRssBytes = 1_500 * 1024 * 1024;
 const sweepSeconds = 15;
@@ -23,6 +24,8 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   await queue.serve('mail-checkpoint', (data) => recordlog.mailCheckpoint(data));
   const requests = requestsService(deps, sheetsService(deps));
   await queue.serve('mail-request', (data) => requests.mailRequest(data));
+  const alarms = guessAlarmsService(deps);
+  await queue.serve('mail-guessing', (data) => alarms.mailAlarm(data));
   const stopCheckpoints = every(config.CHECKPOINT_SECONDS, 'checkpoints', () => recordlog.makeCheckpoints());
   const stopSweep = every(sweepSeconds, 'left-over deliveries', () => deliveries.interpretLeftOver());
   return async () => {

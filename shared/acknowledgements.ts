@@ -3,8 +3,16 @@ import { Id, Instant, Language, LocalDate, PageQuery, Sha256 } from './common';
 
 export const acknowledgementKinds = ['signed', 'could-not-sign', 'paper', 'witnessed'] as const;
 export const AcknowledgementKind = z.enum(acknowledgementKinds);
-/** Whether the PIN that came with the record was the person's own. */
-export const pinStates = ['confirmed', 'not-confirmed', 'not-set'] as const;
+/**
+ * Whether the PIN that came with the record was the person's own: confirmed, and set before a witness; not-confirmed, a wrong one;
+ * not-set, none was on record; unwitnessed, the right one, but nobody vouched for who had set it. Only `confirmed` proves a signature.
+ */
+export const pinStates = ['confirmed', 'not-confirmed', 'not-set', 'unwitnessed'] as const;
+export const PinState = z.enum(pinStates);
+export type PinState = z.infer<typeof PinState>;
+/** Why the time on a tablet cannot be right: later than it was sent; or earlier than what it is about was published. */
+export const TimeDoubt = z.enum(['after-arrival', 'before-publishing']);
+export type TimeDoubt = z.infer<typeof TimeDoubt>;
 
 export const AcknowledgementRow = z.object({
   id: Id,
@@ -20,10 +28,12 @@ export const AcknowledgementRow = z.object({
   versionNumber: z.number().int(),
   language: Language,
   kind: AcknowledgementKind,
-  pinState: z.enum(pinStates),
+  pinState: PinState,
   /** A newer version existed when this arrived: kept as what was signed, a new signature is asked. */
   wasSuperseded: z.boolean(),
   tabletName: z.string().nullable(),
+  /** Null where the tablet's time can be right. */
+  timeDoubt: TimeDoubt.nullable(),
   entryIndex: z.number().int(),
 });
 export type AcknowledgementRow = z.infer<typeof AcknowledgementRow>;

@@ -1,7 +1,7 @@
 import { pageOf, type Role } from './common';
 import { Equipment, EquipmentEdit } from './equipment';
 import { AddShift, Job, JobEdit, JobSummary, JobsQuery, PublishedVersion, Shift, ShiftPlan, SignBasis } from './jobs';
-import { PeopleQuery, Person, PersonEdit, SetLogin } from './people';
+import { PeopleQuery, Person, PersonEdit, PinEvent, PinEventsQuery, SetLogin, StartPin } from './people';
 import { AddProduct, Kit, KitEdit, Product, ProductsQuery } from './products';
 import { ChangePassword, Session, SignIn } from './session';
 import { ConfirmSheet, Revision, RevisionSummary, SheetEdit, SheetsQuery, UploadedSheet } from './sheets';
@@ -31,6 +31,8 @@ export const peopleEndpoints = {
   readPerson: { method: 'GET', path: '/api/people/:personId', access: everyone, answer: Person },
   editPerson: { method: 'PUT', path: '/api/people/:personId', access: administration, body: PersonEdit, answer: Person, needsVersion: true },
   setLogin: { method: 'PUT', path: '/api/people/:personId/login', access: owner, body: SetLogin, answer: Person },
+  giveStartPin: { method: 'POST', path: '/api/people/:personId/start-pin', access: administration, answer: StartPin },
+  listPinEvents: { method: 'GET', path: '/api/pin-events', access: ['owner', 'safety-officer', 'auditor'], query: PinEventsQuery, answer: pageOf(PinEvent) },
   resetPin: { method: 'DELETE', path: '/api/people/:personId/pin', access: administration, answer: Person },
   listTablets: { method: 'GET', path: '/api/tablets', access: office, query: PageQuery, answer: pageOf(Tablet) },
   addTablet: { method: 'POST', path: '/api/tablets', access: administration, body: AddTablet, answer: PairingCode },

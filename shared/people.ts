@@ -1,7 +1,11 @@
 import * as z from 'zod';
 import { fitTestKinds, respiratorTypes } from '#compliance/facts';
-import { Id, Language, Line, LocalDate, PageQuery, Role, SearchText, Version } from './common';
+import { Id, Instant, Language, Line, LocalDate, PageQuery, Role, SearchText, Version } from './common';
 import { NewPassword } from './session';
+
+/** lead: a lead or officer with an own PIN; office: a start PIN from the office; none: nobody vouched for who set it. */
+export const PinProof = z.enum(['lead', 'office', 'none']);
+export type PinProof = z.infer<typeof PinProof>;
 
 export const PersonRespirator = z.strictObject({
   type: z.enum(respiratorTypes),
@@ -35,6 +39,10 @@ export const Person = z.object({
   ...personFields,
   version: Version,
   hasPin: z.boolean(),
+  /** Who vouched for the person when the PIN was set; null without a PIN. */
+  pinProof: PinProof.nullable(),
+  /** A start PIN that waits to be used. */
+  startPin: z.object({ givenBy: z.string(), givenAt: Instant, expiresAt: Instant }).nullable(),
   login: z.object({ email: z.string(), role: Role }).nullable(),
 });
 export type Person = z.infer<typeof Person>;
@@ -46,3 +54,26 @@ export const SetLogin = z.strictObject({
   login: z.strictObject({ email: z.email('Write an e-mail address.').max(200), role: Role, password: NewPassword.optional() }).nullable(),
 });
 export type SetLogin = z.infer<typeof SetLogin>;
+
+/** Shown once, said or handed to the person; good for one PIN, until `expiresAt`. */
+export const StartPin = z.object({ pin: z.string(), expiresAt: Instant, person: Person });
+export type StartPin = z.infer<typeof StartPin>;
+
+/** What happened to PINs, never a PIN: an entry of the record log each. */
+export const PinEvent = z.object({
+  id: Id,
+  event: z.enum(['set', 'reset', 'start-pin-given']),
+  personId: Id,
+  personName: z.string(),
+  /** Where one was set. */
+  proof: PinProof.nullable(),
+  /** The witness; or who in the office reset it or gave the start PIN. */
+  byName: z.string().nullable(),
+  tabletName: z.string().nullable(),
+  /** The tablet's time, where it was set on one. */
+  capturedAt: Instant.nullable(),
+  at: Instant,
+  entryIndex: z.number().int(),
+});
+export type PinEvent = z.infer<typeof PinEvent>;
+export const PinEventsQuery = PageQuery.extend({ personId: Id.optional() });

@@ -21,6 +21,10 @@ export interface PinStatement {
  */
 export const pinSetText = (ownerPersonId: string): string => `pin-set ${ownerPersonId.toLowerCase()}`;
 
+/** The same for answers of a briefing or a start check: a seal proves these answers and no others. `taskId` is null for a briefing. */
+export const answersText = (kind: string, versionId: string, taskId: string | null, answers: readonly { readonly lineId: string; readonly answer: string; readonly note: string | null }[]): string =>
+  `${kind} ${versionId.toLowerCase()} ${taskId?.toLowerCase() ?? '-'} ${JSON.stringify(answers.map(({ lineId, answer, note }) => [lineId, answer, note]))}`;
+
 export const PIN_SEAL = {
   version: 1,
   info: 'kneeboard-pin/1',

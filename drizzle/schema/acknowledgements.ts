@@ -28,16 +28,19 @@ export const acknowledgements = pgTable(
     wasSuperseded: boolean().notNull(),
     capturedAt: timestamp({ withTimezone: true }).notNull(),
     receivedAt: timestamp({ withTimezone: true }).notNull(),
-    clockOffsetSeconds: integer(),
+    /** More than an integer holds where a tablet stands in another millennium. */
+    clockOffsetSeconds: bigint({ mode: 'number' }),
     tabletId: uuid(),
     tabletName: text(),
     deliveryId: uuid(),
     entryIndex: bigint({ mode: 'number' }).notNull(),
+    /** Why the tablet's time cannot be right; null where it can. */
+    timeDoubt: text(),
   },
   (t) => [
     primaryKey({ columns: [t.organisationId, t.id] }),
-    // A signature whose PIN was wrong does not stand: the right one may still come.
-    uniqueIndex('acknowledgements_one_standing').on(t.organisationId, t.versionId, t.personId).where(sql`kind = 'signed' AND pin_state <> 'not-confirmed'`),
+    // A signature that its PIN does not prove does not stand: one that is proven may still come.
+    uniqueIndex('acknowledgements_one_proven').on(t.organisationId, t.versionId, t.personId).where(sql`kind = 'signed' AND pin_state = 'confirmed'`),
     uniqueIndex('acknowledgements_by_entry').on(t.organisationId, t.entryIndex),
     index('acknowledgements_by_person').on(t.organisationId, t.personId, t.shiftDate, t.entryIndex),
     index('acknowledgements_by_job').on(t.organisationId, t.jobId, t.shiftDate, t.entryIndex),
@@ -79,6 +82,8 @@ export const correctiveActions = pgTable(
     index('corrective_actions_by_opening').on(t.organisationId, t.openedAt, t.id),
     foreignKey({ columns: [t.organisationId, t.jobId], foreignColumns: [jobs.organisationId, jobs.id] }),
     foreignKey({ columns: [t.organisationId, t.shiftId], foreignColumns: [shifts.organisationId, shifts.id] }),
+    foreignKey({ columns: [t.organisationId, t.versionId], foreignColumns: [checklistVersions.organisationId, checklistVersions.id] }),
+    foreignKey({ columns: [t.organisationId, t.deliveryId], foreignColumns: [deliveries.organisationId, deliveries.id] }),
     foreignKey({ columns: [t.organisationId, t.ownerPersonId], foreignColumns: [people.organisationId, people.id] }),
   ],
 );

@@ -1,6 +1,7 @@
 import { date, foreignKey, index, integer, pgTable, primaryKey, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { bytea, people } from './people';
 import { jobs, shifts } from './jobs';
+import { deliveries } from './tablets';
 
 /** A published day's checklist. Append-only; the newest number of a shift counts. */
 export const checklistVersions = pgTable(
@@ -69,11 +70,15 @@ export const answerSets = pgTable(
     capturedAt: timestamp({ withTimezone: true }).notNull(),
     receivedAt: timestamp({ withTimezone: true }).notNull(),
     deliveryId: uuid().notNull(),
+    /** Whether the PIN that came with it was the person's own; 'not-set' where none came. */
+    pinState: text().notNull().default('not-set'),
+    timeDoubt: text(),
   },
   (t) => [
     primaryKey({ columns: [t.organisationId, t.id] }),
     index('answer_sets_by_version').on(t.organisationId, t.versionId, t.capturedAt),
     foreignKey({ columns: [t.organisationId, t.versionId], foreignColumns: [checklistVersions.organisationId, checklistVersions.id] }),
     foreignKey({ columns: [t.organisationId, t.personId], foreignColumns: [people.organisationId, people.id] }),
+    foreignKey({ columns: [t.organisationId, t.deliveryId], foreignColumns: [deliveries.organisationId, deliveries.id] }),
   ],
 );

@@ -1,4 +1,4 @@
-import { boolean, customType, date, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid, foreignKey } from 'drizzle-orm/pg-core';
+import { boolean, customType, date, index, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
 import { organisations } from './organisations';
 
 export const bytea = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => 'bytea' });
@@ -19,25 +19,10 @@ export const people = pgTable(
     hazcomTrainedOn: date(),
     hazcomTrainedBy: text(),
     respirators: jsonb().notNull().default([]),
+    /** The unit each quantity was last typed in, by quantity: the same on every machine. Not part of what is edited and versioned. */
+    units: jsonb().notNull().default({}),
     isActive: boolean().notNull().default(true),
     version: integer().notNull().default(1),
   },
   (t) => [primaryKey({ columns: [t.organisationId, t.id] }), index('people_by_name').on(t.organisationId, t.name, t.id)],
-);
-
-/** HMAC of the PIN under a pepper that is not in the database; chosen by the person, witnessed, never by the office. */
-export const pins = pgTable(
-  'pins',
-  {
-    organisationId: uuid().notNull(),
-    personId: uuid().notNull(),
-    digest: text().notNull(),
-    setAt: timestamp({ withTimezone: true }).notNull(),
-    witnessPersonId: uuid(),
-    tabletId: uuid(),
-  },
-  (t) => [
-    primaryKey({ columns: [t.organisationId, t.personId] }),
-    foreignKey({ columns: [t.organisationId, t.personId], foreignColumns: [people.organisationId, people.id] }),
-  ],
 );

@@ -3,7 +3,7 @@ import { v7 as newId } from 'uuid';
 import type * as z from 'zod';
 import { acknowledgements, correctiveActions } from '#drizzle/schema/acknowledgements';
 import { answerSets } from '#drizzle/schema/checklists';
-import { pins } from '#drizzle/schema/people';
+import { pinEvents, pins, startPins } from '#drizzle/schema/pins';
 import { deliveries, deliveryOutcomes, tablets } from '#drizzle/schema/tablets';
 import { type Page, type PageQuery } from '#shared/common';
 import { type CheckPin, type Deliveries, type Receipt, type Receipts } from '#shared/envelopes';
@@ -13,11 +13,11 @@ import { RefusedError, SlowDownError } from '../errors';
 import { type PersonActor, type TabletActor } from '../http/actor';
 import { readCursor, toPage } from '../paging';
 import { pinDigest, isSamePinDigest } from '../people/pin-digest';
-import { unsealPin } from '../people/pin-unsealing';
+import { freePinTries, openSeal, pinGuessKey, startPinGuessKey } from '../people/pin-judging';
 import { databaseErrorCode, type Tx } from '../platform/database';
 import { takeGuess, wasRight } from '../platform/guesses';
 import { appendEntries, lockHead } from '../recordlog/recordlog-store';
-import { freePinTries, interpret, pinGuessKey, readEnvelope, readPins, type Delivery, type Interpretation } from './interpret';
+import { interpret, readEnvelope, readPinsOf, type Delivery, type Interpretation } from './interpret';
 
 const deliveredAs = { id: deliveries.id, bytes: deliveries.bytes, receivedAt: deliveries.receivedAt, sentAt: deliveries.sentAt, tabletId: deliveries.tabletId, tabletName: tablets.name };
 
@@ -54,9 +54,11 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
         .where(and(eq(deliveries.organisationId, tx.organisationId), inArray(deliveries.id, [...ids]), isNull(deliveryOutcomes.deliveryId)));
       const ordered = rows.map(readEnvelope).sort((a, b) => (a.envelope?.sequence ?? 0) - (b.envelope?.sequence ?? 0));
       if (ordered.length === 0) return [];
-      const pinsBefore = await readPins(tx, ordered);
+      // A PIN that is set changes what the next envelopes prove: nobody else sets or resets one meanwhile.
+      if (ordered.some(({ envelope }) => envelope?.kind === 'pin-set')) await lockHead(tx);
+      const known = await readPinsOf(tx, ordered, clock.now());
       const interpretations: Interpretation[] = [];
-      for (const delivery of ordered) interpretations.push(await interpret(tx, config.keys, delivery, pinsBefore));
+      for (const delivery of ordered) interpretations.push(await interpret(tx, config.keys, delivery, known));
       return write(tx, interpretations);
     });
   }
@@ -68,30 +70,43 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     const receipts: Receipt[] = [];
     for (const { delivery, keptAside, acknowledgement, answers, pin, actions, drafts } of interpretations) {
       if (decided.has(delivery.id)) continue;
-      const receipt: Receipt = { id: delivery.id, outcome: keptAside === undefined ? 'recorded' : 'kept-aside', acknowledgementId: null, entryIndex: null, pinState: null, isSuperseded: false, note: keptAside ?? null };
+      const receipt: Receipt = { id: delivery.id, outcome: keptAside === undefined ? 'recorded' : 'kept-aside', acknowledgementId: null, entryIndex: null, ...pinStateOf(acknowledgement?.pinState ?? answers?.pinState), isSuperseded: false, note: keptAside ?? null };
+      if (acknowledgement && acknowledgement.kind !== 'signed') Object.assign(receipt, { pinState: null });
       const before = acknowledgement?.kind === 'signed' ? await signatureOf(tx, acknowledgement.versionId, acknowledgement.personId) : undefined;
-      // A signature with the wrong PIN does not stand in the way of one with the right PIN.
-      const standing = before?.pinState === 'not-confirmed' && acknowledgement?.pinState !== 'not-confirmed' ? undefined : before;
+      // A signature that its PIN does not prove stands in the way of no proven one.
+      const standing = before?.pinState !== 'confirmed' && acknowledgement?.pinState === 'confirmed' ? undefined : before;
       if (standing) {
-        Object.assign(receipt, { outcome: 'second', acknowledgementId: standing.id, entryIndex: standing.entryIndex, pinState: standing.pinState, isSuperseded: standing.wasSuperseded, note: `${standing.personName} had signed this version already, at ${standing.capturedAt.toISOString()}${standing.tabletName ? ` on ${standing.tabletName}` : ''}. This one is kept beside it.` });
+        Object.assign(receipt, { outcome: 'second', acknowledgementId: standing.id, entryIndex: standing.entryIndex, ...pinStateOf(standing.pinState), isSuperseded: standing.wasSuperseded, note: `${standing.personName} had signed this version already, at ${standing.capturedAt.toISOString()}${standing.tabletName ? ` on ${standing.tabletName}` : ''}. This one is kept beside it.` });
+      } else if (pin && !(await takePin(tx, pin.row))) {
+        Object.assign(receipt, { outcome: 'kept-aside', note: `${pin.event.personName} set a PIN elsewhere at the same moment. That one counts.` });
       } else {
         const [entryIndex] = await appendEntries(tx, clock, drafts, acknowledgement ? 1 : 0);
         if (acknowledgement) {
           await tx.insert(acknowledgements).values({ ...acknowledgement, entryIndex: entryIndex as number });
-          Object.assign(receipt, { acknowledgementId: acknowledgement.id, pinState: acknowledgement.pinState, isSuperseded: acknowledgement.wasSuperseded });
+          Object.assign(receipt, { acknowledgementId: acknowledgement.id, isSuperseded: acknowledgement.wasSuperseded });
         }
         if (answers) await tx.insert(answerSets).values(answers);
-        if (pin) await tx.insert(pins).values(pin).onConflictDoNothing();
+        if (pin) await tx.insert(pinEvents).values({ ...pin.event, entryIndex: entryIndex as number });
         if (actions.length > 0) await tx.insert(correctiveActions).values([...actions]);
         receipt.entryIndex = entryIndex ?? null;
       }
-      await tx.insert(deliveryOutcomes).values({ organisationId: tx.organisationId, deliveryId: delivery.id, outcome: receipt.outcome, subjectId: receipt.acknowledgementId ?? answers?.id ?? null, because: keptAside ?? null, decidedAt: clock.now(), receipt: JSON.stringify(receipt) });
+      await tx.insert(deliveryOutcomes).values({ organisationId: tx.organisationId, deliveryId: delivery.id, outcome: receipt.outcome, subjectId: receipt.acknowledgementId ?? answers?.id ?? null, because: receipt.outcome === 'kept-aside' ? receipt.note : null, decidedAt: clock.now(), receipt: JSON.stringify(receipt) });
       receipts.push(receipt);
     }
     return receipts;
   }
+  /** False where somebody else's delivery was first: then nothing is changed. */
+  async function takePin(tx: Tx, row: typeof pins.$inferInsert): Promise<boolean> {
+    if (row.proof === 'office' && (await tx.delete(startPins).where(and(eq(startPins.organisationId, tx.organisationId), eq(startPins.personId, row.personId))).returning({ personId: startPins.personId })).length === 0) return false;
+    const taken = await tx
+      .insert(pins)
+      .values(row)
+      .onConflictDoUpdate({ target: [pins.organisationId, pins.personId], set: row, setWhere: sql`${pins.proof} = 'none' AND ${row.proof ?? 'none'} <> 'none'` })
+      .returning({ personId: pins.personId });
+    return taken.length > 0;
+  }
   const signatureOf = async (tx: Tx, versionId: string, personId: string) =>
-    (await tx.select().from(acknowledgements).where(and(eq(acknowledgements.organisationId, tx.organisationId), eq(acknowledgements.versionId, versionId), eq(acknowledgements.personId, personId), eq(acknowledgements.kind, 'signed'))).orderBy(sql`${acknowledgements.pinState} = 'not-confirmed'`, asc(acknowledgements.entryIndex)).limit(1))[0];
+    (await tx.select().from(acknowledgements).where(and(eq(acknowledgements.organisationId, tx.organisationId), eq(acknowledgements.versionId, versionId), eq(acknowledgements.personId, personId), eq(acknowledgements.kind, 'signed'))).orderBy(sql`${acknowledgements.pinState} <> 'confirmed'`, asc(acknowledgements.entryIndex)).limit(1))[0];
 
   /** One bad envelope must not hold the others back: it is set aside by itself, with the fault in the log. */
   async function interpretEach(organisationId: string, ids: readonly string[]): Promise<Receipt[]> {
@@ -107,9 +122,12 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     }
     return receipts;
   }
+  const findPin = async (tx: Tx, personId: string) => (await tx.select({ digest: pins.digest }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), eq(pins.personId, personId))))[0];
+  const findStartPin = async (tx: Tx, personId: string) =>
+    (await tx.select({ digest: startPins.digest }).from(startPins).where(and(eq(startPins.organisationId, tx.organisationId), eq(startPins.personId, personId), gt(startPins.expiresAt, clock.now()))))[0];
   async function setAside(organisationId: string, id: string): Promise<Receipt> {
     const note = 'The service could not record it. It is stored; the safety officer sees it.';
-    const receipt: Receipt = { id, outcome: 'kept-aside', acknowledgementId: null, entryIndex: null, pinState: null, isSuperseded: false, note };
+    const receipt: Receipt = { id, outcome: 'kept-aside', acknowledgementId: null, entryIndex: null, pinState: null, isUnwitnessed: false, isSuperseded: false, note };
     await database.inOrganisation(organisationId, (tx) => tx.insert(deliveryOutcomes).values({ organisationId, deliveryId: id, outcome: 'kept-aside', because: note, decidedAt: clock.now(), receipt: JSON.stringify(receipt) }).onConflictDoNothing());
     return receipt;
   }
@@ -154,20 +172,15 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
     },
 
     /** Says at once whether the PIN is the person's own. Five wrong tries per person and tablet, then waiting. */
-    async checkPin(actor: TabletActor, { personId, sealedPin, textSha256, nonce }: z.output<typeof CheckPin>): Promise<void> {
-      const key = pinGuessKey(personId, actor.tabletId);
-      const [stored] = await database.inOrganisation(actor.organisationId, (tx) => tx.select().from(pins).where(and(eq(pins.organisationId, tx.organisationId), eq(pins.personId, personId))));
-      if (!stored) throw new RefusedError('This person has no PIN yet: set one first.', { reason: 'pin-not-set' });
+    async checkPin(actor: TabletActor, { kind, personId, sealedPin, textSha256, nonce }: z.output<typeof CheckPin>): Promise<void> {
+      const isStart = kind === 'start-pin';
+      const key = isStart ? startPinGuessKey(personId) : pinGuessKey(personId, actor.tabletId);
+      const stored = await database.inOrganisation(actor.organisationId, (tx) => (isStart ? findStartPin(tx, personId) : findPin(tx, personId)));
+      if (!stored) throw new RefusedError(isStart ? 'The office gave no start PIN that is still good. Call them for one.' : 'This person has no PIN yet: set one first.', { reason: 'pin-not-set' });
       const guess = await takeGuess(database, key, freePinTries);
       if (guess.isPaused) throw new SlowDownError(`Too many wrong PINs. Wait ${guess.waitSeconds} ${guess.waitSeconds === 1 ? 'second' : 'seconds'}.`, guess.waitSeconds);
-      let opened: ReturnType<typeof unsealPin> | undefined;
-      try {
-        opened = unsealPin(sealedPin, config.keys.pinSealingKey);
-      } catch {
-        opened = undefined;
-      }
-      const fits = opened && opened.textHash === textSha256 && opened.nonce === nonce && isSamePinDigest(stored.digest, pinDigest(config.keys.pinPepper, actor.organisationId, personId, opened.pin));
-      if (fits) {
+      const pin = openSeal(config.keys, { sealedPin, nonce }, textSha256);
+      if (pin !== undefined && isSamePinDigest(stored.digest, pinDigest(config.keys.pinPepper, actor.organisationId, personId, pin))) {
         await wasRight(database, key);
         return;
       }
@@ -191,6 +204,11 @@ export function deliveriesService({ config, database, clock, log }: Deps) {
       }),
   };
 }
+
+/** `unwitnessed` in the words that every version of the tablet's app knows. */
+const pinStateOf = (state: string | undefined): Pick<Receipt, 'pinState' | 'isUnwitnessed'> =>
+  state === 'unwitnessed' ? { pinState: 'not-confirmed', isUnwitnessed: true } : { pinState: (state ?? null) as Receipt['pinState'], isUnwitnessed: false };
+
 export type DeliveriesService = ReturnType<typeof deliveriesService>;
 
 /** Whether the fault is the database's or the network's for now, and the tablet should simply send again. */

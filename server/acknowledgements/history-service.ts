@@ -23,6 +23,7 @@ const columns: readonly [string, (row: AcknowledgementRecord) => string | number
   ['newer version existed', (row) => (row.wasSuperseded ? 'yes' : 'no')],
   ['tablet', (row) => row.tabletName],
   ['tablet clock off by (s)', (row) => row.clockOffsetSeconds],
+  ['tablet time', (row) => (row.timeDoubt === null ? '' : row.timeDoubt === 'after-arrival' ? 'cannot be right: later than it arrived' : 'cannot be right: earlier than the checklist')],
   ['text SHA-256', (row) => row.textSha256],
 ];
 

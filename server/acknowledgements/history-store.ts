@@ -28,6 +28,7 @@ export const toRow = (row: AcknowledgementRecord): AcknowledgementRow => ({
   pinState: row.pinState as AcknowledgementRow['pinState'],
   wasSuperseded: row.wasSuperseded,
   tabletName: row.tabletName,
+  timeDoubt: row.timeDoubt as AcknowledgementRow['timeDoubt'],
   entryIndex: row.entryIndex,
 });
 

@@ -1,20 +1,21 @@
-import { and, asc, desc, eq, gte, inArray, isNotNull, isNull, lte, or } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, isNotNull, lte, ne, or, sql } from 'drizzle-orm';
 import { type Checklist } from '#compliance/answer';
 import { correctiveActions } from '#drizzle/schema/acknowledgements';
 import { answerSets, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
 import { jobs, shiftKits, shifts } from '#drizzle/schema/jobs';
 import { organisations } from '#drizzle/schema/organisations';
-import { people, pins } from '#drizzle/schema/people';
+import { people } from '#drizzle/schema/people';
+import { pins } from '#drizzle/schema/pins';
 import { kitParts, products, revisions } from '#drizzle/schema/sheets';
 import { type TabletDay } from '#shared/envelopes';
 import { type ShiftPlan } from '#shared/jobs';
-import { sql } from 'drizzle-orm';
 import { type Deps } from '../deps';
 import { type TabletActor } from '../http/actor';
 import { localDate } from '../jobs/jobs-service';
 import { readAsked } from '../jobs/shift-store';
 import { pinPublicKeySpki } from '../people/pin-unsealing';
 import { type Tx } from '../platform/database';
+import { readLeads } from '../people/witnesses';
 
 const dayMs = 24 * 3600 * 1000;
 type Answers = { lineId: string; answer: 'yes' | 'no' }[];
@@ -50,6 +51,7 @@ export function tabletDayService({ config, database, clock }: Deps) {
           sealingKey,
           officerName: officer.rows[0]?.name ?? null,
           officerPhone: organisation?.phone ?? null,
+          witnesses: await readWitnesses(tx, now),
           jobs: await Promise.all(published.map((each) => toTabletJob(tx, each))),
         };
       }),
@@ -58,9 +60,15 @@ export function tabletDayService({ config, database, clock }: Deps) {
   async function toTabletJob(tx: Tx, { shift, job, version }: { shift: typeof shifts.$inferSelect; job: typeof jobs.$inferSelect; version: typeof checklistVersions.$inferSelect }): Promise<TabletDay['jobs'][number]> {
     const texts = await tx.select().from(checklistTexts).where(and(eq(checklistTexts.organisationId, tx.organisationId), eq(checklistTexts.versionId, version.id))).orderBy(asc(checklistTexts.language));
     const asked = (await readAsked(tx, [version.id])).get(version.id) ?? [];
-    const withPin = asked.length === 0 ? [] : await tx.select({ personId: pins.personId }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, asked.map((person) => person.personId))));
-    const answers = await tx.select().from(answerSets).where(and(eq(answerSets.organisationId, tx.organisationId), eq(answerSets.versionId, version.id))).orderBy(asc(answerSets.capturedAt));
-    const stops = await tx.select().from(correctiveActions).where(and(eq(correctiveActions.organisationId, tx.organisationId), eq(correctiveActions.shiftId, shift.id), isNull(correctiveActions.resolvedAt), or(isNotNull(correctiveActions.taskId), isNotNull(correctiveActions.lineId)))).orderBy(asc(correctiveActions.openedAt));
+    const withPin = asked.length === 0 ? [] : await tx.select({ personId: pins.personId, proof: pins.proof }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, asked.map((person) => person.personId))));
+    // In the order of arrival: a tablet that stands in another year must not have the last word.
+    const answers = await tx.select({ set: answerSets, name: people.name }).from(answerSets).innerJoin(people, and(eq(people.organisationId, answerSets.organisationId), eq(people.id, answerSets.personId))).where(and(eq(answerSets.organisationId, tx.organisationId), eq(answerSets.versionId, version.id))).orderBy(asc(answerSets.receivedAt), asc(answerSets.id));
+    const everyStop = await tx
+      .select({ stop: correctiveActions, ownerName: people.name })
+      .from(correctiveActions)
+      .leftJoin(people, and(eq(people.organisationId, correctiveActions.organisationId), eq(people.id, correctiveActions.ownerPersonId)))
+      .where(and(eq(correctiveActions.organisationId, tx.organisationId), eq(correctiveActions.shiftId, shift.id), or(isNotNull(correctiveActions.taskId), isNotNull(correctiveActions.lineId))))
+      .orderBy(asc(correctiveActions.openedAt), asc(correctiveActions.id));
     const sheets = await tx
       .selectDistinct({ revisionId: revisions.id, productName: products.name })
       .from(shiftKits)
@@ -69,9 +77,12 @@ export function tabletDayService({ config, database, clock }: Deps) {
       .innerJoin(revisions, and(eq(revisions.organisationId, products.organisationId), eq(revisions.productId, products.id), eq(revisions.isCurrent, true)))
       .where(and(eq(shiftKits.organisationId, tx.organisationId), eq(shiftKits.shiftId, shift.id)))
       .orderBy(asc(products.name));
-    const briefing = answers.filter((set) => set.kind === 'briefing').at(-1);
+    const briefing = answers.filter(({ set }) => set.kind === 'briefing').at(-1);
     const noLines = (set: typeof answerSets.$inferSelect) => (JSON.parse(set.answers) as Answers).filter((answer) => answer.answer === 'no').map((answer) => answer.lineId);
-    const taskIds = (JSON.parse(version.checklist.toString('utf8')) as Checklist).tasks.map((task) => task.taskId);
+    const { tasks } = JSON.parse(version.checklist.toString('utf8')) as Checklist;
+    // A "No" to a line about the whole job names no task: it stops each of them.
+    const ofTasks = everyStop.flatMap(({ stop, ownerName }) => (stop.taskId ? [stop.taskId] : tasks.map((task) => task.taskId)).map((taskId) => ({ taskId, stop, ownerName })));
+    const begun = startsOf(tasks, answers.map(({ set }) => set), ofTasks.flatMap(({ taskId, stop }) => (stop.resolvedAt ? [{ taskId, resolvedAt: stop.resolvedAt }] : [])), noLines);
     const competent = (shift.plan as ShiftPlan).competentPersonId;
     return {
       shiftId: shift.id,
@@ -80,13 +91,41 @@ export function tabletDayService({ config, database, clock }: Deps) {
       siteName: job.siteName,
       date: shift.date,
       version: { id: version.id, number: version.number, publishedAt: version.publishedAt.toISOString(), texts: texts.map(({ language, sha256, bytes }) => ({ language: language as 'en' | 'es', sha256, text: bytes.toString('utf8') })) },
-      people: asked.map(({ personId, ...person }) => ({ ...person, id: personId, isLead: personId === competent, hasPin: withPin.some((pin) => pin.personId === personId) })),
-      briefing: briefing ? { at: briefing.capturedAt.toISOString(), noLineIds: noLines(briefing) } : null,
-      // A "No" to a line about the whole job names no task: it stops each of them.
-      stopped: stops.flatMap((stop) => (stop.taskId ? [stop.taskId] : taskIds).map((taskId) => ({ taskId, lineId: stop.lineId, text: stop.text, actionId: stop.id }))),
-      startedTaskIds: [...new Set(answers.filter((set) => set.kind === 'start-check' && set.taskId && noLines(set).length === 0).map((set) => set.taskId as string))],
+      people: asked.map(({ personId, ...person }) => ({ ...person, id: personId, isLead: personId === competent, hasPin: withPin.some((pin) => pin.personId === personId), isPinProven: withPin.some((pin) => pin.personId === personId && pin.proof !== 'none') })),
+      briefing: briefing ? { at: briefing.set.capturedAt.toISOString(), noLineIds: noLines(briefing.set), by: briefing.name, isProven: briefing.set.pinState === 'confirmed' } : null,
+      stopped: ofTasks.filter(({ stop }) => stop.resolvedAt === null).map(({ taskId, stop, ownerName }) => ({ taskId, lineId: stop.lineId, text: stop.text, actionId: stop.id, openedAt: stop.openedAt.toISOString(), openedBy: stop.openedBy, ownerName })),
+      reopened: ofTasks
+        .flatMap(({ taskId, stop }) => (stop.resolvedAt ? [{ taskId, lineId: stop.lineId, text: stop.text, actionId: stop.id, resolvedAt: stop.resolvedAt.toISOString(), resolvedBy: stop.resolvedBy ?? '', evidence: stop.evidence ?? '' }] : []))
+        .sort((one, other) => (one.resolvedAt < other.resolvedAt ? -1 : 1)),
+      ...begun,
       sheets,
     };
   }
+}
+
+/** Which tasks may run: live lines answered after the last stop, without a critical "No", by somebody with a proven PIN; and those where only the PIN is missing. */
+function startsOf(
+  tasks: Checklist['tasks'],
+  sets: readonly (typeof answerSets.$inferSelect)[],
+  reopenings: readonly { taskId: string; resolvedAt: Date }[],
+  noLines: (set: typeof answerSets.$inferSelect) => string[],
+): { startedTaskIds: string[]; unprovenTaskIds: string[] } {
+  const opening = (taskId: string, live: readonly { id: string; isCritical: boolean }[]) => {
+    const since = Math.max(0, ...reopenings.filter((each) => each.taskId === taskId).map((each) => each.resolvedAt.getTime()));
+    return sets.filter((set) => set.kind === 'start-check' && set.taskId === taskId && set.receivedAt.getTime() >= since && !noLines(set).some((id) => live.find((line) => line.id === id)?.isCritical));
+  };
+  const opened = tasks.map((task) => ({ taskId: task.taskId, sets: opening(task.taskId, task.live) }));
+  const isProven = (set: typeof answerSets.$inferSelect) => set.pinState === 'confirmed';
+  return {
+    startedTaskIds: opened.filter((each) => each.sets.some(isProven)).map((each) => each.taskId),
+    unprovenTaskIds: opened.filter((each) => each.sets.length > 0 && !each.sets.some(isProven)).map((each) => each.taskId),
+  };
+}
+
+/** Leads, officers and owners whose own PIN is proven. */
+async function readWitnesses(tx: Tx, now: Date): Promise<TabletDay['witnesses']> {
+  const leads = await readLeads(tx, now);
+  const proven = await tx.select({ personId: pins.personId }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), ne(pins.proof, 'none')));
+  return leads.filter(({ id }) => proven.some((pin) => pin.personId === id));
 }
 export type TabletDayService = ReturnType<typeof tabletDayService>;

@@ -2,9 +2,10 @@ import { and, asc, desc, eq, inArray, isNull, ne } from 'drizzle-orm';
 import { answerShift, generateChecklist } from '#compliance';
 import { type ElsewhereFacts, type ExposureBasis, type PersonFacts } from '#compliance/facts';
 import { acknowledgements, correctiveActions } from '#drizzle/schema/acknowledgements';
-import { checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
+import { answerSets, checklistPeople, checklistTexts, checklistVersions } from '#drizzle/schema/checklists';
 import { exposureBases, jobs, shifts } from '#drizzle/schema/jobs';
 import { people } from '#drizzle/schema/people';
+import { type PinState, type TimeDoubt } from '#shared/acknowledgements';
 import { assembleFacts, type PublishedVersion, type Shift, type ShiftPlan, type SiteFacts } from '#shared/jobs';
 import { NotFoundError } from '../errors';
 import { listAllEquipment } from '../equipment/equipment-service';
@@ -130,6 +131,12 @@ export async function readVersions(tx: Tx, shiftId: string): Promise<PublishedVe
     .where(and(eq(checklistTexts.organisationId, tx.organisationId), inArray(checklistTexts.versionId, ids)))
     .orderBy(asc(checklistTexts.language));
   const asked = await readAsked(tx, ids);
+  const answers = await tx
+    .select({ id: answerSets.id, versionId: answerSets.versionId, kind: answerSets.kind, taskId: answerSets.taskId, personName: people.name, answers: answerSets.answers, at: answerSets.capturedAt, receivedAt: answerSets.receivedAt, pinState: answerSets.pinState, timeDoubt: answerSets.timeDoubt })
+    .from(answerSets)
+    .innerJoin(people, and(eq(people.organisationId, answerSets.organisationId), eq(people.id, answerSets.personId)))
+    .where(and(eq(answerSets.organisationId, tx.organisationId), inArray(answerSets.versionId, ids)))
+    .orderBy(asc(answerSets.receivedAt), asc(answerSets.id));
   return rows.map((row) => ({
     id: row.id,
     number: row.number,
@@ -138,11 +145,23 @@ export async function readVersions(tx: Tx, shiftId: string): Promise<PublishedVe
     manifestSha256: row.manifestSha256,
     texts: texts.filter((text) => text.versionId === row.id).map(({ language, sha256 }) => ({ language: language as 'en' | 'es', sha256 })),
     asked: asked.get(row.id) ?? [],
+    answers: answers.filter((set) => set.versionId === row.id).map(({ versionId: _, kind, answers: given, at, receivedAt, pinState, timeDoubt, ...set }) => ({
+      ...set,
+      kind: kind as 'briefing' | 'start-check',
+      at: at.toISOString(),
+      receivedAt: receivedAt.toISOString(),
+      noCount: (JSON.parse(given) as { answer: string }[]).filter(({ answer }) => answer === 'no').length,
+      pinState: pinState as PinState,
+      timeDoubt: timeDoubt as TimeDoubt | null,
+    })),
   }));
 }
 
 export type Asked = PublishedVersion['asked'][number];
-/** Who each version asks, and how far each person is. A signature stands above an earlier "I can't sign yet". */
+/**
+ * Who each version asks, and how far each person is. A signature stands above an earlier "I can't sign yet". One that no proven PIN
+ * stands beside is kept and marked, and counts when the person signs again with a witnessed PIN: a lead's word would prove the lead.
+ */
 export async function readAsked(tx: Tx, versionIds: readonly string[]): Promise<Map<string, Asked[]>> {
   if (versionIds.length === 0) return new Map();
   const asked = await tx.select().from(checklistPeople).where(and(eq(checklistPeople.organisationId, tx.organisationId), inArray(checklistPeople.versionId, [...versionIds]))).orderBy(asc(checklistPeople.name), asc(checklistPeople.personId));
@@ -154,9 +173,11 @@ export async function readAsked(tx: Tx, versionIds: readonly string[]): Promise<
   const result = new Map<string, Asked[]>();
   for (const person of asked) {
     const own = answers.filter((answer) => answer.versionId === person.versionId && answer.personId === person.personId);
-    const answer = own.find((each) => each.kind !== 'could-not-sign' && each.pinState !== 'not-confirmed') ?? own.at(-1);
-    const state: Asked['state'] = !answer ? 'not-yet' : answer.kind === 'could-not-sign' ? 'could-not-sign' : answer.pinState === 'not-confirmed' ? 'not-confirmed' : 'signed';
-    result.set(person.versionId, [...(result.get(person.versionId) ?? []), { personId: person.personId, name: person.name, language: person.language as 'en' | 'es', state, at: answer?.capturedAt.toISOString() ?? null }]);
+    const answer = own.find((each) => each.kind !== 'could-not-sign' && !isUnproven(each)) ?? own.at(-1);
+    const state: Asked['state'] = !answer ? 'not-yet' : answer.kind === 'could-not-sign' ? 'could-not-sign' : isUnproven(answer) ? 'not-confirmed' : 'signed';
+    result.set(person.versionId, [...(result.get(person.versionId) ?? []), { personId: person.personId, name: person.name, language: person.language as 'en' | 'es', state, at: answer?.capturedAt.toISOString() ?? null, pinState: answer?.kind === 'signed' ? (answer.pinState as PinState) : null }]);
   }
   return result;
 }
+/** Paper and witnessed records stand by themselves; what was signed on a tablet stands by its PIN. */
+const isUnproven = ({ kind, pinState }: { kind: string; pinState: string }): boolean => kind === 'signed' && pinState !== 'confirmed';

@@ -1,6 +1,7 @@
-import { and, asc, eq, gt, ilike, or, sql } from 'drizzle-orm';
+import { and, asc, eq, gt, ilike, inArray, or, sql } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
-import { people, pins } from '#drizzle/schema/people';
+import { people } from '#drizzle/schema/people';
+import { pins, startPins } from '#drizzle/schema/pins';
 import { Role, type Page } from '#shared/common';
 import { type Person, type PersonEdit, type PeopleQuery, type SetLogin } from '#shared/people';
 import type * as z from 'zod';
@@ -13,17 +14,25 @@ import { hashPassword, refuseWeakPassword } from '../session/passwords';
 
 type PersonRow = typeof people.$inferSelect;
 
-export function peopleService({ database, log }: Deps) {
+export function peopleService({ database, clock, log }: Deps) {
   const toPerson = async (tx: Tx, row: PersonRow): Promise<Person> => (await toPeople(tx, [row]))[0] as Person;
   async function toPeople(tx: Tx, rows: readonly PersonRow[]): Promise<Person[]> {
     const logins = await tx.execute<{ person_id: string; email: string; role: string }>(sql`SELECT * FROM door_members()`);
     const byPerson = new Map(logins.rows.map((login) => [login.person_id, { email: login.email, role: Role.parse(login.role) }]));
-    const withPin = new Set((await tx.select({ personId: pins.personId }).from(pins)).map((pin) => pin.personId));
-    return rows.map(({ organisationId: _, respirators, language, ...row }) => ({
+    const ids = rows.map((row) => row.id);
+    const proofs = new Map((ids.length === 0 ? [] : await tx.select({ personId: pins.personId, proof: pins.proof }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, ids)))).map((pin) => [pin.personId, pin.proof]));
+    const given = new Map((ids.length === 0 ? [] : await tx.select().from(startPins).where(and(eq(startPins.organisationId, tx.organisationId), inArray(startPins.personId, ids), gt(startPins.expiresAt, clock.now())))).map((start) => [start.personId, start]));
+    const startPinOf = (id: string): Person['startPin'] => {
+      const start = given.get(id);
+      return start ? { givenBy: start.givenByName, givenAt: start.givenAt.toISOString(), expiresAt: start.expiresAt.toISOString() } : null;
+    };
+    return rows.map(({ organisationId: _, units: __, respirators, language, ...row }) => ({
       ...row,
       language: language as Person['language'],
       respirators: respirators as Person['respirators'],
-      hasPin: withPin.has(row.id),
+      hasPin: proofs.has(row.id),
+      pinProof: (proofs.get(row.id) as Person['pinProof']) ?? null,
+      startPin: startPinOf(row.id),
       login: byPerson.get(row.id) ?? null,
     }));
   }
@@ -94,16 +103,6 @@ export function peopleService({ database, log }: Deps) {
         return toPerson(tx, await find(tx, id));
       });
     },
-
-    /** The officer can reset a PIN, never choose one: the person sets a new one on a tablet. */
-    resetPin: (actor: PersonActor, id: string): Promise<Person> =>
-      database.inOrganisation(actor.organisationId, async (tx) => {
-        demandRole(actor, 'owner', 'safety-officer');
-        const row = await find(tx, id);
-        await tx.delete(pins).where(and(eq(pins.organisationId, tx.organisationId), eq(pins.personId, id)));
-        log.info({ by: actor.personId, person: id }, 'PIN reset');
-        return toPerson(tx, row);
-      }),
   };
 
   /** Sign-ins are the owner's business: nobody else ends an owner's, and the last one stays. */

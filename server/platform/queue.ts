@@ -10,8 +10,9 @@ export interface Work {
   'sheet-unread': { organisationId: string; revisionId: string };
   'mail-checkpoint': { organisationId: string; size: number };
   'mail-request': { organisationId: string; requestId: string };
+  'mail-guessing': { organisationId: string; alarmId: string };
 }
-export const queueNames = ['sheet-unread', 'read-sheet', 'ocr-sheet', 'mail-checkpoint', 'mail-request'] as const satisfies readonly (keyof Work)[];
+export const queueNames = ['sheet-unread', 'read-sheet', 'ocr-sheet', 'mail-checkpoint', 'mail-request', 'mail-guessing'] as const satisfies readonly (keyof Work)[];
 
 /** Where work goes when its last try failed or its worker was gone for the last time. */
 const afterLastTry: Partial<Record<keyof Work, keyof Work>> = { 'read-sheet': 'sheet-unread', 'ocr-sheet': 'sheet-unread' };
@@ -30,7 +31,12 @@ export const patienceFor =
   (name: keyof Work): number =>
     Math.ceil(1.5 * (name === 'ocr-sheet' ? limits.SHEET_OCR_SECONDS : limits.SHEET_READ_SECONDS));
 
-export async function createQueue(url: string, options: { isServing: boolean; expireSeconds: (name: keyof Work) => number; onError: (error: Error) => void }): Promise<Queue> {
+/** A mail waits out a mail server that is away: tried again every so often for a week, then given up. */
+const mailDays = 7;
+const retriesOf = (name: keyof Work, mailSeconds: number) =>
+  name.startsWith('mail-') ? { retryLimit: Math.ceil((mailDays * 24 * 3600) / mailSeconds), retryDelay: mailSeconds, retryBackoff: false } : { retryLimit: 5, retryDelay: 2, retryBackoff: true };
+
+export async function createQueue(url: string, options: { isServing: boolean; expireSeconds: (name: keyof Work) => number; mailRetrySeconds?: number; onError: (error: Error) => void }): Promise<Queue> {
   // The owner made the schema; the application role only uses it.
   const boss = new PgBoss({ connectionString: url, schema: 'pgboss', migrate: false, supervise: options.isServing, schedule: false, max: 4, maintenanceIntervalSeconds: 5, application_name: 'kneeboard-queue' });
   boss.on('error', options.onError);
@@ -40,9 +46,7 @@ export async function createQueue(url: string, options: { isServing: boolean; ex
       const next = afterLastTry[name];
       const id = await boss.send(name, data, {
         ...(next ? { deadLetter: next } : {}),
-        retryLimit: 5,
-        retryDelay: 2,
-        retryBackoff: true,
+        ...retriesOf(name, options.mailRetrySeconds ?? 30),
         expireInSeconds: options.expireSeconds(name),
         db: { executeSql: (text: string, values: unknown[]) => tx.client.query(text, values) },
       });

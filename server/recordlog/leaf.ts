@@ -3,7 +3,7 @@ import { createHash } from 'node:crypto';
 /** What an entry is about. A kind, once used, keeps its word: old leaves are never rewritten. */
 export const LEAF_KINDS = [
   'checklist-version', 'briefing', 'acknowledgement', 'start-check', 'corrective-action', 'sheet-confirmed',
-  'exposure-basis', 'plan-approved', 'correction', 'key-rotation',
+  'exposure-basis', 'pin', 'plan-approved', 'correction', 'key-rotation',
 ] as const;
 export type LeafKind = (typeof LEAF_KINDS)[number];
 

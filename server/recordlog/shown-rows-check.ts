@@ -6,10 +6,11 @@ import { answerSets, checklistPeople, checklistTexts, checklistVersions } from '
 import { exposureBases } from '#drizzle/schema/jobs';
 import { recordlogEntries, recordlogHeads, recordlogRecords } from '#drizzle/schema/recordlog';
 import { revisions } from '#drizzle/schema/sheets';
+import { pinEvents } from '#drizzle/schema/pins';
 import { deliveries } from '#drizzle/schema/tablets';
 import { type Database, type Tx } from '../platform/database';
 import { parseLeaf, type LeafKind } from './leaf';
-import { acknowledgementDiffers, actionDiffers, answersDiffer, basisDiffers, sheetDiffers, versionDiffers, type ShownAcknowledgement, type ShownVersion } from './shown-rows';
+import { acknowledgementDiffers, actionDiffers, answersDiffer, basisDiffers, pinDiffers, sheetDiffers, versionDiffers, type ShownAcknowledgement, type ShownVersion } from './shown-rows';
 
 const entriesAtOnce = 500;
 type Recorded = Readonly<Record<string, unknown>>;
@@ -28,6 +29,7 @@ const rowsOf: Readonly<Partial<Record<LeafKind, Rows>>> = {
   'start-check': { where: 'answers', read: readAnswers, differs: answersDiffer },
   'corrective-action': { where: 'corrective actions', read: readActions, differs: actionDiffers },
   'checklist-version': { where: 'published checklists', read: readVersions, differs: versionDiffers },
+  pin: { where: 'list of PINs', read: readPinEvents, differs: pinDiffers },
   'exposure-basis': { where: 'signed bases', read: readBases, differs: basisDiffers },
   'sheet-confirmed': { where: 'library', read: readSheets, differs: sheetDiffers },
 };
@@ -92,6 +94,7 @@ async function findUnrecordedRow(tx: Tx): Promise<string | null> {
       UNION ALL SELECT 'answers', s.id, s.organisation_id, ARRAY['briefing', 'start-check'], 1 FROM answer_sets s
       UNION ALL SELECT 'corrective actions', c.id, c.organisation_id, ARRAY['corrective-action'], CASE WHEN c.resolved_at IS NULL THEN 1 ELSE 2 END FROM corrective_actions c
       UNION ALL SELECT 'published checklists', v.id, v.organisation_id, ARRAY['checklist-version'], 1 FROM checklist_versions v
+      UNION ALL SELECT 'list of PINs', p.id, p.organisation_id, ARRAY['pin'], 1 FROM pin_events p
       UNION ALL SELECT 'signed bases', b.id, b.organisation_id, ARRAY['exposure-basis'], 1 FROM exposure_bases b
       UNION ALL SELECT 'library', r.id, r.organisation_id, ARRAY['sheet-confirmed'], 1 FROM revisions r WHERE r.state = 'confirmed'
     ) shown
@@ -121,6 +124,14 @@ async function readAnswers(tx: Tx, ids: string[]) {
     .from(answerSets)
     .leftJoin(deliveries, and(eq(deliveries.organisationId, answerSets.organisationId), eq(deliveries.id, answerSets.deliveryId)))
     .where(and(eq(answerSets.organisationId, tx.organisationId), inArray(answerSets.id, ids)));
+  return byId(rows);
+}
+async function readPinEvents(tx: Tx, ids: string[]) {
+  const rows = await tx
+    .select({ ...getTableColumns(pinEvents), envelopeSha256: deliveredHash })
+    .from(pinEvents)
+    .leftJoin(deliveries, and(eq(deliveries.organisationId, pinEvents.organisationId), eq(deliveries.id, pinEvents.deliveryId)))
+    .where(and(eq(pinEvents.organisationId, tx.organisationId), inArray(pinEvents.id, ids)));
   return byId(rows);
 }
 async function readActions(tx: Tx, ids: string[]) {

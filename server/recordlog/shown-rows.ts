@@ -24,11 +24,12 @@ const words: Readonly<Record<string, string>> = {
   kind: 'the kind', language: 'the language', textSha256: 'the text that was signed', reason: 'the reason', pinState: 'whether the PIN was right', wasSuperseded: 'whether a newer version was out',
   capturedAt: 'the time on the tablet', receivedAt: 'the time of arrival', clockOffsetSeconds: 'the tablet’s clock', tabletName: 'the tablet’s name', tabletId: 'the tablet', strokesSha256: 'the drawn signature', envelopeSha256: 'what the tablet sent',
   answers: 'the answers', text: 'the text', openedAt: 'when it was opened', openedBy: 'who opened it', evidence: 'the evidence', resolvedBy: 'who resolved it', resolvedAt: 'when it was resolved',
+  timeDoubt: 'whether the tablet’s time can be right', event: 'what was done', proof: 'who vouched for it', byName: 'who vouched for it', byPersonId: 'who vouched for it', at: 'the time of arrival',
   manifest: 'the manifest', publishedBy: 'who published it', publishedAt: 'when it was published', values: 'the confirmed values', confirmedBy: 'who confirmed it', confirmedAt: 'when it was confirmed', sha256: 'the file',
 };
 const wordsFor = (field: string): string => words[field] ?? field;
 
-const instants = new Set(['capturedAt', 'receivedAt', 'openedAt', 'resolvedAt', 'publishedAt', 'confirmedAt', 'signedAt']);
+const instants = new Set(['at', 'capturedAt', 'receivedAt', 'openedAt', 'resolvedAt', 'publishedAt', 'confirmedAt', 'signedAt']);
 
 /** The same value, whatever way it was written: ids in any case, instants with any offset, halves of character pairs as the database keeps them. */
 function isSame(field: string, recorded: unknown, shown: unknown): boolean {
@@ -49,13 +50,17 @@ function differing(recorded: Recorded, shown: Recorded, fields: readonly string[
 
 export const acknowledgementFields = [
   'id', 'personName', 'personId', 'jobName', 'jobId', 'shiftId', 'shiftDate', 'versionId', 'versionNumber', 'kind', 'language', 'textSha256', 'reason', 'pinState', 'wasSuperseded',
-  'capturedAt', 'receivedAt', 'clockOffsetSeconds', 'tabletName', 'tabletId', 'deliveryId', 'strokesSha256', 'envelopeSha256',
+  'capturedAt', 'receivedAt', 'clockOffsetSeconds', 'tabletName', 'tabletId', 'deliveryId', 'strokesSha256', 'envelopeSha256', 'timeDoubt',
 ] as const;
 export const acknowledgementDiffers = (recorded: Recorded, shown: ShownAcknowledgement): string | undefined => differing(recorded, shown, acknowledgementFields);
 
 /** A briefing or a start check. The answers are compared as text: they are stored as they were recorded. */
 export const answersDiffer = (recorded: Recorded, shown: Recorded): string | undefined =>
-  differing({ ...recorded, answers: JSON.stringify(recorded['answers']), personId: (recorded['person'] as Recorded | undefined)?.['id'] }, shown, ['id', 'kind', 'versionId', 'taskId', 'personId', 'answers', 'capturedAt', 'receivedAt', 'envelopeSha256']);
+  differing({ ...recorded, answers: JSON.stringify(recorded['answers']), personId: (recorded['person'] as Recorded | undefined)?.['id'] }, shown, ['id', 'kind', 'versionId', 'taskId', 'personId', 'answers', 'pinState', 'timeDoubt', 'capturedAt', 'receivedAt', 'envelopeSha256']);
+
+/** A PIN that was set or reset, or a start PIN that was given. */
+export const pinDiffers = (recorded: Recorded, shown: Recorded): string | undefined =>
+  differing(recorded, shown, ['id', 'event', 'personId', 'personName', 'proof', 'byPersonId', 'byName', 'tabletId', 'tabletName', 'deliveryId', 'capturedAt', 'at', 'envelopeSha256']);
 
 export function actionDiffers(recorded: Recorded, shown: Recorded): string | undefined {
   if (recorded['event'] !== 'resolved') return differing(recorded, shown, ['id', 'jobId', 'shiftId', 'versionId', 'taskId', 'lineId', 'text', 'openedAt', 'openedBy', 'deliveryId']);

@@ -14,7 +14,7 @@ import { fileURLToPath } from 'node:url';
 
 const KINDS = new Set([
   'checklist-version', 'briefing', 'acknowledgement', 'start-check', 'corrective-action', 'sheet-confirmed',
-  'exposure-basis', 'plan-approved', 'correction', 'key-rotation',
+  'exposure-basis', 'pin', 'plan-approved', 'correction', 'key-rotation',
 ]);
 const LEAF_HEAD = /^\{"format":"kneeboard-leaf\/1","kind":"([a-z-]+)","recordedAt":"(\d{4}-(?:0[1-9]|1[0-2])-(?:0[1-9]|[12]\d|3[01])T(?:[01]\d|2[0-3]):[0-5]\d:[0-5]\d\.\d{3}Z)","recordHash":"/;
 const LEAF_TAIL = /^[0-9a-f]{64}"\}$/;

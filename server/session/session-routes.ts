@@ -4,7 +4,10 @@ import { Strategy as LocalStrategy } from 'passport-local';
 import { type PersonActor } from '../http/actor';
 import { mount } from '../http/mount';
 import { sessionCookieName } from '../http/sessions';
+import { knownMachineCookie, knownMachineDays, type knownMachines } from './known-machines';
 import { type SessionService } from './session-service';
+
+type KnownMachines = ReturnType<typeof knownMachines>;
 
 interface Remembered {
   organisationId: string;
@@ -13,11 +16,11 @@ interface Remembered {
 }
 
 /** Passport wired to the service: how a password becomes a session, and a session a person. */
-export function passportFor(service: SessionService): passport.Authenticator {
+export function passportFor(service: SessionService, machines: KnownMachines): passport.Authenticator {
   const door = new passport.Passport();
   door.use(
     new LocalStrategy({ usernameField: 'email', passReqToCallback: true }, (request, email, password, done) => {
-      service.signIn({ email, password }, request.ip ?? 'unknown').then((actor) => done(null, { ...actor, signedInAt: Date.now() }), done);
+      service.signIn({ email, password }, request.ip ?? 'unknown', machines.recognise(request.headers.cookie, email)).then((actor) => done(null, { ...actor, signedInAt: Date.now() }), done);
     }),
   );
   door.serializeUser<Remembered>((user, done) => done(null, { organisationId: user.organisationId, personId: user.personId, signedInAt: user.signedInAt }));
@@ -27,18 +30,19 @@ export function passportFor(service: SessionService): passport.Authenticator {
   return door;
 }
 
-export function sessionRoutes(service: SessionService, door: passport.Authenticator): Router {
+export function sessionRoutes(service: SessionService, door: passport.Authenticator, machines: KnownMachines, isSecure: boolean): Router {
   const router = Router();
   const remember = (request: Request, actor: PersonActor, signedInAt: number) =>
     // logIn gives the session a new id: one planted before signing in is worth nothing after.
     new Promise<void>((resolve, reject) => request.logIn({ ...actor, signedInAt }, (error: unknown) => (error ? reject(error) : resolve())));
 
-  mount(router, 'signIn', async ({ request, response }) => {
+  mount(router, 'signIn', async ({ body, request, response }) => {
     const actor = await new Promise<PersonActor>((resolve, reject) => {
       const answer = (error: unknown, user?: Express.User | false) => (error || !user ? reject(error ?? new Error('no user')) : resolve(user));
       (door.authenticate('local', answer) as (request: unknown, response: unknown, next: (error: unknown) => void) => void)(request, response, reject);
     });
     await remember(request, actor, Date.now());
+    response.cookie(knownMachineCookie, machines.remember(request.headers.cookie, body.email), { httpOnly: true, sameSite: 'strict', secure: isSecure, path: '/api/session', maxAge: knownMachineDays * 24 * 3600 * 1000 });
     return service.toSession(actor);
   });
   mount(router, 'readSession', async ({ actor }) => service.toSession(actor));

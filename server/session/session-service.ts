@@ -7,6 +7,7 @@ import { type Deps } from '../deps';
 import { InputError, SignedOutError, SlowDownError } from '../errors';
 import { type PersonActor } from '../http/actor';
 import { takeGuess, wasRight } from '../platform/guesses';
+import { guessAlarmsService } from './guess-alarms';
 import { hashPassword, refuseWeakPassword, verifyPassword } from './passwords';
 
 /** Wrong tries before waiting begins: few for one account from one address, more for an address as a whole. */
@@ -14,7 +15,9 @@ const freeTries = { account: 5, address: 30, anywhere: 50 };
 
 type Member = { role: string; email: string; passwordHash: string; sessionsValidFromMs: number; name: string; isActive: boolean; organisationName: string };
 
-export function sessionService({ database, clock, log }: Deps) {
+export function sessionService(deps: Deps) {
+  const { database, clock, log } = deps;
+  const alarms = guessAlarmsService(deps);
   async function readMember(organisationId: string, personId: string): Promise<Member | undefined> {
     return database.inOrganisation(organisationId, async (tx) => {
       const rows = await tx.execute<Member>(sql`
@@ -35,16 +38,19 @@ export function sessionService({ database, clock, log }: Deps) {
   });
 
   return {
-    /** Throws SlowDownError before looking, SignedOutError for a wrong address or password alike. */
-    async signIn({ email, password }: SignIn, address: string): Promise<PersonActor> {
+    /**
+     * Throws SlowDownError before looking, SignedOutError for a wrong address or password alike. A machine where this account signed in
+     * before waits for its own wrong tries only: guessing from elsewhere locks nobody out of it.
+     */
+    async signIn({ email, password }: SignIn, address: string, knownMachine?: string): Promise<PersonActor> {
       const account = email.toLowerCase();
       const slowDown = (seconds: number) => new SlowDownError(`Too many wrong tries. Wait ${seconds} ${seconds === 1 ? 'second' : 'seconds'}, then try again.`, seconds);
-      const own = `account ${account} from ${address}`;
+      const own = knownMachine ? `account ${account} on machine ${knownMachine}` : `account ${account} from ${address}`;
       const wider = [
         { key: `address ${address}`, free: freeTries.address },
         { key: `account ${account}`, free: freeTries.anywhere },
       ];
-      for (const { key, free } of wider) {
+      for (const { key, free } of knownMachine ? [] : wider) {
         const [wait] = await database.atTheDoor<{ seconds: number | null }>('SELECT door_wait($1, $2) AS seconds', [key, free]);
         if (wait?.seconds) throw slowDown(wait.seconds);
       }
@@ -56,6 +62,8 @@ export function sessionService({ database, clock, log }: Deps) {
       if (!login || !member?.isActive) {
         for (const { key } of wider) await database.atTheDoor('SELECT door_failed($1)', [key]);
         log.warn({ address }, 'sign-in refused');
+        // Told beside the answer, which takes as long for an account that nobody has.
+        if (login) void alarms.notice(login.organisation_id, login.person_id, account).catch((error: unknown) => log.error({ err: error }, 'the owner could not be told of guesses'));
         throw new SignedOutError('This e-mail address and password do not belong together. Check both, or ask your owner for a new password.');
       }
       await wasRight(database, own);

@@ -4,6 +4,7 @@ import { acknowledgements, correctiveActions } from '#drizzle/schema/acknowledge
 import { jobs, shifts } from '#drizzle/schema/jobs';
 import { kitParts, kits, products, revisions } from '#drizzle/schema/sheets';
 import { deliveryOutcomes, tablets } from '#drizzle/schema/tablets';
+import { type PinState } from '#shared/acknowledgements';
 import { assembleFacts, type Shift } from '#shared/jobs';
 import { type Today, type TodayItem } from '#shared/today';
 import { type Deps } from '../deps';
@@ -11,6 +12,7 @@ import { type PersonActor } from '../http/actor';
 import { localDate } from '../jobs/jobs-service';
 import { readShift } from '../jobs/shift-store';
 import { type Tx } from '../platform/database';
+import { readGuessAlarms } from '../session/guess-alarms';
 import { revisedSheets } from './revised-sheets';
 
 const dayMs = 24 * 3600 * 1000;
@@ -30,7 +32,7 @@ export function todayService({ database, clock }: Deps) {
         const now = clock.now();
         const shiftsNow = await currentShifts(tx, now);
         const revised = await revisedSheets(tx, shiftsNow);
-        const items = [...(await stops(tx)), ...revised.items, ...shiftsNow.flatMap((shift) => shiftItems(shift, now).filter(({ id }) => id !== `again-${shift.id}` || !revised.shiftIds.has(shift.id))), ...(await libraryItems(tx)), ...(await keptAside(tx)), ...renewals(shiftsNow, now)];
+        const items = [...(await stops(tx)), ...revised.items, ...shiftsNow.flatMap((shift) => shiftItems(shift, now).filter(({ id }) => id !== `again-${shift.id}` || !revised.shiftIds.has(shift.id))), ...(await libraryItems(tx)), ...(await keptAside(tx)), ...(await guesses(tx, actor, now)), ...renewals(shiftsNow, now)];
         return {
           items: items.sort((a, b) => rank(a) - rank(b)).slice(0, 100),
           onSite: await Promise.all(shiftsNow.map((shift) => onSite(tx, shift, now))),
@@ -93,7 +95,7 @@ export function todayService({ database, clock }: Deps) {
       : again
         ? [{ id: `again-${shift.id}`, level: 'stop', label: 'Sign again', text: `${shift.job.name}: the facts changed after version ${newest.number}`, detail: `Publish, and ${counted(newest.asked.length, 'person is', 'people are')} asked to sign again.`, aside: '', link, linkText: 'See what changed' }]
         : missing.length > 0
-          ? [{ id: `sign-${shift.id}`, level: 'caution', label: 'Not signed', text: `${shift.job.name}: ${counted(missing.length, 'person has', 'people have')} not signed`, detail: missing.map((person) => person.name).join(', '), aside: `version ${newest.number}`, link, linkText: 'Open' }]
+          ? [{ id: `sign-${shift.id}`, level: 'caution', label: 'Not signed', text: `${shift.job.name}: ${counted(missing.length, 'person has', 'people have')} not signed`, detail: missing.map((person) => `${person.name}${doubts[person.pinState ?? 'confirmed']}`).join(', '), aside: `version ${newest.number}`, link, linkText: 'Open' }]
           : [];
     return [...held, ...signing];
   }
@@ -118,6 +120,23 @@ export function todayService({ database, clock }: Deps) {
     const [row] = await tx.select({ found: count() }).from(deliveryOutcomes).where(and(eq(deliveryOutcomes.organisationId, tx.organisationId), eq(deliveryOutcomes.outcome, 'kept-aside')));
     const found = row?.found ?? 0;
     return found === 0 ? [] : [{ id: 'kept-aside', level: 'caution', label: 'Kept aside', text: `${counted(found, 'delivery', 'deliveries')} from tablets could not be recorded`, detail: 'Nothing is lost: the bytes are stored. See which tablet and why.', aside: '', link: '/tablets', linkText: 'Look' }];
+  }
+
+  /** To owners, and to whose account it is. */
+  async function guesses(tx: Tx, actor: PersonActor, now: Date): Promise<TodayItem[]> {
+    const alarms = await readGuessAlarms(tx, now);
+    return alarms
+      .filter(({ personId }) => actor.role === 'owner' || actor.personId === personId)
+      .map((alarm) => ({
+        id: `guesses-${alarm.id}`,
+        level: 'caution',
+        label: 'Guessing',
+        text: `${counted(alarm.failures, 'wrong sign-in', 'wrong sign-ins')} for ${alarm.name} from ${counted(alarm.addresses, 'address', 'addresses')}`,
+        detail: 'They are slowed, and nobody got in by them. Where this person signed in before they still can. If it was not you, give a longer password.',
+        aside: alarm.lastAt.toISOString().slice(0, 16).replace('T', ' '),
+        link: actor.role === 'owner' ? `/people/${alarm.personId}` : '/account',
+        linkText: 'Open',
+      }));
   }
 
   /** Fit tests of people on today's shifts that end soon. 1910.134(f)(2): at least annually. */
@@ -168,6 +187,8 @@ export function todayService({ database, clock }: Deps) {
 }
 export type TodayService = ReturnType<typeof todayService>;
 
+/** Why a signature that came does not count, behind the name. */
+const doubts: Readonly<Record<PinState, string>> = { confirmed: '', 'not-confirmed': ' (PIN not right)', 'not-set': ' (no PIN)', unwitnessed: ' (PIN set without witness)' };
 const clockText = (minute: number) => `${String(Math.floor(minute / 60) % 24).padStart(2, '0')}:${String(minute % 60).padStart(2, '0')}`;
 function minuteAt(now: Date, timeZone: string): number {
   const [hours = 0, minutes = 0] = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }).format(now).split(':').map(Number);

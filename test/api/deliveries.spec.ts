@@ -41,7 +41,7 @@ describe('a signature', () => {
   it('[REC-03] is recorded once, with its PIN, its text, its times, one log entry, and is seen by nobody else', async () => {
     const own = await scene();
     const { tablet, day, crew, organisation } = own;
-    await tablet.deliver(await tablet.pinSet(crew, '2468'));
+    await tablet.setPin(crew);
     const before = (await logOf(own)).length;
     const envelope = await tablet.signed(day.version, crew);
     const receipt = await tablet.deliver(envelope);
@@ -155,8 +155,8 @@ describe('a delivery that is not understood', () => {
       await tablet.signed(version, organisation.officer.personId),
       { ...(await tablet.signed(version, lead)), id: newId() },
       tablet.couldNotSign(version, crew, { note: 'half \u0000 a note' }),
-      tablet.briefing(version, lead, [{ lineId: 'no-such-line', answer: 'yes', note: null }]),
-      tablet.startCheck(version, lead, newId(), [{ lineId: 'x', answer: 'yes', note: null }]),
+      await tablet.briefing(version, lead, [{ lineId: 'no-such-line', answer: 'yes', note: null }]),
+      await tablet.startCheck(version, lead, newId(), [{ lineId: 'x', answer: 'yes', note: null }]),
     ];
     const good = await tablet.signed(version, lead);
     const { receipts } = await tablet.deliverAll([...strange, good]);
@@ -190,9 +190,10 @@ describe("a briefing's and a start check's \"No\"", () => {
   it('on a live line of a task stops it until the action is resolved with evidence', async () => {
     const own = await scene();
     const { organisation, tablet, day, lead } = own;
+    await tablet.setPin(lead);
     const task = (await textOf(own)).tasks.find(({ taskId }) => taskId === day.grindingTaskId);
     const critical = task?.live.find(({ isCritical }) => isCritical);
-    await tablet.deliver(tablet.startCheck(day.version, lead, day.grindingTaskId, allYes(task?.live ?? [], [critical?.id ?? ''])));
+    await tablet.deliver(await tablet.startCheck(day.version, lead, day.grindingTaskId, allYes(task?.live ?? [], [critical?.id ?? ''])));
     const [action] = await actions(own);
     expect(action).toMatchObject({ taskId: day.grindingTaskId, taskName: 'Floor grinding', openedBy: 'Dov Lindqvist', resolvedAt: null, text: expect.stringContaining(critical?.text ?? 'no line') });
     const stopped = await ok(organisation.lead.agent, 'readShift', { params: { shiftId: day.shift.id } });
@@ -207,9 +208,9 @@ describe("a briefing's and a start check's \"No\"", () => {
     expect(resolved).toMatchObject({ resolvedBy: 'Dov Lindqvist', evidence: 'Hose clamped again; gauge above its mark.' });
     expectProblem(await call(organisation.officer.agent, 'resolveAction', { params, version: resolved.version, body: { evidence: 'Hose clamped once more.' } }), 422);
     expect((await ok(organisation.lead.agent, 'readShift', { params: { shiftId: day.shift.id } })).context.failedControls).toEqual({});
-    await tablet.deliver(tablet.startCheck(day.version, lead, day.grindingTaskId, allYes(task?.live ?? [])));
+    await tablet.deliver(await tablet.startCheck(day.version, lead, day.grindingTaskId, allYes(task?.live ?? [])));
     expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]).toMatchObject({ stopped: [], startedTaskIds: [day.grindingTaskId] });
-    expect((await logOf(own)).map(({ record }) => record?.['event']).filter(Boolean)).toEqual(['opened', 'resolved']);
+    expect((await logOf(own)).map(({ record }) => record?.['event']).filter(Boolean)).toEqual(['start-pin-given', 'set', 'opened', 'resolved']);
     const stranger = await scene();
     expectProblem(await call(stranger.organisation.officer.agent, 'resolveAction', { params, version: resolved.version, body: { evidence: 'From elsewhere.' } }), 404);
   });
@@ -217,14 +218,15 @@ describe("a briefing's and a start check's \"No\"", () => {
   it('on a critical morning line opens an action; one on a plain line is only recorded', async () => {
     const own = await scene();
     const { tablet, day, lead } = own;
+    await tablet.setPin(lead);
     const { morning } = await textOf(own);
     const [critical, plain] = [morning.find(({ isCritical }) => isCritical), morning.find(({ isCritical }) => !isCritical)];
-    await tablet.deliver(tablet.briefing(day.version, lead, allYes(morning, [plain?.id ?? ''])));
+    await tablet.deliver(await tablet.briefing(day.version, lead, allYes(morning, [plain?.id ?? ''])));
     expect(await actions(own)).toEqual([]);
-    await tablet.deliver(tablet.briefing(day.version, lead, allYes(morning, [critical?.id ?? ''])));
+    await tablet.deliver(await tablet.briefing(day.version, lead, allYes(morning, [critical?.id ?? ''])));
     expect(await actions(own)).toMatchObject([{ openedBy: 'Dov Lindqvist', text: expect.stringContaining(critical?.text ?? 'no line') }]);
     expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.briefing).toMatchObject({ noLineIds: [critical?.id] });
-    expect((await logOf(own)).map(({ leaf }) => (JSON.parse(leaf) as { kind: string }).kind)).toEqual(['checklist-version', 'briefing', 'briefing', 'corrective-action']);
+    expect((await logOf(own)).map(({ leaf }) => (JSON.parse(leaf) as { kind: string }).kind)).toEqual(['checklist-version', 'pin', 'pin', 'briefing', 'briefing', 'corrective-action']);
   });
 });
 
@@ -235,6 +237,7 @@ it('"I can\'t sign yet" is recorded with its reason, opens an action, and does n
   expect(await history(own)).toMatchObject([{ kind: 'could-not-sign', pinState: 'not-set' }]);
   expect(await actions(own)).toMatchObject([{ text: 'Marisol Tena could not sign: is missing gear: No gloves in my size', taskId: null }]);
   expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === crew)?.state).toBe('could-not-sign');
+  await tablet.setPin(crew);
   expect(await tablet.deliver(await tablet.signed(day.version, crew))).toMatchObject({ outcome: 'recorded' });
   expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === crew)?.state).toBe('signed');
 });
@@ -243,7 +246,7 @@ describe('a PIN', () => {
   it('confirms a signature; a wrong one leaves it unconfirmed and asks the lead; none leaves it "not set"', async () => {
     const own = await scene();
     const { tablet, day, lead, crew } = own;
-    await tablet.deliver(await tablet.pinSet(lead, '2468'));
+    await tablet.setPin(lead);
     expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '1111' }))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
     expect(await tablet.deliver(await tablet.signed(day.version, crew))).toMatchObject({ outcome: 'recorded', pinState: 'not-set' });
     expect((await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === lead)?.state).toBe('not-confirmed');
@@ -257,7 +260,7 @@ describe('a PIN', () => {
   it('that was wrong does not stand in the way of the right one; a right one stands against any later', async () => {
     const own = await scene();
     const { tablet, day, lead } = own;
-    await tablet.deliver(await tablet.pinSet(lead, '2468'));
+    await tablet.setPin(lead);
     const state = async () => (await ok(tablet.agent, 'readTabletDay')).jobs[0]?.people.find(({ id }) => id === lead)?.state;
     expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '1111' }))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
     expect(await tablet.deliver(await tablet.signed(day.version, lead, { pin: '2222' }))).toMatchObject({ outcome: 'second', pinState: 'not-confirmed' });
@@ -274,7 +277,7 @@ describe('a PIN', () => {
     ['that was changed', async (tablet, hash) => ({ sealedPin: (await tablet.seal('2468', hash)).sealedPin.replace(/.{6}$/, 'AAAAAA'), nonce: 'f'.repeat(32) })],
   ])('sealed %s confirms nothing', async (_, seal) => {
     const { tablet, day, lead } = await scene();
-    await tablet.deliver(await tablet.pinSet(lead, '2468'));
+    await tablet.setPin(lead);
     const hash = day.version.texts.find(({ language }) => language === 'en')?.sha256 ?? '';
     expect(await tablet.deliver(await tablet.signed(day.version, lead, await seal(tablet, hash)))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
   });
@@ -282,16 +285,16 @@ describe('a PIN', () => {
   it('once set is not set again until the office resets it; nobody in the office can choose it', async () => {
     const own = await scene();
     const { organisation, tablet, crew } = own;
-    expect(await tablet.deliver(await tablet.pinSet(crew, '2468'))).toMatchObject({ outcome: 'recorded' });
+    await tablet.setPin(crew);
     expect(await tablet.deliver(await tablet.pinSet(crew, '9999'))).toMatchObject({ outcome: 'kept-aside', note: expect.stringContaining('has a PIN already') });
     for (const pin of ['12', '123456789', 'abcd']) expect(await tablet.deliver(await tablet.pinSet(own.lead, pin))).toMatchObject({ outcome: 'kept-aside' });
-    expect(await ok(organisation.officer.agent, 'resetPin', { params: { personId: crew } })).toMatchObject({ hasPin: false });
-    expect(await tablet.deliver(await tablet.pinSet(crew, '9999'))).toMatchObject({ outcome: 'recorded' });
+    expect(await ok(organisation.officer.agent, 'resetPin', { params: { personId: crew } })).toMatchObject({ hasPin: false, pinProof: null });
+    await tablet.setPin(crew, '9999');
   });
 
   it('witnessed with a PIN that is not the witness\'s own is not set', async () => {
     const { tablet, lead, crew } = await scene();
-    await tablet.deliver(await tablet.pinSet(lead, '2468'));
+    await tablet.setPin(lead);
     const witness = async (pin: string) => {
       const { sealedPin, nonce } = await tablet.seal(pin, pinSetHash(crew));
       return { witnessPersonId: lead, witnessSealedPin: sealedPin, witnessNonce: nonce };
@@ -306,7 +309,8 @@ describe('a PIN', () => {
     const textSha256 = day.version.texts[0]?.sha256 ?? '';
     const check = async (on: TestTablet, personId: string, pin: string) => call(on.agent, 'checkPin', { body: { personId, textSha256, ...(await on.seal(pin, textSha256)) } });
     expect(expectProblem(await check(tablet, lead, '2468'), 422)).toMatchObject({ reason: 'pin-not-set' });
-    await tablet.deliverAll([await tablet.pinSet(lead, '2468'), await tablet.pinSet(crew, '1357')]);
+    await tablet.setPin(lead);
+    await tablet.setPin(crew, '1357');
     expect((await check(tablet, lead, '2468')).status).toBe(204);
     for (const triesLeft of [4, 3, 2, 1, 0]) expect(expectProblem(await check(tablet, lead, '0000'), 422)).toMatchObject({ reason: 'pin-wrong', triesLeft });
     expectProblem(await check(tablet, lead, '0000'), 422);

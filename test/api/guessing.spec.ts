@@ -24,7 +24,7 @@ async function scene(): Promise<Scene> {
   const [crew, second] = [(await organisation.person('Marisol Tena')).id, (await organisation.person('Abe Kowalczyk')).id];
   const tablet = await organisation.tablet();
   const lead = organisation.lead.personId;
-  await tablet.deliver(await tablet.pinSet(lead, '2468'));
+  await tablet.setPin(lead);
   return { organisation, tablet, crew, second, lead, day: await organisation.publishedDay({ crew: [crew, second] }) };
 }
 const witnessed = async (tablet: TestTablet, personId: string, witnessPersonId: string, guess: string) => {

@@ -2,6 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from '@jest/globals';
 import pg from 'pg';
 import { v7 as newId } from 'uuid';
 import { type CallInput, call, expectProblem, ok } from '#test/support/call';
+import { editOf } from '#test/support/edits';
 import { testEnvironment } from '#test/support/environment';
 import { makeOrganisation, type Organisation, type PublishedDay } from '#test/support/organisation';
 import { startService, type Service } from '#test/support/service';
@@ -89,8 +90,8 @@ describe('the history', () => {
     const { organisation, days, crew } = await scene();
     const day = days[0] ?? raise();
     await organisation.publishAgain(day, 'A later fact.');
-    const { version: personVersion, id: _, hasPin: __, login: ___, ...person } = await ok(organisation.owner.agent, 'readPerson', { params: { personId: crew } });
-    await ok(organisation.owner.agent, 'editPerson', { params: { personId: crew }, version: personVersion, body: { ...person, name: 'Renamed Since' } });
+    const person = await ok(organisation.owner.agent, 'readPerson', { params: { personId: crew } });
+    await ok(organisation.owner.agent, 'editPerson', { params: { personId: crew }, version: person.version, body: { ...editOf(person), name: 'Renamed Since' } });
     const [row] = (await ok(organisation.auditor.agent, 'listHistory', { query: { personId: crew, jobId: day.job.id, kind: 'signed' } })).items;
     expect(row).toMatchObject({ personName: crewName });
     const full = await ok(organisation.auditor.agent, 'readAcknowledgement', { params: { acknowledgementId: row?.id ?? '' } });

@@ -26,12 +26,12 @@ beforeAll(async () => {
   const tablet = await organisation.tablet();
   const text = JSON.parse((await ok(officer.agent, 'readText', { params: { versionId: day.version.id, language: 'en' } })).toString()) as ChecklistText;
   const critical = text.morning.find((line) => line.isCritical)?.id;
+  await tablet.setPin(lead.personId);
   await tablet.deliverAll([
-    await tablet.pinSet(lead.personId, '2468'),
     // Ids in capitals, an instant with an offset and half a character pair say the same as what the database gives back.
     await tablet.signed(day.version, lead.personId, { personId: lead.personId.toUpperCase(), capturedAt: '2026-12-01T05:25:00.123-06:00' }),
     tablet.couldNotSign(day.version, crew, { reason: 'other', note: 'half a pair: \ud800' }),
-    tablet.briefing(day.version, lead.personId, text.morning.map(({ id }) => ({ lineId: id, answer: id === critical ? 'no' : 'yes', note: null }))),
+    await tablet.briefing(day.version, lead.personId, text.morning.map(({ id }) => ({ lineId: id, answer: id === critical ? 'no' : 'yes', note: null }))),
   ]);
   const [action] = (await ok(officer.agent, 'listActions')).items;
   await ok(officer.agent, 'resolveAction', { params: { actionId: action?.id ?? '' }, version: action?.version, body: { evidence: 'Looked at it together.' } });
@@ -93,6 +93,10 @@ describe.each<[string, string, string]>([
   ['checklist_versions', `UPDATE checklist_versions SET published_by_name = 'Nobody' WHERE OWN`, 'publishedByName'],
   ['checklist_people', `DELETE FROM checklist_people WHERE OWN AND name = 'Marisol Tena'`, 'whom it asks to sign'],
   ['answer_sets', `UPDATE answer_sets SET answers = replace(answers, '"no"', '"yes"') WHERE OWN`, 'the answers'],
+  ['answer_sets', `UPDATE answer_sets SET pin_state = 'not-set' WHERE OWN`, 'whether the PIN was right'],
+  ['pin_events', `UPDATE pin_events SET by_name = 'Somebody Else' WHERE OWN AND event = 'set'`, 'who vouched for it'],
+  ['pin_events', `UPDATE pin_events SET proof = 'lead' WHERE OWN AND event = 'set'`, 'who vouched for it'],
+  ['pin_events', `DELETE FROM pin_events WHERE OWN AND event = 'start-pin-given'`, 'missing from the list of PINs'],
   ['corrective_actions', `UPDATE corrective_actions SET text = 'Nothing to see' WHERE OWN`, 'the text'],
   ['corrective_actions', `UPDATE corrective_actions SET evidence = 'A new hose was fitted.' WHERE OWN AND evidence IS NOT NULL`, 'the evidence'],
   ['corrective_actions', `UPDATE corrective_actions SET resolved_at = now(), resolved_by = 'Hazel Marrow', evidence = 'Done' WHERE OWN AND resolved_at IS NULL`, 'never recorded'],

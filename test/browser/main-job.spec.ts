@@ -13,7 +13,7 @@ import { addOrganisation, answerOf, callFrom, names, type SignIns } from '#test/
 import { buildDemoSheet, quarrybondPartA, quarrybondPartB, quarrybondPartC } from '#test/support/demo-sheets';
 import { addTask, blockOf, confirmAsNewProduct, dragEnd, dropFiles, hasValue, lookThrough, navigationOf, openSubject, signIn, taskRow } from '#test/support/office-steps';
 import { projectRoot, startRunningService, type RunningService } from '#test/support/running-service';
-import { drawSignature, givePin, keepForOffline, sign, signerRow } from '#test/support/tablet-steps';
+import { drawSignature, givePin, keepForOffline, proveByPin, sign, signerRow } from '#test/support/tablet-steps';
 
 jest.setTimeout(120_000);
 
@@ -313,14 +313,23 @@ withChromium('The main job', () => {
       await page.getByText('All lines are answered.').waitFor();
       await expectAccessible(page, 'Morning briefing');
       await page.getByRole('button', { name: 'Done', exact: true }).click();
-      await page.getByRole('link', { name: /Morning briefing.*Done \d\d:\d\d.*sent/s }).waitFor();
+      // Who briefs proves it: the first PIN of the first day, with the start PIN that the office gave.
+      const office = seats['safety-officer'].page;
+      await openSubject(office, 'People', 'People');
+      await office.getByRole('list', { name: 'People' }).getByRole('link', { name: dov }).click();
+      await office.getByRole('button', { name: 'Give a start PIN' }).click();
+      await office.getByText('It is not shown again.').waitFor();
+      await expectAccessible(office, 'A start PIN');
+      const startPin = ((await office.locator('.digits').textContent()) ?? '').replace(/\D/g, '');
+      await proveByPin(page, { name: dov, language: 'en', pin: pins[dov] ?? '', newPin: { startPin } });
+      await page.getByRole('link', { name: /Morning briefing.*Done \d\d:\d\d by Dov Lindqvist.*sent/s }).waitFor();
     });
 
     step('each sets a PIN and signs in their own language, the second witnessed by the lead', async () => {
       const { page } = seats.tablet;
       await page.getByRole('link', { name: /Sign the day’s checklist/ }).click();
       await page.getByRole('heading', { name: 'Tap your name.' }).waitFor();
-      await sign(page, { name: dov, language: 'en', pin: pins[dov] ?? '', newPin: { witness: null } });
+      await sign(page, { name: dov, language: 'en', pin: pins[dov] ?? '', newPin: null });
       await page.getByText(/^Dov Lindqvist signed at \d\d:\d\d\. Sent\.$/).waitFor();
 
       await drawSignature(page, { name: marisol, language: 'es' });
@@ -378,7 +387,7 @@ withChromium('The main job', () => {
       await expectAccessible(page, 'Stopped');
       await page.getByRole('link', { name: 'Back to the job' }).last().click();
       const task = page.getByRole('region', { name: 'Tasks' }).getByRole('listitem').filter({ hasText: 'Floor grinding' });
-      await task.getByText('The office knows.').waitFor();
+      await task.getByText(/Stopped by Dov Lindqvist, .*The office knows\./).waitFor();
 
       const office = seats['safety-officer'].page;
       await openSubject(office, 'Today', 'What needs you, worst first');
@@ -397,13 +406,17 @@ withChromium('The main job', () => {
       await action.getByText('Resolved').waitFor();
 
       await page.reload();
+      await task.getByText(/Opened again .* by Ines Halloran: Filter changed; 415 cfm/).waitFor();
       await task.getByRole('link', { name: 'Before it starts: Floor grinding' }).click();
       for (const yes = page.getByRole('button', { name: 'Yes', exact: true }); ; ) {
         const line = await page.locator('#live-line').textContent();
         await yes.click();
         await page.waitForFunction((before) => document.querySelector('#live-line')?.textContent !== before, line);
-        if (await page.getByText('Floor grinding may start.').isVisible()) break;
+        if (await page.getByRole('heading', { name: `${dov}, type your PIN` }).isVisible()) break;
       }
+      await expectAccessible(page, 'A PIN for the start check');
+      await proveByPin(page, { name: dov, language: 'en', pin: pins[dov] ?? '', newPin: null });
+      await page.getByText('Floor grinding may start.').waitFor();
     });
 
     step('a changed fact makes version 2, and the tablet asks to sign again', async () => {

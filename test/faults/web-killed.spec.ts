@@ -36,7 +36,7 @@ beforeAll(async () => {
   crew = await Promise.all(Array.from({ length: crewSize }, async (_, at) => (await organisation.person(`Crew ${String(at).padStart(2, '0')}`)).id));
   day = await organisation.publishedDay({ crew });
   tablet = await organisation.tablet();
-  await tablet.deliverAll(await Promise.all(crew.map((id) => tablet.pinSet(id, '2468'))));
+  for (const id of crew) await tablet.setPin(id);
 });
 afterAll(async () => {
   built.remove();

@@ -1,11 +1,14 @@
 import { L_PER_FT3, M2_PER_FT2, m3PerHFromCfm } from '#compliance/quantities/units';
 import { type EquipmentEdit } from '#shared/equipment';
 import { type JobEdit } from '#shared/jobs';
-import { type PersonEdit } from '#shared/people';
+import { type Person, PersonEdit } from '#shared/people';
 import { type KitEdit } from '#shared/products';
 import { type SheetEdit } from '#shared/sheets';
 
 const daysAgo = (days: number): string => new Date(Date.now() - days * 24 * 3600 * 1000).toISOString().slice(0, 10);
+
+/** What of a person the office's page sends back. */
+export const editOf = (person: Person): PersonEdit => PersonEdit.strip().parse(person);
 
 /** Bodies as the office's pages send them; every name in them is invented. */
 export const personEdit = (name: string, changes: Partial<PersonEdit> = {}): PersonEdit => ({

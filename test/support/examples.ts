@@ -28,6 +28,8 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
     return { params: { personId: id }, version, body: personEdit('Tomasz Reyes', { language: 'es' }) };
   },
   setLogin: async ({ organisation }) => ({ params: { personId: (await organisation.person('Per Aldana')).id }, body: { login: { email: `${newId()}@marrowslate.example`, role: 'crew-lead', password: testPassword } } }),
+  giveStartPin: async ({ organisation }) => ({ params: { personId: (await organisation.person('Per Aldana')).id } }),
+  listPinEvents: ({ ids }) => ({ query: { limit: 1, personId: ids['leadId'] ?? '' } }),
   resetPin: ({ ids }) => ({ params: pick(ids, 'personId') }),
   listTablets: () => ({ query: { limit: 1 } }),
   addTablet: () => ({ body: { name: 'Tablet 9' } }),

@@ -64,7 +64,7 @@ export async function startService(changes: Record<string, string> = {}): Promis
   const log = pino({ level: 'error', base: null }, { write: (line: string) => void faults.push(line) });
   const clock = new TestClock();
   const database = createDatabase(config.DATABASE_URL, { max: 12 });
-  const queue = await createQueue(config.DATABASE_URL, { isServing: false, expireSeconds: patienceFor(config), onError: (error) => log.error({ err: error }, 'queue') });
+  const queue = await createQueue(config.DATABASE_URL, { isServing: false, expireSeconds: patienceFor(config), mailRetrySeconds: config.MAIL_RETRY_SECONDS, onError: (error) => log.error({ err: error }, 'queue') });
   const storage = createStorage({ endpoint: config.S3_ENDPOINT, region: config.S3_REGION, bucket: config.S3_BUCKET, accessKeyId: config.S3_ACCESS_KEY_ID, secretAccessKey: config.S3_SECRET_ACCESS_KEY });
   const deps: Deps = { config, database, queue, storage, clock, log, mail: createMail(config.SMTP_URL, config.MAIL_FROM) };
   const { app, close } = createApp(deps);

@@ -2,8 +2,8 @@ import { type Locator, type Page } from 'playwright-core';
 
 /** The words a signer meets, in the language of the text they sign. */
 const words = {
-  en: { yes: 'Yes, matches', box: 'Signature box', done: 'Done', keypad: 'PIN keypad', choose: (name: string) => `${name}, choose a PIN`, repeat: 'Type the same PIN again', enter: (name: string) => `${name}, type your PIN`, witness: (name: string) => `${name}, type your own PIN` },
-  es: { yes: 'Sí, coincide', box: 'Cuadro para firmar', done: 'Listo', keypad: 'Teclado para el PIN', choose: (name: string) => `${name}, elija un PIN`, repeat: 'Escriba el mismo PIN otra vez', enter: (name: string) => `${name}, escriba su PIN`, witness: (name: string) => `${name}, escriba su propio PIN` },
+  en: { yes: 'Yes, matches', box: 'Signature box', done: 'Done', keypad: 'PIN keypad', choose: (name: string) => `${name}, choose a PIN`, repeat: 'Type the same PIN again', enter: (name: string) => `${name}, type your PIN`, witness: (name: string) => `${name}, type your own PIN`, start: (name: string) => `${name}, type your start PIN` },
+  es: { yes: 'Sí, coincide', box: 'Cuadro para firmar', done: 'Listo', keypad: 'Teclado para el PIN', choose: (name: string) => `${name}, elija un PIN`, repeat: 'Escriba el mismo PIN otra vez', enter: (name: string) => `${name}, escriba su PIN`, witness: (name: string) => `${name}, escriba su propio PIN`, start: (name: string) => `${name}, escriba su PIN de inicio` },
 } as const;
 
 export interface Signer {
@@ -11,7 +11,7 @@ export interface Signer {
   readonly language: 'en' | 'es';
   readonly pin: string;
   /** Null: the PIN is there already. */
-  readonly newPin: { readonly witness: { readonly name: string; readonly pin: string } | null } | null;
+  readonly newPin: { readonly witness: { readonly name: string; readonly pin: string } } | { readonly startPin: string } | null;
 }
 
 /** On the page where the crew signs: answers the own line, draws and stops before the PIN. */
@@ -22,14 +22,20 @@ export async function drawSignature(page: Page, { name, language }: Pick<Signer,
   await scribble(page, page.getByRole('img', { name: say.box }));
 }
 
-/** Types the PIN, chosen and witnessed when it is new. */
-export async function givePin(page: Page, { name, language, pin, newPin }: Signer): Promise<void> {
+/** Types the PIN, chosen and vouched for when it is new. */
+export async function givePin(page: Page, signer: Signer): Promise<void> {
+  await page.getByRole('button', { name: words[signer.language].done, exact: true }).click();
+  await proveByPin(page, signer);
+}
+
+/** The PIN alone, where it was asked for. */
+export async function proveByPin(page: Page, { name, language, pin, newPin }: Signer): Promise<void> {
   const say = words[language];
-  await page.getByRole('button', { name: say.done }).click();
   if (newPin) {
     await typePin(page, say.choose(name), say.keypad, pin);
     await typePin(page, say.repeat, say.keypad, pin);
-    if (newPin.witness) await typePin(page, say.witness(newPin.witness.name), say.keypad, newPin.witness.pin);
+    if ('startPin' in newPin) await typePin(page, say.start(name), say.keypad, newPin.startPin);
+    else await typePin(page, say.witness(newPin.witness.name), say.keypad, newPin.witness.pin);
   } else await typePin(page, say.enter(name), say.keypad, pin);
 }
 

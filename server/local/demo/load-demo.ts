@@ -17,6 +17,7 @@ import { equipmentService } from '../../equipment/equipment-service';
 import { type PersonActor, type TabletActor } from '../../http/actor';
 import { jobsService, localDate } from '../../jobs/jobs-service';
 import { peopleService } from '../../people/people-service';
+import { pinsService } from '../../people/pins-service';
 import { pinPublicKeySpki } from '../../people/pin-unsealing';
 import { productsService } from '../../products/products-service';
 import { recordlogService } from '../../recordlog/recordlog-service';
@@ -89,8 +90,21 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
     return { sealedPin: await sealPin({ pin: demoPins[name] ?? raise(`${name} has no demo PIN`), textHash, nonce }, sealingKey), nonce };
   };
 
+  const unwitnessed = 'Per Aldana';
   const signers = ['Dov Lindqvist', 'Marisol Tena', 'Abe Kowalczyk', 'Tomasz Reyes', 'Per Aldana'];
-  for (const name of signers) await deliver(addDays(realNow, -9), 'pin-set', { personId: idOf(name), ...(await seal(name, pinSetHash(idOf(name)))), witnessPersonId: null });
+  // The first lead has a start PIN from the office and then witnesses the others; one was set before anybody witnessed, and is marked.
+  const [lead, ...others] = signers.map((name) => ({ name, id: idOf(name) })) as [{ name: string; id: string }, ...{ name: string; id: string }[]];
+  deps.clock.set(addDays(realNow, -10));
+  const { pin: startPin } = await pinsService(deps).giveStartPin(officer, lead.id);
+  const startNonce = randomBytes(16).toString('hex');
+  const startSealedPin = await sealPin({ pin: startPin, textHash: pinSetHash(lead.id), nonce: startNonce }, sealingKey);
+  await deliver(addDays(realNow, -9), 'pin-set', { personId: lead.id, ...(await seal(lead.name, pinSetHash(lead.id))), witnessPersonId: null, startSealedPin, startNonce });
+  for (const { name, id } of others) {
+    const hash = pinSetHash(id);
+    const witness = await seal(lead.name, hash);
+    const witnessing = { witnessPersonId: lead.id, witnessSealedPin: witness.sealedPin, witnessNonce: witness.nonce };
+    await deliver(addDays(realNow, -9), 'pin-set', { personId: id, ...(await seal(name, hash)), ...(name === unwitnessed ? { witnessPersonId: null } : witnessing) });
+  }
 
   /** One day that was published, briefed and signed; `signedBy` in order. */
   async function pastDay(jobId: string, days: number, plan: ShiftPlan, signedBy: readonly string[]): Promise<Shift> {

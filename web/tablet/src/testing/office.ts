@@ -53,7 +53,7 @@ export class Office {
     const receipts = envelopes.map(({ id, bytes }): Receipt => {
       const isKnown = this.delivered.some((one) => one.id === id);
       if (!isKnown) this.delivered.push({ id, bytes });
-      return { id, outcome: isKnown ? 'duplicate' : 'recorded', acknowledgementId: null, entryIndex: null, pinState: null, isSuperseded: false, note: null };
+      return { id, outcome: isKnown ? 'duplicate' : 'recorded', acknowledgementId: null, entryIndex: null, pinState: null, isUnwitnessed: false, isSuperseded: false, note: null };
     });
     return { status: 200, body: { receivedAt: '2026-12-03T12:00:10Z', receipts: receipts.filter(({ id }) => id !== this.unanswered) } };
   }

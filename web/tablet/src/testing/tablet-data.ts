@@ -40,7 +40,7 @@ export function checklistText(language: Language = 'en'): ChecklistText {
 }
 
 export function dayJob(more: Partial<DayJob> = {}): DayJob {
-  const person = { state: 'not-yet' as const, at: null };
+  const person = { state: 'not-yet' as const, at: null, isPinProven: true, pinState: null };
   return {
     shiftId: ids.shift,
     jobId: ids.job,
@@ -50,12 +50,14 @@ export function dayJob(more: Partial<DayJob> = {}): DayJob {
     version: { id: ids.version, number: 2, publishedAt: '2026-12-03T11:50:00Z', texts: [] },
     people: [
       { id: ids.dov, name: 'Dov Lindqvist', language: 'en', isLead: true, hasPin: true, ...person },
-      { id: ids.marisol, name: 'Marisol Tena', language: 'es', isLead: false, hasPin: false, ...person },
+      { id: ids.marisol, name: 'Marisol Tena', language: 'es', isLead: false, hasPin: false, ...person, isPinProven: false },
       { id: ids.abe, name: 'Abe Kowalczyk', language: 'en', isLead: false, hasPin: true, ...person },
     ],
     briefing: null,
     stopped: [],
+    reopened: [],
     startedTaskIds: [],
+    unprovenTaskIds: [],
     sheets: [],
     ...more,
   };
@@ -74,6 +76,7 @@ export async function tabletDay(sealingKey: string, job: DayJob = dayJob()): Pro
     sealingKey,
     officerName: 'Ines Halloran',
     officerPhone: '555-0142',
+    witnesses: [{ id: ids.dov, name: 'Dov Lindqvist' }],
     jobs: [{ ...job, version: { ...job.version, texts } }],
   };
 }

@@ -1,7 +1,7 @@
 import { inject, Injectable } from '@angular/core';
 import { type Observable } from 'rxjs';
 import { type Page } from '#shared/common';
-import { type Person, type PersonEdit, type SetLogin } from '#shared/people';
+import { type Person, type PersonEdit, type PinEvent, type SetLogin, type StartPin } from '#shared/people';
 import { allPages } from '../contract/all-pages';
 import { ContractClient } from '../contract/contract-client';
 
@@ -32,6 +32,14 @@ export class PeopleApi {
 
   setLogin(personId: string, login: SetLogin['login']): Observable<Person> {
     return this.client.call('setLogin', { params: { personId }, body: { login } });
+  }
+
+  giveStartPin(personId: string): Observable<StartPin> {
+    return this.client.call('giveStartPin', { params: { personId } });
+  }
+
+  listPinEvents(personId: string | undefined, after?: string): Observable<Page<PinEvent>> {
+    return this.client.call('listPinEvents', { query: { personId, after } });
   }
 
   resetPin(personId: string): Observable<Person> {

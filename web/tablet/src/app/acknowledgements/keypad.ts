@@ -1,17 +1,14 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
 import { type Messages } from '../words/en';
 
-const mostDigits = 6;
-const fewestDigits = 4;
-
 /** A keypad for gloves. Digits are never shown; the PIN leaves it once, when OK is pressed, and is forgotten here. */
 @Component({
   selector: 'kb-keypad',
     template: `
     <output class="dots">
       <span class="kb-visually-hidden">{{ say().pin.digits(typed().length) }}</span>
-      @for (place of places; track place) {
-        <span class="dot" aria-hidden="true" [class.full]="place < typed().length" [class.spare]="place >= fewest"></span>
+      @for (place of places(); track place) {
+        <span class="dot" aria-hidden="true" [class.full]="place < typed().length" [class.spare]="place >= fewest()"></span>
       }
     </output>
     <div class="keys" role="group" [attr.aria-label]="say().pin.keypad">
@@ -29,18 +26,20 @@ const fewestDigits = 4;
 export class Keypad {
   readonly say = input.required<Messages>();
   readonly isBusy = input(false);
+  /** Digits of a PIN; a start PIN has eight. */
+  readonly fewest = input(4);
+  readonly most = input(6);
   readonly entered = output<string>();
-  /** OK was pressed with fewer than four digits. */
+  /** OK was pressed with too few digits. */
   readonly tooShort = output<void>();
 
   protected readonly digits = ['1', '2', '3', '4', '5', '6', '7', '8', '9', '0'];
-  protected readonly places = Array.from({ length: mostDigits }, (_, place) => place);
-  protected readonly fewest = fewestDigits;
+  protected readonly places = computed(() => Array.from({ length: this.most() }, (_, place) => place));
   private readonly pin = signal('');
   protected readonly typed = computed(() => ({ length: this.pin().length }));
 
   protected type(digit: string): void {
-    if (!this.isBusy()) this.pin.update((pin) => (pin.length < mostDigits ? pin + digit : pin));
+    if (!this.isBusy()) this.pin.update((pin) => (pin.length < this.most() ? pin + digit : pin));
   }
 
   protected erase(): void {
@@ -50,7 +49,7 @@ export class Keypad {
   protected accept(): void {
     if (this.isBusy()) return;
     const pin = this.pin();
-    if (pin.length < fewestDigits) {
+    if (pin.length < this.fewest()) {
       this.tooShort.emit();
       return;
     }

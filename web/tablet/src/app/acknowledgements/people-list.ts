@@ -26,7 +26,7 @@ import { messagesIn, Words } from '../words/words';
                 }
               </span>
             } @else {
-              <span class="word" [class.caution]="person.state === 'not-confirmed' || person.state === 'sign-again'" [class.kb-quiet]="person.state === 'not-yet'">{{ say[person.state] }}</span>
+              <span class="word" [class.caution]="person.state === 'not-confirmed' || person.state === 'sign-again'" [class.kb-quiet]="person.state === 'not-yet'">{{ person.state === 'not-confirmed' ? say.doubts[person.doubt ?? 'pin-wrong'] : say[person.state] }}</span>
             }
           </button>
         </li>

@@ -3,7 +3,7 @@ import { sha256Hex } from '../checklists/opened-text';
 import { Connection } from '../connection/connection';
 import { CallFailed, TabletApi } from '../connection/tablet-api';
 import { Day } from '../day/day';
-import { pinSetText, sealPin } from '#shared/pin-sealing';
+import { answersText, pinSetText, sealPin } from '#shared/pin-sealing';
 
 /** A PIN shut away to the server's key; the tablet cannot open it again. */
 export interface SealedPin {
@@ -39,10 +39,15 @@ export class PinDesk {
     return sha256Hex(pinSetText(ownerPersonId));
   }
 
-  async check(personId: string, textSha256: string, sealed: SealedPin): Promise<PinAnswer> {
+  /** Stands there for answers: the PIN proves these and no others. */
+  answersHash(kind: 'briefing' | 'start-check', versionId: string, taskId: string | null, answers: Parameters<typeof answersText>[3]): Promise<string> {
+    return sha256Hex(answersText(kind, versionId, taskId, answers));
+  }
+
+  async check(personId: string, textSha256: string, sealed: SealedPin, kind: 'pin' | 'start-pin' = 'pin'): Promise<PinAnswer> {
     if (this.connection.state() === 'no-signal') return { outcome: 'unchecked' };
     try {
-      await this.api.checkPin({ personId, textSha256, ...sealed });
+      await this.api.checkPin({ kind, personId, textSha256, ...sealed });
       return { outcome: 'right' };
     } catch (error) {
       if (!(error instanceof CallFailed)) throw error;

@@ -1,22 +1,26 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output, signal } from '@angular/core';
 import { Note } from '#ui/note';
 import { Connection } from '../connection/connection';
-import { type PersonView } from '../jobs/job-view';
+import { WhoToCall } from '../connection/who-to-call';
+import { type PersonView, type Witness } from '../jobs/job-view';
 import { type Draft } from '../outbox/outbox';
 import { type Messages } from '../words/en';
 import { Keypad } from './keypad';
 import { PinDesk, type SealedPin } from './pin-desk';
 
-/** The person's sealed PIN for what is being signed, and the envelope that sets it when it is new. */
+/** The person's sealed PIN for what is being signed or answered, and the envelope that sets it when it is new. */
 export interface PinGiven {
   readonly sealed: SealedPin;
   readonly pinSet: Draft | null;
 }
 
-type Step = 'enter' | 'choose' | 'repeat' | 'witness';
+type Step = 'enter' | 'choose' | 'repeat' | 'witness' | 'start';
+
+const startPinDigits = 8;
 
 /**
- * The PIN beside a signature: typed, or chosen twice on first use and witnessed by the lead.
+ * The PIN beside a signature or answers: typed; or chosen twice on first use and vouched for, by a lead or officer with an own PIN
+ * or by the start PIN from the office. With neither it goes on, and says that it will not count.
  * It is sealed as soon as it is complete; plain digits live only in this component, and only until then.
  */
 @Component({
@@ -40,7 +44,19 @@ type Step = 'enter' | 'choose' | 'repeat' | 'witness';
         <p>{{ say().pin.checking }}</p>
       }
     </div>
-    <kb-keypad [say]="say()" [isBusy]="isBusy() || isPaused()" (entered)="take($event)" (tooShort)="trouble.set(say().pin.short)" />
+    <kb-keypad [say]="say()" [isBusy]="isBusy() || isPaused()" [fewest]="step() === 'start' ? startDigits : 4" [most]="step() === 'start' ? startDigits : 6" (entered)="take($event)" (tooShort)="trouble.set(step() === 'start' ? say().pin.startShort : say().pin.short)" />
+    @if (step() === 'witness' || step() === 'start') {
+      <div class="kb-actions" role="group" [attr.aria-label]="say().pin.otherWays">
+        @for (other of others(); track other.id) {
+          <button type="button" class="kb-button outlined small" [disabled]="isBusy()" (click)="chooseWitness(other)">{{ say().pin.witnessBy(other.name) }}</button>
+        }
+        @if (step() === 'witness') {
+          <button type="button" class="kb-button outlined small" [disabled]="isBusy()" (click)="useStartPin()">{{ say().pin.useStart }}</button>
+        }
+        <button type="button" class="kb-button text small" [disabled]="isBusy()" (click)="goOnAlone()">{{ say().pin.nobody }}</button>
+      </div>
+      <p class="kb-quiet">{{ say().pin.nobodyDetail }}</p>
+    }
     <button type="button" class="kb-button text small" [disabled]="isBusy()" (click)="cancelled.emit()">{{ say().pin.back }}</button>
   `,
   styles: `
@@ -59,9 +75,9 @@ type Step = 'enter' | 'choose' | 'repeat' | 'witness';
 })
 export class PinEntry {
   readonly person = input.required<PersonView>();
-  /** Who witnesses a new PIN: the lead, when the lead has a PIN and is somebody else. */
-  readonly lead = input.required<PersonView | null>();
-  /** SHA-256 of the text being signed: the PIN is sealed together with it. */
+  /** Who may witness a new PIN; the person is left out here. The first one is asked. */
+  readonly witnesses = input.required<readonly Witness[]>();
+  /** SHA-256 of the text being signed, or of the answers: the PIN is sealed together with it. */
   readonly textSha256 = input.required<string>();
   readonly say = input.required<Messages>();
   readonly given = output<PinGiven>();
@@ -69,6 +85,7 @@ export class PinEntry {
 
   private readonly desk = inject(PinDesk);
   private readonly connection = inject(Connection);
+  private readonly whoToCall = inject(WhoToCall);
   private readonly later = signal<Step | null>(null);
   private chosen = '';
   private chosenSeals: { readonly forSetting: SealedPin; readonly forSigning: SealedPin } | null = null;
@@ -76,12 +93,13 @@ export class PinEntry {
   protected readonly trouble = signal('');
   protected readonly isBusy = signal(false);
   protected readonly isPaused = signal(false);
-  protected readonly step = computed<Step>(() => this.later() ?? (this.person().hasPin ? 'enter' : 'choose'));
+  protected readonly step = computed<Step>(() => this.later() ?? (this.person().hasPin && this.person().isPinProven ? 'enter' : 'choose'));
+  protected readonly startDigits = startPinDigits;
+  private readonly chosenWitness = signal<Witness | null>(null);
   protected readonly isOffline = computed(() => this.connection.state() !== 'online');
-  private readonly witness = computed(() => {
-    const lead = this.lead();
-    return lead && lead.id !== this.person().id && lead.hasPin ? lead : null;
-  });
+  private readonly candidates = computed(() => this.witnesses().filter(({ id }) => id !== this.person().id));
+  private readonly witness = computed(() => this.chosenWitness() ?? this.candidates()[0] ?? null);
+  protected readonly others = computed(() => this.candidates().filter(({ id }) => this.step() === 'start' || id !== this.witness()?.id));
 
   protected readonly heading = computed(() => {
     const say = this.say().pin;
@@ -95,11 +113,15 @@ export class PinEntry {
         return say.repeat;
       case 'witness':
         return say.witness(this.witness()?.name ?? '');
+      case 'start':
+        return say.start(name);
     }
   });
   protected readonly detail = computed(() => {
-    if (this.step() === 'choose') return this.say().pin.chooseDetail;
-    return this.step() === 'witness' ? this.say().pin.witnessDetail(this.person().name) : '';
+    const say = this.say().pin;
+    if (this.step() === 'choose') return this.person().hasPin ? say.chooseAgain : say.chooseDetail;
+    if (this.step() === 'start') return say.startDetail(this.whoToCall.contact());
+    return this.step() === 'witness' ? say.witnessDetail(this.person().name) : '';
   });
 
   protected async take(pin: string): Promise<void> {
@@ -115,6 +137,8 @@ export class PinEntry {
           return await this.takeRepeat(pin);
         case 'witness':
           return await this.takeWitness(pin);
+        case 'start':
+          return await this.takeStart(pin);
       }
     } finally {
       this.isBusy.set(false);
@@ -144,8 +168,7 @@ export class PinEntry {
       return;
     }
     this.chosenSeals = { forSetting: await this.desk.seal(pin, await this.desk.pinSetHash(this.person().id)), forSigning: await this.desk.seal(pin, this.textSha256()) };
-    if (this.witness()) this.later.set('witness');
-    else this.giveChosen(null, null);
+    this.later.set(this.witness() ? 'witness' : 'start');
   }
 
   private async takeWitness(pin: string): Promise<void> {
@@ -153,17 +176,40 @@ export class PinEntry {
     if (!witness) return;
     const hash = await this.desk.pinSetHash(this.person().id);
     const [asked, sealed] = await this.sealTwice(pin, hash);
-    if (await this.passes(witness, hash, asked)) this.giveChosen(witness, sealed);
+    if (await this.passes(witness, hash, asked)) this.giveChosen({ witnessPersonId: witness.id, witnessSealedPin: sealed.sealedPin, witnessNonce: sealed.nonce });
   }
 
-  private giveChosen(witness: PersonView | null, sealed: SealedPin | null): void {
+  private async takeStart(pin: string): Promise<void> {
+    const { id } = this.person();
+    const hash = await this.desk.pinSetHash(id);
+    const [asked, sealed] = await this.sealTwice(pin, hash);
+    const answer = await this.desk.check(id, hash, asked, 'start-pin');
+    if (answer.outcome === 'wrong') this.trouble.set(this.say().pin.startWrong(this.whoToCall.contact()));
+    else if (answer.outcome === 'paused') this.pause(answer.seconds);
+    else this.giveChosen({ witnessPersonId: null, startSealedPin: sealed.sealedPin, startNonce: sealed.nonce });
+  }
+
+  protected chooseWitness(witness: Witness): void {
+    this.trouble.set('');
+    this.chosenWitness.set(witness);
+    this.later.set('witness');
+  }
+
+  protected useStartPin(): void {
+    this.trouble.set('');
+    this.later.set('start');
+  }
+
+  /** Kept and marked at the office: it counts once the person has a witnessed PIN and signs again. */
+  protected goOnAlone(): void {
+    if (this.person().hasPin && this.chosenSeals) this.given.emit({ sealed: this.chosenSeals.forSigning, pinSet: null });
+    else this.giveChosen({ witnessPersonId: null });
+  }
+
+  private giveChosen(voucher: Voucher): void {
     if (!this.chosenSeals) return;
     const { forSetting, forSigning } = this.chosenSeals;
-    const witnessing = sealed ? { witnessSealedPin: sealed.sealedPin, witnessNonce: sealed.nonce } : {};
-    this.given.emit({
-      sealed: forSigning,
-      pinSet: { kind: 'pin-set', personId: this.person().id, ...forSetting, witnessPersonId: witness?.id ?? null, ...witnessing },
-    });
+    this.given.emit({ sealed: forSigning, pinSet: { kind: 'pin-set', personId: this.person().id, ...forSetting, ...voucher } });
   }
 
   /** One to ask with and one to keep: what goes over the wire now says nothing about what is kept. */
@@ -171,7 +217,7 @@ export class PinEntry {
     return Promise.all([this.desk.seal(pin, hash), this.desk.seal(pin, hash)]);
   }
 
-  private async passes(person: PersonView, hash: string, sealed: SealedPin): Promise<boolean> {
+  private async passes(person: Witness, hash: string, sealed: SealedPin): Promise<boolean> {
     const answer = await this.desk.check(person.id, hash, sealed);
     if (answer.outcome === 'wrong') this.trouble.set(this.say().pin.wrong(person.name, answer.detail));
     if (answer.outcome === 'paused') this.pause(answer.seconds);
@@ -186,6 +232,15 @@ export class PinEntry {
       this.trouble.set('');
     }, seconds * 1000);
   }
+}
+
+/** What of a new PIN's envelope says who vouched for it. */
+interface Voucher {
+  readonly witnessPersonId: string | null;
+  readonly witnessSealedPin?: string;
+  readonly witnessNonce?: string;
+  readonly startSealedPin?: string;
+  readonly startNonce?: string;
 }
 
 /** One digit over and over, or a run up or down: the first anybody tries. */

@@ -51,7 +51,12 @@ export class SignPane {
     for (const item of this.tasks().flatMap((task) => task.protection)) seen.set(item.name, item);
     return [...seen.values()];
   });
-  protected readonly question = computed(() => (this.tasks().length > 0 ? this.say().sign.own : this.say().sign.ownNoTasks));
+  protected readonly question = computed(() => {
+    const say = this.say().sign;
+    if (this.tasks().length === 0) return say.ownNoTasks;
+    // Whoever wears none is not asked whether it fits: a question that can only be answered with a lie.
+    return this.protection().some(({ mark }) => mark === 'respirator') ? say.own : say.ownNoMask;
+  });
   protected readonly spoken = computed(() => [this.taskWords(), ...this.ownLines(), this.text().text.sentence].join('. '));
 
   /** The box is next: it comes clear of the row of buttons that stays in sight. */

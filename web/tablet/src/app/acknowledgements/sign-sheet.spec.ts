@@ -129,6 +129,68 @@ describe('SignSheet', () => {
     expect(pinSet.witnessPersonId).toBe(ids.dov);
   });
 
+  /** Marisol, who has no PIN, draws and chooses one; then somebody must vouch. */
+  async function marisolChooses(): Promise<void> {
+    await page.press('Marisol');
+    await page.press('Sí, coincide');
+    draw();
+    await page.press('Listo');
+    await page.typePin('7391');
+    await page.typePin('7391');
+  }
+
+  it('takes the start PIN from the office where no lead can witness', async () => {
+    await marisolChooses();
+    await page.press('Tengo un PIN de inicio');
+    await page.typePin('4071');
+    expect(await page.text()).toContain('El PIN de inicio tiene 8 números.');
+    await page.typePin('22981');
+    const [pinSet, signed] = written();
+    expect([pinSet?.kind, signed?.kind]).toEqual(['pin-set', 'signed']);
+    if (pinSet?.kind !== 'pin-set') throw new Error('no new PIN');
+    expect(pinSet).toMatchObject({ witnessPersonId: null });
+    expect(await keys.open(pinSet.startSealedPin ?? '')).toMatchObject({ pin: '40712298', nonce: pinSet.startNonce });
+    expect(JSON.parse(office.pinChecks[0] ?? '{}')).toMatchObject({ kind: 'start-pin', personId: ids.marisol });
+  });
+
+  it('goes on without anybody, and says on the spot that it does not count', async () => {
+    dropSignal();
+    await marisolChooses();
+    expect(await page.text()).toContain('no cuenta hasta que elija el PIN delante de un líder');
+    await page.press('Ahora no hay testigo');
+    expect(written().map(({ kind }) => kind)).toEqual(['pin-set', 'signed']);
+    expect(written()[0]).toMatchObject({ witnessPersonId: null });
+    expect(written()[0]).not.toHaveProperty('startSealedPin');
+    // The list is in the tablet's own language.
+    expect(await page.text()).toContain('PIN not witnessed');
+  });
+
+  it('is witnessed by another lead or officer than the day’s lead', async () => {
+    office.day = { ...(await tabletDay(keys.spki)), witnesses: [{ id: ids.dov, name: 'Dov Lindqvist' }, { id: ids.nobody, name: 'Ines Halloran' }] };
+    await TestBed.inject(Day).refresh();
+    await marisolChooses();
+    await page.press('Ines Halloran es testigo');
+    expect(await page.text()).toContain('Ines Halloran, escriba su propio PIN');
+    await page.typePin('8642');
+    expect(written()[0]).toMatchObject({ kind: 'pin-set', witnessPersonId: ids.nobody });
+  });
+
+  it('asks nobody without a mask whether it fits', async () => {
+    await page.press('Abe');
+    expect(await page.text()).toContain('does the mask fit?');
+    await page.press('Not me');
+    const bare = checklistText();
+    const text = JSON.stringify({ ...bare, tasks: bare.tasks.map((task) => ({ ...task, protection: [] })) });
+    const day = await tabletDay(keys.spki);
+    const [job] = day.jobs;
+    if (!job) throw new Error('no job');
+    office.day = { ...day, jobs: [{ ...job, version: { ...job.version, texts: [{ language: 'en', text, sha256: await sha256Hex(text) }] } }] };
+    await TestBed.inject(Day).refresh();
+    await page.press('Abe');
+    expect(await page.text()).not.toContain('does the mask fit?');
+    expect(await page.text()).toContain('do you know what to wear for them?');
+  });
+
   it('starts a new PIN over when the second differs, and takes no run or repeat', async () => {
     dropSignal();
     await page.press('Marisol');

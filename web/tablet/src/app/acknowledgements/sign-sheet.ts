@@ -5,7 +5,7 @@ import { type OpenedText } from '../checklists/opened-text';
 import { type DayJob } from '../day/day';
 import { Frame } from '../frame/frame';
 import { bestText, type GoodText, injectJob } from '../jobs/found-job';
-import { type PersonView } from '../jobs/job-view';
+import { type PersonView, type Witness } from '../jobs/job-view';
 import { NoJob } from '../jobs/no-job';
 import { type Draft, Outbox, TooLong } from '../outbox/outbox';
 import { Sender } from '../outbox/sender';
@@ -21,7 +21,7 @@ import { SignPane } from './sign-pane';
 /** One person at the tablet. The version and its texts are those of the moment they began: what is read is what is signed. */
 interface Sitting {
   readonly person: PersonView;
-  readonly lead: PersonView | null;
+  readonly witnesses: readonly Witness[];
   readonly job: DayJob;
   readonly texts: readonly OpenedText[];
   readonly isBriefed: boolean;
@@ -118,7 +118,7 @@ export class SignSheet {
     this.strokes.set(null);
     this.language.set(person.language);
     this.step.set('read');
-    this.sitting.set({ person, lead: found.view.lead, job: found.view.job, texts: found.texts, isBriefed: found.view.briefing !== null });
+    this.sitting.set({ person, witnesses: found.view.witnesses, job: found.view.job, texts: found.texts, isBriefed: found.view.briefing !== null });
   }
 
   protected stop(): void {

@@ -10,13 +10,25 @@ import { injectJob } from '../jobs/found-job';
 import { NoJob } from '../jobs/no-job';
 import { NotKept, Storage } from '../outbox/storage';
 import { Outbox } from '../outbox/outbox';
+import { type Draft as Envelope } from '../outbox/outbox';
 import { Sender } from '../outbox/sender';
+import { PinDesk } from '../acknowledgements/pin-desk';
+import { PinEntry, type PinGiven } from '../acknowledgements/pin-entry';
+import { type PersonView, type Witness } from '../jobs/job-view';
 import { clockTime, dayName } from '../words/dates';
 import { Words } from '../words/words';
 
 interface Given {
   readonly answer: 'yes' | 'no';
   readonly note: string;
+}
+/** A whole briefing that waits for the PIN of who gave it: a newer list or another lead meanwhile changes nothing of it. */
+interface Asked {
+  readonly person: PersonView;
+  readonly witnesses: readonly Witness[];
+  readonly textSha256: string;
+  readonly envelope: Envelope;
+  readonly versionId: string;
 }
 /** Half a briefing, kept so that a sleeping tablet does not lose it. */
 interface Draft {
@@ -27,7 +39,7 @@ interface Draft {
 /** The morning lines, said by the lead and answered as they are now. */
 @Component({
   selector: 'kb-briefing',
-  imports: [Frame, NoJob, Note, Mark, LineSource, RouterLink],
+  imports: [Frame, NoJob, Note, Mark, LineSource, PinEntry, RouterLink],
   templateUrl: './briefing.html',
   styleUrl: './briefing.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -37,6 +49,7 @@ export class Briefing {
   private readonly outbox = inject(Outbox);
   private readonly sender = inject(Sender);
   private readonly storage = inject(Storage);
+  private readonly desk = inject(PinDesk);
   private readonly router = inject(Router);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   protected readonly call = inject(WhoToCall).afterNo;
@@ -45,6 +58,7 @@ export class Briefing {
 
   protected readonly given = signal<Readonly<Record<string, Given>>>({});
   protected readonly trouble = signal('');
+  protected readonly asked = signal<Asked | null>(null);
   /** While the answers are written: a second tap on Done is not a second briefing. */
   private isKeeping = false;
   private readonly chosenLead = signal<string | null>(null);
@@ -93,34 +107,50 @@ export class Briefing {
     return `${task ? say.holdsTask(task.name) : say.holdsAll} ${this.call()}`;
   }
 
+  /** All lines are answered: now the PIN of who answered them. */
   protected async finish(): Promise<void> {
     const view = this.view();
     const say = this.words.say();
-    if (!view || this.isKeeping) return;
+    if (!view) return;
     const open = view.text.morning.find(({ id }) => !this.given()[id]);
-    const personId = this.leadId();
+    const person = view.people.find(({ id }) => id === this.leadId());
     if (open) {
       this.trouble.set(say.briefing.missing);
       this.host.nativeElement.querySelector<HTMLElement>(`[data-line="${CSS.escape(open.id)}"] button`)?.focus();
       return;
     }
-    if (!personId) {
+    if (!person) {
       this.trouble.set(say.briefing.whoMissing);
       return;
     }
     const answers = view.text.morning.map(({ id }) => ({ lineId: id, answer: this.given()[id]?.answer ?? 'no', note: this.given()[id]?.note.trim() || null }));
+    const versionId = view.job.version.id;
+    const textSha256 = await this.desk.answersHash('briefing', versionId, null, answers);
+    this.trouble.set('');
+    this.asked.set({ person, witnesses: view.witnesses, textSha256, versionId, envelope: { kind: 'briefing', versionId, personId: person.id, answers, shiftId: view.job.shiftId } });
+  }
+
+  protected async keep({ sealed, pinSet }: PinGiven): Promise<void> {
+    const asked = this.asked();
+    if (!asked || this.isKeeping) return;
     this.isKeeping = true;
     try {
-      await this.outbox.add([{ kind: 'briefing', versionId: view.job.version.id, personId, answers, shiftId: view.job.shiftId }]);
+      const briefing: Envelope = { ...asked.envelope, ...sealed };
+      await this.outbox.add(pinSet ? [pinSet, briefing] : [briefing]);
     } catch (error) {
       this.isKeeping = false;
       if (!(error instanceof NotKept)) throw error;
-      this.trouble.set(say.sign.notKept);
+      this.asked.set(null);
+      this.trouble.set(this.words.say().sign.notKept);
       return;
     }
-    await this.keepDraft({ versionId: view.job.version.id, given: {} });
+    await this.keepDraft({ versionId: asked.versionId, given: {} });
     void this.sender.sendNow();
     await this.router.navigate(['/jobs', this.shiftId()]);
+  }
+
+  protected goBack(): void {
+    this.asked.set(null);
   }
 
   private change(lineId: string, given: Given): void {

@@ -24,7 +24,7 @@ export function injectJob(shiftId: Signal<string>): Signal<FoundJob> {
     if (!opened || serverTime === undefined) return { state: day.isLoaded() ? 'gone' : 'loading' };
     const text = bestText(opened.texts, words.language());
     if (!text) return { state: opened.texts.some(({ state }) => state === 'damaged') ? 'damaged' : 'unreadable', job: opened.job };
-    return { state: 'good', view: jobView(opened.job, text.text, outbox.posted(), serverTime), text, texts: opened.texts };
+    return { state: 'good', view: jobView(opened.job, text.text, outbox.posted(), serverTime, day.day()?.witnesses ?? []), text, texts: opened.texts };
   });
 }
 

@@ -2,27 +2,26 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { RouterLink } from '@angular/router';
 import { Note } from '#ui/note';
 import { State, type StateKind } from '#ui/state';
-import { WhoToCall } from '../connection/who-to-call';
 import { Frame } from '../frame/frame';
 import { clockTime, dayName, nameList, whenTime } from '../words/dates';
 import { Words } from '../words/words';
 import { injectJob } from './found-job';
-import { type JobView, type PersonView, type TaskView } from './job-view';
+import { type JobView, type PersonView, type Reopening, type TaskView } from './job-view';
 import { NoJob } from './no-job';
+import { StopNote } from './stop-note';
 
 const taskKinds: Readonly<Record<TaskView['state'], StateKind>> = { 'may-not-start': 'stop', 'not-decided': 'caution', stopped: 'stop', started: 'done', ready: 'plain' };
 
 /** One job today: the briefing, the signing, and what each task needs before it starts. */
 @Component({
   selector: 'kb-job-home',
-  imports: [Frame, NoJob, Note, State, RouterLink],
+  imports: [Frame, NoJob, Note, State, StopNote, RouterLink],
   templateUrl: './job-home.html',
   styleUrl: './job-home.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class JobHome {
   readonly shiftId = input.required<string>();
-  protected readonly call = inject(WhoToCall).afterNo;
   protected readonly words = inject(Words);
   protected readonly found = injectJob(this.shiftId);
   protected readonly taskKinds = taskKinds;
@@ -42,7 +41,9 @@ export class JobHome {
       return names.length > 0 ? [words(nameList(names, this.words.language()))] : [];
     };
     return [
-      ...about(say.notConfirmed, ({ state }) => state === 'not-confirmed'),
+      ...about(say.notConfirmed, ({ doubt }) => doubt === 'pin-wrong'),
+      ...about(say.noPin, ({ doubt }) => doubt === 'no-pin'),
+      ...about(say.noWitness, ({ doubt }) => doubt === 'no-witness'),
       ...about(say.second, ({ noted }) => noted === 'second'),
       ...about(say.keptAside, ({ noted }) => noted === 'kept-aside'),
     ];
@@ -58,10 +59,14 @@ export class JobHome {
   protected briefingWords(view: JobView): string {
     const say = this.words.say();
     if (!view.briefing) return say.job.briefingNot;
-    const done = say.job.briefingDone(clockTime(view.briefing.at, this.words.language()));
+    const done = say.job.briefingDone(clockTime(view.briefing.at, this.words.language()), view.briefing.by);
     const no = view.briefing.noLineIds.length;
     const sending = view.briefing.sending;
-    return [done, no > 0 ? say.job.briefingNo(no) : '', sending ? say.people[sending] : ''].filter(Boolean).join(', ');
+    return [done, no > 0 ? say.job.briefingNo(no) : '', view.briefing.isProven ? '' : say.job.briefingUnproven, sending ? say.people[sending] : ''].filter(Boolean).join(', ');
+  }
+
+  protected reopenedWords({ at, by, evidence }: Reopening): string {
+    return this.words.say().task.reopened(whenTime(at, this.words.language()), by, evidence);
   }
 
   protected names(people: readonly PersonView[]): string {

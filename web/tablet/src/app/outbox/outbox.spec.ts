@@ -22,7 +22,7 @@ function tab(): Outbox {
 }
 
 function receiptFor(id: string, more: Partial<Receipt> = {}): Receipt {
-  return { id, outcome: 'recorded', acknowledgementId: null, entryIndex: null, pinState: null, isSuperseded: false, note: null, ...more };
+  return { id, outcome: 'recorded', acknowledgementId: null, entryIndex: null, pinState: null, isUnwitnessed: false, isSuperseded: false, note: null, ...more };
 }
 
 describe('Outbox', () => {

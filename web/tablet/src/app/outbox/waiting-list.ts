@@ -80,7 +80,7 @@ export class WaitingList {
       who: envelope ? this.nameOf(envelope.personId) : '',
       kind: !receipt ? 'caution' : receipt.outcome === 'kept-aside' ? 'plain' : 'done',
       state: receipt ? say.done[receipt.outcome] : say.waiting,
-      remarks: [receipt?.isSuperseded ? say.superseded : '', receipt?.pinState === 'not-confirmed' ? say.notConfirmed : ''].join(' ').trim(),
+      remarks: [receipt?.isSuperseded ? say.superseded : '', receipt?.isUnwitnessed ? say.noWitness : receipt?.pinState === 'not-confirmed' ? say.notConfirmed : receipt?.pinState === 'not-set' ? say.noPin : ''].join(' ').trim(),
     };
   }
 

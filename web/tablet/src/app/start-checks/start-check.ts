@@ -10,10 +10,14 @@ import { WhoToCall } from '../connection/who-to-call';
 import { Frame } from '../frame/frame';
 import { injectJob } from '../jobs/found-job';
 import { NoJob } from '../jobs/no-job';
-import { Outbox } from '../outbox/outbox';
+import { PinDesk } from '../acknowledgements/pin-desk';
+import { PinEntry, type PinGiven } from '../acknowledgements/pin-entry';
+import { type PersonView, type Witness } from '../jobs/job-view';
+import { StopNote } from '../jobs/stop-note';
+import { type Draft, Outbox } from '../outbox/outbox';
 import { Sender } from '../outbox/sender';
 import { NotKept } from '../outbox/storage';
-import { clockTime, dayName, nameList } from '../words/dates';
+import { clockTime, dayName, nameList, whenTime } from '../words/dates';
 import { messagesIn, tabletLanguages, Words } from '../words/words';
 
 interface Answered {
@@ -22,13 +26,22 @@ interface Answered {
   readonly note: string | null;
 }
 
+/** All lines answered, waiting for the PIN of who answered. */
+interface Asked {
+  readonly person: PersonView;
+  readonly witnesses: readonly Witness[];
+  readonly textSha256: string;
+  readonly envelope: Draft;
+  readonly answers: readonly Answered[];
+}
+
 /** The buttons stay in one place while the lines change: a gloved finger that bounces must not answer a line nobody saw. */
 const bounceMs = 500;
 
 /** The live lines that unlock one task, one at a time, answered where the work is. A critical "No" stops the task at once. */
 @Component({
   selector: 'kb-start-check',
-  imports: [Frame, NoJob, Empty, Mark, Note, LineSource, ReadAloud, RouterLink],
+  imports: [Frame, NoJob, Empty, Mark, Note, LineSource, PinEntry, ReadAloud, RouterLink, StopNote],
   templateUrl: './start-check.html',
   styleUrl: './start-check.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -38,6 +51,7 @@ export class StartCheck {
   readonly taskId = input.required<string>();
   private readonly outbox = inject(Outbox);
   private readonly sender = inject(Sender);
+  private readonly desk = inject(PinDesk);
   protected readonly whoToCall = inject(WhoToCall);
   protected readonly words = inject(Words);
   protected readonly found = injectJob(this.shiftId);
@@ -56,6 +70,7 @@ export class StartCheck {
   /** A newer version may ask other lines: what was answered of the old one begins anew, or it would fit neither. */
   protected readonly at = linkedSignal<string | null, number>({ source: this.versionId, computation: () => 0 });
   private readonly answered = linkedSignal<string | null, readonly Answered[]>({ source: this.versionId, computation: () => [] });
+  protected readonly asked = linkedSignal<string | null, Asked | null>({ source: this.versionId, computation: () => null });
   protected readonly one = computed(() => this.view()?.tasks.find(({ task }) => task.taskId === this.taskId()) ?? null);
   protected readonly line = computed<TextLine | null>(() => this.one()?.task.live[this.at()] ?? null);
   protected readonly checkerId = computed(() => this.chosenChecker() ?? this.view()?.lead?.id ?? this.one()?.people[0]?.id ?? null);
@@ -104,6 +119,14 @@ export class StartCheck {
     this.chosenChecker.set(personId);
   }
 
+  protected leavePin(): void {
+    this.asked.set(null);
+  }
+
+  protected reopenedAt(instant: string): string {
+    return whenTime(instant, this.words.language());
+  }
+
   protected goBack(): void {
     this.at.update((at) => Math.max(0, at - 1));
     this.answered.update((answers) => answers.slice(0, -1));
@@ -122,15 +145,33 @@ export class StartCheck {
       this.at.update((at) => at + 1);
       return;
     }
-    await this.keep(answers, isStop);
+    await this.finish(answers, isStop);
   }
 
-  private async keep(answers: readonly Answered[], isStop: boolean): Promise<void> {
+  /** A stop needs no PIN: nobody looks for one while the dust is in the air. What lets a task start is proven like a signature. */
+  private async finish(answers: readonly Answered[], isStop: boolean): Promise<void> {
     const view = this.view();
-    const personId = this.checkerId();
-    if (!view || !personId) return this.isSettling.set(false);
+    const person = view?.people.find(({ id }) => id === this.checkerId());
+    if (!view || !person) return this.isSettling.set(false);
+    const versionId = view.job.version.id;
+    const envelope: Draft = { kind: 'start-check', versionId, personId: person.id, taskId: this.taskId(), answers: [...answers], shiftId: view.job.shiftId };
+    if (isStop) return this.keep([envelope], answers, true);
+    this.asked.set({ person, witnesses: view.witnesses, textSha256: await this.desk.answersHash('start-check', versionId, this.taskId(), answers), envelope, answers });
+    this.isSettling.set(false);
+  }
+
+  protected async keepProven({ sealed, pinSet }: PinGiven): Promise<void> {
+    const asked = this.asked();
+    if (!asked || this.isSettling()) return;
+    this.isSettling.set(true);
+    const check: Draft = { ...asked.envelope, ...sealed };
+    await this.keep(pinSet ? [pinSet, check] : [check], asked.answers, false);
+    this.asked.set(null);
+  }
+
+  private async keep(envelopes: readonly Draft[], answers: readonly Answered[], isStop: boolean): Promise<void> {
     try {
-      await this.outbox.add([{ kind: 'start-check', versionId: view.job.version.id, personId, taskId: this.taskId(), answers: [...answers], shiftId: view.job.shiftId }]);
+      await this.outbox.add(envelopes);
     } catch (error) {
       if (!(error instanceof NotKept)) throw error;
       this.trouble.set(this.words.say().sign.notKept);

@@ -24,7 +24,7 @@ describe('the history page', () => {
     const asked = () => server.match((request) => request.url === '/api/acknowledgements');
     return { server, harness, settle, element, asked, router: TestBed.inject(Router) };
   }
-  const person = { id: personId, name: 'Marisol Tena', language: 'es', employer: null, isAdultConfirmed: true, isKeptFromIsocyanates: false, silicaTrainedOn: null, hazcomTrainedOn: null, respirators: [], isActive: true, version: 1, hasPin: true, login: null };
+  const person = { id: personId, name: 'Marisol Tena', language: 'es', employer: null, isAdultConfirmed: true, isKeptFromIsocyanates: false, silicaTrainedOn: null, hazcomTrainedOn: null, respirators: [], isActive: true, version: 1, hasPin: true, pinProof: 'lead', startPin: null, login: null };
   const empty = { items: [], next: null, total: 24118, found: 0, isFoundCapped: false };
 
   it('asks for what the address says, and exports the same', async () => {

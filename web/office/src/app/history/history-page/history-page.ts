@@ -12,6 +12,7 @@ import { PagedList } from '../../contract/paged-list';
 import { momentShort } from '../../pieces/dates';
 import { Unready } from '../../pieces/unready';
 import { SessionApi } from '../../session/session-api';
+import { PinEvents } from '../../people/pin-events/pin-events';
 import { EntryDetail } from '../entry-detail/entry-detail';
 import { HistoryApi, type HistoryFilter } from '../history-api';
 import { HistoryFilters } from '../history-filters/history-filters';
@@ -23,7 +24,7 @@ const text = (value: string | undefined): string | undefined => value || undefin
 /** Every acknowledgement, newest first. Filters and the open entry stand in the address, so that a link shows the same. */
 @Component({
   selector: 'kb-history-page',
-  imports: [Empty, EntryDetail, HistoryFilters, MatButton, PageHeader, RecordResult, State, Unready],
+  imports: [Empty, EntryDetail, HistoryFilters, MatButton, PageHeader, PinEvents, RecordResult, State, Unready],
   templateUrl: './history-page.html',
   styleUrl: './history-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -61,6 +62,7 @@ export class HistoryPage {
 
   protected readonly opened = signal<Acknowledgement | null>(null);
   protected readonly openProblem = signal<Problem | null>(null);
+  protected readonly isPinListOpen = signal(false);
   protected readonly isChecking = signal(false);
   protected readonly check = signal<RecordCheck | null>(null);
   protected readonly checkProblem = signal<Problem | null>(null);

@@ -42,7 +42,7 @@ describe('publishing', () => {
     await button.click();
     const sent = server.expectOne(url);
     expect(sent.request.headers.get('If-Match')).toBe('"7"');
-    const published = { id: shiftIds.job, number: 2, publishedAt: '2026-12-03T12:00:00Z', publishedBy: 'Ines Halloran', manifestSha256: 'a', texts: [], asked: [] };
+    const published = { id: shiftIds.job, number: 2, publishedAt: '2026-12-03T12:00:00Z', publishedBy: 'Ines Halloran', manifestSha256: 'a', texts: [], asked: [], answers: [] };
     sent.flush(published);
     await new Promise((resolve) => setTimeout(resolve));
     expect(close).toHaveBeenCalledWith(published);

@@ -1,9 +1,11 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
 import { RouterLink } from '@angular/router';
-import { type PublishedVersion } from '#shared/jobs';
+import { TASKS } from '#compliance/silica/tasks.data';
+import { type PublishedVersion, type ShiftPlan } from '#shared/jobs';
 import { State, type StateKind } from '#ui/state';
 import { ExactTextDialog, type ExactTextQuestion } from '../../history/exact-text-dialog';
+import { pinWords, timeWords } from '../../history/history-words';
 import { momentShort, timeOf } from '../../pieces/dates';
 
 type SigningState = PublishedVersion['asked'][number]['state'];
@@ -35,10 +37,21 @@ const words: Readonly<Record<SigningState, { readonly kind: StateKind; readonly 
               <li>
                 <span>{{ person.name }}</span>
                 <span class="kb-quiet">{{ languages[person.language] }}</span>
-                <kb-state [kind]="states[person.state].kind">{{ states[person.state].words }}{{ person.at ? ' ' + timeOf(person.at) : '' }}</kb-state>
+                <kb-state [kind]="states[person.state].kind">{{ stateWords(person) }}{{ person.at ? ' ' + timeOf(person.at) : '' }}</kb-state>
               </li>
             }
           </ul>
+          @if (version.answers.length > 0) {
+            <ul class="kb-rows people" style="--kb-columns: 10rem minmax(10rem, 1fr) minmax(10rem, 1fr)" [attr.aria-label]="'Briefings and start checks on version ' + version.number">
+              @for (set of version.answers; track set.id) {
+                <li>
+                  <span>{{ set.kind === 'briefing' ? 'Briefing' : 'Start check' }} {{ timeOf(set.timeDoubt ? set.receivedAt : set.at) }}</span>
+                  <span>{{ set.personName }}{{ taskWords(set) }}{{ set.noCount > 0 ? ', ' + set.noCount + ' No' : '' }}</span>
+                  <kb-state [kind]="set.pinState === 'confirmed' && !set.timeDoubt ? 'done' : 'caution'">{{ answerWords(set) }}</kb-state>
+                </li>
+              }
+            </ul>
+          }
         } @else {
           <p class="kb-small kb-quiet">{{ signedOf(version) }}</p>
         }
@@ -61,12 +74,27 @@ export class ShiftVersions {
   private readonly dialogs = inject(MatDialog);
 
   readonly versions = input.required<readonly PublishedVersion[]>();
+  readonly tasks = input<ShiftPlan['tasks']>([]);
 
   protected readonly ordered = computed(() => [...this.versions()].sort((a, b) => b.number - a.number));
   protected readonly states = words;
   protected readonly languages = { en: 'English', es: 'Español' } as const;
   protected readonly momentShort = momentShort;
   protected readonly timeOf = timeOf;
+
+  protected stateWords({ state, pinState }: PublishedVersion['asked'][number]): string {
+    return (state === 'not-confirmed' && pinState && pinWords[pinState]) || words[state].words;
+  }
+
+  /** ", floor grinding"; nothing for a briefing, or a task that is no longer planned. */
+  protected taskWords({ taskId }: PublishedVersion['answers'][number]): string {
+    const task = this.tasks().find(({ id }) => id === taskId);
+    return task ? `, ${TASKS[task.kind].name.en.toLowerCase()}` : '';
+  }
+
+  protected answerWords({ pinState, timeDoubt }: PublishedVersion['answers'][number]): string {
+    return [pinWords[pinState] || 'proven by PIN', timeDoubt ? timeWords[timeDoubt] : ''].filter(Boolean).join(', ');
+  }
 
   protected signedOf({ asked }: PublishedVersion): string {
     return `${asked.filter(({ state }) => state === 'signed').length} of ${asked.length} signed it. Their signatures stay on record with this text.`;

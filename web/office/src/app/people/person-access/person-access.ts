@@ -1,27 +1,37 @@
-import { ChangeDetectionStrategy, Component, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input, linkedSignal, output, signal, untracked } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { firstValueFrom } from 'rxjs';
 import { roleNames, roles, type Role } from '#shared/common';
 import { type Person, SetLogin } from '#shared/people';
+import { Note } from '#ui/note';
 import { problemOf, problemWords } from '#ui/problem';
+import { State } from '#ui/state';
 import { Access } from '../../contract/access';
 import { Confirmation } from '../../pieces/confirmation';
 import { ChoiceField, type Choice } from '../../pieces/fields/choice-field';
 import { TextField } from '../../pieces/fields/text-field';
 import { FormTrouble } from '../../pieces/form-trouble';
+import { dayOf } from '../../pieces/dates';
 import { PeopleApi } from '../people-api';
+import { PinEvents } from '../pin-events/pin-events';
 
 /** How a person gets in: PIN on the tablet, sign-in to the office. */
 @Component({
   selector: 'kb-person-access',
-  imports: [ChoiceField, FormTrouble, MatButton, ReactiveFormsModule, TextField],
+  imports: [ChoiceField, FormTrouble, MatButton, Note, PinEvents, ReactiveFormsModule, State, TextField],
   templateUrl: './person-access.html',
   styles: `
     :host {
       display: flex;
       flex-direction: column;
       gap: 0.75rem;
+    }
+
+    .digits {
+      font-size: 1.75rem;
+      font-variant-numeric: tabular-nums;
+      letter-spacing: 0.08em;
     }
 
     .grid {
@@ -44,6 +54,14 @@ export class PersonAccess {
   readonly changed = output<Person>();
 
   protected readonly mayResetPin = computed(() => this.access.may('resetPin') && this.person().hasPin);
+  protected readonly mayGiveStartPin = computed(() => this.access.may('giveStartPin') && this.person().isActive && (!this.person().hasPin || this.person().pinProof === 'none'));
+  protected readonly mayListPinEvents = computed(() => this.access.may('listPinEvents'));
+  /** By id: a person that was read again is still the same. */
+  private readonly personId = computed(() => this.person().id);
+  /** Shown until another person is opened. */
+  protected readonly startDigits = linkedSignal<string, string>({ source: this.personId, computation: () => '' });
+  protected readonly isPinListOpen = linkedSignal<string, boolean>({ source: this.personId, computation: () => false });
+  protected readonly dayOf = dayOf;
   protected readonly maySetLogin = computed(() => this.access.may('setLogin'));
   protected readonly isOpen = signal(false);
   protected readonly isSending = signal(false);
@@ -65,8 +83,16 @@ export class PersonAccess {
 
   protected async resetPin(): Promise<void> {
     const { id, name } = this.person();
-    const isSure = await this.confirmation.ask({ heading: `Reset the PIN of ${name}?`, text: `${name} chooses a new one on a paired tablet, witnessed by the lead. Nobody can choose it for them. Signatures given before stay as they are.`, action: 'Reset PIN' });
+    const isSure = await this.confirmation.ask({ heading: `Reset the PIN of ${name}?`, text: `${name} chooses a new one on a paired tablet, before a lead or with a start PIN. Nobody can choose it for them. Signatures given before stay as they are.`, action: 'Reset PIN' });
     if (isSure) await this.send(() => firstValueFrom(this.api.resetPin(id)));
+  }
+
+  protected async giveStartPin(): Promise<void> {
+    await this.send(async () => {
+      const { pin, person } = await firstValueFrom(this.api.giveStartPin(this.person().id));
+      this.startDigits.set(pin);
+      return person;
+    });
   }
 
   protected async giveLogin(): Promise<void> {
