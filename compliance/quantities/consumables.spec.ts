@@ -30,7 +30,7 @@ describe('what a shift uses up (consumable-amount)', () => {
   it.each<[string, ConsumableRate, string]>([
     ['0.4 kg a m² of 55.74 m²', rate(), 'Steel shot: 22.3 kg.'],
     ['8 kg a machine hour, 2.5 h', rate({ amount: 8, per: 'hour' }), 'Steel shot: 20 kg.'],
-    ['a set for each 6 machine hours, 2 h 55 min: one piece begun', rate({ item: 'diamonds', amount: 1 / 6, unit: 'pieces', per: 'hour' }), 'Diamond tools: 1 pieces.'],
+    ['a set for each 6 machine hours, 2 h 55 min: one piece begun', rate({ item: 'diamonds', amount: 1 / 6, unit: 'pieces', per: 'hour' }), 'Diamond tools: 1 piece.'],
     ['a bag for 4 m²: 13.9 are 14', rate({ item: 'collector-bags', amount: 0.25, unit: 'pieces' }), 'Collector bags: 14 pieces.'],
     ['3 m of tape a kit, 24 kits', rate({ item: 'tape', amount: 3, unit: 'm', per: 'kit' }), 'Masking tape: 72 m.'],
     ['two filters a person, one person at the blaster', rate({ amount: 2, unit: 'pieces', per: 'person' }), 'Steel shot: 2 pieces.'],

@@ -49,6 +49,7 @@ export function rounded(amount: number, unit: ConsumableRate['unit']): number {
 const isStated = ({ amount, statedBy }: ConsumableRate): boolean => Number.isFinite(amount) && amount > 0 && statedBy.trim() !== '';
 const PER: Readonly<Record<ConsumableRate['per'], Words>> = { m2: words('m²', 'm²'), hour: words('machine hour', 'hora de máquina'), kit: words('kit', 'kit'), person: words('person', 'persona') };
 const UNIT: Readonly<Record<ConsumableRate['unit'], Words>> = { pieces: words('pieces', 'piezas'), kg: words('kg', 'kg'), m: words('m', 'm') };
+const unitOf = (unit: ConsumableRate['unit'], amount: unknown): Words => (unit === 'pieces' && amount === 1 ? words('piece', 'pieza') : UNIT[unit]);
 
 /** Amounts for the shift from rates that a person stated. A rate that nobody stated is not known: it is never put in by the program. */
 export const consumableRule: ShiftRule<ConsumableOfShift> = {
@@ -62,12 +63,12 @@ export const consumableRule: ShiftRule<ConsumableOfShift> = {
     const { row, rate } = context;
     const inputs = { rate: rate?.amount ?? null, unit: rate?.unit ?? null, per: rate?.per ?? null, 'stated by': rate?.statedBy ?? null };
     const state = words('State a rate and where it comes from.', 'Dé un consumo y de dónde sale.');
-    if (rate === null) return undecided(words('Not known: nobody stated a rate.', 'No se sabe: nadie dio un consumo.'), row.whoSays, { inputs, whatWouldChange: state });
+    if (rate === null) return undecided(words('Nobody stated a rate.', 'Nadie dio un consumo.'), row.whoSays, { inputs, whatWouldChange: state });
     if (!isStated(rate)) return unmet(words('The rate is not above zero, or nobody is named for it.', 'El consumo no es mayor que cero, o nadie responde por él.'), { inputs, whatWouldChange: state });
     const base = baseOf(rate.per, context);
     if (base === null) return undecided(words(`Not known: how many ${PER[rate.per].en} is missing.`, `No se sabe: falta cuántos ${PER[rate.per].es}.`), words('the crew lead', 'el jefe de cuadrilla'), { inputs, whatWouldChange: words('Give area, thickness or count.', 'Dé área, espesor o cuenta.') });
     const amount = rounded(rate.amount * base, rate.unit);
-    return met(words(`${rate.amount} ${UNIT[rate.unit].en} a ${PER[rate.per].en}, stated by ${rate.statedBy}.`, `${rate.amount} ${UNIT[rate.unit].es} por ${PER[rate.per].es}, según ${rate.statedBy}.`), {
+    return met(words(`${rate.amount} ${unitOf(rate.unit, rate.amount).en} a ${PER[rate.per].en}, stated by ${rate.statedBy}.`, `${rate.amount} ${unitOf(rate.unit, rate.amount).es} por ${PER[rate.per].es}, según ${rate.statedBy}.`), {
       inputs: { ...inputs, [`counted, ${PER[rate.per].en}`]: Math.round(base * 100) / 100 },
       results: { [`amount, ${rate.unit}`]: amount },
     });
@@ -76,7 +77,8 @@ export const consumableRule: ShiftRule<ConsumableOfShift> = {
     const { row, rate } = context;
     const amount = rate === null ? null : results[`amount, ${rate.unit}`];
     if (outcome !== 'met' || rate === null || amount === undefined) return words(`${row.name.en}: amount not known.`, `${row.name.es}: cantidad sin saber.`);
-    return words(`${row.name.en}: ${amount} ${UNIT[rate.unit].en}.`, `${row.name.es}: ${amount} ${UNIT[rate.unit].es}.`);
+    const unit = unitOf(rate.unit, amount);
+    return words(`${row.name.en}: ${amount} ${unit.en}.`, `${row.name.es}: ${amount} ${unit.es}.`);
   },
   sourceOf: ({ row }) => row.source,
 };

@@ -59,7 +59,7 @@ export function demoEquipment(daysAgo: (days: number) => string): Readonly<Recor
   };
 }
 
-export const kit = { name: 'Quarrybond 40', volumeL: Math.round(((25 * 0.25) / 12) * L_PER_FT3 * 1000) / 1000, mixMinutesPerKit: 2, bucketMinutes: 5 };
+export const kit = { name: 'Quarrybond 40', volumeL: Math.round(((25 * 0.25) / 12) * L_PER_FT3 * 1000) / 1000, mixMinutesPerKit: 2, bucketMinutes: 5, cartridgeSchedule: { change: 'new ones before each day of resin', basedOn: 'service-life table of the mask’s maker, read by Ines Halloran' } };
 
 const square = (feet2: number) => Math.round(feet2 * M2_PER_FT2 * 100) / 100;
 const cubic = (feet3: number) => Math.round((feet3 * L_PER_FT3) / 10) / 100;

@@ -211,6 +211,10 @@ function creameryDay(idOf: Ids, machines: Machines, kit: Kit): ShiftPlan {
     competentPersonId: dov,
     personIds: [dov, marisol, abe, tomasz, per],
     kits: [{ kitId: kit.id, count: null }],
+    consumableRates: [
+      { item: 'shot', amount: 0.4, unit: 'kg', per: 'm2', statedBy: 'Abe Kowalczyk, counted on the last floor' },
+      { item: 'cartridges', amount: 2, unit: 'pieces', per: 'person', statedBy: 'the change schedule of the kit' },
+    ],
     tasks: [
       task('inspection', [on(dov, at(6, 30), at(7)), on(dov, at(9, 30), at(10))]),
       task('floor-grinding', [on(dov, at(7), at(9, 10))], { equipmentId: machines.grinder, collectorId: machines.grinderCollector, dustMethod: 'vacuum' }),

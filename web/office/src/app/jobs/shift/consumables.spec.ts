@@ -56,7 +56,7 @@ describe('what a shift uses up, on its page', () => {
     press('Use this rate');
     expect(told).toEqual([{ item: 'diamonds', amount: 0.5, unit: 'pieces', per: 'hour', statedBy: 'maker’s manual, page 12' }]);
     // Two hours of grinding at half a set an hour.
-    expect(element().textContent).toContain('Diamond tools: 1 pieces.');
+    expect(element().textContent).toContain('Diamond tools: 1 piece.');
     expect(element().textContent).toContain('stated by maker’s manual, page 12');
     press('Change the rate: Diamond tools');
     press('Take it away');
