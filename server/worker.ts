@@ -3,6 +3,7 @@ import { type Deps } from './deps';
 import { requestsService } from './library/requests-service';
 import { recordlogService } from './recordlog/recordlog-service';
 import { createGuardedReader } from './sds/reader/guarded-reader';
+import { searchBackfill } from './search/backfill';
 import { sheetsService } from './sds/sheets-service';
 import { ocrSheetWork, readSheetWork, unreadSheetWork } from './sds/sheets-work';
 import { guessAlarmsService } from './session/guess-alarms';
@@ -28,11 +29,33 @@ export async function startWorker(deps: Deps): Promise<() => Promise<void>> {
   await queue.serve('mail-guessing', (data) => alarms.mailAlarm(data));
   const stopCheckpoints = every(config.CHECKPOINT_SECONDS, 'checkpoints', () => recordlog.makeCheckpoints());
   const stopSweep = every(sweepSeconds, 'left-over deliveries', () => deliveries.interpretLeftOver());
+  const stopBackfill = once('search texts of older sheets', searchBackfill(deps, { text: reader, pictures: pictureReader }));
   return async () => {
+    stopBackfill();
     stopCheckpoints();
     stopSweep();
     await Promise.all([reader.close(), pictureReader.close()]);
   };
+
+  /** Runs until it succeeds, then never again in this process; a fault is logged and tried a little later. */
+  function once(what: string, work: (isStopped: () => boolean) => Promise<unknown>): () => void {
+    let isStopped = false;
+    let timer: NodeJS.Timeout;
+    const turn = (seconds: number): void => {
+      timer = setTimeout(() => {
+        work(() => isStopped).catch((error: unknown) => {
+          if (isStopped) return;
+          log.error({ err: error }, `${what} failed`);
+          turn(sweepSeconds * 4);
+        });
+      }, seconds * 1000);
+    };
+    turn(sweepSeconds);
+    return () => {
+      isStopped = true;
+      clearTimeout(timer);
+    };
+  }
 
   /** Runs again and again, never twice at once; a fault is logged and tried at the next turn. */
   function every(seconds: number, what: string, work: () => Promise<void>): () => void {

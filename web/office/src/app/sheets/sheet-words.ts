@@ -13,7 +13,7 @@ export const readerWords: Readonly<Record<Exclude<ReaderState, 'read' | 'read-by
   'too-large': { short: 'too large to read', sentence: 'This file is too large to be read by itself. Enter what it says by hand, beside the page.' },
   'too-slow': { short: 'took too long to read', sentence: 'Reading this file took too long and was stopped. Read it again, or enter what it says by hand.' },
   'too-much-memory': { short: 'too heavy to read', sentence: 'Reading this file took too much memory and was stopped. Enter what it says by hand, beside the page.' },
-  unavailable: { short: 'not read yet', sentence: 'The stored file could not be reached for reading. Read it again in a while, or enter what it says by hand.' },
+  unavailable: { short: 'reading failed', sentence: 'Reading failed at every try, or the stored file could not be reached. Read it again, or enter what it says by hand.' },
 };
 
 /** Why a revision could not be read; null when it was, or is on its way. */
@@ -30,10 +30,17 @@ export function pageUnderWay({ pages, pagesRead }: RevisionSummary): string {
   return pagesRead === 0 ? 'a scan, waits its turn' : `reading page ${pagesRead} of ${pages ?? pagesRead}`;
 }
 
+/** Longer than any queue is patient: nobody is reading it any more. */
+const longWaitMs = 2 * 3600 * 1000;
+export const isStuck = ({ state, pagesRead, uploadedAt }: RevisionSummary, now: Date): boolean => state === 'waiting' && pagesRead === null && now.getTime() - Date.parse(uploadedAt) > longWaitMs;
+/** Whether reading once more may help: not where the file itself is the trouble. */
+export const mayReadAgain = (revision: RevisionSummary, now: Date): boolean => isStuck(revision, now) || (revision.state === 'needs-entry' && revision.readerState !== 'not-a-pdf' && revision.readerState !== 'encrypted' && revision.readerState !== 'too-large');
+
 /** State of a revision in words, for a list. */
-export function revisionState(revision: RevisionSummary): { readonly kind: StateKind; readonly words: string } {
+export function revisionState(revision: RevisionSummary, now = new Date()): { readonly kind: StateKind; readonly words: string } {
   switch (revision.state) {
     case 'waiting':
+      if (isStuck(revision, now)) return { kind: 'caution', words: 'waits unusually long' };
       return { kind: 'plain', words: pageUnderWay(revision) };
     case 'read':
       return revision.toLookAt === 0 ? { kind: 'caution', words: 'check and confirm' } : { kind: 'caution', words: revision.toLookAt === 1 ? '1 value wants a look' : `${revision.toLookAt} values want a look` };

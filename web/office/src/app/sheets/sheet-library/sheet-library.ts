@@ -95,7 +95,7 @@ export class SheetLibrary {
   }
 
   /** What leaves one state comes into another: those three are read afresh, the rest stays as it is. */
-  private lookAgain(): void {
+  protected lookAgain(): void {
     for (const list of [this.beingRead, this.toCheck, this.toEnter]) list.refresh({ isWhole: true });
   }
 }
