@@ -76,3 +76,13 @@ export function wholeYearsBetween(from: IsoDate, to: IsoDate): number {
   if (addYears(from, years) > checkIsoDate('to', to)) years -= 1;
   return years;
 }
+
+/** The day `count` working days after `from`; the first one counted is the day after. */
+export function addWorkingDays(from: IsoDate, count: number, isHoliday: (day: IsoDate) => boolean): IsoDate {
+  let day = checkIsoDate('from', from);
+  for (let left = count; left > 0; ) {
+    day = addDays(day, 1);
+    if (!isWeekend(day) && !isHoliday(day)) left -= 1;
+  }
+  return day;
+}

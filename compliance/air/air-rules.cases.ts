@@ -2,7 +2,8 @@ import { type RuleCase } from '../rule';
 import { casesOf, type RuleCases } from '../rules/case';
 import { sourced, usFederal, type Source } from '../source';
 import { averageWithinLimit, collectorAirflow, dilutionEnough, mixtureWithinLimits, type AirflowFacts, type AverageFacts, type DilutionFacts } from './air-rules';
-import { monitoringDue, noticeOfAssessment, reassessOnChange, type ChangeFacts, type MonitoringFacts, type NoticeFacts } from './monitoring-rules';
+import { monitoringDue, reassessOnChange, type ChangeFacts, type MonitoringFacts } from './monitoring-rules';
+import { noticeOfAssessment, type NoticeFacts } from './notice-rule';
 import { MM_PER_INCH, m3PerHFromCfm } from '../quantities/units';
 
 const DAY = '2026-12-01';

@@ -15,7 +15,9 @@ export const MONITORING_SOURCES = {
   reassess: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(iv)', note: 'A training text that restates both limbs.' }),
 } as const satisfies Record<string, Source>;
 
+/** (C), (D), (E). */
 const REPEAT_MONTHS = { atOrAboveActionLevel: 6, aboveLimit: 3, below: 6 } as const;
+/** (E). */
 const MIN_DAYS_BETWEEN_LOW_RESULTS = 7;
 
 /** One day's most exposed worker of a shift, job classification and work area, as 8-hour average without respirator. */

@@ -1,5 +1,4 @@
-import { addWorkingDays } from '../air/notice-date';
-import { addYears, checkIsoDate, type IsoDate } from '../iso-date';
+import { addWorkingDays, addYears, checkIsoDate, type IsoDate } from '../iso-date';
 import { usFederal } from '../source';
 
 export const ACCESS_SOURCE = usFederal('1910.1020', 'partly', { paragraph: '(e)(1)', note: 'Abstract of OSHA 3110; the delay rule, and that the days begin when the request is received, in the OSHA letter of 27 March 2002.' });

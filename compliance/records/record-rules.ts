@@ -1,5 +1,4 @@
-import { addWorkingDays } from '../air/notice-date';
-import { addYears, checkDoneOn, type IsoDate } from '../iso-date';
+import { addWorkingDays, addYears, checkDoneOn, type IsoDate } from '../iso-date';
 import { met, notApplicable, undecided, unmet, WHO, type Rule } from '../rule';
 import { sourced, usFederal } from '../source';
 import { words } from '../words';

@@ -1,6 +1,7 @@
 import { averageWithinLimit, collectorAirflow, dilutionEnough, mixtureWithinLimits } from '../air/air-rules';
 import { LIMIT_ROWS } from '../air/limits.data';
-import { monitoringDue, noticeOfAssessment, reassessOnChange } from '../air/monitoring-rules';
+import { monitoringDue, reassessOnChange } from '../air/monitoring-rules';
+import { noticeOfAssessment } from '../air/notice-rule';
 import { PUBLISHED_EXPOSURES } from '../air/published-exposure.data';
 import { airRecordContents, laboratoryContents, objectiveDataContents, observationOffered } from '../air/record-contents';
 import { SUBSTANCES } from '../air/substances.data';

@@ -1,47 +1,10 @@
-import { type ExposureBasis } from '../facts';
-import { type Words } from '../outcome';
 import { met, notApplicable, undecided, unmet, WHO } from '../rule';
 import { type ShiftRule } from '../shift-rule';
 import { usFederal } from '../source';
 import { sentences, words } from '../words';
-import { type BasisFault } from './basis';
-import { type SilicaDecision, type Undecided } from './decision';
+import { BASIS_KINDS, decidedReason, undecidedReason, WHAT_OPENS_IT } from './basis-words';
+import { type SilicaDecision } from './decision';
 import { type SilicaTask } from './silica-context';
-
-const FAULTS: Readonly<Record<BasisFault, Words>> = {
-  'no-exposure': words('The signed basis names no figure.', 'La base firmada no da una cifra.'),
-  'no-conditions': words('The signed basis names no conditions.', 'La base firmada no da condiciones.'),
-  'not-below-action-level': words('The signed basis says "below the action level", but its figure is not.', 'La base firmada dice «bajo el nivel de acción», pero su cifra no lo está.'),
-  'no-action-level': words('This place has no action level.', 'Este lugar no tiene nivel de acción.'),
-  'no-interim-respirator': words('The sampling day names no mask. Its signer must write one.', 'El día de muestreo no dice qué máscara. Quien firma debe escribirla.'),
-  'no-factors': words('It is over the limit, and no mask factors of this place are on file.', 'Pasa el límite, y no hay factores de máscara de este lugar.'),
-  'beyond-every-respirator': words('The figure is past what any mask can stop.', 'La cifra pasa lo que detiene cualquier máscara.'),
-};
-
-const KINDS: Readonly<Record<ExposureBasis['kind'], Words>> = {
-  'objective-data': words('Objective data', 'Datos objetivos'),
-  'air-samples': words('Air samples', 'Muestras de aire'),
-  'sampling-day': words('Sampling day', 'Día de muestreo'),
-  'below-action-level': words('Below the action level', 'Bajo el nivel de acción'),
-};
-
-export const WHAT_OPENS_IT = words(
-  'A qualified person signs a basis with conditions and an end date, or plans a sampling day.',
-  'Una persona calificada firma una base con condiciones y fecha final, o planea un día de muestreo.',
-);
-
-function undecidedReason({ fault, ended }: Undecided): Words {
-  const gap = fault !== null ? FAULTS[fault] : ended === null ? null : words(`The basis of ${ended.signedBy} ended on ${ended.endsOn}.`, `La base de ${ended.signedBy} terminó el ${ended.endsOn}.`);
-  return sentences(words('No air sample or objective data for this setting.', 'No hay muestra de aire ni datos objetivos para este lugar.'), gap);
-}
-
-function decidedReason(basis: ExposureBasis): Words {
-  const kind = KINDS[basis.kind];
-  return words(
-    `${kind.en}, signed by ${basis.signedBy} on ${basis.signedOn}, good to ${basis.endsOn}. Conditions: ${basis.conditions}`,
-    `${kind.es}, firmado por ${basis.signedBy} el ${basis.signedOn}, vale hasta ${basis.endsOn}. Condiciones: ${basis.conditions}`,
-  );
-}
 
 /** Whether the decision hangs on a basis, had or missing. */
 function hangsOnBasis(silica: SilicaDecision): silica is Extract<SilicaDecision, { kind: 'basis' | 'undecided' | 'no-pack' }> {
@@ -49,7 +12,8 @@ function hangsOnBasis(silica: SilicaDecision): silica is Extract<SilicaDecision,
 }
 
 /**
- * Work outside Table 1 starts only on a decision that a named person signed: does the rule apply ((a)), or what is the exposure ((d)).
+ * (a), (d)(2)(ii): outside Table 1 the employer first settles, from objective data or air samples, whether the rule applies and what the exposure is.
+ * Here: work starts only on a basis that a named person signed and whose end date is not past (`decideSilica` finds it).
  * Undecided is held: exposure that cannot be reasonably estimated is never guessed (29 CFR 1910.134(d)(1)(iii)).
  */
 export const basisRule: ShiftRule<SilicaTask> = {
@@ -61,16 +25,19 @@ export const basisRule: ShiftRule<SilicaTask> = {
   holds: true,
   evaluate({ silica, facts, task, pack }) {
     if (!hangsOnBasis(silica)) return notApplicable(words('Not decided by a signed basis.', 'No se decide con una base firmada.'));
+    // No law of this place on file: nothing to compare with.
     if (silica.kind === 'no-pack') {
       return undecided(sentences(pack.gap, pack.orientation?.words ?? null), WHO.localAuthority, {
         inputs: { place: facts.jurisdictionId },
         whatWouldChange: words('A pack for this place.', 'Reglas para este lugar.'),
       });
     }
+    // No basis in force, or one that settles nothing.
     if (silica.kind === 'undecided') {
       const inputs = { task: task.kind, 'bases on file for this task': facts.bases.filter(({ taskKind }) => taskKind === task.kind).length, date: facts.date };
       return undecided(undecidedReason(silica.undecided), WHO.hygienist, { inputs, whatWouldChange: WHAT_OPENS_IT });
     }
+    // Signed and in force: (a) below the action level under foreseeable conditions, or (d)(2) an exposure that is known or sampled today.
     const { basis } = silica.decision;
     return met(decidedReason(basis), {
       inputs: {
@@ -85,7 +52,7 @@ export const basisRule: ShiftRule<SilicaTask> = {
   },
   line({ silica, traits }) {
     if (silica.kind === 'basis') {
-      const kind = KINDS[silica.decision.basis.kind];
+      const kind = BASIS_KINDS[silica.decision.basis.kind];
       return words(`${kind.en}: signed by ${silica.decision.basis.signedBy}.`, `${kind.es}: firmó ${silica.decision.basis.signedBy}.`);
     }
     if (silica.kind === 'undecided' && silica.question === 'scope') return words('Not decided: does the silica rule apply?', 'Sin decidir: ¿aplica la regla de sílice?');
@@ -93,7 +60,7 @@ export const basisRule: ShiftRule<SilicaTask> = {
   },
 };
 
-/** A day on which samples are taken under interim protection: one shift, one named person answers for it. */
+/** (d)(2): exposure is assessed. Here by sampling it: one shift under interim protection, for which one named person answers. */
 export const samplingDayRule: ShiftRule<SilicaTask> = {
   id: 'silica-sampling-day',
   title: words('A sampling day takes samples', 'En un día de muestreo se toman muestras'),
@@ -108,7 +75,10 @@ export const samplingDayRule: ShiftRule<SilicaTask> = {
   line: () => words('Air pump on and running before the work starts.', 'Bomba de aire puesta y andando antes de empezar.'),
 };
 
-/** The signed figure of one task says nothing about the same person's Table 1 minutes unless its signer counted them (8-hour average, (d)). */
+/**
+ * (d)(1): the limit is an average over the 8 hours of the shift, so every part of the shift counts.
+ * Here: the signed figure of one task says nothing about the same person's Table 1 minutes unless its signer counted them.
+ */
 export const combinedExposureRule: ShiftRule<SilicaTask> = {
   id: 'silica-combined-exposure',
   title: words('Table 1 work and other silica work in one shift', 'Trabajo de la Tabla 1 y otro trabajo con sílice en un turno'),
@@ -117,7 +87,8 @@ export const combinedExposureRule: ShiftRule<SilicaTask> = {
   topic: 'gate',
   holds: true,
   evaluate({ silica, people, table1TimeByPerson, pack }) {
-    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.apf !== null) return notApplicable(words('No sum to make.', 'No hay suma que hacer.'));
+    // Only a figure within the limit (exposure ÷ limit at most 1) can pass it by the sum; one above it is `silica-over-limit`.
+    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.ratio > 1) return notApplicable(words('No sum to make.', 'No hay suma que hacer.'));
     const { basis } = silica.decision;
     const mixed = people.filter(({ id }) => (table1TimeByPerson.get(id)?.minutes ?? 0) > 0);
     if (mixed.length === 0) return notApplicable(words('Nobody here does Table 1 work today.', 'Nadie aquí hace trabajo de la Tabla 1 hoy.'));
@@ -136,7 +107,11 @@ export const combinedExposureRule: ShiftRule<SilicaTask> = {
     outcome === 'met' ? words('Dust of the whole shift is counted.', 'El polvo de todo el turno está contado.') : words('Not decided: dust of the whole shift.', 'Sin decidir: el polvo de todo el turno.'),
 };
 
-/** Exposure above the limit: controls first, then the respirator that the ratio asks ((d)(3)(i), (e)). */
+/**
+ * (d)(3)(i): above the limit the employer uses every feasible engineering and work practice control, down to the limit or as near to it as they reach;
+ * (e)(1)(ii): where they do not reach it, respirators come on top.
+ * Here: asked of a signed exposure with the controls on; the limit is the place's (`pack.silica.limit`, µg/m³ as 8-hour average).
+ */
 export const overLimitRule: ShiftRule<SilicaTask> = {
   id: 'silica-over-limit',
   title: words('Controls before masks above the limit', 'Controles antes que máscaras sobre el límite'),
@@ -145,8 +120,10 @@ export const overLimitRule: ShiftRule<SilicaTask> = {
   topic: 'control',
   holds: false,
   evaluate({ silica, pack }) {
-    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.apf === null) return notApplicable(words('The limit is kept.', 'Se cumple el límite.'));
+    // Nothing over the limit is known: exposure ÷ limit at most 1, or no signed exposure (held elsewhere: `silica-signed-basis`, the Table 1 rules).
+    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.ratio <= 1) return notApplicable(words('The limit is kept.', 'Se cumple el límite.'));
     const { decision } = silica;
+    // (d)(3)(i) more controls; (e)(1)(ii) until then a respirator whose factor covers the ratio (`apfForRatio`).
     return unmet(words('The air is over the limit even with the controls. The mask comes on top, not in their place.', 'El aire pasa el límite aun con los controles. La máscara va además, no en su lugar.'), {
       inputs: { 'exposure, µg/m³ as 8-hour average': decision.basis.exposureMicrogramsPerM3, 'limit, µg/m³ as 8-hour average': pack.silica?.limit ?? null },
       results: { 'exposure over limit': Math.round(decision.ratio * 100) / 100, 'protection factor, at least': decision.apf },

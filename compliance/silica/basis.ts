@@ -6,6 +6,7 @@ import { type RespiratorFactors, type SilicaLaw } from './shift-pack';
 /** What a signed basis settles for a task. */
 export type BasisDecision =
   | { readonly kind: 'outside-scope'; readonly basis: ExposureBasis }
+  /** `ratio` is exposure ÷ limit; `apf` is null while it is at most 1, else the least factor that covers it. */
   | { readonly kind: 'assessed'; readonly basis: ExposureBasis; readonly ratio: number; readonly apf: number | null }
   | { readonly kind: 'sampling-day'; readonly basis: ExposureBasis; readonly apf: number }
   /** Signed and in time, but it settles nothing: the fault says why. */

@@ -4,7 +4,7 @@ import { DILUTION_SOURCE, dilutionAirflowCfm, dilutionRefusal, dilutionVentilati
 import { limitsOf } from '#compliance/air/limits';
 import { additiveMixture, MIXTURE_SOURCE } from '#compliance/air/mixture';
 import { monitoringSchedule } from '#compliance/air/monitoring';
-import { noticeDate } from '#compliance/air/notice-date';
+import { noticeDate } from '#compliance/air/notice-rule';
 import { findSubstance, SUBSTANCES } from '#compliance/air/substances.data';
 import { LONG_SHIFT_SOURCE, shiftTwa, TWA_SOURCE } from '#compliance/air/twa';
 import { findPack } from '#compliance/jurisdictions/pack';

@@ -2,8 +2,8 @@ import { describe, expect, it } from '@jest/globals';
 import Holidays from 'date-holidays';
 import fc from 'fast-check';
 import { InputError } from '../input-error';
-import { addDays, daysBetween, isWeekend } from '../iso-date';
-import { addWorkingDays, noticeDate } from './notice-date';
+import { addDays, addWorkingDays, daysBetween, isWeekend } from '../iso-date';
+import { noticeDate } from './notice-rule';
 
 const us = new Holidays('US');
 /** Days, not instants: the calendar keeps the country's own zone. */
