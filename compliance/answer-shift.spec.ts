@@ -346,6 +346,7 @@ describe('kits and their sheets', () => {
     ['P284 with a stated condition asks it only then', { precautionaryCodes: ['P284'], protectionWords: [{ topic: 'respiratory' as const, text: 'In case of inadequate ventilation wear a mask.' }] }, 'none-required'],
     ['P285 is always conditional', { precautionaryCodes: ['P285'] }, 'none-required'],
     ['P280 alone names nothing', { precautionaryCodes: ['P280'] }, 'none-required'],
+    ['"none with good ventilation, otherwise wear it" asks it only then', { protectionWords: [{ topic: 'respiratory' as const, text: 'With good ventilation none is needed. Otherwise wear a half mask with organic vapor cartridges.' }] }, 'none-required'],
     ['words of section 8 ask it', { protectionWords: [{ topic: 'respiratory' as const, text: 'Wear a combination filter A-P2.' }] }, 'required'],
     ['"not required" asks nothing', { protectionWords: [{ topic: 'respiratory' as const, text: 'Not normally required.' }] }, 'none-required'],
   ])('a respirator by the sheet: %s (precautionary statements table)', (_name, sheet, outcome) => {

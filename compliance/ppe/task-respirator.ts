@@ -10,7 +10,7 @@ import { saysNotNeeded } from './protection';
 
 type SheetDemand = { readonly kind: 'required' | 'conditional'; readonly productName: string; readonly quote: string } | { readonly kind: 'none' };
 
-const CONDITION = /inadequate|insufficient|poor(ly)?\b|exceed|\bif\b|\bwhen\b|\bwhere\b|in case of|insuficiente|si\b/i;
+const CONDITION = /inadequate|insufficient|poor(ly)?\b|exceed|\bif\b|\bwhen\b|\bwhere\b|in case of|\botherwise\b|\bunless\b|insuficiente|\bsi\b|de lo contrario|a menos que/i;
 
 /** What the sheets of the kit ask of breathing protection: P284 without a condition, or section 8 in words. P280 alone names nothing. */
 export function sheetRespiratorDemand({ traits, kit }: TaskContext): SheetDemand {

@@ -240,6 +240,32 @@ withChromium('The main job', () => {
       await expectAccessible(page, 'Shift');
     });
 
+    step('[SIL-04] time logged past the plan counts beside it; what wears is computed from a stated rate only (trap 4)', async () => {
+      const { page } = seats['safety-officer'];
+      const lane = page.getByRole('group', { name: marisol, exact: true });
+      await taskRow(page, 'Edge grinding').getByRole('button', { name: 'Edge grinding', exact: true }).click();
+      await page.getByRole('button', { name: `Log time worked: ${marisol}` }).click();
+      await page.getByLabel(`${marisol} worked to`).fill('13:30');
+      await lane.getByText('6 h 30').waitFor();
+      expect(await taskRow(page, 'Edge grinding').textContent()).toMatch(/half mask/);
+      await expectAccessible(page, 'Shift with a log');
+      await page.getByRole('button', { name: `Remove logged time: ${marisol}` }).click();
+      await lane.getByText('2 h 30').waitFor();
+      await page.getByRole('button', { name: 'Done', exact: true }).click();
+
+      const uses = page.getByRole('region', { name: 'What it uses up' });
+      await uses.getByText('Steel shot: amount not known.').waitFor();
+      await uses.getByRole('button', { name: 'State a rate: Steel shot' }).click();
+      await uses.getByRole('textbox', { name: 'Amount' }).fill('0.4');
+      await uses.getByLabel('Unit').selectOption('kg');
+      await uses.getByLabel('Stated by').fill('our own count of November');
+      await expectAccessible(page, 'Stating a rate');
+      await uses.getByRole('button', { name: 'Use this rate' }).click();
+      // Derived: 600 ft² are 55.74 m², times 0.4 kg.
+      await uses.getByText('Steel shot: 22.3 kg.').waitFor();
+      await page.getByText(/^saved \d\d:\d\d$/).waitFor();
+    });
+
     step('sees blasting and mixing held, and opens blasting by a basis signed with a typed name', async () => {
       const { page } = seats['safety-officer'];
       expect(await blockOf(page, 'Shot blasting', abe).getAttribute('aria-label')).toContain('may not start');
