@@ -58,7 +58,7 @@ describe('what a shift uses up, on its page', () => {
     // Two hours of grinding at half a set an hour.
     expect(element().textContent).toContain('Diamond tools: 1 piece.');
     expect(element().textContent).toContain('stated by maker’s manual, page 12');
-    press('Change the rate: Diamond tools');
+    press('Change rate: Diamond tools');
     press('Take it away');
     expect(plan.consumableRates).toEqual([]);
     expect(element().textContent).toContain('Diamond tools: amount not known.');

@@ -24,7 +24,7 @@ const perWords: Readonly<Record<StatedRate['per'], string>> = { m2: 'a m²', hou
               >{{ row.line.text.en }} <span class="kb-quiet">{{ row.line.reason.en }}{{ row.line.whoDecides ? ' Can say: ' + row.line.whoDecides.en + '.' : '' }}</span></span
             >
             @if (mayEdit()) {
-              <button type="button" class="kb-link" [attr.aria-expanded]="open() === row.item" [attr.aria-label]="(row.rate ? 'Change the rate: ' : 'State a rate: ') + row.name" (click)="toggle(row.item)">{{ row.rate ? 'change rate' : 'state a rate' }}</button>
+              <button type="button" class="kb-link" [attr.aria-expanded]="open() === row.item" [attr.aria-label]="(row.rate ? 'Change rate: ' : 'State a rate: ') + row.name" (click)="toggle(row.item)">{{ row.rate ? 'change rate' : 'state a rate' }}</button>
             } @else {
               <span></span>
             }
