@@ -25,7 +25,7 @@ export function createUploads(folder: string, maxBytes = maxUploadBytes): Upload
 }
 
 function named(error: unknown, maxBytes: number): unknown {
-  if (!(error instanceof multer.MulterError)) return error instanceof Error && /Multipart|boundary|Unexpected end/i.test(error.message) ? new InputError('The upload broke off. Nothing was stored; send the file again.') : error;
+  if (!(error instanceof multer.MulterError)) return error instanceof Error && /Multipart|boundary|Unexpected end|Request (?:aborted|closed)/i.test(error.message) ? new InputError('The upload broke off. Nothing was stored; send the file again.') : error;
   if (error.code === 'LIMIT_FILE_SIZE') return new KneeboardError(413, 'Too large', `This file is over ${maxBytes / 1024 / 1024} MB. Ask the supplier for a smaller one, or save it without pictures.`);
   return new InputError('Send one file, in the field named file.', [{ path: 'file', message: error.message }]);
 }
