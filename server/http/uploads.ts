@@ -1,6 +1,7 @@
 import { mkdirSync } from 'node:fs';
+import { types } from 'node:util';
 import multer from 'multer';
-import { InputError, KneeboardError } from '../errors';
+import { InputError, KneeboardError, UnavailableError } from '../errors';
 import { type Uploads } from './mount';
 
 export const maxUploadBytes = 25 * 1024 * 1024;
@@ -25,6 +26,8 @@ export function createUploads(folder: string, maxBytes = maxUploadBytes): Upload
 }
 
 function named(error: unknown, maxBytes: number): unknown {
+  // multer removes what it wrote of it.
+  if (types.isNativeError(error) && 'code' in error && /^(?:ENOSPC|EDQUOT|EFBIG)$/.test(String(error.code))) return new UnavailableError('There is no room left for files. Nothing was stored; tell whoever runs this service, then send the file again.');
   if (!(error instanceof multer.MulterError)) return error instanceof Error && /Multipart|boundary|Unexpected end|Request (?:aborted|closed)/i.test(error.message) ? new InputError('The upload broke off. Nothing was stored; send the file again.') : error;
   if (error.code === 'LIMIT_FILE_SIZE') return new KneeboardError(413, 'Too large', `This file is over ${maxBytes / 1024 / 1024} MB. Ask the supplier for a smaller one, or save it without pictures.`);
   return new InputError('Send one file, in the field named file.', [{ path: 'file', message: error.message }]);

@@ -1,3 +1,4 @@
+import { types } from 'node:util';
 import { drizzle, type NodePgDatabase } from 'drizzle-orm/node-postgres';
 import pg from 'pg';
 
@@ -64,4 +65,19 @@ export async function refuseTooMuchPower(database: Database): Promise<void> {
 export function databaseErrorCode(error: unknown): string | undefined {
   for (let at: unknown = error; at instanceof Error; at = at.cause) if ('code' in at && typeof at.code === 'string' && /^[0-9A-Z]{5}$/.test(at.code)) return at.code;
   return undefined;
+}
+
+/** Whether the database is away for now or has no room, and the same request may succeed later; undefined for every other error. */
+export function databaseTrouble(error: unknown): 'away' | 'full' | undefined {
+  const code = databaseErrorCode(error);
+  if (code === '53100') return 'full';
+  // Connection exceptions, shutting down, starting up, too many connections (PostgreSQL's manual, appendix A).
+  if (code !== undefined) return /^(?:08|57P0|53300)/.test(code) ? 'away' : undefined;
+  for (let at: unknown = error; types.isNativeError(at); at = at.cause) if (isLostConnection(at)) return 'away';
+  return undefined;
+}
+/** The driver's own errors carry no code of PostgreSQL's. */
+function isLostConnection(error: Error): boolean {
+  const isOfNetwork = 'code' in error && 'syscall' in error && /^E(?:CONNREFUSED|CONNRESET|PIPE|HOSTUNREACH|TIMEDOUT)$/.test(String(error.code));
+  return isOfNetwork || /^(?:Connection terminated|timeout exceeded when trying to connect|Client has encountered a connection error|Client was closed)/.test(error.message);
 }

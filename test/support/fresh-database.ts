@@ -12,9 +12,9 @@ export interface FreshDatabase {
  * An empty database of its own in the test cluster, without tables. A test that runs a worker needs one: workers take
  * whatever is queued and sign checkpoints for every organisation they find, those of other specs too.
  */
-export async function freshDatabase(): Promise<FreshDatabase> {
+export async function freshDatabase(tablespace?: string): Promise<FreshDatabase> {
   const name = `kneeboard_own_${randomBytes(6).toString('hex')}`;
-  await asSuperuser([`CREATE DATABASE ${name} OWNER kneeboard_owner`, `REVOKE ALL ON DATABASE ${name} FROM PUBLIC`, `GRANT CONNECT ON DATABASE ${name} TO kneeboard_app`]);
+  await asSuperuser([`CREATE DATABASE ${name} OWNER kneeboard_owner${tablespace ? ` TABLESPACE ${tablespace}` : ''}`, `REVOKE ALL ON DATABASE ${name} FROM PUBLIC`, `GRANT CONNECT ON DATABASE ${name} TO kneeboard_app`]);
   const named = (url: string): string => Object.assign(new URL(url), { pathname: `/${name}` }).toString();
   return {
     ownerUrl: named(testEnvironment('TEST_OWNER_DATABASE_URL')),
