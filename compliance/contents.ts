@@ -13,6 +13,9 @@ export interface ContentItem {
   readonly source?: Source;
 }
 
+/** An item by its id, with its name in both languages and its source where that is not the rule's. */
+export const item = (id: string, en: string, es: string, source?: Source): ContentItem => ({ id, name: words(en, es), ...(source === undefined ? {} : { source }) });
+
 /** Whether each item is there; null or absent where nobody has looked. */
 export interface ContentFacts {
   readonly present: Readonly<Record<string, boolean | null>>;

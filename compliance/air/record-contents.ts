@@ -1,9 +1,7 @@
-import { contentsRule, type ContentItem } from '../contents';
+import { contentsRule, item } from '../contents';
 import { WHO } from '../rule';
 import { usFederal } from '../source';
 import { words } from '../words';
-
-const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
 
 /** A record of air samples. A Social Security number has no place in it: the federal rule dropped it in 2019. */
 export const airRecordContents = contentsRule({

@@ -1,8 +1,6 @@
-import { contentsRule, type ContentItem } from '../contents';
+import { contentsRule, item } from '../contents';
 import { usFederal } from '../source';
 import { words } from '../words';
-
-const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
 
 export const hazcomProgram = contentsRule({
   id: 'hazcom-program',

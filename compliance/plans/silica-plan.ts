@@ -1,9 +1,8 @@
-import { contentsRule, yearlyRule, type ContentItem } from '../contents';
+import { contentsRule, yearlyRule, item } from '../contents';
 import { sourced, usFederal } from '../source';
 import { words } from '../words';
 
 const PARALLEL = (paragraph: string, note: string) => usFederal('1926.1153', 'parallel-text', { paragraph, note });
-const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
 
 /** The written exposure control plan: its four elements, for each task. */
 export const silicaPlanElements = contentsRule({
@@ -53,7 +52,7 @@ export const silicaTraining = contentsRule({
     item('medical', 'purpose of medical surveillance', 'para qué es la vigilancia médica'),
     item('language', 'in a language the person understands', 'en un idioma que la persona entiende'),
     item('shown', 'knowledge shown by the person', 'la persona mostró que lo sabe'),
-    { ...item('certified', 'who certifies it: trainer or employer, by name and day', 'quién lo certifica: instructor o empleador, con nombre y día'), source: sourced('OSHA letters of 14 Aug 1997 and 10 Apr 2000', 'read', { note: 'Standards ask for the trainer’s or employer’s certification; none asks for the employee’s signature. 1997 as quoted.' }) },
+    item('certified', 'who certifies it: trainer or employer, by name and day', 'quién lo certifica: instructor o empleador, con nombre y día', sourced('OSHA letters of 14 Aug 1997 and 10 Apr 2000', 'read', { note: 'Standards ask for the trainer’s or employer’s certification; none asks for the employee’s signature. 1997 as quoted.' })),
   ],
 });
 

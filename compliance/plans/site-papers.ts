@@ -1,9 +1,7 @@
-import { contentsRule, type ContentItem } from '../contents';
+import { contentsRule, item } from '../contents';
 import { WHO } from '../rule';
 import { commonPractice, usFederal } from '../source';
 import { words } from '../words';
-
-const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
 
 /** Slurry, dust and resin waste. What counts as hazardous waste is for the place's own law. */
 export const wasteHandling = contentsRule({

@@ -1,4 +1,4 @@
-import { contentsRule, yearlyRule, type ContentItem } from '../contents';
+import { contentsRule, yearlyRule, item } from '../contents';
 import { type IsoDate } from '../iso-date';
 import { met, notApplicable, undecided, unmet, WHO, type Rule } from '../rule';
 import { usFederal } from '../source';
@@ -6,8 +6,6 @@ import { words } from '../words';
 import { checkWearer, type Wearer } from './fit-test';
 import { countRespiratorDays, EXAM_SOURCE, MEDICAL_TRIGGER_DAYS, MEDICAL_TRIGGER_SOURCE, silicaExamDue, type RespiratorDay } from './respirator-days';
 import { selectRespirator, type RespiratorNeed } from './select';
-
-const item = (id: string, en: string, es: string): ContentItem => ({ id, name: words(en, es) });
 
 export interface ChosenRespiratorFacts extends RespiratorNeed {
   /** Factor of the respirator planned; null where none is. */
