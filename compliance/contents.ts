@@ -33,6 +33,7 @@ export interface ContentsRule extends Rule<ContentFacts> {
   readonly items: readonly ContentItem[];
 }
 
+/** Met when every item is there, unmet when one is missing, undecided while one was not looked for. */
 export function contentsRule({ whoDecides = WHO.safetyOfficer, items, ...described }: Described & { readonly items: readonly ContentItem[]; readonly whoDecides?: Words }): ContentsRule {
   return { ...described, items, evaluate: ({ present }) => judgeContents(items, present, whoDecides) };
 }

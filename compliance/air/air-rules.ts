@@ -17,9 +17,13 @@ export interface AverageFacts {
   readonly periods: readonly { readonly concentrationMgPerM3: number | null; readonly minutes: number }[];
 }
 
+/** To four figures, for reading; decisions use the whole value. */
 const round = (value: number): number => Number(value.toPrecision(4));
 
-/** One substance's 8-hour average against the construction limit of the place. */
+/**
+ * 1926.55(a): no one breathes more of a substance than its limit in App. A, as an 8-hour average; the average is Σ concentration × hours ÷ 8 (1910.1000(d)(1)(i)).
+ * Here: the average over the whole shift (`twa.ts`) against the place's limit in force on the day (`limits.data.ts`); exactly the limit is not above it. The worst 8 hours stand beside.
+ */
 export const averageWithinLimit: Rule<AverageFacts> = {
   id: 'air-average-within-limit',
   title: words('8-hour average within the limit', 'Promedio de 8 horas dentro del límite'),
@@ -29,6 +33,7 @@ export const averageWithinLimit: Rule<AverageFacts> = {
     const twa = shiftTwa(shiftMinutes, periods.map(({ concentrationMgPerM3, minutes }) => ({ concentration: concentrationMgPerM3, minutes })));
     const inputs = { substance: substanceId, 'minutes of the shift': shiftMinutes };
     if (!twa.isDecided) return undecided(twa.reason, twa.whoDecides, { inputs, whatWouldChange: words('State the concentration of every minute.', 'Indique la concentración de cada minuto.') });
+    // The limit of the place on that day, in mg/m³.
     const limit = findLimit(substanceId, jurisdictionId, 'twa-8h', asOf);
     const results = { 'whole shift ÷ 8 h, mg/m³': round(twa.wholeShift), 'worst 8 h, mg/m³': round(twa.worstEightHours) };
     const extra = { inputs, results, whatWouldChange: words('Better controls or less time.', 'Mejores controles o menos tiempo.') };
@@ -41,6 +46,7 @@ export const averageWithinLimit: Rule<AverageFacts> = {
   },
 };
 
+/** 1910.1000(d)(2)(i): for contaminants that act together, the sum of average ÷ limit over them (`additiveMixture`) is at most 1. */
 export const mixtureWithinLimits: Rule<{ readonly members: readonly MixtureMember[] }> = {
   id: 'air-mixture-within-limits',
   title: words('Contaminants together within their limits', 'Contaminantes juntos dentro de sus límites'),
@@ -64,6 +70,10 @@ export interface AirflowFacts {
   readonly measuredM3PerH: number | null;
 }
 
+/**
+ * (c)(1) Table 1 rows (xi), (xii): a handheld grinder's collector moves 25 cfm for each inch of wheel, or more (`CFM_PER_INCH_OF_WHEEL`, `airflow.ts`); row (xiii): a walk-behind machine's, what its maker recommends.
+ * Here: against the flow measured at the shroud; too little loses Table 1.
+ */
 export const collectorAirflow: Rule<AirflowFacts> = {
   id: 'collector-airflow',
   title: words('Collector moves enough air', 'El colector mueve suficiente aire'),
@@ -83,6 +93,10 @@ export const collectorAirflow: Rule<AirflowFacts> = {
 
 export type DilutionFacts = Parameters<typeof dilutionVentilation>[0] & { readonly suppliedM3PerH: number | null };
 
+/**
+ * (a): where ventilation is the control, it keeps the air within the limits; (d): it runs through the whole operation and after it.
+ * Here: the fans move the fresh air that the formula of `dilution.ts` asks; dust and sensitizers are refused, since dilution is no control for them.
+ */
 export const dilutionEnough: Rule<DilutionFacts> = {
   id: 'dilution-ventilation',
   title: words('Fresh air where fresh air can do it', 'Aire fresco donde el aire fresco basta'),

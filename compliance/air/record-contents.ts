@@ -3,13 +3,16 @@ import { WHO } from '../rule';
 import { usFederal } from '../source';
 import { words } from '../words';
 
-/** A record of air samples. A Social Security number has no place in it: the federal rule dropped it in 2019. */
+// Each rule: met when every item is there, unmet when one is missing, undecided while nobody has looked (`contentsRule`).
+
+/** (j)(1)(ii): the record of air samples holds (A) date, (B) task, (C) methods, (D) number, duration, results, (E) laboratory, (F) protection worn, (G) who was measured and whom that stands for. A Social Security number has no place in it: the federal rule dropped it in 2019. */
 export const airRecordContents = contentsRule({
   id: 'air-record-contents',
   title: words('Record of air samples is whole', 'El registro de muestras de aire está completo'),
   source: usFederal('1926.1153', 'parallel-text', { paragraph: '(j)(1)', note: 'WAC 296-840-155(1); 84 FR 21416 of 14 May 2019 removed the Social Security number, wording recalled.' }),
   duties: ['SIL-23'],
   items: [
+    // (A) to (G)
     item('date', 'date of each sample', 'fecha de cada muestra'),
     item('task', 'task monitored', 'tarea medida'),
     item('methods', 'sampling and analytical methods', 'métodos de muestreo y análisis'),
@@ -20,6 +23,7 @@ export const airRecordContents = contentsRule({
   ],
 });
 
+/** (j)(2)(ii): the record of objective data relied on holds the material, source, testing protocol and results, the work it supports and other relevant data; (b): its conditions resemble the work closely or are worse. */
 export const objectiveDataContents = contentsRule({
   id: 'objective-data-contents',
   title: words('Objective data record is whole', 'El registro de datos objetivos está completo'),
@@ -32,11 +36,13 @@ export const objectiveDataContents = contentsRule({
     item('protocol', 'testing protocol and results', 'protocolo y resultados de las pruebas'),
     item('work', 'process, task or activity described', 'proceso, tarea o actividad descritos'),
     item('other', 'other relevant data', 'otros datos pertinentes'),
+    // (b); then our own: data do not hold for ever.
     item('resembles', 'conditions closely like ours, or worse', 'condiciones muy parecidas a las nuestras, o peores'),
     item('until', 'until when and for what it is taken as valid', 'hasta cuándo y para qué se da por válido'),
   ],
 });
 
+/** (d)(2)(v): samples go to a laboratory that works by App. A: accredited, one of its methods, traceable standards, quality control. */
 export const laboratoryContents = contentsRule({
   id: 'silica-laboratory',
   title: words('Laboratory fits the rule', 'El laboratorio cumple la norma'),
@@ -51,6 +57,7 @@ export const laboratoryContents = contentsRule({
   ],
 });
 
+/** (d)(2)(vii): (A) affected people or their representatives may watch the sampling; (B) who watches where protection is asked gets it at no cost. */
 export const observationOffered = contentsRule({
   id: 'monitoring-observation',
   title: words('Observation of sampling offered', 'Se ofreció observar el muestreo'),

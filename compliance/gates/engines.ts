@@ -4,7 +4,10 @@ import { type ShiftRule } from '../shift-rule';
 import { usFederal } from '../source';
 import { words } from '../words';
 
-/** Engines and fuel heaters indoors: exhaust led outside and an alarm worn; electric first. */
+/**
+ * 1926.55(a): carbon monoxide stays within the limit of App. A; 1926.154(a): fresh air for heaters inside.
+ * Here: indoors, engines and fuel heaters run only with their exhaust led outside and an alarm worn; electric first.
+ */
 export const enginesRule: ShiftRule<ShiftContext> = {
   id: 'engines-indoors',
   title: words('Engines and heaters indoors', 'Motores y calentadores adentro'),
@@ -20,6 +23,7 @@ export const enginesRule: ShiftRule<ShiftContext> = {
       return undecided(words('Nobody said whether engines run inside.', 'Nadie dijo si hay motores adentro.'), WHO.competentPerson, { inputs, whatWouldChange: words('Say yes or no.', 'Diga sí o no.') });
     }
     if (!engines.areUsedInside) return met(words('No engine and no fuel heater inside.', 'Ni motor ni calentador de gas adentro.'), { inputs });
+    // Both are needed; one "no" is unmet, one unsaid is a question.
     if (engines.isExhaustLedOutside === true && engines.hasCarbonMonoxideAlarm === true) return met(words('Exhaust goes outside; the alarm is worn.', 'El humo sale afuera; la alarma va puesta.'), { inputs });
     const reason = words('Exhaust gas kills without smell. It must go outside, and an alarm must be worn.', 'El humo mata sin oler. Debe salir afuera, y la alarma va puesta.');
     const extra = { inputs, whatWouldChange: words('Lead it outside and wear the alarm, or use electric.', 'Sáquelo afuera y use alarma, o use eléctrico.') };

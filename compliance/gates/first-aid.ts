@@ -4,9 +4,12 @@ import { type ShiftRule } from '../shift-rule';
 import { usFederal } from '../source';
 import { sentences, words } from '../words';
 
-const said = (text: string | null): boolean => text !== null && text.trim() !== '';
+const isWritten = (text: string | null): boolean => text !== null && text.trim() !== '';
 
-/** A first-aider, the emergency number and the address are named before work. */
+/**
+ * (c): without a clinic near, a person with a valid first-aid certificate is at the site; (e), (f): a way to call an ambulance, its number posted.
+ * Here: the first-aider, the emergency number and the address to send help to are written down before work.
+ */
 export const firstAidRule: ShiftRule<ShiftContext> = {
   id: 'first-aid-named',
   title: words('First aid, number and address', 'Primeros auxilios, número y dirección'),
@@ -16,13 +19,16 @@ export const firstAidRule: ShiftRule<ShiftContext> = {
   holds: true,
   evaluate({ facts: { firstAid } }) {
     const inputs = { 'first-aider': firstAid.firstAiderName, 'emergency number': firstAid.emergencyNumber, address: firstAid.address };
-    if (said(firstAid.firstAiderName) && said(firstAid.emergencyNumber) && said(firstAid.address)) {
+    if (isWritten(firstAid.firstAiderName) && isWritten(firstAid.emergencyNumber) && isWritten(firstAid.address)) {
       return met(words(`First aid: ${firstAid.firstAiderName}. Call ${firstAid.emergencyNumber}. Send them to ${firstAid.address}.`, `Primeros auxilios: ${firstAid.firstAiderName}. Llame al ${firstAid.emergencyNumber}. Mándelos a ${firstAid.address}.`), { inputs });
     }
     const missing = sentences(
-      said(firstAid.firstAiderName) ? null : words('No first-aider is named.', 'Nadie da primeros auxilios.'),
-      said(firstAid.emergencyNumber) ? null : words('No emergency number.', 'Falta el número de emergencia.'),
-      said(firstAid.address) ? null : words('No address to send help to.', 'Falta la dirección para la ayuda.'),
+      // (c)
+      isWritten(firstAid.firstAiderName) ? null : words('No first-aider is named.', 'Nadie da primeros auxilios.'),
+      // (f)
+      isWritten(firstAid.emergencyNumber) ? null : words('No emergency number.', 'Falta el número de emergencia.'),
+      // (e): help that is called must find the place.
+      isWritten(firstAid.address) ? null : words('No address to send help to.', 'Falta la dirección para la ayuda.'),
     );
     return undecided(missing, WHO.competentPerson, { inputs, whatWouldChange: words('Write down what is missing.', 'Anote lo que falta.') });
   },
@@ -32,9 +38,13 @@ export const firstAidRule: ShiftRule<ShiftContext> = {
       : words('First aid, number or address not named.', 'Faltan primeros auxilios, número o dirección.'),
 };
 
+/** Corrosive by the sheet: H314 severe skin burns and eye damage, H318 serious eye damage. */
 const BURNS_EYES = ['H314', 'H318'];
 
-/** Corrosive material and wet cement: eyewash and wash water in reach (29 CFR 1926.50(g)). */
+/**
+ * (g): where corrosive material may reach eyes or body, suitable means to drench or flush them quickly are in the work area.
+ * Here: corrosive is a kit whose sheets carry H314 or H318, or with cement in a powder part (wet cement, whatever its sheet says); the means is the one answer `hasEyewash`.
+ */
 export const eyewashRule: ShiftRule<TaskContext> = {
   id: 'eyewash-in-reach',
   title: words('Eyewash for what burns', 'Lavaojos para lo que quema'),
@@ -43,11 +53,13 @@ export const eyewashRule: ShiftRule<TaskContext> = {
   topic: 'gate',
   holds: true,
   evaluate({ facts, traits, kitHazards }) {
+    // Exposed: the task handles a kit, and its confirmed sheets or its cement say that it burns. A kit without sheets is held by `sheet-for-every-product`.
     const codes = kitHazards === null ? [] : BURNS_EYES.filter((code) => kitHazards.single.has(code));
     const isWetCement = kitHazards?.isWetCement ?? false;
     if (!traits.touchesKit || (codes.length === 0 && !isWetCement)) return notApplicable(words('Nothing here burns eyes.', 'Aquí nada quema los ojos.'));
     const inputs = { 'on the sheets': codes.join(', ') || null, 'wet cement': isWetCement, eyewash: facts.firstAid.hasEyewash };
     const reason = isWetCement && codes.length === 0 ? words('Wet cement burns eyes and skin.', 'El cemento mojado quema ojos y piel.') : words(`The sheet says it burns eyes (${codes.join(', ')}).`, `La hoja dice que quema los ojos (${codes.join(', ')}).`);
+    // Flushing in the work area: yes; then no, or nobody looked.
     if (facts.firstAid.hasEyewash === true) return met(reason, { inputs });
     const extra = { inputs, whatWouldChange: words('Bring and check the eyewash.', 'Traiga y revise el lavaojos.') };
     return facts.firstAid.hasEyewash === false ? unmet(reason, extra) : undecided(sentences(reason, words('Nobody checked the eyewash.', 'Nadie revisó el lavaojos.')), WHO.competentPerson, extra);

@@ -10,7 +10,7 @@ const ASBESTOS: Source = usFederal('1926.1101', 'partly', { paragraph: '(g)(8)(i
 const LEAD: Source = usFederal('1926.62', 'partly', { paragraph: '(d)(2)' });
 const BOTH: Source = sourced('29 CFR 1926.1101 and 1926.62', 'partly', { paragraph: '(g)(8)(i), (k); (d)(2)', note: 'Asbestos read through a letter of the agency; lead in part.' });
 
-const BLOCKS: readonly Survey[] = ['present', 'unknown'];
+const NOT_CLEARED: readonly Survey[] = ['present', 'unknown'];
 
 function floorInputs(floor: FloorFacts): Verdict['inputs'] {
   return { covering: floor.covering, built: floor.builtYear, asbestos: floor.asbestos, lead: floor.lead, survey: floor.surveyReference };
@@ -25,25 +25,30 @@ function whatIsOpen(floor: FloorFacts): Words {
 
 /** "Absent" and "not needed" are answers of somebody: report number, or who looked and when. */
 function unproven(floor: FloorFacts): Words | null {
-  const isAnswered = !BLOCKS.includes(floor.asbestos) || !BLOCKS.includes(floor.lead);
+  const isAnswered = !NOT_CLEARED.includes(floor.asbestos) || !NOT_CLEARED.includes(floor.lead);
   return isAnswered && (floor.surveyReference ?? '').trim() === '' ? words('Nobody wrote down who looked, or the report.', 'Nadie anotó quién revisó, ni el informe.') : null;
 }
 
-const PRESUMED_TO = 1980;
+/** Last year in which flooring was laid that is presumed to hold asbestos ((k)(1)). */
+const PRESUMED_TO_YEAR = 1980;
 
 /** Flooring and its mastic to 1980 count as asbestos until a survey says no; that none was needed is no survey ((k)(1), (k)(5)). */
 function isPresumed({ covering, builtYear, asbestos }: FloorFacts): boolean {
-  return asbestos === 'not-needed' && (covering === 'tile' || covering === 'black-mastic') && (builtYear === null || builtYear <= PRESUMED_TO);
+  return asbestos === 'not-needed' && (covering === 'tile' || covering === 'black-mastic') && (builtYear === null || builtYear <= PRESUMED_TO_YEAR);
 }
 
+/** The four answers, in this order: presumed, found, nobody knows, cleared by somebody. */
 function judge(floor: FloorFacts): Verdict {
   const inputs = floorInputs(floor);
+  // 1926.1101(k)(1), (k)(5): presumed until samples say no.
   if (floor.asbestos !== 'present' && floor.lead !== 'present' && isPresumed(floor)) {
     return undecided(words('Tile and mastic to 1980 count as asbestos until a survey says no.', 'Loseta y pegamento hasta 1980 cuentan como asbesto hasta que un estudio diga que no.'), WHO.competentPerson, { inputs, whatWouldChange: words('A survey with samples, or papers that it was laid later.', 'Un estudio con muestras, o papeles de que se puso después.') });
   }
+  // 1926.1101(g)(8)(i), 1926.62: found, so those rules take over.
   if (floor.asbestos === 'present' || floor.lead === 'present') {
     return unmet(whatIsOpen(floor), { inputs, whatWouldChange: words('Other rules and trained people take over this floor.', 'Otras reglas y gente preparada toman este piso.') });
   }
+  // 1926.1101(k), 1926.62(d)(2): until it is known, it is treated as if it were there.
   if (floor.asbestos === 'unknown' || floor.lead === 'unknown' || floor.covering === 'unknown' || unproven(floor) !== null) {
     return undecided(whatIsOpen(floor), WHO.competentPerson, { inputs, whatWouldChange: words('A survey, or who looked and when.', 'Un estudio, o quién revisó y cuándo.') });
   }
@@ -51,13 +56,17 @@ function judge(floor: FloorFacts): Verdict {
 }
 
 function sourceOf(floor: FloorFacts): Source {
-  const isAsbestosOpen = BLOCKS.includes(floor.asbestos) || isPresumed(floor);
-  const isLeadOpen = BLOCKS.includes(floor.lead);
+  const isAsbestosOpen = NOT_CLEARED.includes(floor.asbestos) || isPresumed(floor);
+  const isLeadOpen = NOT_CLEARED.includes(floor.lead);
   if (isAsbestosOpen === isLeadOpen) return BOTH;
   return isAsbestosOpen ? ASBESTOS : LEAD;
 }
 
-/** What is on the floor now: asbestos and lead change everything, and unknown means no grinding and no blasting. */
+/**
+ * 1926.1101(g)(8)(i): flooring that holds asbestos is not sanded and, as a rule, not chipped; (k): whoever opens a floor finds out first, and flooring to 1980 is presumed to hold it;
+ * 1926.62(d)(2): until lead is measured, work that disturbs it is protected as if the limit were passed.
+ * Here: unknown means no grinding and no blasting. `judge`, above, gives the answer.
+ */
 export const floorRule: ShiftRule<ShiftContext> = {
   id: 'floor-survey',
   title: words('Asbestos and lead in the floor', 'Asbesto y plomo en el piso'),
@@ -72,6 +81,7 @@ export const floorRule: ShiftRule<ShiftContext> = {
   sourceOf: ({ facts }) => sourceOf(facts.floor),
 };
 
+/** The same paragraphs for one task: what opens the floor waits for the answer. */
 export const floorTaskRule: ShiftRule<TaskContext> = {
   ...floorRule,
   id: 'floor-survey-of-task',

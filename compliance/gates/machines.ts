@@ -5,7 +5,7 @@ import { type ShiftRule } from '../shift-rule';
 import { usFederal } from '../source';
 import { listed, words } from '../words';
 
-/** The maker's manual is on file for each machine of the task: Table 1 and the pre-use check both lean on it. */
+/** (c)(1) Table 1: tools and dust controls are run by the maker's instructions; 1926.300 to .303: guards and safe tools. Here: the maker's manual of each machine and collector of the task is on file. */
 export const manualRule: ShiftRule<TaskContext> = {
   id: 'machine-manual-on-file',
   title: words('The maker\'s manual on file', 'El manual del fabricante a la mano'),

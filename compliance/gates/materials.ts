@@ -8,7 +8,7 @@ import { inside, listed, words } from '../words';
 
 const noKit = notApplicable(words('No kit in this task.', 'Sin kit en esta tarea.'));
 
-/** Every product has a confirmed sheet before its task starts; one without is named, never silently used. */
+/** (g)(1): a safety data sheet in the workplace for each hazardous chemical that is used. Here: a task that handles a kit starts when every part has a confirmed sheet whose codes are known; a part without is named. */
 export const sheetsRule: ShiftRule<TaskContext> = {
   id: 'sheet-for-every-product',
   title: words('A sheet for every product', 'Una hoja para cada producto'),
@@ -38,7 +38,10 @@ export const sheetsRule: ShiftRule<TaskContext> = {
     outcome === 'met' ? words('Safety data sheets are here for every part.', 'Hay hoja de seguridad de cada parte.') : words(`${traits.name.en} may not start: a sheet is missing.`, `${traits.name.es}: no puede empezar, falta una hoja.`),
 };
 
-/** Flammable vapor and sparks are kept apart in time; air first, then the lid. */
+/**
+ * (f)(3): flammable liquids of category 1 to 3 (H224, H225, H226) are used only where no open flame or other source of ignition is within 50 feet, more where conditions ask it.
+ * Here: distance is for the crew line; in the plan, no task with sparks runs at the same time, and indoors no engine.
+ */
 export const flammableRule: ShiftRule<TaskContext> = {
   id: 'flammable-vapor-and-sparks',
   title: words('Flammable vapor and sparks', 'Vapor inflamable y chispas'),
@@ -49,6 +52,7 @@ export const flammableRule: ShiftRule<TaskContext> = {
   evaluate({ traits, task, facts, kitHazards }) {
     if (!traits.touchesKit || kitHazards === null || kitHazards.flammableCodes.length === 0) return notApplicable(words('No flammable liquid on the sheets.', 'Ningún líquido inflamable en las hojas.'));
     const spans = task.assignments.filter(isPossible);
+    // Other tasks that make sparks and share a minute with this one.
     const sparks = facts.tasks.filter(
       (other) => other.id !== task.id && TASKS[other.kind].isIgnition && other.assignments.some((theirs) => isPossible(theirs) && spans.some((ours) => theirs.startMinute < ours.endMinute && ours.startMinute < theirs.endMinute)),
     );
@@ -65,7 +69,7 @@ export const flammableRule: ShiftRule<TaskContext> = {
     outcome === 'met' ? words('Air moving before the lid comes off. No flame, no grinder within 50 feet.', 'Aire andando antes de abrir. Sin llama ni pulidora a 50 pies.') : words(`${traits.name.en} may not start: sparks near flammable vapor.`, `${traits.name.es}: no puede empezar, hay chispas cerca del vapor.`),
 };
 
-/** Vapor is decided apart from dust: what the sheets ask, and that a dust filter does not stop it. */
+/** (d)(3)(iii): against gas and vapor, supplied air or a cartridge with a change schedule. Here: said where the sheets show isocyanate or a flammable liquid, since a dust filter stops neither; the schedule is `cartridge-change-schedule`. */
 export const vaporRule: ShiftRule<TaskContext> = {
   id: 'vapor-apart-from-dust',
   title: words('Vapor decided apart from dust', 'El vapor se decide aparte del polvo'),
@@ -89,7 +93,7 @@ export const vaporRule: ShiftRule<TaskContext> = {
   line: () => words('P100 and N95 stop dust, not vapor. Doors open, fan to outside, before the lid comes off.', 'P100 y N95 detienen polvo, no vapor. Puertas abiertas y aire para afuera antes de abrir.'),
 };
 
-/** Sheets of resin and sensitizers: skin kept clean, breath trouble said at once. */
+/** P333+P313 (H317, skin) and P342+P311 (H334, breath): who shows signs of allergy is seen to. Here: the crew is told to stop and say so. */
 export const symptomRule: ShiftRule<TaskContext> = {
   id: 'sensitizer-symptoms',
   title: words('Say it when skin or breath is off', 'Avise si la piel o el aire fallan'),

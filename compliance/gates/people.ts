@@ -18,13 +18,14 @@ export interface PersonInTask extends SilicaPerson {
   readonly respirator: RespiratorAnswer;
 }
 
+/** Loose-fitting: no seal on the face to test. */
 const LOOSE: readonly RespiratorType[] = ['papr-loose', 'papr-hood', 'supplied-air-hood'];
 
-const since = (on: string | null, day: IsoDate): boolean => on !== null && isIsoDate(on) && on <= day;
+const isDoneBy = (on: string | null, day: IsoDate): boolean => on !== null && isIsoDate(on) && on <= day;
 
 /** Fit-tested within the year that ends on the day; loose-fitting hoods need no fit test. */
 export function isFitted({ type, fitTestedOn }: PersonRespirator, day: IsoDate): boolean {
-  return LOOSE.includes(type) || (fitTestedOn !== null && since(fitTestedOn, day) && isIsoDate(day) && addYears(fitTestedOn, 1) >= day);
+  return LOOSE.includes(type) || (fitTestedOn !== null && isDoneBy(fitTestedOn, day) && isIsoDate(day) && addYears(fitTestedOn, 1) >= day);
 }
 
 /** A negative-pressure full facepiece tested by taste or smell serves to a factor of 10; `null` where nobody said how it was tested ((f)(6)). */
@@ -33,7 +34,11 @@ function isTestEnough({ type, fitTestKind = null }: PersonRespirator, neededFact
   return fitTestKind === 'qualitative' ? false : null;
 }
 
-/** A required mask is the person's own: strong enough, cleared by a clinician, fitted within a year ((d), (e), (f)). */
+/**
+ * A required mask is (d)(3)(i)(A) strong enough, by its assigned factor; (e)(1) its wearer medically cleared before use; (f)(2) fit-tested within the year, with this very mask;
+ * (f)(6) where the test went by taste or smell and the mask is drawn in by breath, asked for a factor of 10 at most.
+ * Here: one of the person's own masks passes all four; the first paragraph at which none is left gives the reason. The factor asked comes from the task (`respirator.apf`).
+ */
 export const maskReadyRule: ShiftRule<PersonInTask> = {
   id: 'mask-cleared-and-fitted',
   title: words('Cleared, fitted and their own', 'Con permiso, prueba y propia'),
@@ -45,10 +50,13 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
     if (respirator.outcome !== 'required') return notApplicable(words('No mask is required.', 'No se exige máscara.'));
     const needed = respirator.apf ?? 0;
     const factorOf = ({ type }: PersonRespirator): number | null => pack.silica?.factors?.apf[type] ?? null;
-    // A sheet's respirator has no factor: the person's own serves, whatever it is rated.
+    // (d)(3)(i)(A). A sheet's respirator has no factor: the person's own serves, whatever it is rated.
     const strong = person.respirators.filter((mask) => respirator.apf === null || (factorOf(mask) ?? 0) >= needed);
-    const cleared = strong.filter(({ clearedOn }) => since(clearedOn, day));
+    // (e)(1)
+    const cleared = strong.filter(({ clearedOn }) => isDoneBy(clearedOn, day));
+    // (f)(2)
     const fitted = cleared.filter((mask) => isFitted(mask, day));
+    // (f)(6)
     const ready = fitted.find((mask) => isTestEnough(mask, needed) === true);
     const best = ready ?? fitted[0] ?? cleared[0] ?? strong[0] ?? person.respirators[0] ?? null;
     const inputs = {
@@ -59,18 +67,20 @@ export const maskReadyRule: ShiftRule<PersonInTask> = {
       'kind of fit test': best?.fitTestKind ?? null,
       date: facts.date,
     };
+    // Masks whose factor the law of the place does not give.
     const unrated = strong.length === 0 && person.respirators.some((mask) => factorOf(mask) === null);
     if (unrated) return undecided(words(`The factor of ${person.name}'s mask is not on file here.`, `No está anotado aquí el factor de la máscara de ${person.name}.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Look up its class and factor.', 'Busque su clase y factor.') });
     if (ready !== undefined) return met(words(`${person.name}: ${ready.label}, cleared and fitted.`, `${person.name}: ${ready.label}, con permiso y prueba.`), { inputs });
     if (fitted.some((mask) => isTestEnough(mask, needed) === null)) return undecided(words(`${person.name}'s full mask: by smell, or counted? By smell it serves to a factor of 10.`, `Máscara completa de ${person.name}: ¿por olor o medida? Por olor sirve hasta un factor de 10.`), WHO.safetyOfficer, { inputs, whatWouldChange: words('Look at the fit test record.', 'Mire el registro de la prueba.') });
+    // In the order of the paragraphs: (d)(3)(i)(A), (e)(1), (f)(2), (f)(6).
     const gap =
-      fitted.length > 0
-        ? words(`${person.name}'s full mask was tested by smell: good to a factor of 10 only.`, `La máscara completa de ${person.name} se probó por olor: solo hasta un factor de 10.`)
-        : strong.length === 0
+      strong.length === 0
         ? words(`${person.name} has no mask that is strong enough.`, `${person.name} no tiene máscara bastante fuerte.`)
         : cleared.length === 0
           ? words(`${person.name} is not cleared for this mask.`, `${person.name} no tiene permiso médico para esta máscara.`)
-          : words(`${person.name} has no fit test within a year.`, `${person.name} no tiene prueba de ajuste de este año.`);
+          : fitted.length === 0
+            ? words(`${person.name} has no fit test within a year.`, `${person.name} no tiene prueba de ajuste de este año.`)
+            : words(`${person.name}'s full mask was tested by smell: good to a factor of 10 only.`, `La máscara completa de ${person.name} se probó por olor: solo hasta un factor de 10.`);
     return unmet(gap, { inputs, whatWouldChange: words('Clear and fit the person, or put a ready one.', 'Consiga permiso y prueba, o ponga a otro listo.') });
   },
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: mask ready.`, `${person.name}: máscara lista.`) : words(`${person.name} may not do this task: mask not ready.`, `${person.name} no puede hacer esta tarea: falta su máscara.`)),
@@ -82,7 +92,7 @@ function trainedWords(name: string, on: string | null, by: string | null | undef
   return sentences(words(`${name} was trained on ${on}.`, `${name} tomó el curso el ${on}.`), certified);
 }
 
-/** Silica training before silica work; no yearly repeat ((i)). */
+/** (i)(2): each person covered by the silica rule can show knowledge of its hazards, tasks, controls and contents. Here: a training day on record before silica work; the paragraph asks no yearly repeat. */
 export const silicaTrainingRule: ShiftRule<PersonInTask> = {
   id: 'silica-training-on-record',
   title: words('Silica training on record', 'Curso de sílice anotado'),
@@ -94,16 +104,17 @@ export const silicaTrainingRule: ShiftRule<PersonInTask> = {
     const { person, silica } = context;
     // A signed basis below the action level takes the work out of the whole rule, its training too ((a)).
     if (silica.kind === 'basis' && silica.decision.kind === 'outside-scope') return notApplicable(words('The silica rule does not apply to this work.', 'La regla de sílice no aplica a este trabajo.'));
+    // Any work that makes or moves silica dust, decided or not, is covered.
     if (!isSilicaWork(context)) return notApplicable(words('No silica work.', 'Sin trabajo con sílice.'));
     const inputs = { 'silica training on': person.silicaTrainedOn, 'certified by': person.silicaTrainedBy ?? null };
-    return since(person.silicaTrainedOn, day)
+    return isDoneBy(person.silicaTrainedOn, day)
       ? met(trainedWords(person.name, person.silicaTrainedOn, person.silicaTrainedBy), { inputs })
       : unmet(words(`No silica training of ${person.name} is on record.`, `No está anotado el curso de sílice de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
   },
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: silica training done.`, `${person.name}: curso de sílice hecho.`) : words(`${person.name} may not do this task: no silica training.`, `${person.name} no puede hacer esta tarea: falta el curso de sílice.`)),
 };
 
-/** Hazard communication training before work with the kit ((h)(1)). */
+/** (h)(1): information and training on the hazardous chemicals of the work area at first assignment. Here: a training day on record before a task that handles a kit. */
 export const hazardTrainingRule: ShiftRule<PersonInTask> = {
   id: 'hazard-training-on-record',
   title: words('Chemical hazard training on record', 'Curso de químicos anotado'),
@@ -114,14 +125,14 @@ export const hazardTrainingRule: ShiftRule<PersonInTask> = {
   evaluate({ traits, person }, day) {
     if (!traits.touchesKit) return notApplicable(words('No kit in this task.', 'Sin kit en esta tarea.'));
     const inputs = { 'hazard training on': person.hazcomTrainedOn, 'certified by': person.hazcomTrainedBy ?? null };
-    return since(person.hazcomTrainedOn, day)
+    return isDoneBy(person.hazcomTrainedOn, day)
       ? met(trainedWords(person.name, person.hazcomTrainedOn, person.hazcomTrainedBy), { inputs })
       : unmet(words(`No chemical training of ${person.name} is on record.`, `No está anotado el curso de químicos de ${person.name}.`), { inputs, whatWouldChange: words('Train the person, or put a trained one.', 'Dé el curso, o ponga a alguien con curso.') });
   },
   line: ({ person }, { outcome }) => (outcome === 'met' ? words(`${person.name}: chemical training done.`, `${person.name}: curso de químicos hecho.`) : words(`${person.name} may not do this task: no chemical training.`, `${person.name} no puede hacer esta tarea: falta el curso de químicos.`)),
 };
 
-/** A clinician's limit keeps a person off isocyanates; the limit is stored, never the finding. */
+/** (e)(6)(i): the clinician's recommendation names limits, and no more. Here: the limit "no isocyanate" keeps its person off kits that hold it; the finding behind it is never stored. */
 export const keptFromIsocyanatesRule: ShiftRule<PersonInTask> = {
   id: 'kept-from-isocyanates',
   title: words('Kept off this kit', 'Fuera de este kit'),
@@ -142,7 +153,7 @@ export const keptFromIsocyanatesRule: ShiftRule<PersonInTask> = {
   line: ({ person }) => words(`${person.name} may not do this task.`, `${person.name} no puede hacer esta tarea.`),
 };
 
-/** Over eighteen, confirmed without a birth date, and the employer named. */
+/** No law cited: the officer confirms that the person is over eighteen, without a birth date. */
 export const adultRule: ShiftRule<PersonInTask> = {
   id: 'adult-confirmed',
   title: words('Over 18, confirmed', 'Mayor de 18, confirmado'),
@@ -157,6 +168,7 @@ export const adultRule: ShiftRule<PersonInTask> = {
   line: ({ person }) => words(`${person.name} may not work yet: age not confirmed.`, `${person.name} aún no puede trabajar: falta confirmar su edad.`),
 };
 
+/** No law cited: whose employee each person is, own, agency's or a subcontractor's, is named. */
 export const employerRule: ShiftRule<PersonOfShift> = {
   id: 'employer-named',
   title: words('Whose employee', 'De quién es empleado'),
@@ -174,10 +186,14 @@ export const employerRule: ShiftRule<PersonOfShift> = {
 };
 
 export interface BookedTwice extends PersonOfShift {
+  /** A time that two entries of the plan share, from `doubleBookings` (`silica/minutes.ts`); minutes from midnight. */
   readonly booking: { readonly startMinute: number; readonly endMinute: number; readonly withName: string };
 }
 
-/** One person in two places of the plan is noticed; the minutes count once. */
+/**
+ * No law cited: one person cannot be in two places of the plan at once, breaks and inspections aside.
+ * Asked only of a time that two entries share, so it is always unmet. It holds nothing, and the silica sum counts the shared minutes once (`table1Time`).
+ */
 export const doubleBookingRule: ShiftRule<BookedTwice> = {
   id: 'double-booking',
   title: words('Booked twice', 'En dos lugares'),

@@ -22,7 +22,7 @@ function writtenExceptions({ tasks, kits }: ShiftFacts): readonly WrittenExcepti
   return exceptions.length === onFloor.length ? exceptions : [];
 }
 
-/** Grinding gives CSP 1 to 3. A coarse grind with primer in place of a rougher profile is the supplier's written exception, never that profile. */
+/** ICRI 310.2R: each method gives a range of concrete surface profiles (`METHOD_RANGES`); grinding gives CSP 1 to 3. A coarse grind with primer in place of a rougher profile is the supplier's written exception, never that profile. */
 export const profileRule: ShiftRule<ShiftContext> = {
   id: 'floor-profile',
   title: words('The floor profile wanted', 'El perfil de piso que se pide'),
@@ -37,6 +37,7 @@ export const profileRule: ShiftRule<ShiftContext> = {
     if (target === null || ranges.length === 0) return notApplicable(words('No work toward a profile.', 'No se trabaja para un perfil.'));
     const roughest = Math.max(...ranges.map(({ maxProfile }) => maxProfile));
     const inputs = { 'profile wanted, CSP': target, 'roughest that the planned work gives, CSP': roughest };
+    // Reached by the roughest method planned; else the supplier's exception; else the supplier decides.
     if (target <= roughest) return met(words(`CSP ${target} is wanted.`, `Se pide CSP ${target}.`), { inputs });
     const exceptions = writtenExceptions(facts);
     if (exceptions.length > 0) {

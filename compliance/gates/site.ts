@@ -5,7 +5,7 @@ import { type ShiftRule } from '../shift-rule';
 import { sourced, usFederal } from '../source';
 import { sentences, words } from '../words';
 
-/** The host's hazards toward the crew are asked before work; "none" is an answer, silence is not. */
+/** (e)(2): employers on one site tell each other of the chemicals that may reach the other's people; 1926.16: the prime contractor answers for the site. Here: the host was asked what can hurt the crew; "none" is an answer, silence is not. */
 export const hostHazardsRule: ShiftRule<ShiftContext> = {
   id: 'host-hazards-asked',
   title: words('The host\'s hazards', 'Los peligros del lugar'),
@@ -23,7 +23,7 @@ export const hostHazardsRule: ShiftRule<ShiftContext> = {
   line: (_context, { outcome }) => (outcome === 'met' ? words('We know the hazards of this place. The host knows ours.', 'Sabemos los peligros de aquí. El lugar sabe los nuestros.') : words('Nobody asked about the hazards of this place.', 'Nadie preguntó por los peligros de aquí.')),
 };
 
-/** A competent person is named and on the crew of the day ((g)(4), 1926.20(b)(2)). */
+/** (g)(4): a competent person inspects the site, materials and equipment often and regularly to carry out the silica plan; 1926.20(b)(2): the same for the whole job. Here: one is named who is on the crew of the day. */
 export const competentPersonRule: ShiftRule<ShiftContext> = {
   id: 'competent-person-named',
   title: words('The competent person', 'La persona competente'),
@@ -45,7 +45,7 @@ export const competentPersonRule: ShiftRule<ShiftContext> = {
 
 const machineTasks = ({ tasks }: ShiftFacts, personId: string | undefined): readonly TaskFacts[] => tasks.filter(({ equipmentId, assignments }) => equipmentId !== null && assignments.some((each) => each.personId === personId));
 
-/** A competent person who runs a machine cannot inspect at the same time: who does? */
+/** (b)(2): frequent and regular inspections by competent persons. Here, a judgement: one who runs a machine cannot inspect at the same time, so somebody is named who is free then. */
 export const inspectionCoverRule: ShiftRule<ShiftContext> = {
   id: 'inspection-cover',
   title: words('Who inspects meanwhile', 'Quién revisa mientras tanto'),
@@ -58,8 +58,10 @@ export const inspectionCoverRule: ShiftRule<ShiftContext> = {
     const machines = machineTasks(facts, person?.id);
     const cover = peopleById.get(facts.inspectionCoverId ?? '');
     const inputs = { 'competent person': person?.name ?? null, 'tasks at a machine': machines.length, 'inspects meanwhile': cover?.name ?? null };
+    // Nobody named is `competent-person-named`'s to say.
     if (person === undefined || machines.length === 0) return met(words('Free to inspect all shift.', 'Libre para revisar todo el turno.'), { inputs });
     if (cover !== undefined && cover.id !== person.id) {
+      // Free: at no machine and on no other job while the competent person runs one.
       const theirs = [...machineTasks(facts, cover.id).flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === cover.id)), ...cover.elsewhere];
       const ours = machines.flatMap(({ assignments }) => assignments.filter(({ personId }) => personId === person.id));
       const isBusy = ours.some((span) => theirs.some((other) => span.startMinute < other.endMinute && other.startMinute < span.endMinute));
@@ -71,7 +73,7 @@ export const inspectionCoverRule: ShiftRule<ShiftContext> = {
   line: (_context, { outcome }) => (outcome === 'met' ? words('Inspections are covered.', 'Las revisiones están cubiertas.') : words('Who inspects while the competent person runs a machine?', '¿Quién revisa mientras la persona competente maneja?')),
 };
 
-/** A place without its own pack, or with an incomplete one, is said on every document. */
+/** No paragraph: which law judges the shift. A place without its own pack, or with an incomplete one, is said on every document. */
 export const packRule: ShiftRule<ShiftContext> = {
   id: 'rules-of-the-place',
   title: words('Which law this is', 'Qué ley es esta'),

@@ -5,7 +5,11 @@ import { words } from '../words';
 import { auditSds, type SdsForAudit } from './sds-audit';
 import { hazardRowsOf, readHazardCodes, singleCodes } from './statements';
 
-/** Form (Appendix D) and consistency (Appendix C) of one revision. */
+/**
+ * App. D: a sheet has its 16 sections in order, under their headings, each with its minimum content; App. C: signal word and pictograms are those that its hazard statements ask.
+ * Each line is one function of `sds-audit.ts`, with its own source, in this order: sections, contents, label elements, CAS check digits, date, language.
+ * Here: one unmet line fails the sheet, else one open line leaves it undecided. Lines of the organization's own policy (age) do not count.
+ */
 export const sheetAudit: Rule<SdsForAudit> = {
   id: 'sheet-audit',
   title: words('Sheet has its form and agrees with itself', 'La hoja tiene su forma y concuerda consigo misma'),
@@ -31,7 +35,10 @@ export interface ProductSheetFacts {
   readonly receivedRevisedOn: IsoDate | null;
 }
 
-/** A sheet for every product, and the one that matches what was received. */
+/**
+ * (g)(1): a sheet for each hazardous chemical in use; (g)(5)-(7): suppliers bring it up to date and send it with the first shipment after a change.
+ * Here: the confirmed sheet bears the date of the one that came with the product.
+ */
 export const sheetMatchesProduct: Rule<ProductSheetFacts> = {
   id: 'sheet-matches-product',
   title: words('The sheet on file is the one of the product received', 'La hoja archivada es la del producto recibido'),
@@ -39,7 +46,9 @@ export const sheetMatchesProduct: Rule<ProductSheetFacts> = {
   duties: ['HAZ-04', 'HAZ-08'],
   evaluate({ productName, confirmedRevisedOn, receivedRevisedOn }) {
     const inputs = { product: productName, 'on file': confirmedRevisedOn, received: receivedRevisedOn };
+    // (g)(1)
     if (confirmedRevisedOn === null) return unmet(words(`${productName} has no confirmed sheet.`, `${productName} no tiene una hoja confirmada.`), { inputs, whatWouldChange: words('Upload and confirm its sheet.', 'Suba y confirme su hoja.') });
+    // (g)(5)-(7)
     checkIsoDate('confirmedRevisedOn', confirmedRevisedOn);
     if (receivedRevisedOn === null) return undecided(words('Nobody has compared it with the sheet that came with the product.', 'Nadie la ha comparado con la hoja que vino con el producto.'), WHO.safetyOfficer, { inputs, whatWouldChange: words('Compare the two dates.', 'Compare las dos fechas.') });
     if (checkIsoDate('receivedRevisedOn', receivedRevisedOn) !== confirmedRevisedOn) {
@@ -56,7 +65,7 @@ export interface NewHazardFacts {
   readonly trainedClasses: readonly string[];
 }
 
-/** Training when a new chemical hazard is introduced: a new hazard class, not each new product, and no yearly repeat. */
+/** (h)(1): training at first assignment and when a chemical hazard that people were not trained on enters the work area. Here: a new hazard class, not each new product, and no yearly repeat. */
 export const trainingAtNewHazard: Rule<NewHazardFacts> = {
   id: 'training-at-new-hazard',
   title: words('Trained before a new kind of hazard', 'Capacitación antes de un nuevo tipo de peligro'),
@@ -67,6 +76,7 @@ export const trainingAtNewHazard: Rule<NewHazardFacts> = {
     const classes = [...new Set(singleCodes(codes).flatMap((code) => hazardRowsOf(code).map((row) => row.hazardClass)))];
     const fresh = classes.filter((each) => !trainedClasses.includes(each));
     const inputs = { 'hazard classes on the job': classes.length, 'trained on': trainedClasses.length };
+    // A class of the job's sheets that the person was not trained on; then a code that no table knows.
     if (fresh.length > 0) return unmet(words(`New here: ${fresh.join('; ')}.`, `Nuevo aquí: ${fresh.join('; ')}.`), { inputs, whatWouldChange: words('Brief the person on it.', 'Explíqueselo a la persona.') });
     if (unknown.length > 0) return undecided(unknown[0]!.question, WHO.safetyOfficer, { inputs, whatWouldChange: words('Name the hazard.', 'Nombre el peligro.') });
     if (classes.length === 0) return notApplicable(words('No hazard statements on the job’s sheets.', 'Las hojas del trabajo no traen indicaciones de peligro.'), { inputs });

@@ -9,7 +9,10 @@ export interface ProtectedTask extends TaskContext {
   readonly protection: readonly ProtectionItem[];
 }
 
-/** Protection from the hazards of the sheets, the task and the place; it fits the one who wears it (29 CFR 1926.28, .95, .102). */
+/**
+ * 1926.95(a), 1926.28(a): protective equipment is worn wherever hazards of the work or its materials ask it; (c): it fits the one who wears it.
+ * Here: the items that sheets, task and place ask, as `ppe/protection.ts` found them, with the reason of each.
+ */
 export const protectionRule: ShiftRule<ProtectedTask> = {
   id: 'protection-for-task',
   title: words('Protection for the task', 'Protección para la tarea'),

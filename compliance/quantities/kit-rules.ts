@@ -20,15 +20,16 @@ export interface KitCount {
 const isAmount = (value: number | null): value is number => value !== null && Number.isFinite(value) && value >= 0;
 const isPositive = (value: number | null): value is number => isAmount(value) && value >= LEAST_AMOUNT;
 
-/** Kits, minutes and dumps; null where area, thickness or a count by hand is missing or cannot be. */
+/** Kits, minutes and dumps (bags of powder emptied); null where area, thickness or a count by hand is missing or cannot be. */
 export function countKits({ facts }: ShiftContext, kit: KitFacts): KitCount | null {
   const { areaM2, thicknessMm } = facts;
+  // A count by hand goes before the sum of area × thickness ÷ volume of a kit.
   const kits = kit.count !== null ? kit.count : isAmount(areaM2) && isPositive(thicknessMm) && isPositive(kit.volumeL) ? kitsFor(areaM2, thicknessMm, kit.volumeL) : null;
   if (!isAmount(kits) || !isAmount(kit.mixMinutesPerKit)) return null;
   return { kits, ...mixingOf({ kits, mixMinutesPerKit: kit.mixMinutesPerKit, powderParts: kit.parts.filter(({ form }) => form === 'powder').length }) };
 }
 
-/** Area and thickness give kits, and kits give exposure time. */
+/** Trade arithmetic: area × thickness ÷ volume of a kit, rounded up, gives kits (`kitsFor`); kits × minutes a kit give mixing time, kits × powder parts the dumps (`mixingOf`). */
 export const kitCountRule: ShiftRule<KitOfShift> = {
   id: 'kit-count',
   title: words('Kits, mixing minutes and dumps', 'Kits, minutos de mezcla y vaciadas'),
@@ -58,7 +59,7 @@ export const kitCountRule: ShiftRule<KitOfShift> = {
   },
 };
 
-/** Mixed material leaves the bucket in time. */
+/** The supplier's time in the bucket, in minutes: mixed material is out of it before. */
 export const bucketTimeRule: ShiftRule<KitOfShift> = {
   id: 'kit-bucket-time',
   title: words('Time in the bucket', 'Tiempo en el balde'),
@@ -71,7 +72,10 @@ export const bucketTimeRule: ShiftRule<KitOfShift> = {
   line: ({ kit }) => words(`Out of the bucket within ${kit.bucketMinutes} minutes.`, `Fuera del balde antes de ${kit.bucketMinutes} minutos.`),
 };
 
-/** A product without a confirmed sheet is named on the kit; its tasks are held by `sheet-for-every-product`. */
+/**
+ * (g)(1): a safety data sheet in the workplace for each hazardous chemical that is used.
+ * Here: each part of the kit whose sheet nobody has confirmed is named; its tasks are held by `sheet-for-every-product`, so a kit with all its sheets needs no line.
+ */
 export const kitSheetsRule: ShiftRule<KitOfShift> = {
   id: 'kit-sheets',
   title: words('Sheets of the kit\'s parts', 'Hojas de las partes del kit'),

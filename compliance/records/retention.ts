@@ -32,10 +32,11 @@ export function retention(facts: RecordFacts, asOf: IsoDate): RetentionAnswer {
   if (row === undefined) {
     return { outcome: 'undecided', reason: { en: 'No period for this place is on file. Keep it.', es: 'No hay un plazo registrado para este lugar. Consérvelo.' }, whoDecides: WHO.localAuthority };
   }
+  // (d)(1)(ii)(B)
   if (facts.record === 'sheet' && facts.hasSubstitute) {
     return { outcome: 'no-period', reason: { en: 'The register of use is kept for 30 years in its place.', es: 'En su lugar se guarda 30 años el registro de uso.' }, row };
   }
-  // Work papers may go after a year only when their results stay.
+  // (d)(1)(ii)(A): work papers may go after a year only when their results stay; else 30 years, as any exposure record.
   if (facts.record === 'background-data' && !facts.hasSubstitute) return keepUntil(row, addYears(facts.madeOn, 30), asOf);
   return byKeeping(facts, row, asOf);
 }

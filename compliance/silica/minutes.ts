@@ -1,4 +1,5 @@
 import { type Assignment, type PersonFacts, type ShiftFacts, type TaskKind } from '../facts';
+import { MINUTES_PER_DAY } from '../input-error';
 import { FOUR_HOURS_MINUTES } from './table1';
 
 /** Kinds of floor work that stand in Table 1. Counted by kind, so that a machine outside its row never shortens anyone's sum. */
@@ -11,9 +12,9 @@ export interface Interval {
   readonly endMinute: number;
 }
 
-/** Whether the times can be: finite, in order, from the evening before to the end of the day after. */
+/** Whether the times can be: finite, in order, 24 hours at most, from the day before to the end of the day after. */
 export function isPossible({ startMinute, endMinute }: Interval): boolean {
-  return Number.isFinite(startMinute) && Number.isFinite(endMinute) && startMinute >= -1440 && endMinute <= 2880 && startMinute <= endMinute && endMinute - startMinute <= 1440;
+  return Number.isFinite(startMinute) && Number.isFinite(endMinute) && startMinute >= -MINUTES_PER_DAY && endMinute <= 2 * MINUTES_PER_DAY && startMinute <= endMinute && endMinute - startMinute <= MINUTES_PER_DAY;
 }
 
 /** The same time in sorted pieces that do not overlap. */

@@ -5,10 +5,10 @@ import { commonPractice, usFederal } from '../source';
 import { words } from '../words';
 import { isSilicaWork, type SilicaTask } from './silica-context';
 
-const planned = words('Checked at the start of the task.', 'Se revisa al empezar la tarea.');
-const elsewhere = notApplicable(words('Not for this task.', 'No es para esta tarea.'));
+const checkedAtStart = words('Checked at the start of the task.', 'Se revisa al empezar la tarea.');
+const notForThisTask = notApplicable(words('Not for this task.', 'No es para esta tarea.'));
 
-/** Indoors and in enclosed areas: exhaust as needed against visible dust ((c)(2)(i)). */
+/** (c)(2)(i): Table 1 work indoors or in an enclosed area has a means of exhaust, as needed so that visible dust does not gather. */
 export const exhaustIndoorsRule: ShiftRule<SilicaTask> = {
   id: 'silica-exhaust-indoors',
   title: words('Exhaust indoors', 'Extracción adentro'),
@@ -16,11 +16,11 @@ export const exhaustIndoorsRule: ShiftRule<SilicaTask> = {
   duties: ['SIL-05'],
   topic: 'control',
   holds: false,
-  evaluate: (context) => (context.silica.kind === 'table-1' && isIndoors(context) ? met(planned, { inputs: { setting: context.facts.setting } }) : elsewhere),
+  evaluate: (context) => (context.silica.kind === 'table-1' && isIndoors(context) ? met(checkedAtStart, { inputs: { setting: context.facts.setting } }) : notForThisTask),
   line: () => words('Exhaust to outside. No cloud you can see.', 'Aire sucio para afuera. Sin nube a la vista.'),
 };
 
-/** Wet methods: enough flow that no dust is seen ((c)(2)(ii)); the rule names no figure. */
+/** (c)(2)(ii): Table 1 work by a wet method has water enough that visible dust is kept down; the paragraph names no figure. */
 export const waterFlowRule: ShiftRule<SilicaTask> = {
   id: 'silica-water-flow',
   title: words('Water enough', 'Agua suficiente'),
@@ -28,13 +28,17 @@ export const waterFlowRule: ShiftRule<SilicaTask> = {
   duties: ['SIL-05'],
   topic: 'control',
   holds: false,
-  evaluate: ({ silica }) => (silica.kind === 'table-1' && silica.option.method === 'water' ? met(planned) : elsewhere),
+  evaluate: ({ silica }) => (silica.kind === 'table-1' && silica.option.method === 'water' ? met(checkedAtStart) : notForThisTask),
   line: () => words('Water on full. No dust you can see.', 'Agua bien abierta. Sin polvo a la vista.'),
 };
 
 const NO_BETTER_WAY = words('Only where no wet or vacuum way can work, or a hood takes the blown dust. The competent person writes down why.', 'Solo si no sirve ni mojar ni aspirar, o una campana atrapa lo soplado. La persona competente anota por qué.');
 
-/** No dry sweeping, no compressed air ((f)); both have an exception, which is for the competent person, not for the crew line. */
+/**
+ * Where it could add to silica exposure: (f)(1) no dry sweeping or brushing unless wet, HEPA vacuum and other ways are not feasible;
+ * (f)(2) no compressed air on clothing or surfaces unless (i) with ventilation that catches the cloud or (ii) no other way is feasible.
+ * Here: both exceptions are for the competent person, under "what would change this", not for the crew line.
+ */
 export const housekeepingRule: ShiftRule<SilicaTask> = {
   id: 'silica-housekeeping',
   title: words('No dry sweeping, no blown air', 'Sin barrer en seco, sin soplar'),
@@ -42,25 +46,25 @@ export const housekeepingRule: ShiftRule<SilicaTask> = {
   duties: ['SIL-15'],
   topic: 'housekeeping',
   holds: false,
-  evaluate: (context) => (isSilicaWork(context) ? met(words('Dry sweeping and blown air put the dust back in the air.', 'Barrer en seco y soplar levanta el polvo otra vez.'), { whatWouldChange: NO_BETTER_WAY }) : elsewhere),
+  evaluate: (context) => (isSilicaWork(context) ? met(words('Dry sweeping and blown air put the dust back in the air.', 'Barrer en seco y soplar levanta el polvo otra vez.'), { whatWouldChange: NO_BETTER_WAY }) : notForThisTask),
   line: () => words('HEPA vacuum or wet. No dry sweeping. No blown air.', 'Aspiradora HEPA o mojado. Sin barrer en seco. Sin soplar.'),
 };
 
-/** Others kept out of the dust ((g)(1)(iv)). */
+/** (g)(1)(iv): the written plan says how access is restricted, when necessary, so that few are exposed and little. Here: asked at every dusty silica task. */
 export const accessRule: ShiftRule<SilicaTask> = {
   id: 'silica-access',
   title: words('Others kept out of the dust', 'Otros lejos del polvo'),
-  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(1)(iv)', note: 'Read in WAC 296-840-140(4)(a): "when necessary". The agency reads that as where a mask is required or the limit is passed (81 FR 16803, quoted in its questions and answers); elsewhere it is good practice.' }),
+  source: usFederal('1926.1153', 'parallel-text', { paragraph: '(g)(1)(iv)', note: 'Read in WAC 296-840-140(4)(a): "when necessary". The agency reads that as where a mask is required or the limit is passed (81 FR 16803, quoted in its questions and answers); notForThisTask it is good practice.' }),
   duties: ['GATE-07'],
   topic: 'access',
   holds: false,
-  evaluate: (context) => (isSilicaWork(context) && context.traits.isDusty ? met(words('Other people here must not breathe our dust.', 'Otra gente aquí no debe respirar nuestro polvo.')) : elsewhere),
+  evaluate: (context) => (isSilicaWork(context) && context.traits.isDusty ? met(words('Other people here must not breathe our dust.', 'Otra gente aquí no debe respirar nuestro polvo.')) : notForThisTask),
   line: () => words('Door closed, sign up, neighbors told.', 'Puerta cerrada, aviso puesto, vecinos avisados.'),
 };
 
 const OPEN_NOZZLE = words('An open nozzle, or a blaster that leaks: then the operator wears a blasting hood with supplied air.', 'Una boquilla abierta o una máquina que fuga: entonces el operador usa capucha de granallado con aire.');
 
-/** Blasting of concrete: beside (d) the abrasive-blasting rule holds, and its shot lies on the floor ((d)(3)(ii), 1926.57(f)). */
+/** 1926.1153(d)(3)(ii): where silica is blasted or blasts, 1926.57(f) holds too: dust kept in and drawn off, the operator protected. Here: a closed wheel blaster, and the shot that lies on the floor after it. */
 export const blastingRule: ShiftRule<SilicaTask> = {
   id: 'shot-blasting-safeguards',
   title: words('Shot blasting safeguards', 'Cuidados al granallar'),
@@ -71,14 +75,14 @@ export const blastingRule: ShiftRule<SilicaTask> = {
   evaluate: ({ task }) =>
     task.kind === 'shot-blasting' || task.kind === 'shot-pick-up'
       ? met(words('A wheel blaster is abrasive blasting too. Shot underfoot is a fall.', 'Una granalladora también es chorro abrasivo. Pisar granalla es caerse.'), { whatWouldChange: task.kind === 'shot-blasting' ? OPEN_NOZZLE : null })
-      : elsewhere,
+      : notForThisTask,
   line: ({ task }) =>
     task.kind === 'shot-blasting'
       ? words('Seals whole, collector on before the wheel, and on after it stops.', 'Sellos enteros, colector prendido antes de la rueda y después de pararla.')
       : words('Shot and dust picked up by magnet and vacuum.', 'Granalla y polvo: con imán y aspiradora.'),
 };
 
-/** Powder dumped at the bucket: catch the dust where it rises. */
+/** No law cited: dust of powder emptied into the mixing bucket is caught where it rises. Here: extraction for a bucket is on the list of equipment. */
 export const bucketDustRule: ShiftRule<SilicaTask> = {
   id: 'powder-dust-at-bucket',
   title: words('Dust caught at the bucket', 'Polvo atrapado en el balde'),
@@ -87,7 +91,7 @@ export const bucketDustRule: ShiftRule<SilicaTask> = {
   topic: 'control',
   holds: false,
   evaluate({ task, facts, tool, collector }) {
-    if (task.kind !== 'powder-mixing') return elsewhere;
+    if (task.kind !== 'powder-mixing') return notForThisTask;
     const hasExtraction = facts.equipment.some(({ kind }) => kind === 'bucket-extraction') || tool?.kind === 'bucket-extraction' || collector?.kind === 'bucket-extraction';
     const inputs = { 'extraction at the bucket': hasExtraction };
     return hasExtraction

@@ -40,7 +40,10 @@ function whatRestores({ because, row }: LeftTable1): Words {
   return isOutdoorsOnly ? words('Do it outdoors, or a signed basis.', 'Hágalo afuera, o una base firmada.') : RESTORES[because];
 }
 
-/** Which row of Table 1 governs; a task that leaves Table 1 is held until it is back or a basis is signed ((c)(1), (d)). */
+/**
+ * (c)(1): the row of Table 1 that names the equipment and task gives controls and respirator; (d): a task that no row fits, or whose row is not fully kept, is assessed instead.
+ * Here: `decideTable1` (`decision.ts`) finds the row by machine, dust control and place; a task that leaves Table 1 is held until it is back or a basis is signed.
+ */
 export const table1RowRule: ShiftRule<SilicaTask> = {
   id: 'silica-table-1-row',
   title: words('The Table 1 row of the task', 'La fila de la Tabla 1 para la tarea'),
@@ -51,12 +54,15 @@ export const table1RowRule: ShiftRule<SilicaTask> = {
   evaluate({ silica, tool, task, facts }) {
     const inputs = { tool: tool?.name ?? null, 'dust control': task.dustMethod, setting: facts.setting };
     switch (silica.kind) {
+      // (c)(1) A row fits; whether its controls are whole is `silica-table-1-whole`.
       case 'table-1':
       case 'controls-unknown':
         return met(silica.option.heading, { inputs, results: { row: silica.option.row } });
+      // (d) No row fits, or a control of it is missing, and no basis is signed.
       case 'lost':
         if (silica.left.because === 'not-compared') return undecided(LEFT['not-compared'], WHO.localAuthority, { inputs, results: { row: silica.left.row }, whatWouldChange: RESTORES['not-compared'] });
         return unmet(LEFT[silica.left.because], { inputs, results: { row: silica.left.row }, whatWouldChange: whatRestores(silica.left) });
+      // The row hangs on a machine or dust control that nobody chose.
       case 'not-chosen':
         return silica.missing === 'machine'
           ? undecided(words('No machine is chosen, so no row can be.', 'No hay máquina elegida, así que no hay fila.'), WHO.competentPerson, { inputs, whatWouldChange: words('Choose the machine.', 'Elija la máquina.') })
@@ -104,7 +110,10 @@ function otherInputs({ collector, tool }: ControlOfTask): Readonly<Record<string
   return { tool: tool?.name ?? null, collector: collector?.name ?? null, 'filter, percent': collector?.filterEfficiencyPercent ?? null };
 }
 
-/** Each control of the row against the equipment on the truck; one that is missing loses Table 1 ((c)(1), (d)). */
+/**
+ * (c)(1): every control and work practice of the row is fully and properly in place; (d): one that is not loses Table 1.
+ * Here: one line a control, as `checkControls` (`table1-controls.ts`) compared it with the equipment on the truck; what only the eye can tell is asked at the start of the task.
+ */
 export const table1ControlRule: ShiftRule<ControlOfTask> = {
   id: 'silica-table-1-control',
   title: words('The controls of the Table 1 row', 'Los controles de la fila de la Tabla 1'),
@@ -137,7 +146,10 @@ export const table1ControlRule: ShiftRule<ControlOfTask> = {
   sourceOf: ({ silica }) => ('option' in silica ? silica.option.source : table1ControlRule.source),
 };
 
-/** A control row that is open holds the task; kept apart so that each control has its own line and the hold is said once. */
+/**
+ * (c)(1): the controls are in place fully, not in part; (d): else the task is not in Table 1.
+ * Here: a control that failed today, or that nobody wrote down, holds the task; kept apart from the lines of the single controls so that the hold is said once.
+ */
 export const table1WholeRule: ShiftRule<SilicaTask> = {
   id: 'silica-table-1-whole',
   title: words('Table 1 is all or nothing', 'La Tabla 1 es todo o nada'),
@@ -146,9 +158,11 @@ export const table1WholeRule: ShiftRule<SilicaTask> = {
   topic: 'gate',
   holds: true,
   evaluate({ silica, task }) {
+    // (d) A control failed on the day.
     if (silica.kind === 'control-failed') {
       return unmet(words(`Stopped: ${silica.control}`, `Detenido: ${silica.control}`), { inputs: { 'failed control': task.failedControl }, whatWouldChange: RESTORES.controls });
     }
+    // (c)(1) A control of the row is not on file.
     if (silica.kind !== 'controls-unknown') return notApplicable(words('Nothing is open.', 'No falta nada.'));
     const open = silica.checks.filter(({ state }) => state === 'unknown').map(({ demand }) => DEMAND_WORDS[demand]);
     return undecided(sentences(words('Not on file:', 'Sin anotar:'), ...open), WHO.competentPerson, {
@@ -168,7 +182,10 @@ function whatMinutesChange(respirator: Table1Respirator | null, minutes: number)
   return minutes > FOUR_HOURS_MINUTES ? words('4 h or less in all.', '4 h o menos en total.') : words('More than 4 h in all.', 'Más de 4 h en total.');
 }
 
-/** The respirator column by the person's Table 1 sum over all jobs ((c)(1), (c)(3)). */
+/**
+ * (c)(3): a person whose Table 1 tasks of the shift add up to more than four hours (240 minutes; exactly four is not more) takes, in each of them, the respirator of the column "> 4 hours", else that of "≤ 4 hours".
+ * The sum over all jobs: `table1Time` (`minutes.ts`); the row's two columns: `table1.data.ts`; which one: `table1Apf` (`table1.ts`).
+ */
 export const table1RespiratorRule: ShiftRule<SilicaPerson> = {
   id: 'silica-table-1-respirator',
   title: words('The Table 1 mask by minutes and place', 'La máscara de la Tabla 1 por minutos y lugar'),
