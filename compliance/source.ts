@@ -36,6 +36,11 @@ export function usFederal(section: string, verified: Verified, extra: SourceExtr
   return { citation: `29 CFR ${section}`, verified, ...extra };
 }
 
+/** Whether it is the US federal text, which is no law elsewhere. */
+export function isFederal({ citation }: Source): boolean {
+  return /\b29 CFR\b/.test(citation);
+}
+
 /** Any other source, for example a state code, a guideline or a study. */
 export function sourced(citation: string, verified: Verified, extra: SourceExtra = {}): Source {
   return { citation, verified, ...extra };

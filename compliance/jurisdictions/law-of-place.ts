@@ -2,13 +2,8 @@ import { type ProtectionItem, type RespiratorAnswer } from '../answer';
 import { type Finding, type Words } from '../outcome';
 import { WHO } from '../rule';
 import { type ShiftPack } from '../silica/shift-pack';
-import { sourced, type Source } from '../source';
+import { isFederal, sourced, type Source } from '../source';
 import { sentences, words } from '../words';
-
-/** Whether a line leans on the US federal text. */
-export function isFederal({ citation }: Source): boolean {
-  return /\b29 CFR\b/.test(citation);
-}
 
 /** What a line needs to know of the place. */
 type Place = Pick<ShiftPack, 'name' | 'federalText' | 'orientation'>;

@@ -133,6 +133,13 @@ describe('[SIL-14] choice by hazard ratio', () => {
     expect(leastApf({ jurisdictionId: 'us-california' })).toBe('undecided');
   });
 
+  it('[LOC-02] cites no US paragraph for a place outside the US, whatever comes out (conduct 9)', () => {
+    for (const jurisdictionId of ['australia', 'great-britain', 'canada-ontario', 'nowhere', '']) {
+      for (const changes of [{}, { exposureMgPerM3: null }, { exposureMgPerM3: 0.01 }, { exposureMgPerM3: 60 }, { limitMgPerM3: null }]) expect(selectRespirator(need({ jurisdictionId, ...changes })).source.citation).not.toContain('29 CFR');
+    }
+    expect(selectRespirator(need({ exposureMgPerM3: null })).source.citation).toContain('29 CFR');
+  });
+
   it('takes the strictest of several contaminants (trap 10), and an undecided one holds all', () => {
     const silica = need({ exposureMgPerM3: 0.1 });
     const worse = need({ exposureMgPerM3: 0.6 });

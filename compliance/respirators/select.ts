@@ -1,7 +1,7 @@
 import { checkNumber } from '../input-error';
 import { type Words } from '../outcome';
 import { WHO } from '../rule';
-import { usFederal, type Source } from '../source';
+import { isFederal, sourced, usFederal, type Source } from '../source';
 import { APF_COMPARISON, apfOf, apfRowsOf, type ApfRow } from './apf.data';
 
 export const MUC_SOURCE = usFederal('1910.134', 'read', { paragraph: '(b), (d)(3)(i)(B)' });
@@ -52,6 +52,14 @@ export type RespiratorChoice =
 
 /** Chooses by hazard ratio from the factors of the place. Controls come first: this answers only what is left after them. */
 export function selectRespirator(need: RespiratorNeed): RespiratorChoice {
+  const choice = choose(need);
+  // In another country the US paragraph is not the rule, whatever the arithmetic says.
+  return need.jurisdictionId.startsWith('us-') || !isFederal(choice.source) ? choice : { ...choice, source: NOT_ON_FILE };
+}
+
+const NOT_ON_FILE = sourced('No text on file for this place', 'not-on-file', { note: 'Check the local law.' });
+
+function choose(need: RespiratorNeed): RespiratorChoice {
   const { exposureMgPerM3: exposure, limitMgPerM3: limit, idlhMgPerM3: idlh } = need;
   if (exposure === null) {
     return {
