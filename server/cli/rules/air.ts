@@ -62,6 +62,8 @@ const notice = calculation({
   run: ({ assessmentCompletedOn, scope, country, state }) => {
     const isHoliday = publicHolidays(country, state);
     if (isHoliday === null) throw new RefusedInput([{ field: state === undefined ? 'country' : 'state', message: 'has no holiday calendar' }]);
+    // The five and fifteen working days are US text: no other country's date is made of them.
+    if (country.toUpperCase() !== 'US') return { outcome: 'undecided', reason: { en: 'The days for the notice are US text. Check the local law.', es: 'El plazo del aviso es texto de EE. UU. Consulte la ley local.' } };
     return noticeDate(assessmentCompletedOn, scope, isHoliday);
   },
 });

@@ -106,6 +106,7 @@ describe('answers on the command line', () => {
     expect((await answer('table1', { jurisdictionId: 'us-california', tasks: [grinder] })).tasks[0]).toMatchObject({ isCovered: false, outcome: 'undecided' });
     expect(await answer('monitoring', { jurisdictionId: 'great-britain', asOf: '2026-12-01', results: [] })).toMatchObject({ outcome: 'undecided' });
     expect(await answer('monitoring', { jurisdictionId: 'new-zealand', asOf: '2026-12-01', results: [] })).toMatchObject({ outcome: 'undecided' });
+    expect(await answer('notice-date', { assessmentCompletedOn: '2026-12-04', scope: 'construction', country: 'NZ' })).toMatchObject({ outcome: 'undecided' });
     expect(await answer('respirator', { jurisdictionId: 'australia', exposureMgPerM3: 1, limitMgPerM3: 0.05, form: 'particles' })).toMatchObject({ outcome: 'undecided' });
   });
 
