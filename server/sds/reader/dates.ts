@@ -37,6 +37,7 @@ const monthWord = [...monthOf.keys()].sort((a, b) => b.length - a.length).join('
 
 const yearFirst = /(?<![\d.])((?:19|20)\d{2})[-/.](\d{1,2})[-/.](\d{1,2})(?!\d)/g;
 const figures = /(?<![\d.,/-])(\d{1,2})\s?([-/.])\s?(\d{1,2})\s?\2\s?((?:19|20)\d{2}|\d{2})(?![\d]|[-/]\d)/g;
+const yearMonth = new RegExp(`(?<![\\d.])((?:19|20)\\d{2})[-/. ](${monthWord})[-/. ](\\d{1,2})(?!\\d)`, 'g');
 const dayMonth = new RegExp(`(?<![\\d])(\\d{1,2})(?:st|nd|rd|th|er|o|\\.)?[\\s./-]*(?:of |de |del )?(${monthWord})\\.?[\\s,./-]*(?:de |del |of )?((?:19|20)\\d{2}|\\d{2})(?!\\d)`, 'g');
 const monthDay = new RegExp(`(?<![a-z])(${monthWord})\\.?[\\s/-]*(\\d{1,2})(?:st|nd|rd|th)?[\\s,/-]+((?:19|20)\\d{2})(?!\\d)`, 'g');
 
@@ -53,6 +54,7 @@ export function datesIn(text: string, order: Pick<DateOrder, 'isDayFirst'>): Wri
     if (iso && !found.some((date) => match.index < date.end && end > date.start)) found.push({ start: match.index, end, text: text.slice(match.index, end), iso, other, isDayFirst });
   };
   for (const match of folded.matchAll(yearFirst)) add(match, Number(match[1]), Number(match[2]), Number(match[3]), null, false);
+  for (const match of folded.matchAll(yearMonth)) add(match, Number(match[1]), monthOf.get(match[2] ?? '') ?? 0, Number(match[3]), null, false);
   for (const match of folded.matchAll(dayMonth)) add(match, fullYear(match[3]), monthOf.get(match[2] ?? '') ?? 0, Number(match[1]), null, true);
   for (const match of folded.matchAll(monthDay)) add(match, fullYear(match[3]), monthOf.get(match[1] ?? '') ?? 0, Number(match[2]), null, false);
   for (const match of folded.matchAll(figures)) {

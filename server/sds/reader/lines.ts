@@ -23,6 +23,14 @@ const narrowCellEm = 0.42;
 /** Fewer words than this say nothing about even gaps. */
 const leastStretched = 3;
 
+/** Whether a row has a gap that is a cell's only where a column starts. */
+export const mayTouch = (row: readonly TextItem[]): boolean =>
+  row.some((item, at) => {
+    const before = row[at - 1];
+    const gap = before ? (item.x - before.x - before.width) / item.height : 0;
+    return gap > narrowCellEm && gap < cellEm;
+  });
+
 /** A line of justified text that ends in a forced break: its few words are drawn apart evenly, over more than a cell's gap. */
 function isStretched(row: readonly TextItem[]): boolean {
   if (row.length < leastStretched) return false;

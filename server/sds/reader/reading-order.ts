@@ -1,4 +1,4 @@
-import { groupRows, lineOf, toLine, withoutOverprints, type Line, type Segment } from './lines';
+import { groupRows, lineOf, mayTouch, toLine, withoutOverprints, type Line, type Segment } from './lines';
 import { withLabelsOnTop } from './middle-cells';
 import { type TextItem, type TextPage } from './pdf-text';
 import { isSectionHeading } from './sections';
@@ -28,7 +28,7 @@ function inOrder(page: TextPage): Line[] {
 function linesOf(items: TextItem[]): Line[] {
   const rows = groupRows(items);
   const coarse = rows.map((row) => toLine(row));
-  return rows.map((row, at) => toLine(row, columnStarts(coarse, at))).filter((line) => line.segments.length > 0 && !isRule(line));
+  return rows.map((row, at) => (mayTouch(row) ? toLine(row, columnStarts(coarse, at)) : (coarse[at] as Line))).filter((line) => line.segments.length > 0 && !isRule(line));
 }
 
 /** How many rows up and down may name the columns of a row, and how far off a cell may start, points. */

@@ -51,7 +51,7 @@ function standingAlone(lines: Line[]): Field<SignalWord> | null {
 /** "…, Category 1. Signal word: Danger. May be corrosive to metals." */
 function inSentence(lines: Line[]): Field<SignalWord> | null {
   for (const segment of lines.flatMap((line) => line.segments)) {
-    const word = /\b(?:signal ?words?|palabras? de advertencia|mentions? d'avertissement|signalwort)\s?[:-]\s?([a-z]+)/.exec(fold(segment.text))?.[1];
+    const word = /\b(?:signal ?words?|(?:ghs |hazard )?label(?: elements?)?|palabras? de advertencia|mentions? d'avertissement|signalwort)\s?[:-]\s?([a-z]+)/.exec(fold(segment.text))?.[1];
     const value = word ? wordOf(word) : null;
     if (value && value !== 'none') return field(value, segment, 0.9);
   }

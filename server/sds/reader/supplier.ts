@@ -5,7 +5,7 @@ import { type SheetParts } from './sheet-parts';
 import { fold, hasLetters, joinSpacedLetters } from './words';
 
 const makerLabels =
-  /^((name of (the )?)?(manufacturer|supplier|company|importer|producer|vendor|responsible party)('?s)?( \/ ?| or |, |\/)?(manufacturer|supplier|company|importer|distributor|undertaking)?('?s)?( name| identification| information| details| address| name and address| name & address)?|(manufactured|supplied|produced|sold|prepared and distributed|made) (by|for)|(initial )?supplier identifier|makers?|nome da empresa|identificateur du fournisseur initial|manufacturer name|(registered )?company name( of (the )?(supplier|manufacturer))?|firm name|nombre (de la empresa|del proveedor|del fabricante|de la compania)|fabricante( ?\/ ?proveedor)?|proveedor( ?\/ ?fabricante)?|empresa|compania|razon social|denominacion social|nombre o razon social|(nom du )?(fabricant|fournisseur)( ?\/ ?(fabricant|fournisseur))?|societe|raison sociale|nom de la (societe|compagnie)|hersteller( ?\/ ?lieferant)?|lieferant|firma|firmenname|unternehmen|fornitore|produttore|fornecedor|leverancier)\b/;
+  /^((name,? address,?( and)? tele?phone( number)? of (the )?)?(chemical )?(manufacturer|supplier|company|importer|producer|responsible party)( or other responsible party)?(?=:)|(name of (the )?)?(manufacturer|supplier|company|importer|producer|vendor|responsible party)('?s)?( \/ ?| or |, |\/)?(manufacturer|supplier|company|importer|distributor|undertaking)?('?s)?( name| identification| information| details| address| name and address| name & address)?|(manufactured|supplied|produced|sold|prepared and distributed|made) (by|for)|(initial )?supplier identifier|makers?|nome da empresa|identificateur du fournisseur initial|manufacturer name|(registered )?company name( of (the )?(supplier|manufacturer))?|firm name|nombre (de la empresa|del proveedor|del fabricante|de la compania)|fabricante( ?\/ ?proveedor)?|proveedor( ?\/ ?fabricante)?|empresa|compania|razon social|denominacion social|nombre o razon social|(nom du )?(fabricant|fournisseur)( ?\/ ?(fabricant|fournisseur))?|societe|raison sociale|nom de la (societe|compagnie)|hersteller( ?\/ ?lieferant)?|lieferant|firma|firmenname|unternehmen|fornitore|produttore|fornecedor|leverancier)\b/;
 
 const blockLabels =
   /^((details|information|data) (of|on|about|concerning) the (supplier|manufacturer|company)|supplier of the safety data sheet|manufacturer or supplier's details|supplier's details|company identification|company ?\/ ?undertaking identification|manufacturer information|supplier information|datos del proveedor( o fabricante)?|datos del fabricante|informacion(es)? (del|sobre el) (proveedor|fabricante)|identificacion de la (empresa|compania|sociedad)|(renseignements|details|donnees) (concernant|sur|relati\w+) (le|au|du) (fabricant|fournisseur)|details du fournisseur|einzelheiten zum lieferanten|angaben zum (lieferanten|hersteller)|informazioni sul fornitore)/;
@@ -74,7 +74,7 @@ export function companyName(text: string): string | null {
 
 /** "Slate Paints Ltd., Dock Road, Hull": what follows the legal form is an address, unless it is a form again ("Company, Inc."). */
 function withoutAddress(name: string): string {
-  for (const comma of name.matchAll(/,\s*/g)) {
+  for (const comma of name.matchAll(/,\s*|\s[-–—•|]\s/g)) {
     const [before, after] = [name.slice(0, comma.index), name.slice(comma.index + comma[0].length)];
     if (new RegExp(`${legalForm.source}$`, 'i').test(before) && legalForm.exec(after)?.index !== 0) return before;
   }
