@@ -1,15 +1,17 @@
 import { createCanvas } from '@napi-rs/canvas';
+import { turned, type Turns } from '#server/sds/reader/grey-picture';
 import { openPagePictures } from '#server/sds/reader/page-pictures';
 import { pdfOf } from './odd-pdfs';
 
-/** The first pages of a PDF as pictures in another, without a letter of text, and a blank one: what a scanner makes of a printed sheet. */
-export async function pictureSheet(bytes: Uint8Array, pages: number): Promise<Uint8Array> {
+/** The first pages of a PDF as pictures in another, without a letter of text, and a blank one: what a scanner makes of a printed sheet, laid in upright or turned. */
+export async function pictureSheet(bytes: Uint8Array, pages: number, turns: Turns = 0): Promise<Uint8Array> {
   const pictures = await openPagePictures(bytes);
   const scans: Buffer[] = [];
-  for (let number = 1; number <= Math.min(pages, pictures.pages); number++) scans.push(pngOf((await pictures.draw(number)).picture));
+  for (let number = 1; number <= Math.min(pages, pictures.pages); number++) scans.push(pngOf(turned((await pictures.draw(number)).picture, turns)));
   await pictures.close();
   return pdfOf((doc) => {
-    for (const scan of scans) doc.addPage({ size: 'LETTER', margin: 0 }).image(scan, 0, 0, { width: 612, height: 792 });
+    const [width, height] = turns % 2 === 0 ? [612, 792] : [792, 612];
+    for (const scan of scans) doc.addPage({ size: [width, height], margin: 0 }).image(scan, 0, 0, { width, height });
     doc.addPage({ size: 'LETTER', margin: 0 });
   }, { autoFirstPage: false });
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from '@jest/globals';
-import { greyOf, pgmOf, withoutScreens, type GreyPicture } from './grey-picture';
+import { greyOf, liesSideways, pgmOf, turned, withoutScreens, type GreyPicture } from './grey-picture';
 
 const blank = (width: number, height: number): GreyPicture => ({ width, height, pixels: new Uint8Array(width * height).fill(255) });
 function fill(picture: GreyPicture, left: number, top: number, width: number, height: number): void {
@@ -36,4 +36,24 @@ it('grey follows the eye: green is lighter than red, red than blue (ITU-R BT.601
 
 it('a PGM file carries its size before its bytes', () => {
   expect(Buffer.from(pgmOf({ width: 2, height: 1, pixels: new Uint8Array([65, 66]) })).toString('latin1')).toBe('P5\n2 1\n255\nAB');
+});
+
+describe('a page laid in sideways', () => {
+  const written = (): GreyPicture => {
+    const page = blank(200, 300);
+    for (let line = 20; line < 280; line += 20) for (let word = 20; word < 160; word += 35) fill(page, word + (line % 7), line, 25, 8);
+    return page;
+  };
+
+  it('is known by its ink, whichever way it was turned', () => {
+    expect([0, 1, 2, 3].map((turns) => liesSideways(turned(written(), turns as 0)))).toEqual([false, true, false, true]);
+    expect(liesSideways(blank(200, 300))).toBe(false);
+  });
+
+  it('turns clockwise, and back after four quarters', () => {
+    const corner: GreyPicture = { width: 3, height: 2, pixels: Uint8Array.from([1, 2, 3, 4, 5, 6]) };
+    expect(turned(corner, 1)).toEqual({ width: 2, height: 3, pixels: Uint8Array.from([4, 1, 5, 2, 6, 3]) });
+    expect(turned(turned(corner, 1), 3)).toEqual(corner);
+    expect(turned(turned(corner, 2), 2)).toEqual(corner);
+  });
 });

@@ -23,10 +23,47 @@ export function pgmOf({ width, height, pixels }: GreyPicture): Uint8Array {
   return file;
 }
 
+const dark = 128;
+
+/** Quarter turns clockwise. */
+export type Turns = 0 | 1 | 2 | 3;
+
+/** The picture turned clockwise. */
+export function turned({ width, height, pixels }: GreyPicture, turns: Turns): GreyPicture {
+  if (turns === 0) return { width, height, pixels };
+  const [newWidth, newHeight] = turns === 2 ? [width, height] : [height, width];
+  const result = new Uint8Array(pixels.length);
+  for (let y = 0, from = 0; y < height; y++) {
+    for (let x = 0; x < width; x++, from++) {
+      const [toX, toY] = turns === 1 ? [height - 1 - y, x] : turns === 2 ? [width - 1 - x, height - 1 - y] : [y, width - 1 - x];
+      result[toY * newWidth + toX] = pixels[from] ?? 255;
+    }
+  }
+  return { width: newWidth, height: newHeight, pixels: result };
+}
+
+/** How much more the ink must change from column to column than from row to row. */
+const sidewaysShare = 1.5;
+
+/** Whether lines of print run up or down the page: then the ink comes and goes from column to column, not from row to row. */
+export function liesSideways({ width, height, pixels }: GreyPicture): boolean {
+  const rows = new Float64Array(height);
+  const columns = new Float64Array(width);
+  for (let y = 0, at = 0; y < height; y++) {
+    for (let x = 0; x < width; x++, at++) {
+      if ((pixels[at] ?? 255) >= dark) continue;
+      rows[y] = (rows[y] ?? 0) + 1 / width;
+      columns[x] = (columns[x] ?? 0) + 1 / height;
+    }
+  }
+  return changesOf(columns) > changesOf(rows) * sidewaysShare;
+}
+
+const changesOf = (shares: Float64Array): number => shares.reduce((sum, share, at) => sum + (at === 0 ? 0 : (share - (shares[at - 1] ?? 0)) ** 2), 0);
+
 const tile = 16;
 /** Changes between dark and light per pixel over five tiles; printed lines stay under a sixth, dots of a screen lie above. */
 const screenChanges = 0.2;
-const dark = 128;
 /** Mean grey over 5 by 5 pixels under which a spot in a screen is ink and not dots. */
 const ink = 90;
 /** Tiles between two stretches of one screen: a heading in bold letters. */

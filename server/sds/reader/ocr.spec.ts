@@ -59,6 +59,16 @@ describe('a sheet that is pictures', () => {
     expect(Math.abs((reading.productName?.box.y ?? 0) - (text.productName?.box.y ?? 0))).toBeLessThan(4);
   }, 300_000);
 
+  it('is read when it was laid in sideways, and shown where it stands on the page', async () => {
+    const bytes = await buildDemoSheet(quarrybondPartA);
+    const [reading, text] = [await readSheetOrPictures(await pictureSheet(bytes, 1, 1)), await readSheet(bytes)];
+    expect(sheetLine('', reading)).toMatchObject({ state: 'read-by-ocr', product_name: quarrybondPartA.productName, h_codes: [...quarrybondPartA.hazards].sort() });
+    const [turnedBox, upright] = [reading.productName?.box, text.productName?.box];
+    // A quarter turn clockwise: what was the distance from the top is now the distance from the right edge, 792 points away.
+    expect(Math.abs((turnedBox?.y ?? 0) - (upright?.x ?? 0))).toBeLessThan(4);
+    expect(Math.abs(792 - (turnedBox?.x ?? 0) - (turnedBox?.width ?? 0) - (upright?.y ?? 0))).toBeLessThan(4);
+  }, 300_000);
+
   it('is stopped when it takes too long or too much memory', async () => {
     expect((await reader(300).read(scan)).state).toBe('too-slow');
     expect((await reader(280_000, 150 * megabyte).read(scan)).state).toBe('too-much-memory');
