@@ -3,7 +3,7 @@ import { Equipment, EquipmentEdit } from './equipment';
 import { AddShift, Job, JobEdit, JobSummary, JobsQuery, PublishedVersion, Shift, ShiftPlan, SignBasis } from './jobs';
 import { PeopleQuery, Person, PersonEdit, PinEvent, PinEventsQuery, SetLogin, StartPin } from './people';
 import { AddProduct, Kit, KitEdit, Product, ProductsQuery } from './products';
-import { ChangePassword, Session, SignIn } from './session';
+import { ChangePassword, KeepUnit, Session, SignIn } from './session';
 import { ConfirmSheet, Revision, RevisionSummary, SheetEdit, SheetsQuery, UploadedSheet } from './sheets';
 import { AddTablet, PairingCode, Tablet } from './tablets';
 import { Today } from './today';
@@ -22,6 +22,7 @@ export const sessionEndpoints = {
   readSession: { method: 'GET', path: '/api/session', access: everyone, answer: Session },
   signOut: { method: 'DELETE', path: '/api/session', access: everyone, answer: 'nothing' },
   changePassword: { method: 'PUT', path: '/api/session/password', access: everyone, body: ChangePassword, answer: 'nothing' },
+  keepUnit: { method: 'PUT', path: '/api/session/unit', access: everyone, body: KeepUnit, answer: 'nothing' },
   readToday: { method: 'GET', path: '/api/today', access: office, answer: Today },
 } as const satisfies Record<string, Endpoint>;
 

@@ -137,9 +137,9 @@ export const PublishedVersion = z.object({
   publishedBy: z.string(),
   manifestSha256: z.string(),
   texts: z.array(z.object({ language: z.enum(['en', 'es']), sha256: z.string() })),
-  asked: z.array(z.object({ personId: Id, name: z.string(), language: z.enum(['en', 'es']), state: z.enum(['not-yet', 'signed', 'could-not-sign', 'not-confirmed']), at: Instant.nullable(), pinState: PinState.nullable() })),
+  asked: z.array(z.object({ personId: Id, name: z.string(), language: z.enum(['en', 'es']), state: z.enum(['not-yet', 'signed', 'could-not-sign', 'not-confirmed']), at: Instant.nullable(), pinState: PinState.nullable().default(null) })),
   /** Briefings and start checks, as they arrived. */
-  answers: z.array(z.object({ id: Id, kind: z.enum(['briefing', 'start-check']), taskId: Id.nullable(), personName: z.string(), at: Instant, receivedAt: Instant, noCount: z.number().int(), pinState: PinState, timeDoubt: TimeDoubt.nullable() })),
+  answers: z.array(z.object({ id: Id, kind: z.enum(['briefing', 'start-check']), taskId: Id.nullable(), personName: z.string(), at: Instant, receivedAt: Instant, noCount: z.number().int(), pinState: PinState, timeDoubt: TimeDoubt.nullable() })).default([]),
 });
 export type PublishedVersion = z.infer<typeof PublishedVersion>;
 

@@ -5,8 +5,15 @@ export const Session = z.object({
   person: z.object({ id: Id, name: z.string() }),
   role: Role,
   organisation: z.object({ id: Id, name: z.string() }),
+  /** The unit each quantity was last typed in, by quantity: the person's, on every machine. */
+  units: z.record(z.string(), z.string()).default({}),
 });
 export type Session = z.infer<typeof Session>;
+
+const Word = z.string().regex(/^[a-z][a-z0-9-]{0,19}$/);
+/** Which unit this person types a quantity in; figures are stored in SI all the same. */
+export const KeepUnit = z.strictObject({ quantity: Word, unit: Word });
+export type KeepUnit = z.infer<typeof KeepUnit>;
 
 export const SignIn = z.strictObject({ email: z.email('Write an e-mail address.').max(200), password: z.string().min(1, 'Fill this in.').max(200) });
 export type SignIn = z.infer<typeof SignIn>;

@@ -51,6 +51,10 @@ export function sessionRoutes(service: SessionService, door: passport.Authentica
     response.clearCookie(sessionCookieName);
     return undefined;
   });
+  mount(router, 'keepUnit', async ({ actor, body }) => {
+    await service.keepUnit(actor, body);
+    return undefined;
+  });
   mount(router, 'changePassword', async ({ actor, body, request }) => {
     await remember(request, actor, await service.changePassword(actor, body));
     return undefined;

@@ -1,8 +1,8 @@
-import { eq, sql } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { organisations } from '#drizzle/schema/organisations';
 import { people } from '#drizzle/schema/people';
 import { Role } from '#shared/common';
-import { type ChangePassword, type Session, type SignIn } from '#shared/session';
+import { type ChangePassword, type KeepUnit, type Session, type SignIn } from '#shared/session';
 import { type Deps } from '../deps';
 import { InputError, SignedOutError, SlowDownError } from '../errors';
 import { type PersonActor } from '../http/actor';
@@ -94,7 +94,20 @@ export function sessionService(deps: Deps) {
       });
     },
 
-    toSession: (actor: PersonActor): Session => ({ person: { id: actor.personId, name: actor.personName }, role: actor.role, organisation: { id: actor.organisationId, name: actor.organisationName } }),
+    async toSession(actor: PersonActor): Promise<Session> {
+      const [row] = await database.inOrganisation(actor.organisationId, (tx) => tx.select({ units: people.units }).from(people).where(and(eq(people.organisationId, tx.organisationId), eq(people.id, actor.personId))));
+      return { person: { id: actor.personId, name: actor.personName }, role: actor.role, organisation: { id: actor.organisationId, name: actor.organisationName }, units: (row?.units ?? {}) as Session['units'] };
+    },
+
+    /** One row's one word: two machines of a person cannot undo each other's other quantities. */
+    keepUnit: (actor: PersonActor, { quantity, unit }: KeepUnit): Promise<void> =>
+      database.inOrganisation(actor.organisationId, async (tx) => {
+        // A person keeps a few; whoever invents quantities by the thousand keeps none of them.
+        await tx
+          .update(people)
+          .set({ units: sql`${people.units} || jsonb_build_object(${quantity}::text, ${unit}::text)` })
+          .where(and(eq(people.organisationId, tx.organisationId), eq(people.id, actor.personId), sql`(SELECT count(*) FROM jsonb_object_keys(${people.units})) < 40 OR ${people.units} ? ${quantity}`));
+      }),
 
     /** The organisation's name, for a paired tablet. */
     readOrganisation: (organisationId: string) =>

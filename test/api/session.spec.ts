@@ -21,7 +21,7 @@ describe('signing in', () => {
   it('says who one is, in a cookie that scripts and other sites do not get', async () => {
     const { lead, id } = await makeOrganisation(service);
     const response = await signIn(pageAgent(service), lead.email.toUpperCase());
-    expect(response.body).toEqual({ person: { id: lead.personId, name: 'Dov Lindqvist' }, role: 'crew-lead', organisation: { id, name: 'Marrow & Slate Floors' } });
+    expect(response.body).toEqual({ person: { id: lead.personId, name: 'Dov Lindqvist' }, role: 'crew-lead', organisation: { id, name: 'Marrow & Slate Floors' }, units: {} });
     expect(String(response.headers['set-cookie'])).toMatch(/(?:^|,)kneeboard_session=[^,]*,[^,]*HttpOnly; SameSite=Lax/);
     expect(String(response.headers['set-cookie'])).not.toMatch(/Domain=/);
   });
@@ -63,6 +63,27 @@ describe('signing in', () => {
     const guesser = pageAgent(service);
     for (let tries = 0; tries < 31; tries += 1) expectProblem(await signIn(guesser, `${newId()}@marrowslate.example`, 'wrong password here'), 401);
     expectProblem(await signIn(guesser, lead.email), 429);
+  });
+});
+
+describe('the unit a person types in', () => {
+  it('is the same on another machine, each quantity for itself; nobody else has it, and the person’s page does not change by it', async () => {
+    const { lead, officer, auditor } = await makeOrganisation(service);
+    const before = await ok(officer.agent, 'readPerson', { params: { personId: lead.personId } });
+    expect((await ok(lead.agent, 'readSession')).units).toEqual({});
+    await Promise.all([ok(lead.agent, 'keepUnit', { body: { quantity: 'thickness', unit: 'mm' } }), ok(lead.agent, 'keepUnit', { body: { quantity: 'area', unit: 'm2' } })]);
+    await ok(lead.agent, 'keepUnit', { body: { quantity: 'area', unit: 'ft2' } });
+    const elsewhere = await signIn(pageAgent(service), lead.email);
+    expect(elsewhere.body).toMatchObject({ units: { thickness: 'mm', area: 'ft2' } });
+    expect((await ok(auditor.agent, 'readSession')).units).toEqual({});
+    expect(await ok(officer.agent, 'readPerson', { params: { personId: lead.personId } })).toEqual(before);
+  });
+
+  it('is a word, and there are not endless quantities', async () => {
+    const { lead } = await makeOrganisation(service);
+    for (const body of [{ quantity: 'area', unit: '<b>' }, { quantity: 'x'.repeat(50), unit: 'm' }, { quantity: 'area' }]) expectProblem(await call(lead.agent, 'keepUnit', { body }), 400);
+    for (let at = 0; at < 45; at += 1) await ok(lead.agent, 'keepUnit', { body: { quantity: `quantity-${at}`, unit: 'm' } });
+    expect(Object.keys((await ok(lead.agent, 'readSession')).units)).toHaveLength(40);
   });
 });
 

@@ -19,6 +19,7 @@ export const examples: Record<EndpointName, (world: World) => Promise<Example> |
   readSession: () => ({}),
   signOut: async ({ organisation }) => ({ agent: (await organisation.signIn('Junie Okafor', 'auditor')).agent }),
   changePassword: async ({ organisation }) => ({ agent: (await organisation.signIn('Junie Okafor', 'auditor')).agent, body: { current: testPassword, next: 'quarry lantern 40 mortar' } }),
+  keepUnit: () => ({ body: { quantity: 'area', unit: 'm2' } }),
   readToday: () => ({}),
   listPeople: () => ({ query: { limit: 2, q: 'a' } }),
   addPerson: () => ({ body: personEdit('Abe Kowalczyk') }),

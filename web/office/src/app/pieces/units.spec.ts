@@ -1,5 +1,5 @@
 import { beforeEach, describe, expect, it } from '@jest/globals';
-import { inUnit, numberFrom, quantities, withUnit } from './units';
+import { inUnit, numberFrom, preferredUnit, preferUnit, quantities, useUnits, withUnit } from './units';
 
 const unitOf = (quantity: keyof typeof quantities, id: string) => {
   const found = quantities[quantity].find((unit) => unit.id === id);
@@ -24,7 +24,7 @@ describe('figures as people type them', () => {
 });
 
 describe('units', () => {
-  beforeEach(() => localStorage.clear());
+  beforeEach(() => useUnits({}));
 
   // Source: NIST SP 811, appendix B.8: 1 ft² = 0.09290304 m² (exact), 1 in = 25.4 mm (exact), 1 gal (US) = 3.785412 L.
   it.each([
@@ -36,6 +36,16 @@ describe('units', () => {
     const unit = unitOf(quantity, id);
     expect(typed * unit.perUnit).toBeCloseTo(si, 2);
     expect(numberFrom(inUnit(typed * unit.perUnit, unit))).toBeCloseTo(typed, 6);
+  });
+
+  it('are the ones this person typed last, as the session brought them; one that is not known is the trade’s own', () => {
+    expect(withUnit('thickness', 6.35)).toBe('1/4 in');
+    useUnits({ thickness: 'mm', area: 'acre' });
+    expect(withUnit('thickness', 6.35)).toBe('6.35 mm');
+    expect(preferredUnit('area').id).toBe('ft2');
+    expect(preferUnit('thickness', unitOf('thickness', 'mm'))).toBe(false);
+    expect(preferUnit('thickness', unitOf('thickness', 'in'))).toBe(true);
+    expect(withUnit('thickness', 6.35)).toBe('1/4 in');
   });
 
   it('says inches in eighths where they are eighths', () => {

@@ -1,3 +1,4 @@
+import { signal } from '@angular/core';
 import { L_PER_FT3, M2_PER_FT2, M3_PER_H_PER_CFM, MM_PER_INCH } from '#compliance/quantities/units';
 
 /** One unit a quantity may be typed in: `perUnit` is the SI figure of one of it. */
@@ -36,16 +37,21 @@ export const quantities = {
 } as const satisfies Record<string, readonly [Unit, ...Unit[]]>;
 export type Quantity = keyof typeof quantities;
 
-const key = (quantity: Quantity) => `kneeboard.unit.${quantity}`;
+/** By quantity, as the session brought them: they belong to the person, not to the machine. */
+const kept = signal<Readonly<Record<string, string>>>({});
+export const useUnits = (units: Readonly<Record<string, string>>): void => kept.set(units);
 
-/** The unit this browser last typed this quantity in. */
+/** The unit this person last typed this quantity in. */
 export function preferredUnit(quantity: Quantity): Unit {
-  const wanted = localStorage.getItem(key(quantity));
+  const wanted = kept()[quantity];
   return quantities[quantity].find((unit) => unit.id === wanted) ?? quantities[quantity][0];
 }
 
-export function keepUnit(quantity: Quantity, unit: Unit): void {
-  localStorage.setItem(key(quantity), unit.id);
+/** Shown from now on; whether it changed. */
+export function preferUnit(quantity: Quantity, unit: Unit): boolean {
+  if (kept()[quantity] === unit.id) return false;
+  kept.update((units) => ({ ...units, [quantity]: unit.id }));
+  return true;
 }
 
 /** "38,000": four figures that count, so that 600 ft² stored as square metres comes back as 600. */
@@ -69,7 +75,7 @@ export function inUnit(si: number, unit: Unit): string {
   return unit.id === 'in' ? inches(si / unit.perUnit) : figure(si / unit.perUnit);
 }
 
-/** "38,000 ft³", "1/4 in", in the unit this browser prefers. */
+/** "38,000 ft³", "1/4 in", in the unit this person prefers. */
 export function withUnit(quantity: Quantity, si: number): string {
   const unit = preferredUnit(quantity);
   return `${inUnit(si, unit)} ${unit.label}`;

@@ -1,6 +1,7 @@
 import { HttpClient, HttpErrorResponse } from '@angular/common/http';
 import { Injectable, inject, signal } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
+import { preferUnit, useUnits, type Quantity, type Unit } from '../pieces/units';
 import { type ChangePassword, Session, type SignIn } from '#shared/session';
 
 /** Who is signed in here. The only place that knows the session's addresses. */
@@ -45,8 +46,15 @@ export class SessionApi {
     this.keep(null);
   }
 
+  /** The same on every machine. A figure is stored in SI whatever becomes of this, so a failure is no trouble of the person's. */
+  async keepUnit(quantity: Quantity, unit: Unit): Promise<void> {
+    if (!preferUnit(quantity, unit) || this.current() === null) return;
+    await firstValueFrom(this.http.put('/api/session/unit', { quantity, unit: unit.id })).catch((error: unknown) => console.warn('the unit is kept on this page only', error));
+  }
+
   private keep(session: Session | null): void {
     this.current.set(session);
+    useUnits(session?.units ?? {});
     this.isKnown = true;
   }
 }

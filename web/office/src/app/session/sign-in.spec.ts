@@ -80,7 +80,7 @@ describe('the sign-in page', () => {
     request.flush(session);
     await settle(fixture);
     expect(router.url).toBe('/jobs?open=1');
-    expect(TestBed.inject(SessionApi).session()).toEqual(session);
+    expect(TestBed.inject(SessionApi).session()).toEqual({ ...session, units: {} });
   });
 
   it.each(['https://elsewhere.example/', '//elsewhere.example', '/\\elsewhere.example', 'jobs'])('does not follow the return path %s: it is no path of this application', async (path) => {

@@ -1,10 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, signal } from '@angular/core';
-import { inUnit, keepUnit, numberFrom, preferredUnit, quantities, type Quantity, type Unit } from '../units';
+import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, signal } from '@angular/core';
+import { inUnit, numberFrom, preferredUnit, quantities, type Quantity, type Unit } from '../units';
+import { SessionApi } from '../../session/session-api';
 import { Field } from './field';
 
 /**
  * A figure with its unit. The control's value is SI (or null; NaN for what is no number, which every schema refuses);
- * the person types and sees the unit they chose, which this browser remembers. Fractions are allowed: thickness is said as "1/4".
+ * the person types and sees the unit they chose, which is remembered for them on every machine. Fractions are allowed: thickness is said as "1/4".
  */
 @Component({
   selector: 'kb-quantity-field',
@@ -26,6 +27,7 @@ import { Field } from './field';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class QuantityField extends Field<number | null> {
+  private readonly session = inject(SessionApi);
   readonly quantity = input.required<Quantity>();
 
   protected readonly choices = computed<readonly Unit[]>(() => quantities[this.quantity()]);
@@ -54,7 +56,7 @@ export class QuantityField extends Field<number | null> {
 
   protected type(text: string): void {
     this.typed.set(text);
-    keepUnit(this.quantity(), this.unit());
+    void this.session.keepUnit(this.quantity(), this.unit());
     this.tell(this.value());
   }
 
@@ -63,7 +65,7 @@ export class QuantityField extends Field<number | null> {
     const unit = this.choices().find((choice) => choice.id === id);
     if (!unit) return;
     this.unit.set(unit);
-    keepUnit(this.quantity(), unit);
+    void this.session.keepUnit(this.quantity(), unit);
     if (this.typed() !== null) this.tell(this.value());
   }
 }
