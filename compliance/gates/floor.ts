@@ -81,7 +81,7 @@ export const floorRule: ShiftRule<ShiftContext> = {
   sourceOf: ({ facts }) => sourceOf(facts.floor),
 };
 
-/** The same paragraphs for one task: what opens the floor waits for the answer. */
+/** 1926.1101(g)(8)(i), (k); 1926.62(d)(2), the same demand of one task: what opens the floor waits for the answer. */
 export const floorTaskRule: ShiftRule<TaskContext> = {
   ...floorRule,
   id: 'floor-survey-of-task',

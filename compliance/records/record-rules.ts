@@ -72,7 +72,7 @@ export const rightsNotice: Rule<RightsNoticeFacts> = {
     if (lastToldOn !== null) checkDoneOn('lastToldOn', lastToldOn, asOf);
     const dueOn = rightsNoticeDueOn(employedOn, lastToldOn);
     const extra = { inputs: { 'employed on': employedOn, 'last told': lastToldOn }, dueOn };
-    // Told in this employment, less than a year ago; what was told in an earlier one does not count.
+    // Told in this employment, a year ago at most; what was told in an earlier one does not count.
     const wasToldHere = lastToldOn !== null && lastToldOn >= employedOn;
     if (wasToldHere && asOf <= addYears(lastToldOn, 1)) return met(words(`Told; again by ${dueOn}.`, `Informado; de nuevo a más tardar el ${dueOn}.`), extra);
     return unmet(words(`Due on ${dueOn}.`, `Debía hacerse el ${dueOn}.`), { ...extra, whatWouldChange: words('Tell the worker, and record the day.', 'Informe al trabajador y anote el día.') });

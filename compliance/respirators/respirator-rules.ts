@@ -30,7 +30,7 @@ export const respiratorByRatio: Rule<ChosenRespiratorFacts> = {
   evaluate(facts) {
     const choice = selectRespirator(facts);
     const inputs = { 'exposure, mg/m³': facts.exposureMgPerM3, 'limit, mg/m³': facts.limitMgPerM3, 'planned factor': facts.plannedApf };
-    // (d)(1)(iii)
+    // (d)(1)(iii) no estimate; (d)(3)(i)(B)(2) past what is immediately dangerous; no limit or factors of the place to reckon with.
     if (choice.outcome === 'immediately-dangerous' || choice.outcome === 'undecided') {
       return undecided(choice.reason, choice.whoDecides, { inputs, whatWouldChange: words('Samples or objective data, signed.', 'Muestras o datos objetivos, firmados.') });
     }
@@ -41,7 +41,7 @@ export const respiratorByRatio: Rule<ChosenRespiratorFacts> = {
       const reason = words('Controls come before respirators. Which are in place, or why can none be?', 'Los controles van antes que los respiradores. ¿Cuáles hay, o por qué no puede haberlos?');
       return undecided(reason, WHO.competentPerson, { inputs, results, whatWouldChange: words('Name the controls, or the reason.', 'Nombre los controles o la razón.') });
     }
-    // (d)(3)(i): (A) factor at least the ratio, (B) not past the greatest use concentration.
+    // (d)(3)(i)(A), (B)(1): the planned factor reaches that of a respirator whose factor covers the ratio.
     if (facts.plannedApf === null || !choice.options.some((option) => option.apf <= facts.plannedApf!)) {
       return unmet(choice.reason, { inputs, results, whatWouldChange: words(`A respirator with a factor of ${choice.leastApf} or more.`, `Un respirador con factor de ${choice.leastApf} o más.`) });
     }

@@ -41,6 +41,18 @@ describe('data check', () => {
     }
   });
 
+  it('finds above every rule what its paragraph demands, by letter where a federal paragraph is cited', () => {
+    const sources = files.filter((name) => name.endsWith('.ts') && !/\.(spec|cases)\.ts$/.test(name)).map((name) => readFileSync(join(room, name), 'utf8'));
+    // The comment that stands over the rule, with no blank line between them.
+    const demandOf = (id: string) => {
+      const above = sources.find((text) => text.includes(`\n  id: '${id}',\n  title:`))?.split(`\n  id: '${id}',\n  title:`)[0]!.split('\n\n').at(-1) ?? '';
+      return /\/\*\*(.*)\*\//s.exec(above)?.[1]!.trim() ?? '';
+    };
+    expect(RULES.filter((rule) => demandOf(rule.id).length < 40).map((rule) => rule.id)).toEqual([]);
+    const isByLetter = (source: Source) => source.citation.startsWith('29 CFR') && /^\([a-z]\)/.test(source.paragraph ?? '');
+    expect(RULES.filter((rule) => isByLetter(rule.source) && !/\([a-z]\)/.test(demandOf(rule.id))).map((rule) => rule.id)).toEqual([]);
+  });
+
   it('serves duties by the form of their ids', () => {
     const duties = RULES.flatMap((rule) => rule.duties);
     expect(duties.filter((duty) => !/^(SIL|HAZ|RES|GATE|ISO|REC|WST|NOI|AIR|PPE|LOC)-\d\d$/.test(duty))).toEqual([]);
