@@ -58,7 +58,7 @@ export interface NoticeFacts {
 export const noticeOfAssessment: Rule<NoticeFacts> = {
   id: 'silica-notice-of-assessment',
   title: words('Employees told of the result', 'Se informó el resultado a los empleados'),
-  source: NOTICE_WORKING_DAYS.construction.source,
+  source: usFederal('1926.1153', 'partly', { paragraph: '(d)(2)(vi)(A), (B)', note: 'A trade article and a training text that restate (A); (B) recalled.' }),
   duties: ['SIL-11'],
   evaluate({ assessmentCompletedOn, scope, holidays, toldOn, isAboveLimit, namesCorrectiveAction }, asOf) {
     if (toldOn !== null) checkDoneOn('toldOn', toldOn, asOf);

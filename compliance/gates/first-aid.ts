@@ -56,6 +56,7 @@ export const eyewashRule: ShiftRule<TaskContext> = {
     // Exposed: the task handles a kit, and its confirmed sheets or its cement say that it burns. A kit without sheets is held by `sheet-for-every-product`.
     const codes = kitHazards === null ? [] : BURNS_EYES.filter((code) => kitHazards.single.has(code));
     const isWetCement = kitHazards?.isWetCement ?? false;
+    if (traits.touchesKit && kitHazards === null) return notApplicable(words('No kit is chosen yet: its sheets say what burns.', 'Falta elegir el kit: sus hojas dicen qué quema.'));
     if (!traits.touchesKit || (codes.length === 0 && !isWetCement)) return notApplicable(words('Nothing here burns eyes.', 'Aquí nada quema los ojos.'));
     const inputs = { 'on the sheets': codes.join(', ') || null, 'wet cement': isWetCement, eyewash: facts.firstAid.hasEyewash };
     const reason = isWetCement && codes.length === 0 ? words('Wet cement burns eyes and skin.', 'El cemento mojado quema ojos y piel.') : words(`The sheet says it burns eyes (${codes.join(', ')}).`, `La hoja dice que quema los ojos (${codes.join(', ')}).`);

@@ -4,6 +4,7 @@ import { sourced, usFederal, type Source } from '../source';
 export type RecordKind =
   | 'exposure'
   | 'background-data'
+  | 'analysis'
   | 'sheet'
   | 'register-of-use'
   | 'medical'
@@ -55,6 +56,7 @@ export const RETENTION_ROWS: readonly RetentionRow[] = [
     en: 'Only where results, method and a summary are kept for 30 years.',
     es: 'Solo si los resultados, el método y un resumen se guardan 30 años.',
   }),
+  row('us-federal', 'analysis', years(30), 'analysis that uses exposure or medical records', 'análisis que usa registros de exposición o médicos', usFederal('1910.1020', 'from-memory', { paragraph: '(d)(1)(iii)', note: 'Construction through 1926.33.' })),
   row('us-federal', 'sheet', years(30), 'safety data sheet', 'hoja de datos de seguridad', ACCESS('(d)(1)(ii)(B)', 'OSHA letter, 8 Nov 1985.'), {
     en: 'No fixed period where a register of what it was, where and when it was used is kept for 30 years.',
     es: 'Sin plazo fijo si por 30 años se guarda un registro de qué era, dónde y cuándo se usó.',

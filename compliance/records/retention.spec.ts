@@ -16,6 +16,7 @@ describe('[REC-01] retention, 29 CFR 1910.1020', () => {
     ['work papers 30 years where they do not, derived', 'background-data', {}, { lastDay: '2056-12-01' }],
     ['a sheet 30 years, OSHA letter 8 Nov 1985', 'sheet', {}, { lastDay: '2056-12-01' }],
     ['a sheet without period beside a register of use, verified', 'sheet', { hasSubstitute: true }, { outcome: 'no-period' }],
+    ['an analysis 30 years, 1910.1020(d)(1)(iii), from memory', 'analysis', {}, { lastDay: '2056-12-01' }],
     ['that register 30 years, verified', 'register-of-use', {}, { lastDay: '2056-12-01' }],
     ['medical while employed', 'medical', {}, { outcome: 'keep' }],
     ['medical 30 years from the last day, verified', 'medical', { employmentEndedOn: '2030-06-30' }, { lastDay: '2060-06-30' }],

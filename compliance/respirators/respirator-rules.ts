@@ -25,7 +25,7 @@ export interface ChosenRespiratorFacts extends RespiratorNeed {
 export const respiratorByRatio: Rule<ChosenRespiratorFacts> = {
   id: 'respirator-by-hazard-ratio',
   title: words('Respirator strong enough for what controls leave', 'Respirador suficiente para lo que dejan los controles'),
-  source: usFederal('1910.134', 'read', { paragraph: '(d)(1)(iii), (d)(3)(i)', note: 'In silica work outside Table 1 by 1926.1153(d)(3)(i) and (e).' }),
+  source: usFederal('1910.134', 'partly', { paragraph: '(a)(1), (d)(1)(iii), (d)(3)(i), (d)(3)(iii)(B)(2)', note: '(d)(1)(iii) and (d)(3)(i) read; controls first and the change schedule recalled. In silica work outside Table 1 by 1926.1153(d)(3)(i) and (e).' }),
   duties: ['SIL-12', 'SIL-14', 'RES-01', 'RES-02', 'RES-03', 'RES-04'],
   evaluate(facts) {
     const choice = selectRespirator(facts);

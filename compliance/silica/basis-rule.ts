@@ -121,7 +121,7 @@ export const overLimitRule: ShiftRule<SilicaTask> = {
   holds: false,
   evaluate({ silica, pack }) {
     // Nothing over the limit is known: exposure ÷ limit at most 1, or no signed exposure (held elsewhere: `silica-signed-basis`, the Table 1 rules).
-    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.ratio <= 1) return notApplicable(words('The limit is kept.', 'Se cumple el límite.'));
+    if (silica.kind !== 'basis' || silica.decision.kind !== 'assessed' || silica.decision.ratio <= 1) return notApplicable(words('No signed exposure is over the limit.', 'Ninguna exposición firmada pasa el límite.'));
     const { decision } = silica;
     // (d)(3)(i) more controls; (e)(1)(ii) until then a respirator whose factor covers the ratio (`apfForRatio`).
     return unmet(words('The air is over the limit even with the controls. The mask comes on top, not in their place.', 'El aire pasa el límite aun con los controles. La máscara va además, no en su lugar.'), {
