@@ -23,8 +23,9 @@ const narrowCellEm = 0.42;
 /** Fewer words than this say nothing about even gaps. */
 const leastStretched = 3;
 
-/** Whether a row has a gap that is a cell's only where a column starts. */
+/** Whether a row has gaps that are a cell's only where a column starts. */
 export const mayTouch = (row: readonly TextItem[]): boolean =>
+  isStretched(row) ||
   row.some((item, at) => {
     const before = row[at - 1];
     const gap = before ? (item.x - before.x - before.width) / item.height : 0;
@@ -97,7 +98,7 @@ function sharedHeight(a: { baseline: number; height: number }, b: { baseline: nu
 export function toLine(row: TextItem[], startsCell: (item: TextItem) => boolean = () => false): Line {
   const segments: Segment[] = [];
   let end = -Infinity;
-  const isOne = isStretched(row);
+  const isOne = isStretched(row) && row.slice(1).filter(startsCell).length < 2;
   for (const item of row) {
     const last = segments.at(-1);
     const gap = (item.x - end) / item.height;

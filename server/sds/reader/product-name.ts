@@ -8,12 +8,12 @@ import { fold, hasLetters, joinSpacedLetters } from './words';
 const nameLabels: readonly { label: RegExp; confidence: number }[] = [
   {
     label:
-      /^(product names?(?: ?\/ ?(?:trade names?|codes?|synonyms?))?|product name as (?:used|it appears) on (?:the )?label|material name|name of (the )?product|nombre de la (sustancia( quimica)?( peligrosa)?|mezcla)( o (la )?mezcla)?|commercial product name|product trade name|product name ?[/&] ?trade name|product identity|nombre( comercial)? del? (producto|material)|identificacion del producto( quimico)?|nom d[ue] produit|nom de la (matiere|substance)|nom commercial du produit|produktname|name des produkts|nome del prodotto|nome do produto|productnaam)\b/,
+      /^(product names?(?:\(s\))?(?: ?\/ ?(?:trade names?|codes?|synonyms?))?|product name as (?:used|it appears) on (?:the )?label|material name|name of (the )?product|nombre de la (sustancia( quimica)?( peligrosa)?|mezcla)( o (la )?mezcla)?|commercial product name|product trade name|product name ?[/&] ?trade name|product identity|product i\.?d\.?(?= ?:)|name of the product|nombre( comercial)? del? (producto|material)|identificacion del producto( quimico)?|nom d[ue] produit|nom de la (matiere|substance)|nom commercial du produit|produktname|name des produkts|nome del prodotto|nome do produto|productnaam)\b/,
     confidence: 0.95,
   },
   {
     label:
-      /^(trade ?name|commercial name|brand name|trade designation|nombre comercial|denominacion comercial|nom commercial|designation commerciale|denomination commerciale|handelsname|warenzeichen|bezeichnung des (stoffs|stoffes|gemischs|produkts)|nome commerciale|denominazione commerciale|nome comercial|handelsnaam)\b/,
+      /^(trade ?name( or designation of the (mixture|product|substance))?|commercial name|brand name|trade designation|nombre comercial|nombre o designacion comercial( de la mezcla)?|designacion comercial|denominacion comercial|nom commercial|designation commerciale|denomination commerciale|handelsname|produktbezeichnung|artikelbezeichnung|nom du melange|warenzeichen|bezeichnung des (stoffs|stoffes|gemischs|produkts)|nome commerciale|denominazione commerciale|nome comercial|handelsnaam)\b/,
     confidence: 0.9,
   },
   {

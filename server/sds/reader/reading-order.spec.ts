@@ -52,6 +52,8 @@ describe('reading order', () => {
     const spread = (words: string[], gap: number): TextItem[] => words.reduce<TextItem[]>((items, word) => [...items, item(word, (items.at(-1)?.x ?? 40 - gap) + (items.at(-1)?.width ?? 0) + gap, 80)], []);
     expect(texts(spread(['Supplied', 'by:', 'Slate', 'Hollow', 'Co.'], 60))).toEqual(['Supplied by: Slate Hollow Co.']);
     expect(texts([item('Xylene', 50, 80), item('1330-20-7', 150, 80), item('10-30', 250, 80)])).toEqual(['Xylene  1330-20-7  10-30']);
+    const values = [item('Slate Finishes LP', 40, 95), item('4 Quay Street', 140, 95), item('800 555 0150', 240, 95)];
+    expect(texts([item('COMPANY', 40, 80), item('ADDRESS', 140, 80), item('CONTACT', 240, 80), ...values])[0]).toBe('COMPANY  ADDRESS  CONTACT');
   });
 
   it('parts a cell that nearly touches the next where a column of the rows around it starts', () => {

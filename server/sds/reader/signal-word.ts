@@ -2,6 +2,7 @@ import { findLabelled } from './labels';
 import { type Line, type Segment } from './lines';
 import { type Field, type SignalWord } from './reading';
 import { type SheetParts } from './sheet-parts';
+import { matchStatements } from './statement-matcher';
 import { fold, joinSpacedLetters } from './words';
 
 const label = /^(ghs )?(signal ?words?|palabras? de (advertencia|aviso|senal)|palabra clave|mentions? d'avertissement|mot(-| )?indicateur|signalw(o|oe)rt(er)?|avvertenza|palavra-?( de )?(sinal|advertencia)|signaalwoord)\b/;
@@ -23,7 +24,8 @@ export function signalWord(parts: SheetParts): Field<SignalWord> | null {
   if (alone) return alone;
   const unclassified = lines.find((line) => /not classified|not hazardous|not a hazardous|non-?hazardous|no clasificad|nicht eingestuft|non classe|nicht gefahrlich|kennzeichnung nicht erforderlich|no es peligros/.test(fold(line.text)));
   // Statements without a word: the word may be drawn as a picture. Better no answer than a false "none".
-  if (!unclassified && lines.some((line) => /(?<![A-Z0-9])H[23]\d\d\b/.test(line.text) || label.test(fold(line.text)))) return null;
+  const isSaid = /\bghs\b|\bsga\b|\bsgh\b|categor|kategorie|1272\/2008|statement/.test(fold(lines.map((line) => line.text).join(' '))) && matchStatements(lines.map((line) => line.text).join('\n'), parts.language, 'H', false).length > 0;
+  if (!unclassified && (isSaid || lines.some((line) => /(?<![A-Z0-9])H[23]\d\d\b/.test(line.text) || label.test(fold(line.text))))) return null;
   const place = unclassified ?? heading;
   const because = unclassified ? 'Section 2 says the product is not classified and prints no signal word.' : 'Section 2 prints no signal word.';
   return { value: 'none', page: place.page, box: place.box, quote: place.text, confidence: unclassified ? 0.9 : 0.6, because };

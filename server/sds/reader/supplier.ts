@@ -5,12 +5,14 @@ import { type SheetParts } from './sheet-parts';
 import { fold, hasLetters, joinSpacedLetters } from './words';
 
 const makerLabels =
-  /^((name,? address,?( and)? tele?phone( number)? of (the )?)?(chemical )?(manufacturer|supplier|company|importer|producer|responsible party)( or other responsible party)?(?=:)|(name of (the )?)?(manufacturer|supplier|company|importer|producer|vendor|responsible party)('?s)?( \/ ?| or |, |\/)?(manufacturer|supplier|company|importer|distributor|undertaking)?('?s)?( name| identification| information| details| address| name and address| name & address)?|(manufactured|supplied|produced|sold|prepared and distributed|made) (by|for)|(initial )?supplier identifier|makers?|nome da empresa|identificateur du fournisseur initial|manufacturer name|(registered )?company name( of (the )?(supplier|manufacturer))?|firm name|nombre (de la empresa|del proveedor|del fabricante|de la compania)|fabricante( ?\/ ?proveedor)?|proveedor( ?\/ ?fabricante)?|empresa|compania|razon social|denominacion social|nombre o razon social|(nom du )?(fabricant|fournisseur)( ?\/ ?(fabricant|fournisseur))?|societe|raison sociale|nom de la (societe|compagnie)|hersteller( ?\/ ?lieferant)?|lieferant|firma|firmenname|unternehmen|fornitore|produttore|fornecedor|leverancier)\b/;
+  /^((name,? address,?( and)? tele?phone( number)? of (the )?)?(chemical )?(manufacturer|supplier|company|importer|producer|responsible party)( or other responsible party)?(?=:)|(name of (the )?)?(manufacturer|supplier|company|importer|producer|vendor|responsible party)('?s)?( \/ ?| or |, |\/)?(manufacturer|supplier|company|importer|distributor|undertaking)?('?s)?( name| identification| information| details| address| name and address| name & address)?|(manufactured|supplied|produced|sold|prepared and distributed|made) (by|for)|(initial )?supplier identifier|makers?|fabricado por|fabrique par|hergestellt (von|durch)|inverkehrbringer|nome da empresa|identificateur du fournisseur initial|manufacturer name|(registered )?company name( of (the )?(supplier|manufacturer))?|firm name|nombre (de la empresa|del proveedor|del fabricante|de la compania)|fabricante( ?\/ ?proveedor)?|proveedor( ?\/ ?fabricante)?|empresa|compania|razon social|denominacion social|nombre o razon social|(nom du )?(fabricant|fournisseur)( ?\/ ?(fabricant|fournisseur))?|societe|raison sociale|nom de la (societe|compagnie)|hersteller( ?\/ ?lieferant)?|lieferant|firma|firmenname|unternehmen|fornitore|produttore|fornecedor|leverancier)\b/;
 
 const blockLabels =
   /^((details|information|data) (of|on|about|concerning) the (supplier|manufacturer|company)|supplier of the safety data sheet|manufacturer or supplier's details|supplier's details|company identification|company ?\/ ?undertaking identification|manufacturer information|supplier information|datos del proveedor( o fabricante)?|datos del fabricante|informacion(es)? (del|sobre el) (proveedor|fabricante)|identificacion de la (empresa|compania|sociedad)|(renseignements|details|donnees) (concernant|sur|relati\w+) (le|au|du) (fabricant|fournisseur)|details du fournisseur|einzelheiten zum lieferanten|angaben zum (lieferanten|hersteller)|informazioni sul fornitore)/;
 
 const distributorLabels = /^(distributor|distributed by|distributed for|distribuidor|distribuido por|distributeur|distribue par|vertrieb|imported by|importador|importateur)\b/;
+
+const emergencyLabels = /^(?:.{0,30}\b)?(emergency|emergencia|urgence|notruf|notfall|poison|24[ -]?(h|hour|hr)s?)\b[a-z0-9 /()-]{0,40}/;
 
 /** Endings of company names in the usual countries. */
 const legalForm =
@@ -30,7 +32,10 @@ export function supplier(parts: SheetParts): Field<string> | null {
       }
     }
   }
-  const sure = found.find(({ value }) => legalForm.test(value) || tradeWord.test(value)) ?? found[0];
+  // A distributor answers only where nobody names a maker or supplier, whatever the form of the names.
+  const makers = found.filter(({ rank }) => rank < 2);
+  const named = makers.length > 0 ? makers : found;
+  const sure = named.find(({ value }) => legalForm.test(value) || tradeWord.test(value)) ?? named[0];
   if (sure) {
     const isFormed = legalForm.test(sure.value);
     return { value: sure.value, page: sure.segment.page, box: sure.segment.box, quote: sure.segment.text, confidence: isFormed ? 0.95 : sure.rank === 0 ? 0.8 : 0.65 };
@@ -84,8 +89,10 @@ function withoutAddress(name: string): string {
 /** No label: a line of section 1, or of the running header or footer, that ends in a legal form. */
 function unlabelled(identification: Line[], parts: SheetParts): Field<string> | null {
   const firstPage = parts.lines.filter((line) => line.page === 1).sort((a, b) => a.box.y - b.box.y);
+  // The company that answers emergency calls is another one as a rule.
+  const emergency = new Set(findLabelled(identification, emergencyLabels).flatMap(({ values }) => values));
   const segments = [...identification, ...parts.running, ...parts.sections.preamble, ...firstPage.slice(-2)].flatMap((line) => line.segments);
-  for (const segment of segments) {
+  for (const segment of segments.filter((each) => !emergency.has(each))) {
     const value = companyName(segment.text);
     if (!value || value.split(' ').length > 8 || !legalForm.test(value) || /[.;] \p{Ll}|\b(is|are|the product|material)\b/u.test(value)) continue;
     return { value, page: segment.page, box: segment.box, quote: segment.text, confidence: 0.55, because: 'No label names the supplier; this is the only company named in section 1 or at the edge of the pages.' };
