@@ -32,14 +32,17 @@ async function open(query: string, versions: readonly PublishedVersion[], send: 
   jest.spyOn(TestBed.inject(ContractClient), 'bytes').mockImplementation((_, { language = '' }) => of(new TextEncoder().encode(send(language)).buffer));
   const harness = await RouterTestingHarness.create(`/jobs/${shift.jobId}/shifts/${shift.id}/paper/${id(71)}${query}`);
   const element = harness.fixture.nativeElement as HTMLElement;
-  const settle = async () => {
-    for (let turn = 0; turn < 5; turn += 1) await new Promise((resolve) => setTimeout(resolve));
-    await harness.fixture.whenStable();
+  const words = () => element.textContent?.replace(/\s+/g, ' ') ?? '';
+  // Hashing is done by another thread, in its own time.
+  const settle = async (isDone: () => boolean) => {
+    for (let turn = 0; turn < 1000 && !isDone(); turn += 1) {
+      await new Promise((resolve) => setTimeout(resolve, 5));
+      await harness.fixture.whenStable();
+    }
   };
-  await settle();
-  server.expectOne(`/api/shifts/${shift.id}`).flush({ ...shift, versions });
-  await settle();
-  return { element, words: () => element.textContent?.replace(/\s+/g, ' ') ?? '' };
+  await settle(() => server.match(`/api/shifts/${shift.id}`).some((request) => (request.flush({ ...shift, versions }), true)));
+  await settle(() => !words().includes('Loading'));
+  return { element, words };
 }
 
 describe('the page of the list on paper', () => {
