@@ -42,7 +42,7 @@ export interface PlanTask {
 }
 
 /** Gates that say something of the place. What they say of people stays on the list. */
-const PLACE_RULES = ['rules-of-the-place', 'host-hazards-asked', 'floor-survey', 'engines-indoors', 'floor-profile', 'grind-then-blast'];
+const PLACE_RULES = ['host-hazards-asked', 'floor-survey', 'engines-indoors', 'floor-profile', 'grind-then-blast'];
 const someone = words('a named person', 'una persona nombrada');
 const peopleNotReady = words('The people for it are not ready. Ask the lead.', 'Falta algo de las personas. Pregunte al encargado.');
 const shiftHeld = words('The whole shift is held. Ask the lead.', 'Todo el turno está detenido. Pregunte al encargado.');

@@ -18,6 +18,7 @@ let lastId = 0;
 
     input {
       width: 100%;
+      text-overflow: ellipsis;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -23,6 +23,10 @@ import { ContractClient } from '../contract/contract-client';
       flex-wrap: wrap;
       gap: 0.4rem 1.1rem;
     }
+
+    a {
+      padding-block: 3px;
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

@@ -1,5 +1,6 @@
 import { type ReaderState, type RevisionSummary } from '#shared/sheets';
 import { type StateKind } from '#ui/state';
+import { dayOf, momentShort } from '../pieces/dates';
 
 /** Languages of sheets, as the office writes them. */
 export const languageNames: Readonly<Record<string, string>> = { en: 'English', es: 'Spanish', fr: 'French', de: 'German' };
@@ -35,6 +36,10 @@ const longWaitMs = 2 * 3600 * 1000;
 export const isStuck = ({ state, pagesRead, uploadedAt }: RevisionSummary, now: Date): boolean => state === 'waiting' && pagesRead === null && now.getTime() - Date.parse(uploadedAt) > longWaitMs;
 /** Whether reading once more may help: not where the file itself is the trouble. */
 export const mayReadAgain = (revision: RevisionSummary, now: Date): boolean => isStuck(revision, now) || (revision.state === 'needs-entry' && revision.readerState !== 'not-a-pdf' && revision.readerState !== 'encrypted' && revision.readerState !== 'too-large');
+
+/** "Spanish, of 11 May 2023": the language where it is not English, then the sheet's date or the day it came. */
+export const datedWords = ({ language, revisedOn, uploadedAt }: RevisionSummary): string =>
+  [language === null || language === 'en' ? '' : (languageNames[language] ?? language), revisedOn ? `of ${dayOf(revisedOn)}` : `added ${momentShort(uploadedAt)}`].filter(Boolean).join(', ');
 
 /** State of a revision in words, for a list. */
 export function revisionState(revision: RevisionSummary, now = new Date()): { readonly kind: StateKind; readonly words: string } {

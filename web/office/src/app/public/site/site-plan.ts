@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
 import { type DayPlan, type PlanTask } from '#compliance/plans/day-plan';
 import { type Language, type Words } from '#compliance/outcome';
 import { Mark } from '#ui/mark';
@@ -11,12 +11,13 @@ import { siteWords } from './site-words';
   imports: [Mark, State],
   template: `
     @let plan = day();
-    <p class="kb-small kb-quiet">{{ said(plan.packName) }} {{ plan.packVersion }}. {{ words().people(plan.peopleCount) }} {{ plan.isCompetentPersonNamed ? words().competentNamed : words().competentMissing }}</p>
+    <p class="kb-small kb-quiet">{{ said(plan.packName) }} {{ plan.packVersion }}. {{ words().people(plan.peopleCount) }}. {{ plan.isCompetentPersonNamed ? words().competentNamed : words().competentMissing }}</p>
+    <div class="kb-actions kb-no-print"><button type="button" class="kb-link" [attr.aria-expanded]="isSourced()" (click)="isSourced.set(!isSourced())">{{ isSourced() ? words().hideSources : words().showSources }}</button></div>
     @if (plan.place.length > 0) {
       <h3>{{ words().place }}</h3>
       <ul>
         @for (line of plan.place; track $index) {
-          <li>{{ said(line.text) }} <span class="kb-small kb-quiet">{{ line.source }}</span></li>
+          <li>{{ said(line.text) }} <span class="source kb-small kb-quiet" [class.shown]="isSourced()">{{ line.source }}</span></li>
         }
       </ul>
     }
@@ -31,7 +32,7 @@ import { siteWords } from './site-words';
           <h4>{{ part.heading }}</h4>
           <ul>
             @for (line of part.lines; track $index) {
-              <li>{{ said(line.text) }} <span class="kb-small kb-quiet">{{ line.source }}</span></li>
+              <li>{{ said(line.text) }} <span class="source kb-small kb-quiet" [class.shown]="isSourced()">{{ line.source }}</span></li>
             }
           </ul>
         }
@@ -79,6 +80,16 @@ import { siteWords } from './site-words';
       margin-top: 0.2rem;
     }
 
+    .kb-link {
+      min-height: var(--kb-target);
+    }
+
+    @media screen {
+      .source:not(.shown) {
+        display: none;
+      }
+    }
+
     .marks {
       display: flex;
       flex-wrap: wrap;
@@ -99,6 +110,8 @@ export class SitePlan {
   readonly day = input.required<DayPlan>();
   readonly language = input.required<Language>();
 
+  /** On screen only when asked for; on paper always. */
+  protected readonly isSourced = signal(false);
   protected readonly words = computed(() => siteWords[this.language()]);
   protected said(words: Words): string {
     return words[this.language()];

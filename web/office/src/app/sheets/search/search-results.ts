@@ -5,9 +5,8 @@ import { type SearchAnswer } from '#shared/library';
 import { Empty } from '#ui/empty';
 import { Note } from '#ui/note';
 import { State } from '#ui/state';
-import { dayOf, momentShort } from '../../pieces/dates';
 import { Unready } from '../../pieces/unready';
-import { revisionState } from '../sheet-words';
+import { datedWords, revisionState } from '../sheet-words';
 import { SearchApi, type SheetSearch } from './search-api';
 import { SearchFilters } from './search-filters';
 import { closestWords, countSaid, filterNames, snippetPieces, type FilterName } from './search-words';
@@ -42,7 +41,7 @@ export class SearchResults {
       matched,
       pieces: snippet === null ? [] : snippetPieces(snippet),
       state: revisionState(revision),
-      date: revision.revisedOn ? `of ${dayOf(revision.revisedOn)}` : `added ${momentShort(revision.uploadedAt)}`,
+      date: datedWords(revision),
     })),
   );
   protected readonly said = computed(() => {

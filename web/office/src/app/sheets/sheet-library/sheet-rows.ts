@@ -6,9 +6,8 @@ import { Note } from '#ui/note';
 import { problemOf, problemWords } from '#ui/problem';
 import { State } from '#ui/state';
 import { Access } from '../../contract/access';
-import { dayOf, momentShort } from '../../pieces/dates';
 import { SheetsApi } from '../sheets-api';
-import { languageNames, mayReadAgain, revisionState } from '../sheet-words';
+import { datedWords, mayReadAgain, revisionState } from '../sheet-words';
 
 /** Revisions as a list: product or file, supplier, date, state in words; for one that could not be read, what can be done. */
 @Component({
@@ -67,7 +66,7 @@ export class SheetRows {
       revision,
       state: revisionState(revision),
       mayReadAgain: mayReadAgain(revision, new Date()),
-      date: [revision.language === null || revision.language === 'en' ? '' : (languageNames[revision.language] ?? revision.language), revision.revisedOn ? `of ${dayOf(revision.revisedOn)}` : `added ${momentShort(revision.uploadedAt)}`].filter(Boolean).join(', '),
+      date: datedWords(revision),
     })),
   );
 

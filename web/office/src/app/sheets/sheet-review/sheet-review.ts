@@ -87,7 +87,7 @@ export class SheetReview {
   protected readonly hint = computed(() => {
     const { length } = this.progress.pending();
     const looks = length === 0 ? 'Nothing more wants a look.' : `${length} of ${this.rows().length} ${length === 1 ? 'wants' : 'want'} a look.`;
-    return this.isByHand() ? '' : `${looks} Enter: matches, E: change, arrows: move`;
+    return looks;
   });
   protected readonly confirmedWords = computed(() => {
     const revision = this.revision();
