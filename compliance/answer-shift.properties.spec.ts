@@ -39,7 +39,7 @@ describe('any shift', () => {
     fc.assert(
       fc.property(anyShiftFacts, (facts) => {
         const answer = answerShift(facts, AS_OF);
-        const findings = [...answer.gates, ...answer.tasks.flatMap((task) => task.findings), ...answer.people.flatMap((person) => person.findings), ...answer.kits.flatMap((kit) => kit.findings)];
+        const findings = [...answer.gates, ...answer.tasks.flatMap((task) => task.findings), ...answer.people.flatMap((person) => person.findings), ...answer.kits.flatMap((kit) => kit.findings), ...answer.consumables];
         for (const finding of findings) {
           if (finding.outcome === 'undecided') expect(finding.whoDecides).not.toBeNull();
           if (finding.isHolding) expect(finding.whatWouldChange).not.toBeNull();

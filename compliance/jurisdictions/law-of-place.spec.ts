@@ -16,7 +16,7 @@ const AS_OF = '2026-12-03T12:00:00Z';
 const ABROAD = [...PLACES_WITHOUT_PACK.filter(({ isUsState }) => !isUsState).map(({ id }) => id), 'atlantis', 'nowhere', 'no-pack', ''];
 const STATES = [...PLACES_WITHOUT_PACK.filter(({ isUsState }) => isUsState).map(({ id }) => id), 'us-texas'];
 
-const findingsOf = (answer: ShiftAnswer): readonly Finding[] => [...answer.gates, ...answer.tasks.flatMap((task) => task.findings), ...answer.people.flatMap((person) => person.findings), ...answer.kits.flatMap((kit) => kit.findings)];
+const findingsOf = (answer: ShiftAnswer): readonly Finding[] => [...answer.gates, ...answer.tasks.flatMap((task) => task.findings), ...answer.people.flatMap((person) => person.findings), ...answer.kits.flatMap((kit) => kit.findings), ...answer.consumables];
 const isUsText = ({ source }: { readonly source: Finding['source'] }): boolean => /\b29 CFR\b|\bOSHA\b/.test(`${source.citation} ${source.paragraph ?? ''}`);
 /** The federal limits and Table 1's four hours as any line could say them. */
 const US_FIGURE = /\b(50|25)\s*µg|Table 1|Tabla 1|\b4 h\b/;

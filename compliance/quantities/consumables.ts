@@ -66,7 +66,7 @@ export const consumableRule: ShiftRule<ConsumableOfShift> = {
     if (rate === null) return undecided(words('Nobody stated a rate.', 'Nadie dio un consumo.'), row.whoSays, { inputs, whatWouldChange: state });
     if (!isStated(rate)) return unmet(words('The rate is not above zero, or nobody is named for it.', 'El consumo no es mayor que cero, o nadie responde por él.'), { inputs, whatWouldChange: state });
     const base = baseOf(rate.per, context);
-    if (base === null) return undecided(words(`Not known: how many ${PER[rate.per].en} is missing.`, `No se sabe: falta cuántos ${PER[rate.per].es}.`), words('the crew lead', 'el jefe de cuadrilla'), { inputs, whatWouldChange: words('Give area, thickness or count.', 'Dé área, espesor o cuenta.') });
+    if (base === null || !Number.isFinite(base) || base < 0) return undecided(words(`Not known: how many ${PER[rate.per].en} is missing.`, `No se sabe: falta cuántos ${PER[rate.per].es}.`), words('the crew lead', 'el jefe de cuadrilla'), { inputs, whatWouldChange: words('Give area, thickness or count.', 'Dé área, espesor o cuenta.') });
     const amount = rounded(rate.amount * base, rate.unit);
     return met(words(`${rate.amount} ${unitOf(rate.unit, rate.amount).en} a ${PER[rate.per].en}, stated by ${rate.statedBy}.`, `${rate.amount} ${unitOf(rate.unit, rate.amount).es} por ${PER[rate.per].es}, según ${rate.statedBy}.`), {
       inputs: { ...inputs, [`counted, ${PER[rate.per].en}`]: Math.round(base * 100) / 100 },

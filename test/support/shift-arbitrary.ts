@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { dustMethods, equipmentKinds, fitTestKinds, respiratorTypes, settings, taskKinds, type ShiftFacts } from '#compliance/facts';
+import { consumableBases, consumableKinds, consumableUnits, dustMethods, equipmentKinds, fitTestKinds, respiratorTypes, settings, taskKinds, type ShiftFacts } from '#compliance/facts';
 
 const orNull = <T>(value: fc.Arbitrary<T>): fc.Arbitrary<T | null> => fc.option(value, { nil: null });
 const text = fc.constantFrom('', ' ', 'bare concrete', 'Ines Halloran', 'Quarrybond 40', '<b>', '«ñ»');
@@ -15,6 +15,7 @@ const task = fc.record({
   id: id('task-'),
   kind: fc.constantFrom(...taskKinds),
   assignments: fc.array(assignment, { maxLength: 3 }),
+  logged: fc.array(assignment, { maxLength: 2 }),
   equipmentId: orNull(id('machine-')),
   collectorId: orNull(id('machine-')),
   dustMethod: orNull(fc.constantFrom(...dustMethods)),
@@ -30,7 +31,9 @@ const person = fc.record({
   isAdultConfirmed: fc.boolean(),
   isKeptFromIsocyanates: fc.boolean(),
   silicaTrainedOn: orNull(date),
+  silicaTrainedBy: orNull(text),
   hazcomTrainedOn: orNull(date),
+  hazcomTrainedBy: orNull(text),
   respirators: fc.array(fc.record({ type: fc.constantFrom(...respiratorTypes), label: text, clearedOn: orNull(date), fitTestedOn: orNull(date), fitTestKind: orNull(fc.constantFrom(...fitTestKinds)) }), { maxLength: 2 }),
   elsewhere: fc.array(fc.record({ jobName: text, kind: fc.constantFrom(...taskKinds), startMinute: minute, endMinute: minute }), { maxLength: 2 }),
 });
@@ -45,7 +48,7 @@ const sheet = fc.record({
   protectionWords: fc.array(fc.record({ topic: fc.constantFrom('eyes' as const, 'hands' as const, 'skin' as const, 'respiratory' as const, 'hearing' as const), text: fc.constantFrom('Wear it.', 'Not required.', 'If ventilation is poor, wear a mask.', '') }), { maxLength: 2 }),
 });
 const part = fc.record({ productId: text, productName: text, part: fc.constantFrom('A', 'B', 'C'), form: fc.constantFrom('liquid' as const, 'powder' as const, 'paste' as const), sheet: orNull(sheet) });
-const kit = fc.record({ id: id('kit-'), name: text, volumeL: amount, mixMinutesPerKit: amount, bucketMinutes: orNull(amount), count: orNull(amount), parts: fc.array(part, { maxLength: 3 }) });
+const kit = fc.record({ id: id('kit-'), name: text, volumeL: amount, mixMinutesPerKit: amount, bucketMinutes: orNull(amount), count: orNull(amount), surfaceException: orNull(fc.record({ writtenBy: text, reference: text, text })), cartridgeSchedule: orNull(fc.record({ change: text, basedOn: text })), parts: fc.array(part, { maxLength: 3 }) });
 const reading = fc.record({ airflowM3PerH: amount, instrument: text, place: text, filterState: text, takenBy: text, takenOn: date });
 const equipment = fc.record({
   id: id('machine-'),
@@ -91,10 +94,13 @@ export const anyShiftFacts: fc.Arbitrary<ShiftFacts> = fc.record({
   engines: fc.record({ areUsedInside: anyBoolean, isExhaustLedOutside: anyBoolean, hasCarbonMonoxideAlarm: anyBoolean }),
   firstAid: fc.record({ firstAiderName: orNull(text), hasEyewash: anyBoolean, emergencyNumber: orNull(text), address: orNull(text) }),
   hostHazards: orNull(text),
+  siteMaskRule: orNull(text),
   competentPersonId: orNull(id('person-')),
+  inspectionCoverId: orNull(id('person-')),
   people: fc.array(person, { maxLength: 3 }),
   tasks: fc.array(task, { maxLength: 4 }),
   kits: fc.array(kit, { maxLength: 2 }),
   equipment: fc.array(equipment, { maxLength: 3 }),
   bases: fc.array(basis, { maxLength: 2 }),
+  consumableRates: fc.array(fc.record({ item: fc.constantFrom(...consumableKinds), amount, unit: fc.constantFrom(...consumableUnits), per: fc.constantFrom(...consumableBases), statedBy: text }), { maxLength: 3 }),
 });
