@@ -21,6 +21,7 @@ import { pinsService } from '../../people/pins-service';
 import { pinPublicKeySpki } from '../../people/pin-unsealing';
 import { productsService } from '../../products/products-service';
 import { recordlogService } from '../../recordlog/recordlog-service';
+import { requestsService } from '../../library/requests-service';
 import { readSheet } from '../../sds/reader/read-sheet';
 import { readSheetWork } from '../../sds/sheets-work';
 import { sheetsService } from '../../sds/sheets-service';
@@ -141,6 +142,7 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
   await deps.database.inOrganisation(organisationId, (tx) => tx.update(tabletRows).set({ lastHeardAt: deps.clock.now() }));
   // A newer sheet of part C has come in and waits for the officer: it adds a statement.
   await addSheet(deps, officer, { ...quarrybondPartC, revisedOn: daysAgo(3), supersedesOn: '2023-05-11' });
+  await sendOneBack(deps, officer);
   await recordlogService(deps).makeCheckpoint(organisationId);
 
   function instantAt(date: string, minute: number): Date {
@@ -149,6 +151,19 @@ export async function loadDemo(deps: Deps & { clock: { now(): Date; set(at: Date
     const utc = new Date(guess.toLocaleString('en-US', { timeZone: 'UTC', hour12: false }).replace(', 24:', ', 00:'));
     return new Date(guess.getTime() + (utc.getTime() - local.getTime()));
   }
+}
+
+/** One sheet was not fit for use, before it belonged to a product: its supplier has it back and has not answered yet. */
+async function sendOneBack(deps: Deps, officer: PersonActor): Promise<void> {
+  const { id, version, productName, supplier } = await addSheet(deps, officer, { ...primer, fileName: 'northlode-joint-filler-8.pdf', productName: 'Northlode Joint Filler 8', productCode: 'NJF-8' });
+  await requestsService(deps, sheetsService(deps)).returnSheet(officer, id, version, {
+    productName: productName ?? 'Northlode Joint Filler 8',
+    supplier: supplier ?? primer.supplier.name,
+    email: 'sheets@northlode.example',
+    message: 'We cannot use your safety data sheet of Northlode Joint Filler 8.\n\nWhat we found:\n- Section 14 gives the class of the primer, not of the joint filler.\n\nPlease send a corrected sheet as a PDF, with all 16 sections.',
+    language: 'en',
+    isSetAside: true,
+  });
 }
 
 async function addSheet(deps: Deps, officer: PersonActor, spec: DemoSheetSpec): Promise<Revision> {
