@@ -1,6 +1,6 @@
 /** Amounts in section 3 as sheets print them: "30-60%", "≥10 - ≤20", "10 - <25", "< 1.0", "balance" is none. */
 
-const mark = '(?:[<>≤≥~≈]=?|=<|=>|ca\\.?|approx\\.?|about|max\\.?|up to|more than|less than|min\\.?)';
+const mark = '(?:[<>≤≥~≈]=?|=<|=>|ca\\.?|approx\\.?|about|max\\.?|up to|at least|at most|more than|less than|greater than|not more than|mas de|menos de|hasta|plus de|moins de|jusqu.a|uber|unter|bis zu|min\\.?)';
 const figure = '(?:\\d{1,3}(?:[.,]\\d{1,6})?|[.,]\\d{1,6})';
 const unit = '(?:\\s?(?:%|wt\\.?\\s?%?|w\\/w|vol\\.?\\s?%?|percent)(?:\\s?\\(?(?:w\\/w|w\\/v|v\\/v|by (?:wt|weight|vol|volume)\\.?|wt\\.?|vol\\.?|weight)\\)?)?)';
 const dash = '(?:-|\\u2010|\\u2011|\\u2012|–|—|−|to|a|bis|à|and|y|und|et|\\.\\.\\.?|…)';

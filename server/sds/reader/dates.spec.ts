@@ -1,6 +1,6 @@
 import { describe, expect, it } from '@jest/globals';
 import { pagesFrom } from '#test/support/sheet-text';
-import { dateOrder, datesIn } from './dates';
+import { dateOrder, datesIn, monthsIn } from './dates';
 import { readLines } from './read-sheet';
 import { type Field } from './reading';
 
@@ -24,12 +24,20 @@ describe('dates as written', () => {
     ['30-11-2015', '2015-11-30'],
     ['06/23/2020', '2020-06-23'],
     ['3/9/98', '1998-03-09'],
+    ['Effective: 2022-Jul-02', '2022-07-02'],
+    ['15/ENE/2024', '2024-01-15'],
   ])('%s is %s', (text, iso) => {
     expect(datesIn(text, monthFirst).map((date) => date.iso)).toEqual([iso]);
   });
 
   it.each(['00.00.0000', '31/02/2020', 'Version 12.01', '1-800-424-9300', '29 CFR 1910.1200', '64742-95-6', '1907/2006', '(412) 434-4515', '13/13/2020'])('%s is no date', (text) => {
     expect(datesIn(text, monthFirst)).toEqual([]);
+  });
+
+  it('knows a month without a day, and only that', () => {
+    const months = (text: string) => monthsIn(text, dayFirst).map((month) => month.text);
+    expect(['Revised March 2024', 'Stand: März 2024', 'octubre de 2021', '03/2024', 'Rev. 5-2019'].map(months)).toEqual([['March 2024'], ['März 2024'], ['octubre de 2021'], ['03/2024'], ['5-2019']]);
+    for (const text of ['3 March 2024', 'March 3, 2024', '12/03/2024', '2024-03-12', 'UN 1263', '29/2024/08', 'Regulation 13/2024', '1910.1200']) expect({ text, months: months(text) }).toEqual({ text, months: [] });
   });
 
   it('keeps the other reading of a date that could be turned round', () => {

@@ -26,11 +26,23 @@ describe('statements by their words', () => {
     ['Flammable liquid and vapour', ['H226']],
     ['Causes damage to organs (central nervous system (CNS)) through prolonged or repeated exposure', ['H372']],
     ['May cause damage to lungs and kidneys through prolonged or repeated exposure', ['H373']],
+    ['Causes damage to lungs through prolonged or repeated inhalation', ['H372']],
+    ['Causes damage to lungs through prolonged or repeated expo-\nsure', ['H372']],
     ['May be harmful if swallowed and enters airways', ['H305']],
     ['Causes skin irritation and serious eye damage', ['H315', 'H318']],
     ['May damage fertility or the unborn child (inhalation)', ['H360']],
   ])('%s', (text, expected) => {
     expect(matchStatements(text, 'en', 'H', true).map((match) => match.code)).toEqual(expected);
+  });
+});
+
+describe('what is not a statement of its own', () => {
+  it.each([
+    ['en', 'There is no evidence that it may cause cancer'],
+    ['en', 'Wear gloves if\nmay cause an allergic skin reaction'],
+    ['es', 'Los estudios dicen que puede perjudicar la fertilidad o dañar al feto'],
+  ])('%s: %s', (language, text) => {
+    expect(matchStatements(text, language, 'H', true)).toEqual([]);
   });
 });
 
@@ -105,6 +117,11 @@ describe('the signal word', () => {
 
   it('stays open where statements are printed and the word is not: it may be a picture', () => {
     expect(read('Hazard statements\nH315 Causes skin irritation.').signalWord).toBeNull();
+  });
+
+  it('is found in running text and after "Label:"', () => {
+    expect(read('Skin Irritation, Category 2 (H315). Signal word: Warning. Causes skin irritation.').signalWord?.value).toBe('warning');
+    expect(read('Label: Danger').signalWord?.value).toBe('danger');
   });
 
   it('is not the warning about California', () => {

@@ -11,8 +11,10 @@ export interface ProseIngredient {
 
 /** Letters after a number within which its amount stands. */
 const reach = 90;
+/** A row that ends like this goes on in the next one. */
+const isOpen = /(,|\b(than|to|least|most|of))$/i;
 /** A row longer than this beside its number is a sentence, not a cell. */
-const longRow = 55;
+const longRow = 45;
 
 /**
  * Ingredients that stand in running text ("Xylene (CAS 1330-20-7) 10-30%; toluene …"), in the order of their numbers.
@@ -24,7 +26,7 @@ export function proseIngredients(lines: readonly Line[], rows: readonly number[]
   const last = rows.at(-1);
   if (first === undefined || last === undefined) return null;
   const counts = rows.map((row) => rows.filter((other) => other === row).length);
-  const isRunning = counts.some((count) => count > 1) || rows.filter((row) => (lines[row]?.text.length ?? 0) > longRow).length > rows.length / 2;
+  const isRunning = counts.some((count) => count > 1) || rows.some((row) => isOpen.test(lines[row]?.text ?? '')) || rows.filter((row) => (lines[row]?.text.length ?? 0) > longRow).length > rows.length / 2;
   if (!isRunning || lines.slice(first, last + 1).some((line) => line.segments.length > 1)) return null;
   const text = flow(lines.slice(Math.max(0, first - 1), last + 3));
   const found = casNumbersIn(text);

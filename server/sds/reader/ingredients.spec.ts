@@ -86,3 +86,18 @@ describe('ingredient tables', () => {
     expect(read('Name     CAS          %\nXylene   1330-20-7    5', '').map(({ cas }) => cas)).toEqual(['1330-20-7']);
   });
 });
+
+describe('ingredients in running text', () => {
+  it('take the amount of their own clause, after the number or before it', () => {
+    expect(rows('Cement (CAS 65997-15-1) 70-95%; limestone (CAS 1317-65-3) 5-15%; gypsum (CAS 13397-24-5)\n2-10%; water (CAS 7732-18-5), balance.')).toEqual(['Cement | 65997-15-1 | 70-95%', 'limestone | 1317-65-3 | 5-15%', 'gypsum | 13397-24-5 | 2-10%', 'water | 7732-18-5 | null']);
+    expect(rows('60-80 % toluene (108-88-3) and 20-40 % acetone (67-64-1)').map((row) => row.split(' | ').slice(1).join(' '))).toEqual(['108-88-3 60-80 %', '67-64-1 20-40 %']);
+  });
+
+  it('keep the words of their amount', () => {
+    expect(rows('Epoxy resin: CAS 25068-38-6, greater than 50%\nQuartz: CAS 14808-60-7, less than\n0.5 %.').map((row) => row.split(' | ')[2])).toEqual(['greater than 50%', 'less than 0.5 %']);
+  });
+
+  it('do not take a percentage that is part of the name where amounts have a column', () => {
+    expect(rows('Ingredient                                  CAS No.       Weight %\nXylene (contains ethylbenzene up to 20 %)   1330-20-7     10 to <20\nToluene (purity 99 %)                       108-88-3      withheld')).toEqual([expect.stringMatching(/1330-20-7 \| 10 to <20$/), expect.stringMatching(/108-88-3 \| null$/)]);
+  });
+});

@@ -6,9 +6,9 @@ import { type SheetParts } from './sheet-parts';
 const knownLanguages: ReadonlySet<string> = new Set(['en', 'es', 'fr', 'de']);
 
 /** What a person must know about the whole file before trusting the values. */
-export function notices(parts: SheetParts, language: Field<string> | null): Notice[] {
+export function notices(parts: SheetParts, language: Field<string> | null, revised: Field<string> | null): Notice[] {
   const { nextSheet } = parts.sections;
-  const undated = undatedRevision(parts);
+  const undated = revised ? null : undatedRevision(parts);
   return [
     ...(nextSheet ? [{ kind: 'several-sheets' as const, page: nextSheet.page, quote: nextSheet.text }] : []),
     ...(language && !knownLanguages.has(language.value) ? [{ kind: 'language-not-read' as const, page: language.page, quote: language.value }] : []),

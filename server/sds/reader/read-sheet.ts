@@ -43,6 +43,7 @@ export function readLines(pages: Line[][]): SheetReading {
   const ownRunning = nextSheet ? running.filter((line) => line.page < nextSheet.page) : running;
   const parts: SheetParts = { sections, lines: own, running: ownRunning, pages: pages.length, language: language?.value ?? 'en' };
   const composition = ingredients(parts);
+  const revised = revisionDate(parts);
   return {
     state: 'read',
     pages: pages.length,
@@ -50,14 +51,14 @@ export function readLines(pages: Line[][]): SheetReading {
     language,
     productName: productName(parts),
     supplier: supplier(parts),
-    revisionDate: revisionDate(parts),
+    revisionDate: revised,
     signalWord: signalWord(parts),
     ...hazardStatements(parts),
     ingredients: composition,
     limits: exposureLimits(parts, composition.flatMap(({ value }) => (value.name ? [value.name] : []))),
     ppeWords: ppeWords(parts),
     sections: sections.headings,
-    notices: notices(parts, language),
+    notices: notices(parts, language, revised),
     text,
   };
 }

@@ -32,7 +32,7 @@ function linesOf(items: TextItem[]): Line[] {
 }
 
 /** How many rows up and down may name the columns of a row, and how far off a cell may start, points. */
-const neighbours = 14;
+const neighbours = 20;
 const columnTolerance = 0.8;
 
 /** Whether a cell of a neighbouring row that is not its first starts where this piece does. */

@@ -38,7 +38,7 @@ export function revisionDate(parts: SheetParts): Field<string> | null {
   const revisions = dated.filter(({ role }) => role === 'revision');
   const issues = dated.filter(({ role }) => role === 'issue');
   // "Revised March 2024" beside an older full date: the day is not on the sheet, and the older date is not the revision's.
-  if (revisions.length === 0 && undatedRevision(parts)) return null;
+  if (revisions.length === 0 && undatedRevision(parts)?.role === 'revision') return null;
   const choice = revisions.length > 0 ? revisions : issues;
   const latest = choice.reduce<Dated | null>((best, next) => (best === null || next.date.iso > best.date.iso ? next : best), null);
   if (!latest) return null;
@@ -62,9 +62,10 @@ export function revisionDate(parts: SheetParts): Field<string> | null {
   return reasons.length > 0 ? { ...field, because: reasons.join(' ') } : field;
 }
 
-/** The month of this revision where the sheet names no day for it. */
-export function undatedRevision(parts: SheetParts): { page: number; text: string } | null {
+/** The month of this revision, else of its issue, where the sheet names no day for it. */
+export function undatedRevision(parts: SheetParts): { role: 'revision' | 'issue'; page: number; text: string } | null {
   const order = { isDayFirst: true };
+  let issue: ReturnType<typeof undatedRevision> = null;
   for (const { lines, index } of lookedAt(parts)) {
     const line = lines[index];
     if (!line || !mayHoldYear.test(line.text)) continue;
@@ -73,12 +74,14 @@ export function undatedRevision(parts: SheetParts): { page: number; text: string
       for (const month of monthsIn(segment.text, order)) {
         const own = segment.text.slice(0, month.start);
         const role = notBare(roleOf(own)) ?? roleOf(`${before} ${own}`) ?? (own.trim() === '' ? roleOfColumn(lines, index, segment) : null);
-        if (role?.role === 'revision' || (role?.role === 'issue' && !role.isBare)) return { page: line.page, text: segment.text.slice(0, month.end).slice(-60) };
+        const found = { page: line.page, text: segment.text.slice(0, month.end).slice(-60) };
+        if (role?.role === 'revision') return { role: 'revision', ...found };
+        if (role?.role === 'issue' && !role.isBare) issue ??= { role: 'issue', ...found };
       }
       before += ` ${segment.text}`;
     }
   }
-  return null;
+  return issue;
 }
 
 const mayHoldYear = /(?:19|20)\d\d/;

@@ -32,10 +32,16 @@ export function matchStatements(text: string, language: string, kind: 'H' | 'P',
       const [start, end] = [match.index, match.index + match[0].length];
       if (taken.some((other) => start < other.end && end > other.start) || !beginsSentence(level, start, isList, text.charAt(origin[start] ?? 0))) continue;
       taken.push({ start, end });
-      for (const single of code.split(',')) found.push({ code: single, start: origin[start] ?? 0, end: (origin[end - 1] ?? 0) + 1 });
+      for (const single of withRepetition(code, level.slice(end, end + 90)).split(',')) found.push({ code: single, start: origin[start] ?? 0, end: (origin[end - 1] ?? 0) + 1 });
     }
   }
   return found.sort((a, b) => a.start - b.start);
+}
+
+/** Damage to organs "through prolonged or repeated inhalation" is that of repeated exposure, however the rest is put. */
+function withRepetition(code: string, after: string): string {
+  const isRepeated = /^[^.;]*\b(prolong\w*|repeated|repetid\w*|repete\w*|langerer|wiederholter)\b/.test(after);
+  return isRepeated && code === 'H370' ? 'H372' : isRepeated && code === 'H371' ? 'H373' : code;
 }
 
 function statementsOf(language: string, kind: 'H' | 'P'): readonly Compiled[] {
