@@ -44,7 +44,7 @@ describe('any shift', () => {
           if (finding.outcome === 'undecided') expect(finding.whoDecides).not.toBeNull();
           if (finding.isHolding) expect(finding.whatWouldChange).not.toBeNull();
           if (finding.outcome === 'met') expect(finding.isHolding).toBe(false);
-          for (const said of [finding.text, finding.reason]) expect([said.en, said.es].every((sentence) => sentence.trim() !== '' && !sentence.includes('undefined'))).toBe(true);
+          for (const said of [finding.text, finding.reason]) expect([said.en, said.es].every((sentence) => sentence.trim() !== '' && !/undefined|\bNaN\b|Infinity/.test(sentence))).toBe(true);
           expect(finding.source.citation).not.toBe('');
         }
       }),

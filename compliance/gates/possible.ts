@@ -32,6 +32,7 @@ export function impossibleFields(facts: ShiftFacts): readonly string[] {
     ...facts.kits.flatMap((kit) => [
       ...below(LEAST_AMOUNT, `kits.${kit.id}.volumeL`, kit.volumeL),
       ...below(0, `kits.${kit.id}.mixMinutesPerKit`, kit.mixMinutesPerKit),
+      ...below(LEAST_AMOUNT, `kits.${kit.id}.bucketMinutes`, kit.bucketMinutes),
       ...below(0, `kits.${kit.id}.count`, kit.count),
     ]),
     ...twice('consumableRates.item', (facts.consumableRates ?? []).map(({ item }) => item)),

@@ -34,7 +34,7 @@ export const profileRule: ShiftRule<ShiftContext> = {
     const { facts } = context;
     const target = facts.targetProfile;
     const ranges = facts.tasks.flatMap(({ kind }) => rangeOf(kind) ?? []);
-    if (target === null || ranges.length === 0) return notApplicable(words('No work toward a profile.', 'No se trabaja para un perfil.'));
+    if (target === null || !Number.isFinite(target) || ranges.length === 0) return notApplicable(words('No work toward a profile.', 'No se trabaja para un perfil.'));
     const roughest = Math.max(...ranges.map(({ maxProfile }) => maxProfile));
     const inputs = { 'profile wanted, CSP': target, 'roughest that the planned work gives, CSP': roughest };
     // Reached by the roughest method planned; else the supplier's exception; else the supplier decides.

@@ -68,7 +68,7 @@ export const bucketTimeRule: ShiftRule<KitOfShift> = {
   topic: 'control',
   holds: false,
   evaluate: ({ kit }) =>
-    kit.bucketMinutes === null ? notApplicable(words('No time is set.', 'Sin tiempo fijado.')) : met(words('Mixed material heats up in the bucket.', 'La mezcla se calienta en el balde.'), { inputs: { 'bucket time, minutes': kit.bucketMinutes } }),
+    !isPositive(kit.bucketMinutes) ? notApplicable(words('No time is set.', 'Sin tiempo fijado.')) : met(words('Mixed material heats up in the bucket.', 'La mezcla se calienta en el balde.'), { inputs: { 'bucket time, minutes': kit.bucketMinutes } }),
   line: ({ kit }) => words(`Out of the bucket within ${kit.bucketMinutes} minutes.`, `Fuera del balde antes de ${kit.bucketMinutes} minutos.`),
 };
 
