@@ -21,6 +21,7 @@ import { ContractClient } from '../contract/contract-client';
     p {
       display: flex;
       flex-wrap: wrap;
+      align-items: baseline;
       gap: 0.4rem 1.1rem;
     }
 

@@ -17,7 +17,7 @@ import { datedWords, mayReadAgain, revisionState } from '../sheet-words';
     @if (refusal()) {
       <kb-note kind="stop" [announce]="true">{{ refusal() }}</kb-note>
     }
-    <ul class="kb-rows" style="--kb-columns: minmax(12rem, 1.6fr) minmax(8rem, 1fr) 11rem 13rem" [attr.aria-label]="label()">
+    <ul class="kb-rows" style="--kb-columns: minmax(12rem, 1.6fr) minmax(8rem, 1fr) 12.5rem 12rem" [attr.aria-label]="label()">
       @for (row of rows(); track row.revision.id) {
         <li>
           <a [routerLink]="row.revision.id"><b>{{ row.revision.productName ?? row.revision.fileName }}</b></a>
