@@ -74,3 +74,17 @@ export const pinEvents = pgTable(
     foreignKey({ columns: [t.organisationId, t.deliveryId], foreignColumns: [deliveries.organisationId, deliveries.id] }),
   ],
 );
+
+/** Seals that have proven something: each proves one delivery, so that none taken from a tablet's storage proves another. Append-only. */
+export const spentSeals = pgTable(
+  'spent_seals',
+  {
+    organisationId: uuid().notNull(),
+    nonce: text().notNull(),
+    deliveryId: uuid().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.organisationId, t.nonce] }),
+    foreignKey({ columns: [t.organisationId, t.deliveryId], foreignColumns: [deliveries.organisationId, deliveries.id] }),
+  ],
+);

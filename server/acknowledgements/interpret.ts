@@ -69,7 +69,7 @@ export async function interpret(tx: Tx, keys: Config['keys'], delivery: ReadDeli
   const aside = (because: string): Interpretation => ({ delivery, keptAside: because, actions: [], drafts: [] });
   if (!delivery.envelope) return aside(delivery.unread);
   const { envelope } = delivery;
-  const judge = pinJudge(tx, keys, delivery.tabletId, known);
+  const judge = pinJudge(tx, keys, delivery, known);
   if (envelope.id !== delivery.id) return aside('Its own number differs from the one it was sent under.');
   const [person] = await tx.select().from(people).where(and(eq(people.organisationId, tx.organisationId), eq(people.id, envelope.personId)));
   if (!person) return aside('It names a person who is not known here.');

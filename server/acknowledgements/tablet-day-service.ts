@@ -7,6 +7,7 @@ import { organisations } from '#drizzle/schema/organisations';
 import { people } from '#drizzle/schema/people';
 import { pins } from '#drizzle/schema/pins';
 import { kitParts, products, revisions } from '#drizzle/schema/sheets';
+import { deliveries } from '#drizzle/schema/tablets';
 import { type TabletDay } from '#shared/envelopes';
 import { type ShiftPlan } from '#shared/jobs';
 import { type Deps } from '../deps';
@@ -62,7 +63,7 @@ export function tabletDayService({ config, database, clock }: Deps) {
     const asked = (await readAsked(tx, [version.id])).get(version.id) ?? [];
     const withPin = asked.length === 0 ? [] : await tx.select({ personId: pins.personId, proof: pins.proof }).from(pins).where(and(eq(pins.organisationId, tx.organisationId), inArray(pins.personId, asked.map((person) => person.personId))));
     // In the order of arrival: a tablet that stands in another year must not have the last word.
-    const answers = await tx.select({ set: answerSets, name: people.name }).from(answerSets).innerJoin(people, and(eq(people.organisationId, answerSets.organisationId), eq(people.id, answerSets.personId))).where(and(eq(answerSets.organisationId, tx.organisationId), eq(answerSets.versionId, version.id))).orderBy(asc(answerSets.receivedAt), asc(answerSets.id));
+    const answers = await tx.select({ set: answerSets, name: people.name, sentAt: deliveries.sentAt }).from(answerSets).innerJoin(people, and(eq(people.organisationId, answerSets.organisationId), eq(people.id, answerSets.personId))).innerJoin(deliveries, and(eq(deliveries.organisationId, answerSets.organisationId), eq(deliveries.id, answerSets.deliveryId))).where(and(eq(answerSets.organisationId, tx.organisationId), eq(answerSets.versionId, version.id))).orderBy(asc(answerSets.receivedAt), asc(answerSets.id));
     const everyStop = await tx
       .select({ stop: correctiveActions, ownerName: people.name })
       .from(correctiveActions)
@@ -82,7 +83,7 @@ export function tabletDayService({ config, database, clock }: Deps) {
     const { tasks } = JSON.parse(version.checklist.toString('utf8')) as Checklist;
     // A "No" to a line about the whole job names no task: it stops each of them.
     const ofTasks = everyStop.flatMap(({ stop, ownerName }) => (stop.taskId ? [stop.taskId] : tasks.map((task) => task.taskId)).map((taskId) => ({ taskId, stop, ownerName })));
-    const begun = startsOf(tasks, answers.map(({ set }) => set), ofTasks.flatMap(({ taskId, stop }) => (stop.resolvedAt ? [{ taskId, resolvedAt: stop.resolvedAt }] : [])), noLines);
+    const begun = startsOf(tasks, answers, ofTasks.flatMap(({ taskId, stop }) => (stop.resolvedAt ? [{ taskId, resolvedAt: stop.resolvedAt }] : [])), noLines);
     const competent = (shift.plan as ShiftPlan).competentPersonId;
     return {
       shiftId: shift.id,
@@ -106,13 +107,13 @@ export function tabletDayService({ config, database, clock }: Deps) {
 /** Which tasks may run: live lines answered after the last stop, without a critical "No", by somebody with a proven PIN; and those where only the PIN is missing. */
 function startsOf(
   tasks: Checklist['tasks'],
-  sets: readonly (typeof answerSets.$inferSelect)[],
+  answers: readonly { readonly set: typeof answerSets.$inferSelect; readonly sentAt: Date }[],
   reopenings: readonly { taskId: string; resolvedAt: Date }[],
   noLines: (set: typeof answerSets.$inferSelect) => string[],
 ): { startedTaskIds: string[]; unprovenTaskIds: string[] } {
   const opening = (taskId: string, live: readonly { id: string; isCritical: boolean }[]) => {
     const since = Math.max(0, ...reopenings.filter((each) => each.taskId === taskId).map((each) => each.resolvedAt.getTime()));
-    return sets.filter((set) => set.kind === 'start-check' && set.taskId === taskId && set.receivedAt.getTime() >= since && !noLines(set).some((id) => live.find((line) => line.id === id)?.isCritical));
+    return answers.filter(({ set, sentAt }) => set.kind === 'start-check' && set.taskId === taskId && answeredAtMs(set, sentAt) >= since && !noLines(set).some((id) => live.find((line) => line.id === id)?.isCritical)).map(({ set }) => set);
   };
   const opened = tasks.map((task) => ({ taskId: task.taskId, sets: opening(task.taskId, task.live) }));
   const isProven = (set: typeof answerSets.$inferSelect) => set.pinState === 'confirmed';
@@ -121,6 +122,9 @@ function startsOf(
     unprovenTaskIds: opened.filter((each) => each.sets.length > 0 && !each.sets.some(isProven)).map((each) => each.taskId),
   };
 }
+
+/** When it was answered by our clock: a check of before a stop may arrive after it, from a tablet without signal. */
+const answeredAtMs = ({ capturedAt, receivedAt }: typeof answerSets.$inferSelect, sentAt: Date): number => Math.min(receivedAt.getTime(), capturedAt.getTime() + receivedAt.getTime() - sentAt.getTime());
 
 /** Leads, officers and owners whose own PIN is proven. */
 async function readWitnesses(tx: Tx, now: Date): Promise<TabletDay['witnesses']> {

@@ -1,5 +1,5 @@
 import { and, eq, inArray, sql } from 'drizzle-orm';
-import { pins, startPins } from '#drizzle/schema/pins';
+import { pins, spentSeals, startPins } from '#drizzle/schema/pins';
 import { type PinState } from '#shared/acknowledgements';
 import { type PinProof } from '#shared/people';
 import { type Config } from '../config';
@@ -77,11 +77,19 @@ export function openSeal(keys: Config['keys'], { sealedPin, nonce }: Sealed, tex
 }
 
 /** Judges PINs that came in deliveries of one tablet. Wrong guesses count with those asked online; while that pause lasts no PIN counts as right, or guesses could hide in deliveries. */
-export function pinJudge(tx: Tx, keys: Config['keys'], tabletId: string, known: KnownPins) {
+export function pinJudge(tx: Tx, keys: Config['keys'], { id: deliveryId, tabletId }: { readonly id: string; readonly tabletId: string }, known: KnownPins) {
   const digestOf = (personId: string, pin: string) => pinDigest(keys.pinPepper, tx.organisationId, personId, pin);
   async function failed(key: string): Promise<boolean> {
     const { rows } = await tx.execute<{ failures: number }>(sql`SELECT door_failed(${key}) AS failures`);
     return (rows[0]?.failures ?? 0) > freePinTries;
+  }
+
+  /** Whether this seal has proven no other delivery: one copied from a tablet's storage must not witness or open a task again. */
+  async function spend(nonce: string): Promise<boolean> {
+    const taken = await tx.insert(spentSeals).values({ organisationId: tx.organisationId, nonce, deliveryId }).onConflictDoNothing().returning({ nonce: spentSeals.nonce });
+    if (taken.length > 0) return true;
+    const [spent] = await tx.select({ deliveryId: spentSeals.deliveryId }).from(spentSeals).where(and(eq(spentSeals.organisationId, tx.organisationId), eq(spentSeals.nonce, nonce)));
+    return spent?.deliveryId === deliveryId;
   }
 
   async function judge(personId: string, sealed: Sealed, textHash: string): Promise<PinState> {
@@ -89,7 +97,7 @@ export function pinJudge(tx: Tx, keys: Config['keys'], tabletId: string, known: 
     if (!stored) return 'not-set';
     const pin = openSeal(keys, sealed, textHash);
     if (pin === undefined || stored.isPaused) return 'not-confirmed';
-    if (isSamePinDigest(stored.digest, digestOf(personId, pin))) return stored.proof === 'none' ? 'unwitnessed' : 'confirmed';
+    if (isSamePinDigest(stored.digest, digestOf(personId, pin))) return (await spend(sealed.nonce)) ? (stored.proof === 'none' ? 'unwitnessed' : 'confirmed') : 'not-confirmed';
     stored.isPaused = await failed(pinGuessKey(personId, tabletId));
     return 'not-confirmed';
   }

@@ -91,6 +91,45 @@ it('a stopped task tells the tablet who stopped it, who fixes it and, once resol
   expect(await jobOf(own)).toMatchObject({ startedTaskIds: [day.grindingTaskId] });
 });
 
+describe('after a stop was closed, its task stays shut (practice.md: restart after a stop)', () => {
+  async function stoppedAndClosed(own: Scene) {
+    const critical = liveOf(own).find(({ isCritical }) => isCritical);
+    await own.tablet.deliver(await check(own, own.crew, { noTo: [critical?.id] }));
+    const [action] = (await ok(own.organisation.officer.agent, 'listActions')).items;
+    await ok(own.organisation.officer.agent, 'resolveAction', { params: { actionId: action?.id ?? '' }, version: action?.version, body: { evidence: 'Hose clamped again.' } });
+  }
+
+  it('to a check that was answered before the stop and arrives after it, from a tablet without signal', async () => {
+    const own = await scene();
+    const early = await check(own, own.lead);
+    await stoppedAndClosed(own);
+    expect(await own.tablet.deliver(early)).toMatchObject({ outcome: 'recorded', pinState: 'confirmed' });
+    expect(await jobOf(own)).toMatchObject({ startedTaskIds: [], unprovenTaskIds: [] });
+    await own.tablet.deliver(await check(own, own.lead));
+    expect(await jobOf(own)).toMatchObject({ startedTaskIds: [own.day.grindingTaskId] });
+  });
+
+  it('but not to a new check of a tablet whose clock is an hour slow', async () => {
+    const own = await scene();
+    await stoppedAndClosed(own);
+    const slow = new Date(Date.now() - 3600_000);
+    await own.tablet.deliverAll([await check(own, own.lead, { content: { capturedAt: slow.toISOString() } })], slow);
+    expect(await jobOf(own)).toMatchObject({ startedTaskIds: [own.day.grindingTaskId] });
+  });
+
+  it('to the seal of an earlier check under a new number: a seal proves one delivery', async () => {
+    const own = await scene();
+    const first = await check(own, own.lead);
+    await own.tablet.deliver(first);
+    await stoppedAndClosed(own);
+    const { sealedPin, nonce } = JSON.parse(first.bytes) as Record<string, string>;
+    expect(await own.tablet.deliver(await check(own, own.lead, { content: { sealedPin, nonce } }))).toMatchObject({ outcome: 'recorded', pinState: 'not-confirmed' });
+    expect(await jobOf(own)).toMatchObject({ startedTaskIds: [], unprovenTaskIds: [own.day.grindingTaskId] });
+    // The very same bytes again are the same delivery, and still proven.
+    expect(await own.tablet.deliver(first)).toMatchObject({ outcome: 'duplicate', pinState: 'confirmed' });
+  });
+});
+
 describe('a briefing', () => {
   it('names who gave it and whether their PIN proved it', async () => {
     const own = await scene();

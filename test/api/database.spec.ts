@@ -14,7 +14,7 @@ const restrictViolation = '23001';
 const foreignKeyViolation = '23503';
 
 /** What people signed and what proves it. */
-const signedTables = ['deliveries', 'delivery_outcomes', 'checklist_versions', 'checklist_texts', 'checklist_people', 'answer_sets', 'acknowledgements', 'exposure_bases', 'pin_events', 'recordlog_entries', 'recordlog_records', 'recordlog_checkpoints'];
+const signedTables = ['deliveries', 'delivery_outcomes', 'checklist_versions', 'checklist_texts', 'checklist_people', 'answer_sets', 'acknowledgements', 'exposure_bases', 'pin_events', 'spent_seals', 'recordlog_entries', 'recordlog_records', 'recordlog_checkpoints'];
 
 let service: Service;
 let own: World;

@@ -163,6 +163,18 @@ it('a witness is a lead or an officer: a crew member’s own right PIN witnesses
   expect(await person(own, other)).toMatchObject({ pinProof: 'lead' });
 });
 
+it('a witness’s seal serves once: copied from the tablet’s storage it vouches for no other PIN of the same person', async () => {
+  const own = await scene();
+  const { organisation, tablet, lead, crew } = own;
+  await tablet.setPin(lead);
+  const witnessed = await tablet.witnessedBy(lead, '2468', crew);
+  expect(await tablet.deliver(await tablet.pinSet(crew, '1357', witnessed))).toMatchObject({ outcome: 'recorded' });
+  await ok(organisation.officer.agent, 'resetPin', { params: { personId: crew } });
+  expect(await tablet.deliver(await tablet.pinSet(crew, '6666', witnessed))).toMatchObject({ outcome: 'kept-aside', note: expect.stringContaining('not the witness') });
+  expect(await person(own, crew)).toMatchObject({ hasPin: false });
+  expect(await tablet.deliver(await tablet.pinSet(crew, '1357', await tablet.witnessedBy(lead, '2468', crew)))).toMatchObject({ outcome: 'recorded' });
+});
+
 it('a signature without any PIN is kept, marked "no PIN", and does not count; signing again with a PIN does', async () => {
   const own = await scene();
   const { tablet, day, crew } = own;
