@@ -31,6 +31,15 @@ describe('the plan of a day', () => {
     );
   });
 
+  it('replaces a name that a sentence of a rule carries, the longer one whole', () => {
+    const facts = shiftFacts({ people: [personFacts({ id: 'a', name: 'Ana Tena' }), personFacts({ id: 'b', name: 'Ana Tena Ruiz' })] });
+    const answer = answerShift(facts, asOf);
+    const [gate] = answer.gates.filter(({ ruleId }) => ruleId === 'floor-survey');
+    if (!gate) throw new Error('no gate to say it');
+    const said = dayPlan(facts, { ...answer, gates: [{ ...gate, text: { en: 'Ana Tena Ruiz looked at the floor.', es: 'Ana Tena Ruiz miró el piso.' } }] });
+    expect(said.place.map(({ text }) => text)).toEqual([{ en: 'a named person looked at the floor.', es: 'una persona nombrada miró el piso.' }]);
+  });
+
   it('says that people are not ready without saying what a person lacks', () => {
     const person = personFacts({ id: 'ana', name: 'Ana Veltran', silicaTrainedOn: null, respirators: [] });
     const facts = shiftFacts({ people: [person], competentPersonId: 'ana', tasks: [taskFacts({ id: 'grind', kind: 'floor-grinding', assignments: [{ personId: 'ana', startMinute: 420, endMinute: 550 }] })] });
