@@ -142,7 +142,7 @@ export function recordlogService({ config, database, storage, mail, queue, clock
       const [head, notes] = await database.inOrganisation(actor.organisationId, async (tx) => [(await tx.select().from(recordlogHeads))[0], await readCheckpoints(tx)] as const);
       const newest = notes.at(-1);
       if (!head || !newest) {
-        const trouble = outside.length > 0 ? 'The log is empty, but signed checkpoints of it were kept outside the database: it was removed.' : await findFalseRow(database, actor.organisationId);
+        const trouble = outside.length > 0 ? 'The log is empty, but signed checkpoints of it were kept outside the database: it was removed.' : await findFalseRow(database, config.keys, actor.organisationId);
         return { entries: 0, root: '', checkpoint: null, isGood: trouble === null, trouble, key };
       }
       const folder = await mkdtemp(join(tmpdir(), 'kneeboard-check-'));
@@ -152,7 +152,7 @@ export function recordlogService({ config, database, storage, mail, queue, clock
         const earlier = outside.map((_, at) => join(folder, `checkpoint-${at}.txt`));
         for (const [at, path] of earlier.entries()) await writeFile(path, outside[at] ?? '');
         const { code, output } = await runVerifier([file, '--key', key, ...earlier.flatMap((path) => ['--earlier', path])]);
-        const trouble = code === 0 ? await findFalseRow(database, actor.organisationId) : (output.split('\n')[0] || 'The check could not be run.').replaceAll(`${folder}/`, '');
+        const trouble = code === 0 ? await findFalseRow(database, config.keys, actor.organisationId) : (output.split('\n')[0] || 'The check could not be run.').replaceAll(`${folder}/`, '');
         return {
           entries: newest.size,
           root: newest.root.toString('hex'),

@@ -8,7 +8,9 @@ import { recordlogEntries, recordlogHeads, recordlogRecords } from '#drizzle/sch
 import { revisions } from '#drizzle/schema/sheets';
 import { pinEvents } from '#drizzle/schema/pins';
 import { deliveries } from '#drizzle/schema/tablets';
+import { type Config } from '../config';
 import { type Database, type Tx } from '../platform/database';
+import { findFalsePin } from './kept-pins-check';
 import { parseLeaf, type LeafKind } from './leaf';
 import { acknowledgementDiffers, actionDiffers, answersDiffer, basisDiffers, pinDiffers, sheetDiffers, versionDiffers, type ShownAcknowledgement, type ShownVersion } from './shown-rows';
 
@@ -40,7 +42,7 @@ const idIn = (record: Recorded): unknown => record['id'] ?? record['versionId'] 
  * The first place where rows that pages show are not what the log recorded, in words; null when there is none. Whoever
  * owns the database could change such a row and leave the log alone: the log's own check would not see it.
  */
-export async function findFalseRow(database: Database, organisationId: string): Promise<string | null> {
+export async function findFalseRow(database: Database, keys: Config['keys'], organisationId: string): Promise<string | null> {
   for (let after = -1; ; ) {
     const found = await database.inOrganisation(organisationId, async (tx) => {
       const entries = await readEntriesWithSubjects(tx, after);
@@ -50,7 +52,7 @@ export async function findFalseRow(database: Database, organisationId: string): 
     if (found.last === undefined) break;
     after = found.last;
   }
-  return database.inOrganisation(organisationId, findUnrecordedRow);
+  return database.inOrganisation(organisationId, async (tx) => (await findUnrecordedRow(tx)) ?? findFalsePin(tx, keys));
 }
 
 function readEntriesWithSubjects(tx: Tx, after: number): Promise<Entry[]> {

@@ -33,6 +33,7 @@ beforeAll(async () => {
     tablet.couldNotSign(day.version, crew, { reason: 'other', note: 'half a pair: \ud800' }),
     await tablet.briefing(day.version, lead.personId, text.morning.map(({ id }) => ({ lineId: id, answer: id === critical ? 'no' : 'yes', note: null }))),
   ]);
+  await ok(officer.agent, 'giveStartPin', { params: { personId: crew } });
   const [action] = (await ok(officer.agent, 'listActions')).items;
   await ok(officer.agent, 'resolveAction', { params: { actionId: action?.id ?? '' }, version: action?.version, body: { evidence: 'Looked at it together.' } });
   await ok(officer.agent, 'signBasis', {
@@ -97,6 +98,12 @@ describe.each<[string, string, string]>([
   ['pin_events', `UPDATE pin_events SET by_name = 'Somebody Else' WHERE OWN AND event = 'set'`, 'who vouched for it'],
   ['pin_events', `UPDATE pin_events SET proof = 'lead' WHERE OWN AND event = 'set'`, 'who vouched for it'],
   ['pin_events', `DELETE FROM pin_events WHERE OWN AND event = 'start-pin-given'`, 'missing from the list of PINs'],
+  ['pins', `UPDATE pins SET proof = 'lead' WHERE OWN`, 'The PIN of Dov Lindqvist is not the one'],
+  ['pins', `UPDATE pins SET digest = repeat('a', 64) WHERE OWN`, 'The PIN of Dov Lindqvist is not the one'],
+  ['pins', `UPDATE pins SET set_at = set_at - interval '1 day' WHERE OWN`, 'The PIN of Dov Lindqvist is not the one'],
+  ['start_pins', `UPDATE start_pins SET expires_at = expires_at + interval '1 year' WHERE OWN`, 'The start PIN of Marisol Tena is not the one'],
+  ['start_pins', `UPDATE start_pins SET given_by_name = 'Somebody Else' WHERE OWN`, 'The start PIN of Marisol Tena is not the one'],
+  ['start_pins', `UPDATE start_pins SET person_id = (SELECT id FROM people WHERE OWN AND name = 'Hazel Marrow') WHERE OWN`, 'is not the one that the list of PINs records as given last'],
   ['corrective_actions', `UPDATE corrective_actions SET text = 'Nothing to see' WHERE OWN`, 'the text'],
   ['corrective_actions', `UPDATE corrective_actions SET evidence = 'A new hose was fitted.' WHERE OWN AND evidence IS NOT NULL`, 'the evidence'],
   ['corrective_actions', `UPDATE corrective_actions SET resolved_at = now(), resolved_by = 'Hazel Marrow', evidence = 'Done' WHERE OWN AND resolved_at IS NULL`, 'never recorded'],
@@ -110,6 +117,17 @@ describe.each<[string, string, string]>([
   it(`is named: ${named}`, async () => {
     expect(await after(table, change)).toMatchObject({ isGood: false, trouble: expect.stringContaining(named) });
   });
+});
+
+it('names a PIN that was reset and is there again', async () => {
+  const lead = organisation.lead.personId;
+  const saved = `CREATE TEMP TABLE pin_before AS SELECT * FROM pins WHERE person_id = '${lead}'`;
+  await superuser.query(saved);
+  await ok(organisation.officer.agent, 'resetPin', { params: { personId: lead } });
+  expect(await check()).toMatchObject({ isGood: true });
+  await superuser.query('INSERT INTO pins SELECT * FROM pin_before');
+  expect(await check()).toMatchObject({ isGood: false, trouble: expect.stringContaining('The PIN of Dov Lindqvist') });
+  await superuser.query(`DELETE FROM pins WHERE person_id = '${lead}'`);
 });
 
 it('is in order again when all was put back', async () => {
