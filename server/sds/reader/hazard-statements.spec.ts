@@ -55,6 +55,12 @@ describe('hazards of the product', () => {
     expect(codes('Health hazards   Acute Tox. 4 - H332 Skin Irrit. 2 - H315 STOT SE 3 -\n                 H335, H336 Asp. Tox. 1 - H304')).toEqual(['H304', 'H315', 'H332', 'H335', 'H336']);
   });
 
+  it('are none when section 2 runs on to the end of a long sheet: its codes may be the glossary', () => {
+    const glossary = Array.from({ length: 80 }, (_, at) => `Line ${at} of a text whose headings nobody could read`).join('\n');
+    const text = `Section 1. Identification\nProduct name: Quarrybond 40\nSection 2. Hazards identification\nH315 Causes skin irritation.\n${glossary}\nH225 Highly flammable liquid and vapor`;
+    expect(readLines(pagesFrom(text)).hazardCodes).toEqual([]);
+  });
+
   it('are not those of an ingredient, of section 3 or of section 16', () => {
     expect(codes('Hazard statements   H315 Causes skin irritation.\nPortland cement 65997-15-1 H318', 'Quartz  14808-60-7  H372')).toEqual(['H315']);
   });

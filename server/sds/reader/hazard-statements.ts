@@ -1,8 +1,8 @@
 import { hazardParts, type PartText } from './hazard-block';
 import { type Line, type Segment } from './lines';
 import { type Box, type Field } from './reading';
-import { type SheetParts } from './sheet-parts';
-import { signalWord } from './signal-word';
+import { closedBody, type SheetParts } from './sheet-parts';
+import { globalWords, signalWord } from './signal-word';
 import { matchStatements } from './statement-matcher';
 import { fold } from './words';
 
@@ -20,7 +20,7 @@ export interface HazardReading {
 
 /** The product's own statements: section 2 only, by their printed codes or, where none is printed, by their words. */
 export function hazardStatements(parts: SheetParts): HazardReading {
-  const lines = parts.sections.bodies.get('hazards') ?? [];
+  const lines = closedBody(parts, 'hazards');
   const cells = hazardParts(withoutIngredientRows(lines));
   const printed = codesIn(cells, hCode, isOwnHazard);
   const hazardCodes = printed.length > 0 ? printed : isGlobalSystem(parts, lines) ? mapped(cells, parts.language, 'H') : [];
@@ -78,7 +78,7 @@ function withoutPartsOfCombinations(codes: Field<string>[]): Field<string>[] {
 function isGlobalSystem(parts: SheetParts, lines: Line[]): boolean {
   if (isOfNewForm(parts, lines)) return true;
   const own = fold(lines.map((line) => line.text).join('\n'));
-  return /signal ?word|hazard statement|hazard phrase|\bghs\b|\bsga\b|precautionary|palabra de advertencia|indicacion(es)? de peligro|consejos? de prudencia|mentions? (de danger|d'avertissement)|conseils? de prudence|gefahrenhinweis|signalwort|sicherheitshinweis|1272\/2008|\b(category|categoria|categorie|kategorie) \d/.test(own);
+  return globalWords.test(own) || /signal ?word|palabra de advertencia|indicacion(es)? de peligro|consejos? de prudencia|mentions? (de danger|d'avertissement)|conseils? de prudence|gefahrenhinweis|signalwort|sicherheitshinweis|1272\/2008/.test(own);
 }
 
 /** A sheet after the global system that labels nothing in section 2: its law is cited, its title is new, and a signal word stands there. */

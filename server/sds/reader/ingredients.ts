@@ -3,7 +3,7 @@ import { concentrationIn, wholeConcentration } from './concentration';
 import { proseIngredients } from './ingredient-prose';
 import { around, type Line, type Segment } from './lines';
 import { type Field, type Ingredient } from './reading';
-import { type SheetParts } from './sheet-parts';
+import { closedBody, type SheetParts } from './sheet-parts';
 import { fold, hasLetters } from './words';
 
 /** A cell of section 3 with its place in one long column of pages. */
@@ -36,7 +36,7 @@ const casHeading = /\bc\.?\s?a\.?\s?s\b/;
 
 /** The lines of the composition section that carry a CAS number, with the amount and the name of their row. */
 export function ingredients(parts: SheetParts): Field<Ingredient>[] {
-  const lines = parts.sections.bodies.get('composition') ?? [];
+  const lines = closedBody(parts, 'composition');
   const cells = cellsOf(lines);
   const anchors = anchorsOf(cells);
   const columns = columnsOf(lines, anchors);

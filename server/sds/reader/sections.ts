@@ -141,8 +141,8 @@ function wrappedBelow(first: Segment, next?: Line): string {
 const numberForm = /^(?:no\.? ?|nr\.? ?|n° ?|# ?)?(\d{1,2}|[ivx]{1,4}|[a-z]{2,12})(?![a-z0-9])\s*([:.)\]|/-]*)\s*(.*)$/;
 
 function numbered(whole: string, printed: string, next?: Line): Pick<Candidate, 'number' | 'role' | 'isSure'> | null {
-  // "§ 3.", "• 3.", "3.0 COMPOSITION".
-  const folded = whole.replace(/^[^a-z0-9#]+/, '').replace(/^(\d{1,2})\.0(?=\s+[a-z])/, '$1.');
+  // "§ 3.", "• 3.", "3.0 COMPOSITION", "Section 3 of 16".
+  const folded = whole.replace(/^[^a-z0-9#]+/, '').replace(/^(\d{1,2})\.0(?=\s+[a-z])/, '$1.').replace(/^([a-z]* ?\d{1,2}) ?(?:of|\/|de|sur|von) ?16\b/, '$1');
   const ansi = /^(.*?)\s*\(?ansi section (\d{1,2})\)?$/.exec(folded);
   if (ansi?.[1]) {
     const role = roleOfTitle(ansi[1], Number(ansi[2]));

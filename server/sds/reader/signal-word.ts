@@ -24,7 +24,7 @@ export function signalWord(parts: SheetParts): Field<SignalWord> | null {
   if (alone) return alone;
   const unclassified = lines.find((line) => /not classified|not hazardous|not a hazardous|non-?hazardous|no clasificad|nicht eingestuft|non classe|nicht gefahrlich|kennzeichnung nicht erforderlich|no es peligros/.test(fold(line.text)));
   // Statements without a word: the word may be drawn as a picture. Better no answer than a false "none".
-  const isSaid = /\bghs\b|\bsga\b|\bsgh\b|categor|kategorie|1272\/2008|statement/.test(fold(lines.map((line) => line.text).join(' '))) && matchStatements(lines.map((line) => line.text).join('\n'), parts.language, 'H', false).length > 0;
+  const isSaid = globalWords.test(fold(lines.map((line) => line.text).join(' '))) && matchStatements(lines.map((line) => line.text).join('\n'), parts.language, 'H', false).length > 0;
   if (!unclassified && (isSaid || lines.some((line) => /(?<![A-Z0-9])H[23]\d\d\b/.test(line.text) || label.test(fold(line.text))))) return null;
   const place = unclassified ?? heading;
   const because = unclassified ? 'Section 2 says the product is not classified and prints no signal word.' : 'Section 2 prints no signal word.';
@@ -53,11 +53,14 @@ function standingAlone(lines: Line[]): Field<SignalWord> | null {
 /** "…, Category 1. Signal word: Danger. May be corrosive to metals." */
 function inSentence(lines: Line[]): Field<SignalWord> | null {
   for (const segment of lines.flatMap((line) => line.segments)) {
-    const word = /\b(?:signal ?words?|(?:ghs |hazard )?label(?: elements?)?|palabras? de advertencia|mentions? d'avertissement|signalwort)\s?[:-]\s?([a-z]+)/.exec(fold(segment.text))?.[1];
+    const word = /\b(?:signal ?words?|(?:ghs |hazard )?label(?: elements?)?|kennzeichnung(?:selemente)?|(?:elements d')?etiquetage|etiqueta(?:do)?|elementos de la etiqueta|palabras? de advertencia|mentions? d'avertissement|signalwort)\s?[:-]\s?([a-z]+)/.exec(fold(segment.text))?.[1];
     const value = word ? wordOf(word) : null;
     if (value && value !== 'none') return field(value, segment, 0.9);
   }
   return null;
 }
+
+/** Words of the global system: sentences beside them are its statements. */
+export const globalWords = /\bghs\b|\bsga\b|\bsgh\b|\b(category|categoria|categorie|kategorie) ?\d|1272\/2008|(hazard|precautionary) (statement|phrase)|\b(skin|eye|acute|aquatic|flam|carc|repr|resp|asp|stot|muta|met)\.? (irrit|corr|dam|sens|tox|acute|chronic|liq|sol|se|re|\d)\b/;
 
 const field = (value: SignalWord, segment: Segment, confidence: number): Field<SignalWord> => ({ value, page: segment.page, box: segment.box, quote: segment.text, confidence });
