@@ -124,8 +124,12 @@ export function requestsService({ config, database, mail, queue, clock }: Deps, 
     returnSheet: (actor: PersonActor, revisionId: string, version: number, { productName, supplier, email, message, language, isSetAside }: ReturnSheet): Promise<SheetRequest> =>
       database.inOrganisation(actor.organisationId, async (tx) => {
         demandRole(actor, 'safety-officer');
+        // One after the other: two officers who send back the same sheet would both see that nobody had.
+        await tx.execute(sql`SELECT pg_advisory_xact_lock(hashtextextended(${`return ${revisionId}`}, 0))`);
         const row = await findRevision(tx, revisionId);
         if (row.revision.version !== version) throw new ConflictError('Somebody changed this sheet after you opened it. Compare, then do it again.', toRevision(row, clock.now().toISOString().slice(0, 10)));
+        const waiting = (await select(tx).where(and(eq(sheetRequests.organisationId, tx.organisationId), eq(sheetRequests.aboutRevisionId, revisionId)))).find((each) => stateOf(each, clock.now()) === 'open');
+        if (waiting) throw new RefusedError(`${waiting.askedByName} sent this sheet back already, to ${waiting.request.email}, and the answer is still open. Withdraw that request first.`);
         if (isSetAside && row.revision.state === 'confirmed') throw new RefusedError('A confirmed sheet stays in use until a newer one is confirmed. Send it back without setting it aside.');
         if (isSetAside && row.revision.state !== 'set-aside') await sheets.setAsideIn(tx, revisionId, version);
         return open(tx, actor, { productId: row.revision.productId, productName, supplier, aboutRevisionId: revisionId, email, message, language });

@@ -98,6 +98,20 @@ describe('a request to a supplier', () => {
       expect((await ok(agent, 'listRequests', { query: { productId: confirmed.productId ?? '' } })).items.map(({ id }) => id)).toEqual([request.id]);
     });
 
+    it('goes once, also when two officers send it at the same moment; after it was withdrawn it goes again', async () => {
+      const organisation = await makeOrganisation(service);
+      const { agent } = organisation.officer;
+      const { revision } = await ok(agent, 'uploadSheet', { file: pdf });
+      const back = () => call(agent, 'returnSheet', { params: { revisionId: revision.id }, version: revision.version, body: { ...body, isSetAside: false } });
+      const answers = await Promise.all([back(), back(), back()]);
+      expect(answers.map(({ status }) => status).sort()).toEqual([200, 422, 422]);
+      const [request, ...others] = (await ok(agent, 'listRequests', {})).items;
+      expect(others).toEqual([]);
+      expectProblem(await back(), 422);
+      await ok(agent, 'withdrawRequest', { params: { requestId: request?.id ?? '' } });
+      expect((await back()).status).toBe(200);
+    });
+
     it('says so when the supplier sends the very same file again', async () => {
       const organisation = await makeOrganisation(service);
       const { agent } = organisation.officer;
