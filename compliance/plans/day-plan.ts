@@ -44,8 +44,8 @@ export interface PlanTask {
 /** Gates that say something of the place. What they say of people stays on the list. */
 const PLACE_RULES = ['host-hazards-asked', 'floor-survey', 'engines-indoors', 'floor-profile', 'grind-then-blast'];
 const someone = words('a named person', 'una persona nombrada');
-const peopleNotReady = words('The people for it are not ready. Ask the lead.', 'Falta algo de las personas. Pregunte al encargado.');
-const shiftHeld = words('The whole shift is held. Ask the lead.', 'Todo el turno está detenido. Pregunte al encargado.');
+const peopleNotReady = words('The people for it are not ready. Ask the lead.', 'Falta algo de las personas. Pregunte al líder.');
+const shiftHeld = words('The whole shift is held. Ask the lead.', 'Todo el turno está detenido. Pregunte al líder.');
 
 /** Sources: 29 CFR 1926.1153(g)(1)(i) to (iv), the four elements of a written plan; (g)(3), readable by every employee. */
 export function dayPlan(facts: ShiftFacts, answer: ShiftAnswer): DayPlan {

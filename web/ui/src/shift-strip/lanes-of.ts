@@ -6,7 +6,7 @@ import { type ShiftBlock, type ShiftLane, patternOf } from './shift-lane';
 
 const WORDS = {
   en: { lead: 'lead', held: 'may not start', twice: (time: string) => `listed twice from ${time}`, language: { en: '', es: 'Español' } },
-  es: { lead: 'encargado', held: 'no puede empezar', twice: (time: string) => `anotado dos veces desde las ${time}`, language: { en: 'English', es: '' } },
+  es: { lead: 'líder', held: 'no puede empezar', twice: (time: string) => `anotado dos veces desde las ${time}`, language: { en: 'English', es: '' } },
 } as const;
 
 /** The lanes of a shift from its facts and the rules' answer, one for each person in the order given. Block id: task id, "/", index. */

@@ -19,6 +19,9 @@ import { ReaderLanguage } from './reader-language';
   `,
   styles: `
     :host {
+      /* Opened on a phone at the floor, perhaps with gloves on: larger than in the office. */
+      --kb-target: 3rem;
+
       display: block;
       max-width: 46rem;
       margin-inline: auto;

@@ -37,7 +37,7 @@ export const PAPER_WORDS = {
     answer: 'Respuesta',
     yes: 'sí',
     no: 'no',
-    ifNo: 'Un "no" detiene la tarea. Avise al encargado. Empieza otra vez cuando el punto es un "sí".',
+    ifNo: 'Un "no" detiene la tarea. Avise al líder. Empieza otra vez cuando el punto es un "sí".',
     name: 'Nombre',
     signature: 'Firma',
     time: 'Hora',

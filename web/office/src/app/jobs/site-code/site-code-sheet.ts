@@ -26,7 +26,7 @@ import { QrCode } from '../../pieces/qr-code';
         <p>Escanee para abrir todas las hojas de esta obra, el plan del día y los números de emergencia. Sin cuenta. No se puede cambiar nada.</p>
         <ol>
           <li>Este código</li>
-          <li>La tableta del encargado</li>
+          <li>La tableta del líder</li>
           <li>La carpeta</li>
         </ol>
         <p><b>¿Sin señal?</b> Un teléfono que ya lo abrió lo abre otra vez. El primer escaneo no: use la tableta, después la carpeta.</p>
