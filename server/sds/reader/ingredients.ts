@@ -75,6 +75,8 @@ function cellsOf(lines: Line[]): Cell[] {
   return lines.flatMap((line, row) => line.segments.map((segment) => ({ segment, row, y: segment.page * pageHeight + segment.box.y })));
 }
 
+const middleOf = ({ box }: Segment): number => box.x + box.width / 2;
+
 /** CAS numbers in order; one broken over two lines of a narrow cell ("64742-" / "95-6") is put together. */
 function anchorsOf(cells: Cell[]): Anchor[] {
   const anchors: Anchor[] = [];
@@ -82,7 +84,7 @@ function anchorsOf(cells: Cell[]): Anchor[] {
     const found = casNumbersIn(cell.segment.text);
     for (const { cas, start, end } of found) anchors.push({ ...cell, cas, start, end });
     if (found.length > 0 || !/(^|[\s:])\d{2,7}-(\d{2}-?)?$/.test(cell.segment.text)) continue;
-    const next = cells.find((other) => other.row > cell.row && other.row <= cell.row + 2 && Math.abs(other.segment.box.x - cell.segment.box.x) < 4);
+    const next = cells.find((other) => other.row > cell.row && other.row <= cell.row + 2 && (Math.abs(other.segment.box.x - cell.segment.box.x) < 4 || Math.abs(middleOf(other.segment) - middleOf(cell.segment)) < 4));
     const joined = next ? casNumbersIn(`${cell.segment.text}${next.segment.text}`)[0] : undefined;
     if (joined && joined.end > cell.segment.text.length) anchors.push({ ...cell, cas: joined.cas, start: joined.start, end: cell.segment.text.length });
   }

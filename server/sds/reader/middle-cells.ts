@@ -22,13 +22,14 @@ export function withLabelsOnTop(lines: Line[]): Line[] {
   return current;
 }
 
-/** Where at least two cells that are not the first of their row start. */
+/** Where cells start that stand beside another at least once, and three times in all. */
 function valueColumns(lines: Line[]): number[] {
   const counts = new Map<number, number>();
   for (const line of lines) {
-    for (const { box } of line.segments.slice(1)) counts.set(Math.round(box.x), (counts.get(Math.round(box.x)) ?? 0) + 1);
+    for (const { box } of line.segments) counts.set(Math.round(box.x), (counts.get(Math.round(box.x)) ?? 0) + 1);
   }
-  return [...counts].filter(([, count]) => count >= 2).map(([x]) => x);
+  const beside = new Set(lines.flatMap((line) => line.segments.slice(1).map(({ box }) => Math.round(box.x))));
+  return [...beside].filter((x) => (counts.get(x) ?? 0) >= 3);
 }
 
 function raised(lines: Line[], x: number): Line[] {

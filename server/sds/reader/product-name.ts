@@ -1,3 +1,4 @@
+import { datesIn } from './dates';
 import { boxAround, findLabelled, isLabel, type Labelled } from './labels';
 import { lineOf, type Line, type Segment } from './lines';
 import { type Field } from './reading';
@@ -87,6 +88,9 @@ function cleanName(text: string): string | null {
     .replace(/\s+(product (code|number|no)\b|item (no|number)|sku\b|code:|revision|version\b).*$/i, '')
     .trim();
   if (value.length < 2 || value.length > 120 || !/[\p{L}\p{N}]/u.test(value)) return null;
+  const [date] = datesIn(value, { isDayFirst: true });
+  // A date beside the label is another cell's.
+  if (date && date.end - date.start > value.length * 0.6) return null;
   return notNames.test(fold(value)) || isLabel(value) ? null : value;
 }
 

@@ -67,6 +67,7 @@ function firstName(values: Segment[]): { segment: Segment; value: string } | nul
 /** The name at the start of a line, without the address that follows it; null when the line holds no name. */
 export function companyName(text: string): string | null {
   let name = joinSpacedLetters(text).replace(/^[\s:*•-]+/, '').replace(/^(name|company|nombre|nom|firma|manufacturer|supplier|manufactured (by|for))\s*:\s*/i, '');
+  name = name.replace(/\s+(material )?safety data sheet\b.*$/i, '');
   const address = /[,;]?\s+(?=\d{2,6}[a-z]?[\s,-]+\p{L}|p\.?\s?o\.?\s*box\b|(tele?)?phone\b|tel\b|fax\b|www\.|https?:|\S+@|\(\d{3}\)|\+\d|\d{3}[-.]\d{3})/iu.exec(name);
   if (address && address.index > 2 && !legalForm.test(name.slice(address.index).split(/\s+/).slice(0, 3).join(' '))) name = name.slice(0, address.index);
   const afterForm = /^(.*?\b(?:inc|llc|l\.l\.c|ltd|limited|gmbh|corp|corporation|company|co|plc|s\.?l|s\.?a|b\.?v)\.?)[,\s]+\d/i.exec(name) ?? /^([^,]{3,60}),\s*\d{1,6}[a-z]?\s+\p{L}/iu.exec(name);
