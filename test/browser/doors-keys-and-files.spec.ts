@@ -178,13 +178,13 @@ withChromium('Doors, keys and files', () => {
       for (const [file, state] of Object.entries(words)) await toEnter.getByRole('listitem').filter({ hasText: file }).getByText(state, { exact: true }).waitFor();
       await expectAccessible(page, 'Files to enter by hand');
 
-      await toEnter.getByRole('link', { name: 'letter.txt' }).click();
+      await toEnter.getByRole('link', { name: 'letter.txt', exact: true }).click();
       await page.getByText('This file is not a PDF. It is kept as it came.').waitFor();
       await page.getByText('This file cannot be shown as a page.').waitFor();
       await expectAccessible(page, 'Not a PDF');
       await openSubject(page, 'SDS library', 'SDS library');
 
-      await toEnter.getByRole('link', { name: 'scan.pdf' }).click();
+      await toEnter.getByRole('link', { name: 'scan.pdf', exact: true }).click();
       await page.getByRole('heading', { level: 1, name: 'Enter what the sheet says' }).waitFor();
       await page.getByText('This file is a picture of a sheet, without text to read. Enter what it says by hand, beside the page.').waitFor();
       await page.locator('kb-page-viewer .paper').waitFor();
