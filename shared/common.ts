@@ -12,21 +12,24 @@ export const LocalDate = z.iso.date().refine((date) => date >= firstYear, 'Check
 /** Instant, ISO with offset. */
 export const Instant = z.iso.datetime({ offset: true }).refine((instant) => instant >= firstYear, 'Check the year.');
 export const Sha256 = z.string().regex(/^[0-9a-f]{64}$/);
+/** A mark, not only what nobody sees: a zero-width space states nothing, and names nobody. */
+const somethingVisible = /(?![\u115f\u1160\u2800\u3164\uffa0])[\p{L}\p{N}\p{P}\p{S}]/u;
 /** One line a person types: trimmed, no control characters, no halves of a character pair (the database refuses those). */
 export const Line = (max: number) =>
   z
     .string()
     .trim()
-    .min(1, 'Fill this in.')
     .max(max, `Use at most ${max} characters.`)
-    .regex(/^[^\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]*$/u, 'Remove control characters.');
+    .regex(somethingVisible, 'Fill this in.')
+    .regex(/^[^\p{Cc}\p{Cs}\p{Zl}\p{Zp}\u202a-\u202e\u2066-\u2069]*$/u, 'Remove control characters.');
 /** Several lines; line breaks and tabs may stay. */
 export const Paragraph = (max: number) =>
   z
     .string()
     .trim()
     .max(max, `Use at most ${max} characters.`)
-    .regex(/^(?:[^\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]|[\n\r\t])*$/u, 'Remove control characters.');
+    .regex(/^(?:[^\p{Cc}\p{Cs}\u202a-\u202e\u2066-\u2069]|[\n\r\t])*$/u, 'Remove control characters.')
+    .refine((text) => text === '' || somethingVisible.test(text), 'Fill this in.');
 /** What a person looks for. */
 export const SearchText = z.string().max(100).regex(/^[^\p{Cc}\p{Cs}]*$/u, 'Remove control characters.');
 
