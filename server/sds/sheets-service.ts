@@ -105,8 +105,10 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
         demandRole(actor, 'safety-officer');
         const row = await findRevision(tx, id);
         demandState(row, ['read', 'needs-entry'], row.revision.state === 'waiting' ? 'This sheet is still being read. Wait until it is done.' : 'A confirmed sheet does not change. Add the corrected sheet as a new revision.');
+        // First the values: who saw an older version is told so, and waits here for whoever saves at the same moment.
+        const revision = await change(tx, id, version, { fields: applyEdit(fieldsOf(row), edit) });
         await rememberCorrections(tx, clock, actor, row, edit);
-        return change(tx, id, version, { fields: applyEdit(fieldsOf(row), edit) });
+        return revision;
       }),
 
     /** From here on the sheet reaches crews: named person, named product, one current revision per product and language. */
@@ -124,10 +126,10 @@ export function sheetsService({ database, storage, queue, clock, log }: Deps) {
           const [current] = await tx.select({ revisedOn: revisions.revisedOn }).from(revisions).where(and(own, ne(revisions.id, id)));
           const isCurrent = !current?.revisedOn || (edit.revisedOn as string) >= current.revisedOn;
           if (isCurrent) await tx.update(revisions).set({ isCurrent: false }).where(own);
-          await rememberCorrections(tx, clock, actor, row, edit);
           const fields: SheetFields = applyEdit(fieldsOf(row), edit);
           const confirmedAt = clock.now();
           const revision = await change(tx, id, version, { fields, productId, language, revisedOn: edit.revisedOn, isCurrent, state: 'confirmed', confirmedBy: actor.personId, confirmedAt });
+          await rememberCorrections(tx, clock, actor, row, edit);
           // A request about a sheet that had no product, or that brought this one, knows its product from now on.
           await tx.update(sheetRequests).set({ productId }).where(and(eq(sheetRequests.organisationId, tx.organisationId), isNull(sheetRequests.productId), or(eq(sheetRequests.aboutRevisionId, id), eq(sheetRequests.revisionId, id))));
           await appendEntry(tx, clock, { kind: 'sheet-confirmed', subjectId: id, record: { revisionId: id, sha256: row.revision.sha256, productId, isCurrent, values: edit, confirmedBy: { id: actor.personId, name: actor.personName }, confirmedAt: confirmedAt.toISOString() } });

@@ -41,6 +41,17 @@ describe('corrections remembered', () => {
     expect((await ok(organisation.officer.agent, 'readRevision', { params: { revisionId: next.id } })).fields).toEqual(next.fields);
   });
 
+  it('by two officers at the same moment are one officer’s; the other is shown what is stored', async () => {
+    const organisation = await makeOrganisation(service);
+    const { id, version } = await sheet(organisation, 'Quarrybond 40 Part C');
+    const edits = ['Northlode Resins, Inc.', 'Northlode Resins', 'Northlode'].map((supplier) => sheetEdit({ language: 'de', ...right, supplier }));
+    const answers = await Promise.all(edits.map((body) => call(organisation.officer.agent, 'saveRevision', { params: { revisionId: id }, version, body })));
+    expect(answers.map(({ status }) => status).sort()).toEqual([200, 412, 412]);
+    const { fields } = await ok(organisation.officer.agent, 'readRevision', { params: { revisionId: id } });
+    expect((await taught(organisation)).find(({ field }) => field === 'supplier')?.value).toBe(fields.supplier?.value);
+    expect(service.faults).toEqual([]);
+  });
+
   it('say nothing where the reader agrees, or a person has entered the value already', async () => {
     const organisation = await makeOrganisation(service);
     await save(organisation, await sheet(organisation, 'Quarrybond 40 Part C'), right);
