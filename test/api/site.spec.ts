@@ -70,4 +70,15 @@ describe('the page behind a printed code', () => {
     expectProblem(await call(pageAgent(service), 'openSite', { body: { token: second } }), 404);
     expectProblem(await sheet(second), 404);
   });
+
+  it('opens however many phones of the site still ask with an old code', async () => {
+    const { job } = await organisation.publishedDay();
+    const old = await codeOf(job.id);
+    const token = await codeOf(job.id);
+    const phone = pageAgent(service);
+    const ask = (code: string) => call(phone, 'openSite', { body: { token: code } });
+    for (let asked = 0; asked < 21; asked += 1) expectProblem(await ask(old), 404);
+    expectProblem(await ask(old), 429);
+    expect((await ask(token)).status).toBe(200);
+  });
 });
