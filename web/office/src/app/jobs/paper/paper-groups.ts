@@ -4,6 +4,8 @@ import { type ChecklistText, type Mark } from '#compliance';
 export interface PaperRow {
   readonly id: string;
   readonly text: string;
+  /** Beside most lines; the place's hazards and where to send help stand only here. */
+  readonly why: string;
   readonly mark: Mark | null;
   readonly taskNames: readonly string[];
   readonly source: string;
@@ -19,17 +21,17 @@ export interface PaperGroups {
 
 /** The lines of a published text in the order of the day, controls before protection (rule of conduct 1). */
 export function paperGroups({ morning, tasks }: ChecklistText): PaperGroups {
-  const rows = new Map<string, { id: string; text: string; mark: Mark | null; taskNames: string[]; source: string }>();
+  const rows = new Map<string, { id: string; text: string; why: string; mark: Mark | null; taskNames: string[]; source: string }>();
   for (const { name, live } of tasks) {
-    for (const { id, text, mark, source } of live) {
-      const key = JSON.stringify([text, mark, source]);
+    for (const { id, text, why, mark, source } of live) {
+      const key = JSON.stringify([text, why, mark, source]);
       const known = rows.get(key);
-      if (!known) rows.set(key, { id, text, mark, taskNames: [name], source });
+      if (!known) rows.set(key, { id, text, why, mark, taskNames: [name], source });
       else if (!known.taskNames.includes(name)) known.taskNames.push(name);
     }
   }
   return {
-    morning: morning.map(({ id, text, mark, source }) => ({ id, text, mark, taskNames: [], source })),
+    morning: morning.map(({ id, text, why, mark, source }) => ({ id, text, why, mark, taskNames: [], source })),
     controls: [...rows.values()].filter(({ mark }) => mark === null),
     protection: [...rows.values()].filter(({ mark }) => mark !== null),
   };

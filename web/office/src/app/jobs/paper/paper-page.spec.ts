@@ -51,6 +51,9 @@ describe('the page of the list on paper', () => {
     const list = checklistText(generateChecklist(facts, answerShift(facts)), 'en');
     expect(words()).toContain(list.sentence);
     expect(words()).toContain(list.notice);
+    // Nothing of the text is left out: the hazards of the place and where to send help stand in the reasons only.
+    for (const { text, why } of [...list.morning, ...list.tasks.flatMap(({ live }) => live)]) for (const said of [text, why]) expect(words()).toContain(said);
+    for (const { lines } of list.people) for (const line of lines) expect(words()).toContain(line);
     for (const { name } of list.people) expect([...element.querySelectorAll('.signing td')].map((cell) => cell.textContent)).toContain(name);
     expect(element.querySelector('kb-paper-list')?.getAttribute('lang')).toBe('en');
   });
