@@ -189,8 +189,8 @@ export interface CartridgeSchedule {
 
 export const consumableKinds = ['shot', 'diamonds', 'blades', 'collector-bags', 'hepa-filters', 'cartridges', 'tape'] as const;
 export type ConsumableKind = (typeof consumableKinds)[number];
-export const consumableUnits = ['pieces', 'kg', 'm'] as const;
-export const consumableBases = ['m2', 'hour', 'kit', 'person'] as const;
+export const consumableUnits = ['pieces', 'lb', 'kg', 'ft', 'm'] as const;
+export const consumableBases = ['ft2', 'm2', 'hour', 'kit', 'person'] as const;
 
 /** A stated rate: so much of a thing for each m², machine hour, kit or person. */
 export interface ConsumableRate {

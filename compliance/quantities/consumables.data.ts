@@ -24,5 +24,5 @@ export const CONSUMABLES: readonly ConsumableRow[] = [
   { id: 'collector-bags', name: words('Collector bags', 'Bolsas del colector'), usedBy: 'collected', whoSays: WHO.competentPerson, source: trade('Dust fills bags by how much the floor gives; counted on the job.') },
   { id: 'hepa-filters', name: words('HEPA filters', 'Filtros HEPA'), usedBy: 'collected', whoSays: WHO.maker, source: trade('Changed by the gauge or by the maker’s hours.') },
   { id: 'cartridges', name: words('Mask cartridges', 'Cartuchos de máscara'), usedBy: 'vapor-mask', whoSays: WHO.safetyOfficer, source: trade('From the written change schedule.') },
-  { id: 'tape', name: words('Masking tape', 'Cinta'), usedBy: ['priming', 'spreading'], whoSays: words('the crew lead', 'el jefe de cuadrilla'), source: trade('Edges are measured on the job.') },
+  { id: 'tape', name: words('Masking tape', 'Cinta'), usedBy: ['priming', 'spreading'], whoSays: words('the crew lead', 'el líder'), source: trade('Edges are measured on the job.') },
 ];

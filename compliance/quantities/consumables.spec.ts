@@ -2,7 +2,7 @@ import { describe, expect, it } from '@jest/globals';
 import fc from 'fast-check';
 import { kitFacts, sheetFacts, shiftFacts, taskFacts } from '#test/support/shift-facts';
 import { answerShift } from '../answer-shift';
-import { consumableBases, consumableKinds, type ConsumableRate, type ShiftFacts } from '../facts';
+import { consumableBases, consumableUnits, consumableKinds, type ConsumableRate, type ShiftFacts } from '../facts';
 import { rounded } from './consumables';
 import { CONSUMABLES } from './consumables.data';
 
@@ -40,6 +40,13 @@ describe('what a shift uses up (consumable-amount)', () => {
     expect(line?.reason.en).toContain('stated by Dov Lindqvist');
   });
 
+  it('counts by square feet, as a US maker states it', () => {
+    // 55.74 m² are 600 ft² (1 ft = 0.3048 m exactly, NIST Handbook 44, appendix C); 600 × 0.08 lb = 48 lb.
+    const line = lineOf('shot', shiftFacts({ areaM2: 600 * 0.3048 ** 2, consumableRates: [rate({ amount: 0.08, unit: 'lb', per: 'ft2' })] }));
+    expect(line?.text.en).toBe('Steel shot: 48 lb.');
+    expect(line?.reason.en).toContain('0.08 lb a ft²');
+  });
+
   it('two cartridges for each person whose sheet asks a mask', () => {
     expect(lineOf('cartridges', shiftFacts({ kits: [maskSheet], consumableRates: [rate({ item: 'cartridges', amount: 2, unit: 'pieces', per: 'person' })] }))?.text.en).toBe('Mask cartridges: 8 pieces.');
   });
@@ -63,7 +70,7 @@ describe('what a shift uses up (consumable-amount)', () => {
   });
 
   it('never holds work, never throws, and no number appears that nobody stated', () => {
-    const anyRate = fc.record({ item: fc.constantFrom(...consumableKinds), amount: fc.double({ min: -1, max: 100, noNaN: true }), unit: fc.constantFrom('pieces' as const, 'kg' as const, 'm' as const), per: fc.constantFrom(...consumableBases), statedBy: fc.constantFrom('', 'Dov Lindqvist') });
+    const anyRate = fc.record({ item: fc.constantFrom(...consumableKinds), amount: fc.double({ min: -1, max: 100, noNaN: true }), unit: fc.constantFrom(...consumableUnits), per: fc.constantFrom(...consumableBases), statedBy: fc.constantFrom('', 'Dov Lindqvist') });
     fc.assert(
       fc.property(fc.uniqueArray(anyRate, { selector: ({ item }) => item, maxLength: 7 }), (consumableRates) => {
         const stated = new Set(consumableRates.filter(({ amount, statedBy }) => amount > 0 && statedBy !== '').map(({ item }) => item as string));

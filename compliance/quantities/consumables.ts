@@ -9,6 +9,7 @@ import { commonPractice } from '../source';
 import { words } from '../words';
 import { CONSUMABLES, type ConsumableRow } from './consumables.data';
 import { countKits } from './kit-rules';
+import { ft2FromM2 } from './units';
 
 export interface ConsumableOfShift extends ShiftContext {
   readonly row: ConsumableRow;
@@ -26,6 +27,8 @@ function tasksUsing({ usedBy }: ConsumableRow, shift: ShiftContext): readonly Ta
 /** How much there is of what the rate counts by; null where the facts do not say. Machine hours count each task's own time once. */
 function baseOf(per: ConsumableRate['per'], { facts, tasks, ...shift }: ConsumableOfShift): number | null {
   switch (per) {
+    case 'ft2':
+      return facts.areaM2 === null ? null : ft2FromM2(facts.areaM2);
     case 'm2':
       return facts.areaM2;
     case 'hour':
@@ -47,8 +50,8 @@ export function rounded(amount: number, unit: ConsumableRate['unit']): number {
 }
 
 const isStated = ({ amount, statedBy }: ConsumableRate): boolean => Number.isFinite(amount) && amount > 0 && statedBy.trim() !== '';
-const PER: Readonly<Record<ConsumableRate['per'], Words>> = { m2: words('m²', 'm²'), hour: words('machine hour', 'hora de máquina'), kit: words('kit', 'kit'), person: words('person', 'persona') };
-const UNIT: Readonly<Record<ConsumableRate['unit'], Words>> = { pieces: words('pieces', 'piezas'), kg: words('kg', 'kg'), m: words('m', 'm') };
+const PER: Readonly<Record<ConsumableRate['per'], Words>> = { ft2: words('ft²', 'ft²'), m2: words('m²', 'm²'), hour: words('machine hour', 'hora de máquina'), kit: words('kit', 'kit'), person: words('person', 'persona') };
+const UNIT: Readonly<Record<ConsumableRate['unit'], Words>> = { pieces: words('pieces', 'piezas'), lb: words('lb', 'lb'), kg: words('kg', 'kg'), ft: words('ft', 'ft'), m: words('m', 'm') };
 const unitOf = (unit: ConsumableRate['unit'], amount: unknown): Words => (unit === 'pieces' && amount === 1 ? words('piece', 'pieza') : UNIT[unit]);
 
 /** Amounts for the shift from rates that a person stated. A rate that nobody stated is not known: it is never put in by the program. */
@@ -66,7 +69,7 @@ export const consumableRule: ShiftRule<ConsumableOfShift> = {
     if (rate === null) return undecided(words('Nobody stated a rate.', 'Nadie dio un consumo.'), row.whoSays, { inputs, whatWouldChange: state });
     if (!isStated(rate)) return unmet(words('The rate is not above zero, or nobody is named for it.', 'El consumo no es mayor que cero, o nadie responde por él.'), { inputs, whatWouldChange: state });
     const base = baseOf(rate.per, context);
-    if (base === null || !Number.isFinite(base) || base < 0) return undecided(words(`Not known: how many ${PER[rate.per].en} is missing.`, `No se sabe: falta cuántos ${PER[rate.per].es}.`), words('the crew lead', 'el jefe de cuadrilla'), { inputs, whatWouldChange: words('Give area, thickness or count.', 'Dé área, espesor o cuenta.') });
+    if (base === null || !Number.isFinite(base) || base < 0) return undecided(words(`Not known: how many ${PER[rate.per].en} is missing.`, `No se sabe: falta cuántos ${PER[rate.per].es}.`), words('the crew lead', 'el líder'), { inputs, whatWouldChange: words('Give area, thickness or count.', 'Dé área, espesor o cuenta.') });
     const amount = rounded(rate.amount * base, rate.unit);
     return met(words(`${rate.amount} ${unitOf(rate.unit, rate.amount).en} a ${PER[rate.per].en}, stated by ${rate.statedBy}.`, `${rate.amount} ${unitOf(rate.unit, rate.amount).es} por ${PER[rate.per].es}, según ${rate.statedBy}.`), {
       inputs: { ...inputs, [`counted, ${PER[rate.per].en}`]: Math.round(base * 100) / 100 },

@@ -42,7 +42,7 @@ export const kitCountRule: ShiftRule<KitOfShift> = {
     const count = countKits(context, kit);
     const inputs = { 'area, m²': facts.areaM2, 'thickness, mm': facts.thicknessMm, 'volume of a kit, L': kit.volumeL, 'counted by hand': kit.count, 'mixing, minutes a kit': kit.mixMinutesPerKit };
     if (count === null) {
-      return undecided(words('Area or thickness is missing.', 'Falta el área o el espesor.'), words('the crew lead', 'el jefe de cuadrilla'), { inputs, whatWouldChange: words('Give area and thickness.', 'Dé área y espesor.') });
+      return undecided(words('Area or thickness is missing.', 'Falta el área o el espesor.'), words('the crew lead', 'el líder'), { inputs, whatWouldChange: words('Give area and thickness.', 'Dé área y espesor.') });
     }
     const coverage = isPositive(facts.thicknessMm) && isPositive(kit.volumeL) ? statedCoverageFt2(kit.volumeL, facts.thicknessMm) : null;
     const byHand = kit.count !== null || coverage === null;

@@ -50,7 +50,7 @@ describe('what a shift uses up, on its page', () => {
 
   it('takes a stated rate and shows the amount with who stated it; takes it away again', () => {
     press('State a rate: Diamond tools');
-    type('Amount', '0,5');
+    type('Amount', '1/2');
     type('Counted by', 'hour');
     type('Stated by', 'maker’s manual, page 12');
     press('Use this rate');
@@ -64,7 +64,15 @@ describe('what a shift uses up, on its page', () => {
     expect(element().textContent).toContain('Diamond tools: amount not known.');
   });
 
-  it.each([['', 'somebody'], ['0', 'somebody'], ['-1', 'somebody'], ['x', 'somebody'], ['2', ' ']])('refuses the amount "%s" stated by "%s" in words', (amount, by) => {
+  it('reads 1,500 as fifteen hundred, as every other field here does', () => {
+    press('State a rate: Diamond tools');
+    type('Amount', '1,500');
+    type('Stated by', 'somebody');
+    press('Use this rate');
+    expect(told).toMatchObject([{ amount: 1500, per: 'ft2' }]);
+  });
+
+  it.each([['', 'somebody'], ['0', 'somebody'], ['-1', 'somebody'], ['x', 'somebody'], ['0,5', 'somebody'], ['2', ' ']])('refuses the amount "%s" stated by "%s" in words', (amount, by) => {
     press('State a rate: Diamond tools');
     type('Amount', amount);
     type('Stated by', by);

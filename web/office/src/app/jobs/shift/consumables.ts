@@ -4,11 +4,12 @@ import { type Finding } from '#compliance/outcome';
 import { CONSUMABLES } from '#compliance/quantities/consumables.data';
 import { ConsumableRate, type ShiftPlan } from '#shared/jobs';
 import { Why } from '#ui/why';
+import { numberFrom } from '../../pieces/units';
 import { type StatedRate } from './shift-plan';
 
 type Item = StatedRate['item'];
 type Typed = { readonly amount: string; readonly unit: StatedRate['unit']; readonly per: StatedRate['per']; readonly statedBy: string };
-const perWords: Readonly<Record<StatedRate['per'], string>> = { m2: 'a m²', hour: 'a machine hour', kit: 'a kit', person: 'a person' };
+const perWords: Readonly<Record<StatedRate['per'], string>> = { ft2: 'a ft²', m2: 'a m²', hour: 'a machine hour', kit: 'a kit', person: 'a person' };
 
 /** What the shift uses up: amounts by rates that somebody stated. Without a rate it says "not known" and who can tell. */
 @Component({
@@ -104,7 +105,7 @@ export class Consumables {
   protected readonly perWords = perWords;
   protected readonly open = signal<Item | null>(null);
   protected readonly why = signal<Item | null>(null);
-  protected readonly typed = signal<Typed>({ amount: '', unit: 'pieces', per: 'm2', statedBy: '' });
+  protected readonly typed = signal<Typed>({ amount: '', unit: 'pieces', per: 'ft2', statedBy: '' });
   protected readonly trouble = signal('');
   protected readonly rows = computed(() =>
     CONSUMABLES.flatMap(({ id, name }) => {
@@ -117,7 +118,7 @@ export class Consumables {
     this.trouble.set('');
     if (this.open() === item) return this.open.set(null);
     const stated = this.plan().consumableRates?.find((each) => each.item === item);
-    this.typed.set(stated ? { amount: String(stated.amount), unit: stated.unit, per: stated.per, statedBy: stated.statedBy } : { amount: '', unit: 'pieces', per: 'm2', statedBy: '' });
+    this.typed.set(stated ? { amount: String(stated.amount), unit: stated.unit, per: stated.per, statedBy: stated.statedBy } : { amount: '', unit: 'pieces', per: 'ft2', statedBy: '' });
     this.open.set(item);
   }
 
@@ -128,7 +129,7 @@ export class Consumables {
   protected state(event: Event, item: Item): void {
     event.preventDefault();
     const { amount, ...rest } = this.typed();
-    const rate = ConsumableRate.safeParse({ item, amount: amount.trim() === '' ? null : Number(amount.replace(',', '.')), ...rest });
+    const rate = ConsumableRate.safeParse({ item, amount: numberFrom(amount), ...rest });
     if (!rate.success) return this.trouble.set('Give an amount above 0, and say who states it or which paper.');
     this.rate.emit({ item, rate: rate.data });
     this.open.set(null);
