@@ -70,6 +70,8 @@ describe('StartCheck', () => {
     expect(written()).toEqual([]);
     await typePin('5820');
     await shows('may start');
+    // "May start" is not the whole of it while somebody on the task has not signed.
+    expect(host().textContent).toMatch(/Not signed on this tablet: .+\. Everyone signs before the task starts\./);
     const [check] = written();
     if (check?.kind !== 'start-check') throw new Error('no start check');
     expect(check).toMatchObject({ personId: ids.dov, answers: [{ lineId: 'shroud' }, { lineId: 'seal' }, { lineId: 'gloves' }] });
