@@ -258,6 +258,7 @@ withChromium('The main job', () => {
       await uses.getByRole('button', { name: 'State a rate: Steel shot' }).click();
       await uses.getByRole('textbox', { name: 'Amount' }).fill('0.4');
       await uses.getByLabel('Unit').selectOption('kg');
+      await uses.getByLabel('Counted by').selectOption('m2');
       await uses.getByLabel('Stated by').fill('our own count of November');
       await expectAccessible(page, 'Stating a rate');
       await uses.getByRole('button', { name: 'Use this rate' }).click();
