@@ -61,6 +61,18 @@ describe('[HAZ-06] SDS audit, 29 CFR 1910.1200 App. D', () => {
     expect(new Set(SDS_CONTENT.map((row) => row.id)).size).toBe(SDS_CONTENT.length);
   });
 
+  // Common practice, no source: the ways sheets write these; CAS numbers have two to seven, two and one digits (CAS).
+  it.each<[string, string, readonly string[], readonly string[]]>([
+    ['an emergency telephone', 'sds-content/1.emergency-phone', ['Call us 24 h a day', 'emergency'], ['Call us 23 h a day']],
+    ['precautionary codes', 'sds-content/2.precautionary', ['P280'], ['P28', 'P2800']],
+    ['CAS numbers', 'sds-content/3.ingredients', ['50-00-0', '1317-65-3'], ['5-00-0', '50-0-0']],
+    ['lethal doses', 'sds-content/11.routes', ['LD50 rat', 'LC50 rat', 'LD 50 rat', 'DL50 rata'], ['LD 101 rat']],
+  ])('knows %s as they are written', (_name, id, written, others) => {
+    const marks = SDS_CONTENT.find((row) => row.id === id)!.marks;
+    for (const text of written) expect([text, marks.test(text)]).toEqual([text, true]);
+    for (const text of others) expect([text, marks.test(text)]).toEqual([text, false]);
+  });
+
   it('asks for the date, flags one still to come, and keeps age policy apart from law', () => {
     expect(open({ revisedOn: null })).toEqual(['revised-on undecided']);
     expect(open({ revisedOn: '2026-12-02' })).toEqual(['revised-on undecided']);
